@@ -1,0 +1,19 @@
+import { dirname } from 'node:path'
+import { fileURLToPath } from 'node:url'
+
+const projectFolder = dirname(fileURLToPath(import.meta.url))
+
+/** @type {import('next').NextConfig} */
+const nextConfig = {
+  // Tests build into a folder of their own so that they never break a running start.
+  distDir: process.env.NEXT_DIST_DIR ?? '.next',
+  reactStrictMode: true,
+  poweredByHeader: false,
+  // Knex looks its dialects up at run time and pino starts its transports as threads: neither survives bundling.
+  serverExternalPackages: ['knex', 'pino', 'pg-boss'],
+  allowedDevOrigins: ['127.0.0.1'],
+  turbopack: { root: projectFolder },
+  outputFileTracingRoot: projectFolder,
+}
+
+export default nextConfig
