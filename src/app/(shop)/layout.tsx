@@ -1,0 +1,43 @@
+import type { ReactNode } from 'react'
+import { Toaster } from 'sonner'
+import { AppHeader } from '@/components/layout/app-header'
+import { ShopProvider } from '@/components/layout/shop-context'
+import { requireActor } from '@/server/auth/require-actor'
+import { getShopSettings } from '@/server/services/settings/get-shop-settings'
+
+export default async function ShopLayout({ children }: { children: ReactNode }) {
+  const actor = await requireActor()
+  const settings = await getShopSettings()
+  return (
+    <ShopProvider
+      shop={{
+        actor: {
+          id: actor.id,
+          name: actor.name,
+          role: actor.role,
+          locationId: actor.locationId,
+          homeCribId: actor.homeCribId,
+        },
+        shopName: settings.shopName,
+        unit: actor.lengthUnit ?? settings.lengthUnit,
+        decimalComma: settings.decimalComma,
+        currency: settings.currency,
+        reachSettings: settings.reach,
+      }}
+    >
+      <a
+        href="#content"
+        className="bg-accent text-on-accent sr-only z-50 px-4 py-3 focus:not-sr-only focus:absolute"
+      >
+        Skip to the content
+      </a>
+      <div className="flex min-h-dvh flex-col">
+        <AppHeader />
+        <main id="content" tabIndex={-1} className="flex min-h-0 flex-1 flex-col outline-none">
+          {children}
+        </main>
+      </div>
+      <Toaster position="bottom-right" closeButton />
+    </ShopProvider>
+  )
+}

@@ -1,0 +1,41 @@
+import type { Permission } from '@/core/policies/permissions'
+
+export interface NavigationLink {
+  href: string
+  label: string
+  permission: Permission
+}
+
+/** The places of the product, in the order of the work: ask, look up, bring in, keep. */
+export const navigationGroups: readonly { label: string; links: readonly NavigationLink[] }[] = [
+  {
+    label: 'Calculate',
+    links: [
+      { href: '/reach', label: 'Reach', permission: 'see' },
+      { href: '/ball-speed', label: 'Ball-end speed', permission: 'see' },
+    ],
+  },
+  {
+    label: 'Catalogue',
+    links: [
+      { href: '/cutters', label: 'Cutters', permission: 'see' },
+      { href: '/holders', label: 'Holders', permission: 'see' },
+      { href: '/collets', label: 'Collets', permission: 'see' },
+      { href: '/extensions', label: 'Extensions', permission: 'see' },
+    ],
+  },
+  {
+    label: 'Crib',
+    links: [
+      { href: '/locations', label: 'Locations', permission: 'see' },
+      { href: '/imports', label: 'Imports', permission: 'keepCrib' },
+    ],
+  },
+  {
+    label: 'Shop',
+    links: [
+      { href: '/people', label: 'People', permission: 'administer' },
+      { href: '/settings', label: 'Settings', permission: 'administer' },
+    ],
+  },
+]
