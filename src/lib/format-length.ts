@@ -61,12 +61,20 @@ const longestInchText = 7
  * @example
  * lengthInputText(3.175, 'in') // => '0.125'
  * lengthInputText(3, 'in') // => '3 mm'
- * lengthInputText(0.396875, 'mm') // => '0.396875'
+ * lengthInputText(3.175, 'mm', { decimalComma: true }) // => '3,175'
  */
-export function lengthInputText(mm: number, unit: LengthUnit): string {
+export function lengthInputText(
+  mm: number,
+  unit: LengthUnit,
+  options: { decimalComma?: boolean } = {},
+): string {
   const inMm = decimalText(mm, 0, lengthDecimals)
-  if (unit === 'mm') return inMm
-  const inInches = decimalText(mm / mmPerInch, 0, longestInchText)
-  const readBack = parseLength(inInches, { unit: 'in', decimalComma: false, allowZero: true })
-  return readBack.ok && readBack.mm === Number(inMm) ? inInches : `${inMm} mm`
+  const text = unit === 'mm' ? inMm : (inchInputText(inMm) ?? `${inMm} mm`)
+  return options.decimalComma ? text.replace('.', ',') : text
+}
+
+function inchInputText(inMm: string): string | null {
+  const text = decimalText(Number(inMm) / mmPerInch, 0, longestInchText)
+  const readBack = parseLength(text, { unit: 'in', decimalComma: false, allowZero: true })
+  return readBack.ok && readBack.mm === Number(inMm) ? text : null
 }

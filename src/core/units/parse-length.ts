@@ -88,7 +88,7 @@ function readFraction(
   options: ParseLengthOptions,
 ): ParsedLength | ParseFailure {
   const [numerator, denominator] = [BigInt(top ?? ''), BigInt(bottom ?? '')]
-  if (denominator === 0n) return notALength(written)
+  if (denominator === 0n || (word !== undefined && /\d/.test(word))) return notALength(written)
   if (whole !== undefined && numerator >= denominator) {
     return parseFailure(
       'fraction-improper',
