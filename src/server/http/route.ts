@@ -51,7 +51,7 @@ interface RouteOptions<A extends Access, Params, Query, Body, Answer> {
   /** A `Response` is sent as it is: downloads, and answers that also set a cookie. */
   handle: (
     context: Context<A, Params, Query, Body>,
-  ) => Promise<(Answer extends z.ZodType ? z.input<Answer> : void) | Response>
+  ) => Promise<(Answer extends z.ZodType ? z.input<Answer> : unknown) | Response>
 }
 
 interface NextRouteContext {

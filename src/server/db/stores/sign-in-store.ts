@@ -8,10 +8,10 @@ export async function countFailedSignIns(
   const row = await db('sign_in_attempts')
     .where('succeeded', false)
     .whereRaw("attempted_at > now() - ? * interval '1 second'", [of.seconds])
-    .where((either) => either.where('email', of.email).orWhere('remote_address', of.remoteAddress))
+    .where((either) => either.where('email', of.email).orWhere('address', of.remoteAddress))
     .first(
       db.raw(
-        'greatest(count(*) filter (where email = ?), count(*) filter (where remote_address = ?))::int as tries',
+        'greatest(count(*) filter (where email = ?), count(*) filter (where address = ?))::int as tries',
         [of.email, of.remoteAddress],
       ),
     )
@@ -24,7 +24,7 @@ export async function recordSignIn(
 ): Promise<void> {
   await db('sign_in_attempts').insert({
     email: attempt.email,
-    remote_address: attempt.remoteAddress,
+    address: attempt.remoteAddress,
     succeeded: attempt.succeeded,
   })
 }
