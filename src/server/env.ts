@@ -4,10 +4,12 @@ const loopbackHosts = ['127.0.0.1', 'localhost', '::1']
 
 const port = z.coerce.number().int().min(1).max(65_535)
 
+const databaseUrlSchema = z.url({ protocol: /^postgres(ql)?$/ })
+
 const envSchema = z
   .object({
     NODE_ENV: z.enum(['development', 'production', 'test']).default('development'),
-    DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
+    DATABASE_URL: databaseUrlSchema,
     HOST: z.string().min(1).default('127.0.0.1'),
     PORT: port.default(3000),
     /** Where people reach the shop's Leadline; https here means a TLS front. */
@@ -43,4 +45,11 @@ let cached: Env | undefined
 export function env(): Env {
   cached ??= parseEnv(process.env)
   return cached
+}
+
+/** The one setting of the scripts that talk to the database and do nothing else. */
+export function databaseUrl(): string {
+  const parsed = databaseUrlSchema.safeParse(process.env.DATABASE_URL)
+  if (!parsed.success) throw new Error('Settings: DATABASE_URL is not set, or is no postgres:// address.')
+  return parsed.data
 }
