@@ -1,0 +1,37 @@
+import { defineConfig } from '@playwright/test'
+
+const baseURL = process.env.BASE_URL
+if (!baseURL) throw new Error('BASE_URL names no server to test: run the browser tests through make test.')
+
+export default defineConfig({
+  testDir: 'test/e2e',
+  forbidOnly: true,
+  retries: 0,
+  workers: 2,
+  timeout: 60_000,
+  use: {
+    baseURL,
+    trace: 'retain-on-failure',
+    // Debian's own browser, asked to call nobody and to need neither a sandbox (root) nor a graphics card.
+    launchOptions: {
+      executablePath: '/usr/bin/chromium',
+      args: [
+        '--no-sandbox',
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
+    },
+  },
+  projects: [
+    { name: 'desk', testIgnore: '**/*.phone.spec.ts', use: { viewport: { width: 1440, height: 900 } } },
+    {
+      name: 'phone',
+      testMatch: '**/*.phone.spec.ts',
+      use: { viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true },
+    },
+  ],
+})
