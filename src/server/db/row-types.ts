@@ -1,0 +1,379 @@
+// Written by `npm run db:types` from the migrated database; a test compares the two.
+
+export interface AuditEntriesRow {
+  id: string
+  actor_id: string | null
+  action: string
+  entity: string
+  entity_id: string | null
+  before: unknown
+  after: unknown
+  request_id: string | null
+  recorded_at: Date
+}
+
+export interface BalancesRow {
+  item_id: string
+  location_id: string
+  condition: string
+  is_outside: boolean
+  quantity: number
+}
+
+export interface ColletsRow {
+  item_id: string
+  item_kind: string
+  series: string
+  minimum_mm: number
+  maximum_mm: number
+  length_mm: number | null
+  minimum_grip_mm: number | null
+}
+
+export interface CribMembersRow {
+  crib_id: string
+  user_id: string
+  created_at: Date
+}
+
+export interface CribsRow {
+  id: string
+  code: string
+  name: string
+  time_zone: string
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
+export interface CuttersRow {
+  item_id: string
+  item_kind: string
+  form: string
+  cutting_diameter_mm: number
+  corner_radius_mm: number | null
+  taper_half_angle_deg: number | null
+  point_angle_deg: number | null
+  tip_diameter_mm: number | null
+  length_of_cut_mm: number | null
+  flute_length_mm: number | null
+  neck_diameter_mm: number | null
+  neck_taper_half_angle_deg: number | null
+  reach_length_mm: number | null
+  neck_transition_angle_deg: number | null
+  shank_diameter_mm: number
+  overall_length_mm: number
+  flute_count: number | null
+  substrate: string | null
+  maximum_rpm: number | null
+}
+
+export interface ExtensionSegmentsRow {
+  item_id: string
+  position: number
+  length_mm: number
+  nose_diameter_mm: number
+  spindle_diameter_mm: number
+}
+
+export interface ExtensionsRow {
+  item_id: string
+  item_kind: string
+  projection_mm: number
+  bore_kind: string
+  bore_series: string | null
+  bore_diameter_mm: number | null
+  bore_depth_mm: number | null
+  minimum_grip_mm: number | null
+  grip_start_mm: number | null
+}
+
+export interface HolderSegmentsRow {
+  item_id: string
+  part: string
+  position: number
+  length_mm: number
+  nose_diameter_mm: number
+  spindle_diameter_mm: number
+}
+
+export interface HoldersRow {
+  item_id: string
+  item_kind: string
+  taper: string | null
+  gauge_length_mm: number
+  bore_kind: string
+  bore_series: string | null
+  bore_diameter_mm: number | null
+  bore_depth_mm: number | null
+  minimum_grip_mm: number | null
+  grip_start_mm: number | null
+  side_lock_insertion_mm: number | null
+  maximum_rpm: number | null
+}
+
+export interface IdempotencyKeysRow {
+  actor_id: string
+  route: string
+  key: string
+  body_hash: string
+  status: number | null
+  answer: unknown
+  created_at: Date
+}
+
+export interface ImportMappingsRow {
+  id: string
+  kind: string
+  headings: unknown
+  mapping: unknown
+  unit: string | null
+  updated_by: string
+  created_at: Date
+  updated_at: Date
+}
+
+export interface ImportRowsRow {
+  import_id: string
+  line: number
+  outcome: string
+  item_id: string | null
+  cells: unknown
+  field_values: unknown
+  problems: unknown
+}
+
+export interface ImportsRow {
+  id: string
+  kind: string
+  state: string
+  unit: string | null
+  mapping: unknown
+  rejects: string | null
+  file_name: string
+  file_size_bytes: string
+  file_path: string | null
+  encoding: string | null
+  delimiter: string | null
+  headings: unknown
+  warnings: unknown
+  rows_read: number
+  rows_total: number | null
+  added: number
+  changed: number
+  unchanged: number
+  rejected_count: number
+  error: string | null
+  created_by: string
+  created_at: Date
+  updated_at: Date
+  checked_at: Date | null
+  ended_at: Date | null
+}
+
+export interface ItemsRow {
+  id: string
+  kind: string
+  code: string
+  maker: string | null
+  part_number: string | null
+  description: string
+  unit_cost_minor: string | null
+  is_tracked_by_piece: boolean
+  version: number
+  archived_at: Date | null
+  created_at: Date
+  updated_at: Date
+  search_text: string
+  search_words: string[]
+}
+
+export interface LocationsRow {
+  id: string
+  kind: string
+  code: string
+  name: string
+  crib_id: string | null
+  parent_id: string | null
+  user_id: string | null
+  is_outside: boolean
+  version: number
+  archived_at: Date | null
+  created_at: Date
+  updated_at: Date
+}
+
+export interface MovementsRow {
+  id: string
+  kind: string
+  item_id: string
+  piece_id: string | null
+  quantity: number
+  from_location_id: string
+  from_condition: string
+  to_location_id: string
+  to_condition: string
+  note: string
+  actor_id: string
+  occurred_at: Date
+  recorded_at: Date
+  reverses_id: string | null
+}
+
+export interface PiecesRow {
+  id: string
+  item_id: string
+  tag: string
+  location_id: string | null
+  condition: string | null
+  cutting_diameter_mm: number | null
+  corner_radius_mm: number | null
+  length_of_cut_mm: number | null
+  reach_length_mm: number | null
+  overall_length_mm: number | null
+  runout_mm: number | null
+  regrind_count: number
+  note: string
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
+export interface ReorderPointsRow {
+  item_id: string
+  crib_id: string
+  reorder_point: number
+  order_up_to: number
+  pack_size: number
+  minimum_order: number
+  supplier_id: string | null
+  supplier_part_number: string | null
+  lead_time_days: number | null
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
+export interface SearchWordsRow {
+  word: string
+  one_shorter: string[]
+}
+
+export interface SessionsRow {
+  id: string
+  token_hash: string
+  user_id: string
+  user_agent: string | null
+  created_at: Date
+  last_seen_at: Date
+  expires_at: Date
+  ended_at: Date | null
+}
+
+export interface ShopSettingsRow {
+  id: number
+  shop_name: string
+  currency: string
+  length_unit: string
+  decimal_comma: boolean
+  shank_clearance_mm: number
+  holder_clearance_mm: number
+  stick_out_step_mm: number
+  flute_to_grip_mm: number
+  hole_tolerance_mm: number
+  drill_chip_room_diameters: number
+  flute_stiffness_ratio: number
+  carbide_modulus_gpa: number
+  steel_modulus_gpa: number
+  setup_completed_at: Date | null
+  demo_loaded_at: Date | null
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
+export interface SignInAttemptsRow {
+  id: string
+  email: string
+  address: string
+  succeeded: boolean
+  attempted_at: Date
+}
+
+export interface StockLevelsRow {
+  item_id: string
+  crib_id: string
+  on_hand: number
+  reserved: number
+  coming: number
+}
+
+export interface SuppliersRow {
+  id: string
+  name: string
+  email: string | null
+  phone: string | null
+  contact_name: string | null
+  account_number: string | null
+  lead_time_days: number | null
+  note: string
+  version: number
+  archived_at: Date | null
+  created_at: Date
+  updated_at: Date
+}
+
+export interface UserTokensRow {
+  id: string
+  purpose: string
+  user_id: string | null
+  token_hash: string
+  expires_at: Date
+  used_at: Date | null
+  created_by: string | null
+  created_at: Date
+}
+
+export interface UsersRow {
+  id: string
+  email: string
+  name: string
+  role: string
+  password_hash: string | null
+  length_unit: string | null
+  home_crib_id: string | null
+  is_active: boolean
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
+export interface Tables {
+  audit_entries: AuditEntriesRow
+  balances: BalancesRow
+  collets: ColletsRow
+  crib_members: CribMembersRow
+  cribs: CribsRow
+  cutters: CuttersRow
+  extension_segments: ExtensionSegmentsRow
+  extensions: ExtensionsRow
+  holder_segments: HolderSegmentsRow
+  holders: HoldersRow
+  idempotency_keys: IdempotencyKeysRow
+  import_mappings: ImportMappingsRow
+  import_rows: ImportRowsRow
+  imports: ImportsRow
+  items: ItemsRow
+  locations: LocationsRow
+  movements: MovementsRow
+  pieces: PiecesRow
+  reorder_points: ReorderPointsRow
+  search_words: SearchWordsRow
+  sessions: SessionsRow
+  shop_settings: ShopSettingsRow
+  sign_in_attempts: SignInAttemptsRow
+  stock_levels: StockLevelsRow
+  suppliers: SuppliersRow
+  user_tokens: UserTokensRow
+  users: UsersRow
+}
