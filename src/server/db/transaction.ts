@@ -1,6 +1,6 @@
 import 'server-only'
 import type { Knex } from 'knex'
-import { databaseErrorCode } from './database-error'
+import { databaseErrorCode } from './database-errors'
 
 const attempts = 4
 /** serialization_failure, deadlock_detected: the same work, done again, may go through. */

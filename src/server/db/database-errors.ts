@@ -47,3 +47,8 @@ export function findStockShortage(error: unknown): StockShortage | null {
   if (!isDatabaseError(error) || error.code !== ledgerErrorCodes.stockBelowZero || !error.detail) return null
   return JSON.parse(error.detail)
 }
+
+/** Whether PostgreSQL refused this because a row with the same key is there already. */
+export function isUniqueViolation(error: unknown, constraint: string): boolean {
+  return databaseErrorCode(error) === '23505' && brokenConstraint(error) === constraint
+}
