@@ -58,7 +58,17 @@ export async function endSession(db: Knex, tokenHash: string): Promise<void> {
   await db('sessions').where('token_hash', tokenHash).whereNull('ended_at').update({ ended_at: db.fn.now() })
 }
 
-/** Ends every session of a person, but for one that is kept. */
-export async function endSessionsOfUser(db: Knex, userId: string): Promise<void> {
-  await db('sessions').where('user_id', userId).whereNull('ended_at').update({ ended_at: db.fn.now() })
+/** Ends every session of a person, but for the one that is kept. */
+export async function endSessionsOfUser(
+  db: Knex,
+  userId: string,
+  keptTokenHash: string | null,
+): Promise<void> {
+  await db('sessions')
+    .where('user_id', userId)
+    .whereNull('ended_at')
+    .modify((query) => {
+      if (keptTokenHash) query.whereNot('token_hash', keptTokenHash)
+    })
+    .update({ ended_at: db.fn.now() })
 }

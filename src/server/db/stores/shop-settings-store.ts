@@ -34,3 +34,49 @@ export async function readShopSettings(db: Knex): Promise<ShopSettings> {
     },
   }
 }
+
+export interface ShopSettingsChange {
+  shopName?: string | undefined
+  currency?: string | undefined
+  lengthUnit?: LengthUnit | undefined
+  decimalComma?: boolean | undefined
+  reach?: { [Name in keyof ReachSettings]?: ReachSettings[Name] | undefined } | undefined
+}
+
+function columnsOf(change: ShopSettingsChange): Record<string, unknown> {
+  const { reach = {} } = change
+  const columns = {
+    shop_name: change.shopName,
+    currency: change.currency,
+    length_unit: change.lengthUnit,
+    decimal_comma: change.decimalComma,
+    shank_clearance_mm: reach.shankClearanceMm,
+    holder_clearance_mm: reach.holderClearanceMm,
+    stick_out_step_mm: reach.stickOutStepMm,
+    flute_to_grip_mm: reach.fluteToGripMm,
+    hole_tolerance_mm: reach.holeToleranceMm,
+    drill_chip_room_diameters: reach.drillChipRoomDiameters,
+    flute_stiffness_ratio: reach.fluteStiffnessRatio,
+    carbide_modulus_gpa: reach.carbideModulusGpa,
+    steel_modulus_gpa: reach.steelModulusGpa,
+  }
+  return Object.fromEntries(Object.entries(columns).filter(([, value]) => value !== undefined))
+}
+
+/** False where the version is no longer the row's. */
+export async function updateShopSettings(
+  trx: Knex,
+  version: number,
+  change: ShopSettingsChange,
+): Promise<boolean> {
+  const columns = columnsOf(change)
+  if (Object.keys(columns).length === 0) return true
+  return (await trx('shop_settings').where({ id: 1, version }).update(columns)) === 1
+}
+
+/** The first day is over: the shop has its name and unit. */
+export async function completeSetup(trx: Knex, change: ShopSettingsChange): Promise<void> {
+  await trx('shop_settings')
+    .where('id', 1)
+    .update({ ...columnsOf(change), setup_completed_at: trx.fn.now() })
+}

@@ -1,0 +1,11 @@
+import { idParamsSchema } from '@/schemas/id'
+import { personLinkResponseSchema } from '@/schemas/person'
+import { route } from '@/server/http/route'
+import { renewPersonLink } from '@/server/services/people/renew-person-link'
+
+export const POST = route({
+  access: 'administer',
+  params: idParamsSchema,
+  answer: personLinkResponseSchema,
+  handle: ({ actor, params }) => renewPersonLink(actor, params.id),
+})

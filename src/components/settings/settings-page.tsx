@@ -1,0 +1,168 @@
+'use client'
+
+import { useRouter } from 'next/navigation'
+import { type FormEvent, useState } from 'react'
+import { toast } from 'sonner'
+import { parseDecimal } from '@/core/units/parse-decimal'
+import { parseLength } from '@/core/units/parse-length'
+import { callApi } from '@/lib/api-client'
+import { faultSentence, fieldFaults } from '@/lib/field-faults'
+import { lengthInputText } from '@/lib/format-length'
+import type { ShopSettingsResponse } from '@/schemas/shop-settings'
+import { PageHeading } from '../layout/page-heading'
+import { useShop } from '../layout/shop-context'
+import { Button } from '../ui/button'
+import { LengthField } from '../ui/length-field'
+import { Notice } from '../ui/notice'
+import { SelectField } from '../ui/select-field'
+import { TextField } from '../ui/text-field'
+import { numberSettings, type ReachSettingName } from './number-settings'
+
+type Texts = Record<ReachSettingName, string>
+
+function textsOf(settings: ShopSettingsResponse, unit: 'mm' | 'in', decimalComma: boolean): Texts {
+  return Object.fromEntries(
+    numberSettings.map(({ name, kind }) => {
+      const value = settings.reach[name]
+      const text = kind === 'length' ? lengthInputText(value, unit, { decimalComma }) : String(value)
+      return [name, kind === 'length' || !decimalComma ? text : text.replace('.', ',')]
+    }),
+  ) as Texts
+}
+
+/** The shop's name, unit and money, and the figures every reach is worked out with. */
+export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
+  const { unit, decimalComma } = useShop()
+  const router = useRouter()
+  const [texts, setTexts] = useState(() => textsOf(settings, unit, decimalComma))
+  const [fault, setFault] = useState<unknown>(null)
+  const [isBusy, setIsBusy] = useState(false)
+  const faults = fieldFaults(fault)
+
+  const parsed = numberSettings.map(({ name, kind }) => {
+    const read =
+      kind === 'length'
+        ? parseLength(texts[name], { unit, decimalComma, allowZero: true })
+        : parseDecimal(texts[name], { decimalComma })
+    if (!read.ok) return { name, value: null, message: read.message }
+    return { name, value: 'mm' in read ? read.mm : read.value, message: null }
+  })
+  const unreadable = Object.fromEntries(parsed.map(({ name, message }) => [name, message]))
+
+  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+    event.preventDefault()
+    if (parsed.some(({ value }) => value === null)) return
+    const values = new FormData(event.currentTarget)
+    setIsBusy(true)
+    setFault(null)
+    try {
+      await callApi('PATCH', '/api/settings', {
+        body: {
+          version: settings.version,
+          shopName: values.get('shopName'),
+          currency: values.get('currency'),
+          lengthUnit: values.get('lengthUnit'),
+          decimalComma: values.get('decimalComma') === 'yes',
+          reach: Object.fromEntries(parsed.map(({ name, value }) => [name, value])),
+        },
+      })
+      toast.success('Saved. Every check from now on uses these.')
+      router.refresh()
+    } catch (error) {
+      setFault(error)
+    } finally {
+      setIsBusy(false)
+    }
+  }
+
+  return (
+    <form onSubmit={handleSubmit} noValidate className="max-w-4xl pb-10">
+      <PageHeading
+        title="Shop settings"
+        note="They hold for everyone; each person's own unit stands above them."
+      />
+      <div className="flex flex-col gap-6 px-4 lg:px-6">
+        {fault ? (
+          <Notice kind="collision" isAnnounced>
+            {faultSentence(fault)}
+          </Notice>
+        ) : null}
+        <fieldset className="grid gap-4 sm:grid-cols-2">
+          <legend className="border-ink mb-3 w-full border-b pb-1 text-lg font-semibold">The shop</legend>
+          <TextField
+            label="Name"
+            name="shopName"
+            defaultValue={settings.shopName}
+            error={faults.shopName}
+            isRequired
+          />
+          <TextField
+            label="Currency"
+            name="currency"
+            defaultValue={settings.currency}
+            error={faults.currency}
+            hint="Three letters, as ISO 4217 writes them: EUR, USD, GBP."
+            isRequired
+          />
+          <SelectField
+            label="Unit of length"
+            name="lengthUnit"
+            defaultValue={settings.lengthUnit}
+            hint="For everyone who has not chosen one."
+            options={[
+              { value: 'mm', label: 'Millimetres' },
+              { value: 'in', label: 'Inches' },
+            ]}
+          />
+          <SelectField
+            label="Decimal sign"
+            name="decimalComma"
+            defaultValue={settings.decimalComma ? 'yes' : 'no'}
+            options={[
+              { value: 'no', label: 'Point: 3.175' },
+              { value: 'yes', label: 'Comma: 3,175' },
+            ]}
+          />
+        </fieldset>
+        <fieldset className="grid items-start gap-4 sm:grid-cols-2">
+          <legend className="border-ink mb-3 w-full border-b pb-1 text-lg font-semibold">Reach</legend>
+          {numberSettings.map(({ name, kind, label, hint }) => {
+            const common = {
+              label,
+              hint,
+              value: texts[name],
+              error: faults[`reach.${name}`] ?? unreadable[name],
+              isRequired: true,
+            }
+            const setText = (text: string) => setTexts((held) => ({ ...held, [name]: text }))
+            return kind === 'length' ? (
+              <LengthField
+                key={name}
+                {...common}
+                unit={unit}
+                decimalComma={decimalComma}
+                onTextChange={setText}
+              />
+            ) : (
+              <TextField
+                key={name}
+                {...common}
+                inputMode="decimal"
+                onChange={(event) => setText(event.target.value)}
+              />
+            )
+          })}
+        </fieldset>
+        <Notice kind="caution">
+          A smaller clearance lets more tools through and forgives less. These figures stand behind every
+          verdict in the shop.
+        </Notice>
+        <div>
+          <Button type="submit" variant="primary" disabled={isBusy}>
+            {isBusy ? 'Saving …' : 'Save'}
+          </Button>
+        </div>
+      </div>
+    </form>
+  )
+}

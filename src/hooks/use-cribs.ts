@@ -1,0 +1,14 @@
+import useSWR from 'swr'
+import { getJson } from '@/lib/api-client'
+
+export interface CribChoice {
+  id: string
+  code: string
+  name: string
+}
+
+/** The shop's cribs. */
+export function useCribs() {
+  const { data, error, isLoading } = useSWR<{ rows: CribChoice[] }>('/api/cribs', getJson)
+  return { data, error, isLoading }
+}
