@@ -10,7 +10,7 @@ import { waitForHealth } from '@/server/launch/wait-for-health'
 import type { TestRun } from './test-step'
 
 /** Settings of a developer's own that must not reach into the tests. */
-const strangers = ['HOST', 'PORT', 'PUBLIC_URL', 'DEMO', 'DATABASE_URL', 'LOG_LEVEL']
+const strangers = ['FORCE_COLOR', 'HOST', 'PORT', 'PUBLIC_URL', 'DEMO', 'DATABASE_URL', 'LOG_LEVEL']
 
 /** What everything in this run is told: a data folder, a build folder and ports that no `make start` uses. */
 export async function testEnvironment(dataFolder: string): Promise<NodeJS.ProcessEnv> {
@@ -21,6 +21,7 @@ export async function testEnvironment(dataFolder: string): Promise<NodeJS.Proces
   return {
     ...inherited,
     NODE_ENV: 'test',
+    NO_COLOR: '1',
     DATA_DIR: dataFolder,
     DATABASE_PORT: String(await findFreePort()),
     CLUSTER_IS_THROWAWAY: 'yes',

@@ -4,6 +4,7 @@ const knownCauses: { pattern: RegExp; say: (match: RegExpExecArray) => string }[
   { pattern: /EADDRINUSE.*?:(\d+)/, say: ([, port]) => `port ${port} is taken by another program` },
   { pattern: /ECONNREFUSED (\S+:\d+)/, say: ([, address]) => `nothing answers at ${address}` },
   { pattern: /(?:ENOTFOUND|EAI_AGAIN) ([\w.-]+)/, say: ([, host]) => `the host ${host} cannot be found` },
+  { pattern: /^(\S+\(\d+,\d+\)): error TS\d+: (.+)$/m, say: ([, place, fault]) => `${place}: ${fault}` },
   { pattern: /(?:ETIMEDOUT|EHOSTUNREACH) (\S+:\d+)/, say: ([, address]) => `${address} cannot be reached` },
 ]
 
