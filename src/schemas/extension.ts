@@ -1,0 +1,49 @@
+import { z } from 'zod'
+import { extensionProblems } from '@/core/catalogue/holding-problems'
+import { boreKinds, clampingFields, clampingResponseFields, segmentFields, segmentsSchema } from './bore'
+import { lengthMmSchema } from './fields'
+import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
+import {
+  itemListQueryFields,
+  listQuerySchema,
+  listResponseSchema,
+  numberFilters,
+  setFilter,
+  valuesFilter,
+} from './paging'
+
+export const extensionSegmentSchema = z.object(segmentFields)
+
+const extensionFieldsSchema = z.object({
+  ...itemFields,
+  projectionMm: lengthMmSchema('Give the projection.'),
+  ...clampingFields,
+  segments: segmentsSchema(extensionSegmentSchema),
+})
+
+export const createExtensionRequestSchema = extensionFieldsSchema.superRefine((extension, context) =>
+  addProblems(context, extensionProblems(extension)),
+)
+export type CreateExtensionRequest = z.output<typeof createExtensionRequestSchema>
+
+/** Absent leaves alone, null clears; segments are given all together or not at all. */
+export const updateExtensionRequestSchema = extensionFieldsSchema.partial().extend(changeFields)
+export type UpdateExtensionRequest = z.output<typeof updateExtensionRequestSchema>
+
+export const extensionResponseSchema = z.object({
+  ...itemResponseFields,
+  kind: z.literal('extension'),
+  projectionMm: z.number(),
+  ...clampingResponseFields,
+  segments: z.array(extensionSegmentSchema),
+})
+export type ExtensionResponse = z.infer<typeof extensionResponseSchema>
+
+export const extensionListResponseSchema = listResponseSchema(extensionResponseSchema)
+
+export const extensionListQuerySchema = listQuerySchema({
+  ...itemListQueryFields,
+  series: valuesFilter,
+  boreKind: setFilter(boreKinds),
+  ...numberFilters(['projectionMm', 'boreDiameterMm', 'boreDepthMm', 'minimumGripMm', 'gripStartMm']),
+})

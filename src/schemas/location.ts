@@ -1,0 +1,66 @@
+import { z } from 'zod'
+import { shopLocationKinds, treeLocationKinds } from '@/core/stock/kinds'
+import { idSchema, lineSchema, versionSchema } from './fields'
+import { archivedChoices, listQuerySchema, listResponseSchema, setFilter, textFilter } from './paging'
+
+export const locationResponseSchema = z.object({
+  id: z.string(),
+  version: z.number(),
+  code: z.string(),
+  kind: z.enum(shopLocationKinds),
+  cribId: z.string().nullable(),
+  cribCode: z.string().nullable(),
+  name: z.string(),
+  /** What it stands in; null for a crib itself and for what is in no crib. */
+  parentId: z.string().nullable(),
+  archivedAt: z.iso.datetime().nullable(),
+})
+export type LocationResponse = z.infer<typeof locationResponseSchema>
+
+export const locationListResponseSchema = listResponseSchema(locationResponseSchema)
+
+export const locationListQuerySchema = listQuerySchema({
+  kind: setFilter(shopLocationKinds),
+  cribId: idSchema.optional(),
+  parentId: idSchema.optional(),
+  code: textFilter,
+  archived: z.enum(archivedChoices, 'Only no, only or all.').default('no'),
+})
+
+const code = lineSchema('Give the location a code.', 100)
+const name = lineSchema('Give the location a name.', 200)
+const addedKinds = treeLocationKinds.filter((kind) => kind !== 'crib')
+
+/** A crib needs its time zone and stands in nothing; the rest stand in something of the tree. */
+export const createLocationRequestSchema = z.discriminatedUnion('kind', [
+  z.object({
+    kind: z.literal('crib'),
+    code,
+    name,
+    timeZone: lineSchema('Give the time zone, such as Europe/Vienna.', 100),
+  }),
+  z.object({ kind: z.enum(addedKinds), code, name, parentId: idSchema }),
+])
+export type CreateLocationRequest = z.output<typeof createLocationRequestSchema>
+
+/** A location keeps its kind and its crib; within it, it may move. */
+export const updateLocationRequestSchema = z.object({
+  version: versionSchema,
+  code: code.optional(),
+  name: name.optional(),
+  parentId: idSchema.optional(),
+})
+export type UpdateLocationRequest = z.output<typeof updateLocationRequestSchema>
+
+export const cribResponseSchema = z.object({
+  id: z.string(),
+  code: z.string(),
+  name: z.string(),
+  timeZone: z.string(),
+  /** The crib's own root among the locations. */
+  locationId: z.string(),
+})
+export type CribResponse = z.infer<typeof cribResponseSchema>
+
+/** Cribs are few: all of them, by code. */
+export const cribListResponseSchema = z.object({ rows: z.array(cribResponseSchema) })
