@@ -27,4 +27,16 @@ async function runMigrations(db: Knex): Promise<string[]> {
   return names
 }
 
-for (const name of await migrateToLatest(databaseUrl())) process.stdout.write(`${name}\n`)
+try {
+  for (const name of await migrateToLatest(databaseUrl())) process.stdout.write(`${name}\n`)
+} catch (error) {
+  process.stderr.write(`${causeOf(error)}\n`)
+  process.exitCode = 1
+}
+
+/** Knex puts the whole statement before the cause, and has shown it by now; a refused connection has no words at all. */
+function causeOf(error: unknown): string {
+  if (!(error instanceof Error)) return String(error)
+  if (error instanceof AggregateError) return error.errors.map(causeOf).join('; ')
+  return error.message.split(' - ').at(-1) ?? error.message
+}
