@@ -29,6 +29,7 @@ export function LengthField({
   return (
     <TextField
       {...rest}
+      symbol={symbol ? `${symbol} · ${unit}` : unit}
       inputMode="text"
       autoComplete="off"
       spellCheck={false}
