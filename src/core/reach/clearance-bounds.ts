@@ -1,0 +1,138 @@
+import { overlapToleranceMm } from '@/core/outline/types'
+import { type CheckPart, widenedStart } from './check-parts'
+import type { HolePlacement, Placement, WallPlacement } from './placement'
+import type { Obstacle } from './types'
+
+const none = Number.NEGATIVE_INFINITY
+
+/** A line of the widened, lowered outline: `a` from the nose face up. */
+type LineBound = (a0: number, r0: number, a1: number, r1: number) => number
+
+/**
+ * The stick-out that keeps every part behind the nose off the wall, or out of the hole, at the feature's depth.
+ *
+ * Units      Millimetres.
+ * Result     -Infinity where any stick-out does.
+ */
+export function clearanceBoundMm(at: Placement, holderParts: CheckPart[], clearanceMm: number): number {
+  if (at.kind === 'hole')
+    return largestMm(holderParts, clearanceMm, (a0, r0, a1, r1) => holeBoundMm(at, a0, r0, a1, r1))
+  const edgeRadiusMm = topEdgeRadiusMm(at)
+  return largestMm(holderParts, clearanceMm, (a0, r0, a1, r1) =>
+    wallBoundMm(at, edgeRadiusMm, a0, r0, a1, r1),
+  )
+}
+
+/**
+ * The stick-out that keeps every part behind the nose off the obstacles at the feature's depth.
+ *
+ * Units      Millimetres.
+ * Result     -Infinity where any stick-out does.
+ */
+export function obstaclesBoundMm(at: WallPlacement, holderParts: CheckPart[], clearanceMm: number): number {
+  let boundMm = none
+  for (const obstacle of at.obstacles) {
+    const ofLine: LineBound = (a0, r0, a1, r1) => obstacleBoundMm(at, obstacle, a0, r0, a1, r1)
+    boundMm = Math.max(boundMm, largestMm(holderParts, clearanceMm, ofLine))
+  }
+  return boundMm
+}
+
+/**
+ * The stick-out that keeps the far side of a tilted holder off the floor; a spindle only where its width is known.
+ *
+ * Units      Millimetres.
+ * Result     -Infinity without tilt.
+ */
+export function floorBoundMm(at: WallPlacement, holderParts: CheckPart[], clearanceMm: number): number {
+  if (at.tiltDeg === 0) return none
+  const ofPoint = (a: number, r: number) =>
+    r === Number.POSITIVE_INFINITY ? none : at.pivotMm + (r * at.sinTilt - at.pivotMm) / at.cosTilt - a
+  return largestMm(holderParts, clearanceMm, (a0, r0, a1, r1) => Math.max(ofPoint(a0, r0), ofPoint(a1, r1)))
+}
+
+function largestMm(holderParts: CheckPart[], clearanceMm: number, ofLine: LineBound): number {
+  let boundMm = none
+  for (const part of holderParts)
+    for (const line of part.lines) {
+      const r0 = widenedStart(line, clearanceMm)
+      boundMm = Math.max(
+        boundMm,
+        ofLine(line.z0 - clearanceMm, r0, line.z1 - clearanceMm, line.r1 + clearanceMm),
+      )
+    }
+  return boundMm
+}
+
+/** On a straight line the lesser of the two heights is greatest at an end or where the two meet: at the wall's top edge. */
+function wallBoundMm(
+  at: WallPlacement,
+  edgeRadiusMm: number,
+  a0: number,
+  r0: number,
+  a1: number,
+  r1: number,
+): number {
+  let boundMm = Math.max(neededHeightMm(at, r0) - a0, neededHeightMm(at, r1) - a1)
+  const crosses = Math.min(r0, r1) < edgeRadiusMm && Math.max(r0, r1) > edgeRadiusMm + overlapToleranceMm
+  if (crosses) {
+    const share = r1 === Number.POSITIVE_INFINITY ? 0 : (edgeRadiusMm - r0) / (r1 - r0)
+    boundMm = Math.max(boundMm, heightAtDepthMm(at, edgeRadiusMm) - (a0 + share * (a1 - a0)))
+  }
+  return boundMm
+}
+
+/** How high above the tip a point at this radius has to stand: off the wall's line, or out of its top. */
+function neededHeightMm(at: WallPlacement, radiusMm: number): number {
+  if (radiusMm === Number.POSITIVE_INFINITY) return at.tiltDeg > 0 ? none : at.tipDepthMm
+  return Math.min(heightAtWallMm(at, radiusMm), heightAtDepthMm(at, radiusMm))
+}
+
+function heightAtWallMm(at: WallPlacement, radiusMm: number): number {
+  if (at.tiltDeg > 0) return at.pivotMm + (radiusMm * at.cosWall - at.pivotMm) / at.sinWall
+  if (at.tanDraft > 0) return (radiusMm - at.standOffMm) / at.tanDraft
+  return radiusMm > at.standOffMm + overlapToleranceMm ? Number.POSITIVE_INFINITY : none
+}
+
+function heightAtDepthMm(at: WallPlacement, radiusMm: number): number {
+  if (at.tiltDeg === 0) return at.tipDepthMm
+  return at.pivotMm + (at.tipDepthMm - at.pivotMm - radiusMm * at.sinTilt) / at.cosTilt
+}
+
+/** Radius at which the wall's top edge stands from the tool's axis. */
+function topEdgeRadiusMm(at: WallPlacement): number {
+  const acrossMm = at.tipDepthMm * at.tanDraft - at.axisUMm
+  return acrossMm * at.cosTilt + (at.tiltDeg > 0 ? (at.tipDepthMm - at.pivotMm) * at.sinTilt : 0)
+}
+
+function obstacleBoundMm(
+  at: WallPlacement,
+  { setbackMm, riseMm }: Obstacle,
+  a0: number,
+  r0: number,
+  a1: number,
+  r1: number,
+): number {
+  const clearRadiusMm = at.standOffMm + setbackMm
+  if (Math.max(r0, r1) <= clearRadiusMm + overlapToleranceMm) return none
+  const backMm = (radiusMm: number) =>
+    at.tanDraft > 0 ? Math.min(at.tipDepthMm, (radiusMm - clearRadiusMm) / at.tanDraft) : at.tipDepthMm
+  const alongAt = (radiusMm: number) =>
+    r1 === Number.POSITIVE_INFINITY ? a0 : a0 + ((radiusMm - r0) / (r1 - r0)) * (a1 - a0)
+  const boundAt = (radiusMm: number, a: number) => riseMm + backMm(radiusMm) - a
+  const meetRadiusMm = clearRadiusMm + at.tipDepthMm * at.tanDraft
+  let boundMm = Math.max(
+    r0 > clearRadiusMm ? boundAt(r0, a0) : boundAt(clearRadiusMm, alongAt(clearRadiusMm)),
+    r1 > clearRadiusMm ? boundAt(r1, a1) : boundAt(clearRadiusMm, alongAt(clearRadiusMm)),
+  )
+  if (Math.min(r0, r1) < meetRadiusMm && Math.max(r0, r1) > meetRadiusMm)
+    boundMm = Math.max(boundMm, boundAt(meetRadiusMm, alongAt(meetRadiusMm)))
+  return boundMm
+}
+
+function holeBoundMm(at: HolePlacement, a0: number, r0: number, a1: number, r1: number): number {
+  const room = at.roomRadiusMm
+  if (Math.max(r0, r1) <= room + overlapToleranceMm) return none
+  if (r0 > room || a0 === a1) return at.tipDepthMm - a0
+  return at.tipDepthMm - (a0 + ((room - r0) / (r1 - r0)) * (a1 - a0))
+}

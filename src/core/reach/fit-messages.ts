@@ -1,0 +1,138 @@
+import type { CutterDimensions } from '@/core/outline/cutter-dimensions'
+import { overlapToleranceMm } from '@/core/outline/types'
+import type { CheckedFeature, CheckedWall } from './checked-feature'
+import type { ReachMessage } from './message-codes'
+import type { Placement, WallPlacement } from './placement'
+import type { ReachSettings } from './types'
+
+const angleToleranceDeg = 1e-9
+
+/**
+ * Why this feature does not take this cutter at any stick-out; empty where it does.
+ *
+ * Units      Millimetres and degrees, in the messages' own names.
+ * Tolerance  1e-9 mm, 1e-9 degrees.
+ */
+export function fitMessages(
+  feature: CheckedFeature,
+  cutter: CutterDimensions,
+  at: Placement,
+  settings: ReachSettings,
+): ReachMessage[] {
+  if (feature.kind === 'wall' && at.kind === 'wall')
+    return [...openingMessages(feature, cutter, at), ...wallFormMessages(cutter, at)]
+  if (feature.kind === 'wall') return []
+  const offMm = Math.abs(feature.diameterMm - 2 * cutter.radiusMm)
+  if (offMm <= settings.holeToleranceMm + overlapToleranceMm) return []
+  return [
+    {
+      code: 'hole-diameter-mismatch',
+      values: {
+        holeDiameterMm: feature.diameterMm,
+        cuttingDiameterMm: 2 * cutter.radiusMm,
+        toleranceMm: settings.holeToleranceMm,
+      },
+    },
+  ]
+}
+
+function openingMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {
+  const messages: ReachMessage[] = []
+  const { openingWidthMm, insideCornerRadiusMm, floorRadiusMm } = wall
+  const neededMm = 2 * at.standOffMm
+  if (openingWidthMm !== null && openingWidthMm < neededMm - overlapToleranceMm)
+    messages.push({
+      code: 'opening-too-narrow',
+      values: { openingWidthMm, neededMm, shortfallMm: neededMm - openingWidthMm },
+    })
+  if (insideCornerRadiusMm !== null && insideCornerRadiusMm < cutter.radiusMm - overlapToleranceMm)
+    messages.push({
+      code: 'corner-too-tight',
+      values: {
+        insideCornerRadiusMm,
+        toolRadiusMm: cutter.radiusMm,
+        shortfallMm: cutter.radiusMm - insideCornerRadiusMm,
+      },
+    })
+  if (floorRadiusMm !== null && floorRadiusMm < cutter.cornerRadiusMm - overlapToleranceMm)
+    messages.push({
+      code: 'floor-radius-too-small',
+      values: {
+        floorRadiusMm,
+        cornerRadiusMm: cutter.cornerRadiusMm,
+        shortfallMm: cutter.cornerRadiusMm - floorRadiusMm,
+      },
+    })
+  return messages
+}
+
+function wallFormMessages(cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {
+  const messages: ReachMessage[] = []
+  if (isTaperTooSteep(cutter, at))
+    messages.push({
+      code: 'taper-steeper-than-wall',
+      values: {
+        taperHalfAngleDeg: cutter.taperHalfAngleDeg,
+        wallDeg: at.draftDeg + at.tiltDeg,
+        uncutAtFootMm: uncutAtFootMm(cutter, at),
+      },
+    })
+  const contactHeightMm = contactZMm(cutter, at)
+  if (contactHeightMm > 0 && cutter.lengthOfCutMm <= contactHeightMm + overlapToleranceMm)
+    messages.push({
+      code: 'length-of-cut-below-contact',
+      values: { lengthOfCutMm: cutter.lengthOfCutMm, contactHeightMm },
+    })
+  return messages
+}
+
+/**
+ * Whether the cutter leans more than the wall does as it sees it, so that it can't lie along it.
+ *
+ * Tolerance  1e-9 degrees.
+ */
+export function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): boolean {
+  return cutter.taperHalfAngleDeg > at.draftDeg + at.tiltDeg + angleToleranceDeg
+}
+
+/**
+ * Whether this tool can't lie along this wall at all: its reach there is 0.
+ */
+export function cutsNothing(cutter: CutterDimensions, at: Placement): boolean {
+  return at.kind === 'wall' && wallFormMessages(cutter, at).length > 0
+}
+
+/**
+ * Height along the tool, from the tip, at which its rounded end touches the wall.
+ *
+ * Units      Millimetres.
+ * Result     0 for a sharp end.
+ */
+export function contactZMm(cutter: CutterDimensions, at: WallPlacement): number {
+  return cutter.cornerRadiusMm * (1 - at.sinWall)
+}
+
+/**
+ * What a taper steeper than the wall leaves standing at the wall's foot.
+ *
+ * Units      Millimetres, measured along the floor.
+ * Result     0 where the taper is not too steep; null for a rounded tip, for which it is not defined.
+ */
+export function uncutAtFootMm(cutter: CutterDimensions, at: Placement): number | null {
+  if (at.kind === 'hole' || !isTaperTooSteep(cutter, at)) return 0
+  if (cutter.cornerRadiusMm > 0) return null
+  const taperTan = Math.tan((cutter.taperHalfAngleDeg * Math.PI) / 180)
+  return Math.min(cutter.lengthOfCutMm, at.tipDepthMm) * (taperTan - at.sinWall / at.cosWall)
+}
+
+/**
+ * The largest depth cut at one pass along the axis.
+ *
+ * Units      Millimetres.
+ * Result     0 or more: the length of cut above where the tool touches the wall.
+ */
+export function maximumAxialStepMm(cutter: CutterDimensions, at: Placement): number {
+  return at.kind === 'hole'
+    ? cutter.lengthOfCutMm
+    : Math.max(0, cutter.lengthOfCutMm - contactZMm(cutter, at))
+}

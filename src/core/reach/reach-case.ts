@@ -1,0 +1,139 @@
+import { CoreInputError } from '@/core/core-input-error'
+import { notNegative, positive } from '@/core/outline/checked-number'
+import { type CutterDimensions, cutterDimensions } from '@/core/outline/cutter-dimensions'
+import { overlapToleranceMm } from '@/core/outline/types'
+import { type CheckPart, checkPartsOfDimensions, holderCheckParts } from './check-parts'
+import { type CheckedFeature, checkedFeature } from './checked-feature'
+import { type LeastTouch, leastTouch } from './first-touches'
+import { cutsNothing } from './fit-messages'
+import { type Placement, placement } from './placement'
+import { type CheckedClamping, checkedClamping } from './stick-out-bounds'
+import type { Clearances, ReachLimit, ReachRequest, ReachSettings } from './types'
+
+/** A request with everything checked and every outline ready. */
+export interface ReachCase {
+  cutter: CutterDimensions
+  feature: CheckedFeature
+  at: Placement
+  cutterParts: CheckPart[]
+  holderParts: CheckPart[]
+  clamping: CheckedClamping
+  clearances: Clearances
+  settings: ReachSettings
+  /** First touch of the cutter's own parts: the same at every stick-out. */
+  cutterTouch: LeastTouch
+  /** Depth of the tip at which a hole tool's flutes or reach length end; Infinity for any other. */
+  usableTipDepthMm: number
+}
+
+export interface TipReach {
+  tipDepthMm: number
+  limitedBy: ReachLimit | null
+}
+
+/**
+ * Checks a request and prepares what every answer about it needs.
+ *
+ * Units      Millimetres and degrees.
+ * Errors     CoreInputError as `cutterDimensions`, `checkedFeature`, `holderOutline`, `extensionOutline`,
+ *            `checkedClamping`; `not-finite`, `not-positive`, `negative` for stick-out, clearances and side load.
+ */
+export function reachCase(request: ReachRequest): ReachCase {
+  const { settings } = request
+  const cutter = cutterDimensions(request.cutter)
+  const feature = checkedFeature(request.feature, cutter)
+  const at = placement(feature, cutter)
+  const clearances = checkedClearances(request)
+  const cutterParts = checkPartsOfDimensions(cutter)
+  if (request.stickOutMm != null) positive(request.stickOutMm, 'stickOutMm', 'The stick-out')
+  if (request.sideLoadN != null) notNegative(request.sideLoadN, 'sideLoadN', 'The side load')
+  return {
+    cutter,
+    feature,
+    at,
+    cutterParts,
+    holderParts: holderCheckParts(request.holder, request.extension),
+    clamping: checkedClamping(request.holder, request.extension, request.collet),
+    clearances,
+    settings,
+    cutterTouch: leastTouch(at, cutterParts, 0, clearances),
+    usableTipDepthMm: usableTipDepth(request, cutter, at),
+  }
+}
+
+function checkedClearances({ clearances, settings }: ReachRequest): Clearances {
+  const shankMm = clearances?.shankMm ?? settings.shankClearanceMm
+  const holderMm = clearances?.holderMm ?? settings.holderClearanceMm
+  return {
+    shankMm: notNegative(shankMm, 'clearances.shankMm', 'The shank clearance'),
+    holderMm: notNegative(holderMm, 'clearances.holderMm', 'The holder clearance'),
+  }
+}
+
+/** A drill's flutes need room for the chips; a reach length says how deep any hole tool may go. */
+function usableTipDepth(
+  { cutter: given, settings }: ReachRequest,
+  cutter: CutterDimensions,
+  at: Placement,
+): number {
+  if (at.kind === 'wall') return Number.POSITIVE_INFINITY
+  if (given.reachLengthMm != null) return given.reachLengthMm
+  const chipRoomMm = cutter.form === 'drill' ? settings.drillChipRoomDiameters * 2 * cutter.radiusMm : 0
+  return cutter.lengthOfCutMm - chipRoomMm
+}
+
+/**
+ * How deep the tip gets at a stick-out, and what stops it there.
+ *
+ * Units      Millimetres.
+ * Result     Infinity and null where nothing does; 0 and `flute` where the tool can't lie along the wall at all.
+ */
+export function tipReach(reach: ReachCase, stickOutMm: number): TipReach {
+  if (cutsNothing(reach.cutter, reach.at)) return { tipDepthMm: 0, limitedBy: 'flute' }
+  const ofHolder = leastTouch(reach.at, reach.holderParts, stickOutMm, reach.clearances)
+  const touch = ofHolder.tipDepthMm < reach.cutterTouch.tipDepthMm ? ofHolder : reach.cutterTouch
+  if (reach.usableTipDepthMm < touch.tipDepthMm)
+    return { tipDepthMm: Math.max(0, reach.usableTipDepthMm), limitedBy: 'usableLength' }
+  return { tipDepthMm: touch.tipDepthMm, limitedBy: touch.part }
+}
+
+/**
+ * The depth asked of the feature, counted as its reach is.
+ *
+ * Units      Millimetres.
+ */
+export function askedDepthMm({ at }: ReachCase): number {
+  return at.tipDepthMm - at.leadMm
+}
+
+/**
+ * A depth of the tip as depth of the feature.
+ *
+ * Units      Millimetres.
+ * Result     null where it is without limit; never below 0.
+ */
+export function featureDepthMm({ at }: ReachCase, tipDepthMm: number): number | null {
+  return Number.isFinite(tipDepthMm) ? Math.max(0, tipDepthMm - at.leadMm) : null
+}
+
+/**
+ * Whether a depth of the tip falls short of the one asked.
+ *
+ * Tolerance  1e-9 mm.
+ */
+export function isShort({ at }: ReachCase, tipDepthMm: number): boolean {
+  return tipDepthMm < at.tipDepthMm - overlapToleranceMm
+}
+
+/** Settings a shop can get wrong; the edge checks them where they are entered. */
+export function refuseBadSettings(settings: ReachSettings): void {
+  const named: [keyof ReachSettings, boolean][] = [
+    ['stickOutStepMm', settings.stickOutStepMm > 0],
+    ['fluteStiffnessRatio', settings.fluteStiffnessRatio > 0],
+    ['carbideModulusGpa', settings.carbideModulusGpa > 0],
+    ['steelModulusGpa', settings.steelModulusGpa > 0],
+  ]
+  for (const [name, isGood] of named)
+    if (!isGood)
+      throw new CoreInputError('not-positive', `settings.${name}`, 'The setting must be more than zero.')
+}

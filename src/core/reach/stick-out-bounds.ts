@@ -1,0 +1,177 @@
+import { CoreInputError } from '@/core/core-input-error'
+import { notNegative, notNegativeOr, positiveOrNull } from '@/core/outline/checked-number'
+import type { CutterDimensions } from '@/core/outline/cutter-dimensions'
+import type { ColletGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
+import type { CheckPart } from './check-parts'
+import { clearanceBoundMm, floorBoundMm, obstaclesBoundMm } from './clearance-bounds'
+import type { Placement } from './placement'
+import type { Clearances, LowerBound, ReachSettings, UpperBound } from './types'
+
+/** How whatever holds the cutter clamps it. */
+export interface CheckedClamping {
+  boreDepthMm: number
+  gripStartMm: number
+  /** The least that must be clamped; null for a side-lock that names none. */
+  gripMm: number | null
+  /** A side-lock's; null for any other. */
+  insertionMm: number | null
+}
+
+export interface Bound<Name> {
+  by: Name
+  mm: number
+}
+
+export interface StickOutBounds {
+  /** What bore, flutes or neck, and side-lock ask; never helped by the depth. */
+  fixedLower: Bound<LowerBound>[]
+  /** What the rule asks of nut, holder, extension and spindle at this depth. */
+  clearanceLower: Bound<LowerBound>[]
+  upper: Bound<UpperBound>[]
+}
+
+const colletGripShare = 2 / 3
+
+/**
+ * What clamps the cutter: the extension where there is one, else the holder, with its collet.
+ *
+ * Assumes the longer grip where both holder and collet name one, and two thirds of its length for a collet where none
+ * is named.
+ *
+ * Units      Millimetres.
+ * Errors     CoreInputError `bore-depth-missing`, `grip-missing`, `not-finite`, `not-positive`, `negative`.
+ *
+ * @example
+ * checkedClamping({ gaugeLengthMm: 80, boreDepthMm: 50, segments: [] }, null, { series: 'ER20', minimumMm: 5, maximumMm: 6, lengthMm: 30 }).gripMm // => 20
+ */
+export function checkedClamping(
+  holder: HolderGeometry,
+  extension: ExtensionGeometry | null | undefined,
+  collet: ColletGeometry | null | undefined,
+): CheckedClamping {
+  const owner = extension ? 'extension' : 'holder'
+  const clamping = extension ?? holder
+  const boreDepthMm = positiveOrNull(clamping.boreDepthMm, `${owner}.boreDepthMm`, 'The bore depth')
+  if (boreDepthMm === null)
+    throw new CoreInputError('bore-depth-missing', `${owner}.boreDepthMm`, 'The bore depth is needed.')
+  const insertionMm = extension
+    ? null
+    : positiveOrNull(holder.sideLockInsertionMm, 'holder.sideLockInsertionMm', 'The insertion')
+  const gripMm = gripOf(
+    notNegativeOr(clamping.minimumGripMm, null, `${owner}.minimumGripMm`, 'The grip'),
+    collet,
+  )
+  if (gripMm === null && insertionMm === null)
+    throw new CoreInputError(
+      'grip-missing',
+      `${owner}.minimumGripMm`,
+      'The minimum clamping length is needed, or a collet that names its own or its length.',
+    )
+  const gripStartMm = notNegativeOr(clamping.gripStartMm, 0, `${owner}.gripStartMm`, 'The start of the grip')
+  return { boreDepthMm, gripStartMm, gripMm, insertionMm }
+}
+
+function gripOf(ofHolderMm: number | null, collet: ColletGeometry | null | undefined): number | null {
+  const ofColletMm = collet?.minimumGripMm ?? null
+  if (ofColletMm !== null) {
+    const checkedMm = notNegative(ofColletMm, 'collet.minimumGripMm', 'The grip')
+    return ofHolderMm === null ? checkedMm : Math.max(ofHolderMm, checkedMm)
+  }
+  if (ofHolderMm !== null) return ofHolderMm
+  const lengthMm = positiveOrNull(collet?.lengthMm, 'collet.lengthMm', 'The collet length')
+  return lengthMm === null ? null : lengthMm * colletGripShare
+}
+
+/**
+ * Every bound on the stick-out of a cutter at the feature's depth.
+ *
+ * Units      Millimetres.
+ * Result     Lists, each bound with its name; a bound that does not apply is left out.
+ * Source     Worked by hand in test/reference/reach-hand-cases.md.
+ * Tolerance  1e-9 mm.
+ */
+export function stickOutBounds(
+  at: Placement,
+  cutter: CutterDimensions,
+  clamping: CheckedClamping,
+  holderParts: CheckPart[],
+  clearances: Clearances,
+  settings: ReachSettings,
+): StickOutBounds {
+  return {
+    fixedLower: fixedLowerBounds(cutter, clamping, settings),
+    clearanceLower: clearanceLowerBounds(at, holderParts, clearances),
+    upper: upperBounds(cutter, clamping),
+  }
+}
+
+function fixedLowerBounds(
+  cutter: CutterDimensions,
+  { boreDepthMm, insertionMm }: CheckedClamping,
+  { fluteToGripMm }: ReachSettings,
+): Bound<LowerBound>[] {
+  const bounds: Bound<LowerBound>[] = [{ by: 'bore', mm: cutter.overallLengthMm - boreDepthMm }]
+  if (cutter.neck) bounds.push({ by: 'neck', mm: cutter.neck.fullShankZMm + fluteToGripMm })
+  else bounds.push({ by: 'flutes', mm: cutter.fluteLengthMm + fluteToGripMm })
+  if (insertionMm !== null) bounds.push({ by: 'sideLock', mm: cutter.overallLengthMm - insertionMm })
+  return bounds
+}
+
+function upperBounds(cutter: CutterDimensions, clamping: CheckedClamping): Bound<UpperBound>[] {
+  const { gripMm, gripStartMm, insertionMm } = clamping
+  const bounds: Bound<UpperBound>[] = []
+  if (insertionMm !== null) bounds.push({ by: 'sideLock', mm: cutter.overallLengthMm - insertionMm })
+  if (gripMm !== null) bounds.push({ by: 'grip', mm: cutter.overallLengthMm - gripMm - gripStartMm })
+  return bounds
+}
+
+/**
+ * The stick-outs that keep nut, holder, extension and spindle clear at the feature's depth.
+ *
+ * Units      Millimetres.
+ * Result     At most one each of clearance, obstacle, floor; left out where nothing is asked.
+ */
+export function clearanceLowerBounds(
+  at: Placement,
+  holderParts: CheckPart[],
+  clearances: Clearances,
+): Bound<LowerBound>[] {
+  const bounds: Bound<LowerBound>[] = [
+    { by: 'clearance', mm: clearanceBoundMm(at, holderParts, clearances.holderMm) },
+  ]
+  if (at.kind === 'wall') {
+    bounds.push({ by: 'obstacle', mm: obstaclesBoundMm(at, holderParts, clearances.holderMm) })
+    bounds.push({ by: 'floor', mm: floorBoundMm(at, holderParts, clearances.holderMm) })
+  }
+  return bounds.filter(({ mm }) => mm > Number.NEGATIVE_INFINITY)
+}
+
+/**
+ * The largest bound, the first named where two are alike.
+ *
+ * Errors     None; a list without bounds has none: -Infinity is never returned from `stickOutBounds`' lists.
+ */
+export function largestBound<Name>(bounds: Bound<Name>[]): Bound<Name> {
+  return bounds.reduce((largest, bound) => (bound.mm > largest.mm ? bound : largest))
+}
+
+/**
+ * The smallest bound, the first named where two are alike.
+ */
+export function smallestBound<Name>(bounds: Bound<Name>[]): Bound<Name> {
+  return bounds.reduce((smallest, bound) => (bound.mm < smallest.mm ? bound : smallest))
+}
+
+/**
+ * A stick-out rounded up to the shop's step, never past the largest allowed.
+ *
+ * Units      Millimetres.
+ * Tolerance  A stick-out within 1e-9 steps above a step is on it.
+ *
+ * @example
+ * roundedUpMm(39.1875, 0.5, 60) // => 39.5
+ */
+export function roundedUpMm(leastMm: number, stepMm: number, largestMm: number): number {
+  const steps = Math.ceil(leastMm / stepMm - 1e-9)
+  return Math.min(Math.max(leastMm, steps * stepMm), largestMm)
+}
