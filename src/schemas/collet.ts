@@ -4,6 +4,7 @@ import { lengthMmSchema, lineSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
 import {
   itemListQueryFields,
+  itemSortFields,
   listQuerySchema,
   listResponseSchema,
   numberFilters,
@@ -41,8 +42,15 @@ export type ColletResponse = z.infer<typeof colletResponseSchema>
 
 export const colletListResponseSchema = listResponseSchema(colletResponseSchema)
 
-export const colletListQuerySchema = listQuerySchema({
-  ...itemListQueryFields,
-  series: valuesFilter,
-  ...numberFilters(['minimumMm', 'maximumMm', 'lengthMm', 'minimumGripMm']),
-})
+const colletNumberFields = ['minimumMm', 'maximumMm', 'lengthMm', 'minimumGripMm'] as const
+
+export const colletSortFields = [...itemSortFields, 'series', ...colletNumberFields] as const
+
+export const colletListQuerySchema = listQuerySchema(
+  {
+    ...itemListQueryFields,
+    series: valuesFilter,
+    ...numberFilters(colletNumberFields),
+  },
+  colletSortFields,
+)

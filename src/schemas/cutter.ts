@@ -3,7 +3,14 @@ import { cutterProblems } from '@/core/catalogue/cutter-problems'
 import { cutterForms, substrates } from '@/core/tooling'
 import { countSchema, distanceMmSchema, lengthMmSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
-import { itemListQueryFields, listQuerySchema, listResponseSchema, numberFilters, setFilter } from './paging'
+import {
+  itemListQueryFields,
+  itemSortFields,
+  listQuerySchema,
+  listResponseSchema,
+  numberFilters,
+  setFilter,
+} from './paging'
 
 const maximumAngle = 'More than 90°.'
 const halfAngleSchema = z
@@ -78,25 +85,32 @@ export type CutterResponse = z.infer<typeof cutterResponseSchema>
 
 export const cutterListResponseSchema = listResponseSchema(cutterResponseSchema)
 
-export const cutterListQuerySchema = listQuerySchema({
-  ...itemListQueryFields,
-  form: setFilter(cutterForms),
-  substrate: setFilter(substrates),
-  ...numberFilters([
-    'cuttingDiameterMm',
-    'cornerRadiusMm',
-    'taperHalfAngleDeg',
-    'pointAngleDeg',
-    'tipDiameterMm',
-    'lengthOfCutMm',
-    'fluteLengthMm',
-    'neckDiameterMm',
-    'neckTaperHalfAngleDeg',
-    'reachLengthMm',
-    'neckTransitionAngleDeg',
-    'shankDiameterMm',
-    'overallLengthMm',
-    'fluteCount',
-    'maximumRpm',
-  ]),
-})
+const cutterNumberFields = [
+  'cuttingDiameterMm',
+  'cornerRadiusMm',
+  'taperHalfAngleDeg',
+  'pointAngleDeg',
+  'tipDiameterMm',
+  'lengthOfCutMm',
+  'fluteLengthMm',
+  'neckDiameterMm',
+  'neckTaperHalfAngleDeg',
+  'reachLengthMm',
+  'neckTransitionAngleDeg',
+  'shankDiameterMm',
+  'overallLengthMm',
+  'fluteCount',
+  'maximumRpm',
+] as const
+
+export const cutterSortFields = [...itemSortFields, 'form', 'substrate', ...cutterNumberFields] as const
+
+export const cutterListQuerySchema = listQuerySchema(
+  {
+    ...itemListQueryFields,
+    form: setFilter(cutterForms),
+    substrate: setFilter(substrates),
+    ...numberFilters(cutterNumberFields),
+  },
+  cutterSortFields,
+)

@@ -5,6 +5,7 @@ import { lengthMmSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
 import {
   itemListQueryFields,
+  itemSortFields,
   listQuerySchema,
   listResponseSchema,
   numberFilters,
@@ -41,9 +42,27 @@ export type ExtensionResponse = z.infer<typeof extensionResponseSchema>
 
 export const extensionListResponseSchema = listResponseSchema(extensionResponseSchema)
 
-export const extensionListQuerySchema = listQuerySchema({
-  ...itemListQueryFields,
-  series: valuesFilter,
-  boreKind: setFilter(boreKinds),
-  ...numberFilters(['projectionMm', 'boreDiameterMm', 'boreDepthMm', 'minimumGripMm', 'gripStartMm']),
-})
+const extensionNumberFields = [
+  'projectionMm',
+  'boreDiameterMm',
+  'boreDepthMm',
+  'minimumGripMm',
+  'gripStartMm',
+] as const
+
+export const extensionSortFields = [
+  ...itemSortFields,
+  'series',
+  'boreKind',
+  ...extensionNumberFields,
+] as const
+
+export const extensionListQuerySchema = listQuerySchema(
+  {
+    ...itemListQueryFields,
+    series: valuesFilter,
+    boreKind: setFilter(boreKinds),
+    ...numberFilters(extensionNumberFields),
+  },
+  extensionSortFields,
+)

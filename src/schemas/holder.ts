@@ -6,6 +6,7 @@ import { countSchema, lengthMmSchema, optionalLineSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
 import {
   itemListQueryFields,
+  itemSortFields,
   listQuerySchema,
   listResponseSchema,
   numberFilters,
@@ -51,18 +52,31 @@ export type HolderResponse = z.infer<typeof holderResponseSchema>
 
 export const holderListResponseSchema = listResponseSchema(holderResponseSchema)
 
-export const holderListQuerySchema = listQuerySchema({
-  ...itemListQueryFields,
-  taper: valuesFilter,
-  series: valuesFilter,
-  boreKind: setFilter(boreKinds),
-  ...numberFilters([
-    'gaugeLengthMm',
-    'boreDiameterMm',
-    'boreDepthMm',
-    'minimumGripMm',
-    'gripStartMm',
-    'sideLockInsertionMm',
-    'maximumRpm',
-  ]),
-})
+const holderNumberFields = [
+  'gaugeLengthMm',
+  'boreDiameterMm',
+  'boreDepthMm',
+  'minimumGripMm',
+  'gripStartMm',
+  'sideLockInsertionMm',
+  'maximumRpm',
+] as const
+
+export const holderSortFields = [
+  ...itemSortFields,
+  'taper',
+  'series',
+  'boreKind',
+  ...holderNumberFields,
+] as const
+
+export const holderListQuerySchema = listQuerySchema(
+  {
+    ...itemListQueryFields,
+    taper: valuesFilter,
+    series: valuesFilter,
+    boreKind: setFilter(boreKinds),
+    ...numberFilters(holderNumberFields),
+  },
+  holderSortFields,
+)

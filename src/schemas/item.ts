@@ -12,8 +12,8 @@ export const itemFields = {
   unitCost: minorUnitsSchema.nullable().optional(),
 }
 
-/** Of a change: what is absent is left alone, what is null is cleared. */
-export const changeFields = { version: versionSchema }
+/** Of a change: what is absent is left alone, what is null is cleared; `archivedAt: null` brings an item back. */
+export const changeFields = { version: versionSchema, archivedAt: z.iso.datetime().nullable().optional() }
 
 /** Where pieces on hand lie. */
 export const stockPlaceSchema = z.object({

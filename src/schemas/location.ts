@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { shopLocationKinds, treeLocationKinds } from '@/core/stock/kinds'
+import { shopLocationKinds } from '@/core/stock/kinds'
 import { idSchema, lineSchema, versionSchema } from './fields'
 import { archivedChoices, listQuerySchema, listResponseSchema, setFilter, textFilter } from './paging'
 
@@ -19,19 +19,21 @@ export type LocationResponse = z.infer<typeof locationResponseSchema>
 
 export const locationListResponseSchema = listResponseSchema(locationResponseSchema)
 
-export const locationListQuerySchema = listQuerySchema({
-  kind: setFilter(shopLocationKinds),
-  cribId: idSchema.optional(),
-  parentId: idSchema.optional(),
-  code: textFilter,
-  archived: z.enum(archivedChoices, 'Only no, only or all.').default('no'),
-})
+export const locationListQuerySchema = listQuerySchema(
+  {
+    kind: setFilter(shopLocationKinds),
+    cribId: idSchema.optional(),
+    parentId: idSchema.optional(),
+    code: textFilter,
+    archived: z.enum(archivedChoices, 'Only no, only or all.').default('no'),
+  },
+  ['code', 'name', 'kind', 'cribCode'],
+)
 
 const code = lineSchema('Give the location a code.', 100)
 const name = lineSchema('Give the location a name.', 200)
-const addedKinds = treeLocationKinds.filter((kind) => kind !== 'crib')
 
-/** A crib needs its time zone and stands in nothing; the rest stand in something of the tree. */
+/** A crib needs its time zone; what is in it stands in something; the rest is in no crib. */
 export const createLocationRequestSchema = z.discriminatedUnion('kind', [
   z.object({
     kind: z.literal('crib'),
@@ -39,7 +41,8 @@ export const createLocationRequestSchema = z.discriminatedUnion('kind', [
     name,
     timeZone: lineSchema('Give the time zone, such as Europe/Vienna.', 100),
   }),
-  z.object({ kind: z.enum(addedKinds), code, name, parentId: idSchema }),
+  z.object({ kind: z.enum(['cabinet', 'drawer', 'bin']), code, name, parentId: idSchema }),
+  z.object({ kind: z.enum(['regrind', 'inTransit']), code, name }),
 ])
 export type CreateLocationRequest = z.output<typeof createLocationRequestSchema>
 

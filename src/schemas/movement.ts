@@ -24,13 +24,7 @@ export const createMovementRequestSchema = z.object({
 })
 export type CreateMovementRequest = z.output<typeof createMovementRequestSchema>
 
-/** A reversal needs nothing but what it reverses; a note may say why. An empty body is as good as none. */
-export const createReversalRequestSchema = z.object({ note: descriptionSchema.nullable().optional() })
-export type CreateReversalRequest = z.output<typeof createReversalRequestSchema>
-
-/** A far end of the books has a kind and no id: no page shows it. */
 const movementEndSchema = z.object({
-  locationId: z.string().nullable(),
   kind: z.enum(locationKinds),
   code: z.string().nullable(),
   name: z.string(),
@@ -44,8 +38,11 @@ export const movementResponseSchema = z.object({
   itemCode: z.string(),
   pieceId: z.string().nullable(),
   quantity: z.number(),
+  /** Null at a far end of the books, which no page shows; what kind of end it is stands in `from` and `to`. */
+  fromLocationId: z.string().nullable(),
   from: movementEndSchema,
   fromCondition: z.enum(conditions),
+  toLocationId: z.string().nullable(),
   to: movementEndSchema,
   toCondition: z.enum(conditions),
   note: z.string(),
@@ -62,4 +59,4 @@ export type MovementResponse = z.infer<typeof movementResponseSchema>
 
 export const movementListResponseSchema = listResponseSchema(movementResponseSchema)
 
-export const movementListQuerySchema = listQuerySchema({ kind: setFilter(movementKinds) })
+export const movementListQuerySchema = listQuerySchema({ kind: setFilter(movementKinds) }, [])

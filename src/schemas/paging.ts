@@ -1,6 +1,15 @@
 import { z } from 'zod'
 import { idSchema } from './fields'
 
+/** What every list is asked for, whatever it lists. */
+export interface PageQuery {
+  q?: string | undefined
+  sort?: SortTerm[] | undefined
+  limit: number
+  offset?: number | undefined
+  cursor?: string | undefined
+}
+
 /** Rows a list answers at once, at most. */
 export const pageLimit = 500
 const defaultLimit = 100
@@ -33,22 +42,27 @@ const decimalSchema = z
   .regex(/^-?(\d{1,12})(\.\d{1,15})?$/, 'Only a plain decimal number.')
   .transform(Number)
 
-/** `sort=field,-field` */
-const sortSchema = z
-  .string()
-  .max(500)
-  .transform((text) =>
-    text
-      .split(',')
-      .filter((term) => term !== '')
-      .map((term): SortTerm => ({ field: term.replace(/^-/, ''), isDescending: term.startsWith('-') })),
-  )
+/** `sort=field,-field`, each of the fields named here. */
+function sortSchema(fields: readonly string[]) {
+  return z
+    .string()
+    .max(500)
+    .transform((text) =>
+      text
+        .split(',')
+        .filter((term) => term !== '')
+        .map((term): SortTerm => ({ field: term.replace(/^-/, ''), isDescending: term.startsWith('-') })),
+    )
+    .refine(
+      (terms) => terms.every(({ field }) => fields.includes(field)),
+      `Sorted only by ${fields.join(', ')}.`,
+    )
+}
 
 const searchedText = z.string().trim().max(200, 'At most 200 characters.')
 
 export const pageFields = {
   q: searchedText.optional(),
-  sort: sortSchema.optional(),
   limit: wholeNumberSchema(1, pageLimit).default(defaultLimit),
   /** For grids, which jump. */
   offset: wholeNumberSchema(0, deepestOffset).optional(),
@@ -93,6 +107,17 @@ export function numberFilters<const Field extends string>(
   ) as NumberFilterFields<Field>
 }
 
+/** What a list of any kind of item may be sorted by, beside its geometry. */
+export const itemSortFields = [
+  'code',
+  'maker',
+  'partNumber',
+  'description',
+  'unitCost',
+  'onHand',
+  'available',
+] as const
+
 export const itemListQueryFields = {
   code: textFilter,
   maker: textFilter,
@@ -106,8 +131,8 @@ export const itemListQueryFields = {
 }
 
 /** The query of a list: a member it does not know is refused, since a filter left out would answer too much. */
-export function listQuerySchema<Fields extends z.ZodRawShape>(fields: Fields) {
-  return z.strictObject({ ...pageFields, ...fields })
+export function listQuerySchema<Fields extends z.ZodRawShape>(fields: Fields, sortFields: readonly string[]) {
+  return z.strictObject({ ...pageFields, sort: sortSchema(sortFields).optional(), ...fields })
 }
 
 /** `total` stands on the first block alone. */

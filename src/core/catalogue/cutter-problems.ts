@@ -1,4 +1,4 @@
-import type { CutterForm, CutterGeometry } from '../tooling'
+import { type CutterForm, type CutterGeometry, holeToolForms } from '../tooling'
 import { fluteEndDiameterMm } from './flute-end-diameter'
 import { type GeometryProblem, isMore, lengthToleranceMm } from './geometry-problem'
 
@@ -21,7 +21,8 @@ export function cutterProblems(cutter: CutterGeometry): GeometryProblem[] {
   return [...formProblems(cutter), ...lengthProblems(cutter), ...neckProblems(cutter)]
 }
 
-const pointedForms: readonly CutterForm[] = ['drill', 'reamer', 'tap', 'chamfer']
+const holeTools: readonly CutterForm[] = holeToolForms
+const pointedForms: readonly CutterForm[] = [...holeToolForms, 'chamfer']
 
 function formProblems(cutter: CutterGeometry): GeometryProblem[] {
   return [
@@ -75,10 +76,20 @@ function pointProblems(cutter: CutterGeometry): GeometryProblem[] {
   if (cutter.form === 'chamfer' && (angle === null || angle >= 180)) {
     return [problem('pointAngleDeg', 'A chamfer needs its included angle, less than 180°.')]
   }
+  if (isPointOverlong(cutter, angle)) {
+    return [problem('pointAngleDeg', 'The point is longer than the length of cut.')]
+  }
   if (angle !== null && angle < 180 && !pointedForms.includes(cutter.form)) {
     return [problem('pointAngleDeg', 'This form has no point: leave the point angle empty.')]
   }
   return []
+}
+
+/** A chamfer may cut with a part of its cone; a point is all there. */
+function isPointOverlong(cutter: CutterGeometry, angleDeg: number | null): boolean {
+  if (angleDeg === null || !holeTools.includes(cutter.form)) return false
+  const pointLengthMm = cutter.cuttingDiameterMm / 2 / Math.tan((angleDeg * Math.PI) / 360)
+  return isMore(pointLengthMm, cutter.lengthOfCutMm ?? cutter.fluteLengthMm)
 }
 
 function tipProblems(cutter: CutterGeometry): GeometryProblem[] {
