@@ -111,7 +111,7 @@ function wallPlacement(wall: CheckedWall, cutter: CutterDimensions): WallPlaceme
  * Errors     CoreInputError `wall-out-of-range`.
  *
  * @example
- * wallStandOffMm(3, 3, 30) // => 1.7320508075688774
+ * wallStandOffMm(3, 3, 30).toFixed(6) // => '1.732051'
  */
 export function wallStandOffMm(radiusMm: number, cornerRadiusMm: number, wallDeg: number): number {
   if (!(wallDeg >= 0 && wallDeg < 90))
