@@ -74,21 +74,20 @@ const cutters = `
     flute_length double precision
   ) RETURNS double precision LANGUAGE sql IMMUTABLE AS $$
     SELECT 2 * CASE
+      WHEN form = 'tapered' AND corner_radius > 0 AND flute_length < corner_radius * (1 - sind(taper_deg)) THEN
+        cutting_diameter / 2 - corner_radius + sqrt(corner_radius ^ 2 - (corner_radius - flute_length) ^ 2)
       WHEN form = 'tapered' THEN
-        CASE WHEN corner_radius > 0 AND flute_length < corner_radius * (1 - sind(taper_deg))
-          THEN cutting_diameter / 2 - corner_radius
-            + sqrt(corner_radius ^ 2 - (corner_radius - flute_length) ^ 2)
-          ELSE cutting_diameter / 2 - coalesce(corner_radius, 0) * (1 - cosd(taper_deg))
-            + (flute_length - coalesce(corner_radius, 0) * (1 - sind(taper_deg))) * tand(taper_deg)
-        END
-      WHEN form IN ('corner_radius', 'ball') AND length_of_cut < round_radius THEN
-        cutting_diameter / 2 - round_radius + sqrt(round_radius ^ 2 - (round_radius - length_of_cut) ^ 2)
+        cutting_diameter / 2 - coalesce(corner_radius, 0) * (1 - cosd(taper_deg))
+          + (flute_length - coalesce(corner_radius, 0) * (1 - sind(taper_deg))) * tand(taper_deg)
+      WHEN form = 'ball' AND length_of_cut < cutting_diameter / 2 THEN
+        sqrt((cutting_diameter / 2) ^ 2 - (cutting_diameter / 2 - length_of_cut) ^ 2)
+      WHEN form = 'corner_radius' AND length_of_cut < corner_radius THEN
+        cutting_diameter / 2 - corner_radius + sqrt(corner_radius ^ 2 - (corner_radius - length_of_cut) ^ 2)
       WHEN form = 'drill' AND point_deg < 180 THEN least(cutting_diameter / 2, length_of_cut * tand(point_deg / 2))
       WHEN form = 'chamfer' AND point_deg < 180 THEN
         least(cutting_diameter / 2, coalesce(tip_diameter, 0) / 2 + length_of_cut * tand(point_deg / 2))
       ELSE cutting_diameter / 2
     END
-    FROM (SELECT CASE WHEN form = 'ball' THEN cutting_diameter / 2 ELSE corner_radius END AS round_radius) AS tip
   $$;
 
   CREATE TABLE cutters (
@@ -128,9 +127,10 @@ const cutters = `
     -- Of the length of cut and the flutes' length the one given stands for both where a neck follows.
     CONSTRAINT cutters_neck_beyond_flutes CHECK (neck_diameter_mm IS NULL
       OR coalesce(reach_length_mm > coalesce(flute_length_mm, length_of_cut_mm), false)),
-    CONSTRAINT cutters_neck_within_flutes CHECK (neck_diameter_mm <= 1e-9 + flute_end_diameter_mm(form,
-      cutting_diameter_mm, corner_radius_mm, taper_half_angle_deg, point_angle_deg, tip_diameter_mm,
-      coalesce(length_of_cut_mm, flute_length_mm), coalesce(flute_length_mm, length_of_cut_mm)))
+    CONSTRAINT cutters_neck_within_flutes CHECK (neck_diameter_mm IS NULL
+      OR neck_diameter_mm <= 1e-9 + flute_end_diameter_mm(form,
+        cutting_diameter_mm, corner_radius_mm, taper_half_angle_deg, point_angle_deg, tip_diameter_mm,
+        coalesce(length_of_cut_mm, flute_length_mm), coalesce(flute_length_mm, length_of_cut_mm)))
   );
   CREATE INDEX cutters_form_cutting_diameter_mm_idx ON cutters (form, cutting_diameter_mm);
   CREATE INDEX cutters_cutting_diameter_mm_idx ON cutters (cutting_diameter_mm);
@@ -248,10 +248,12 @@ const geometryTables = [
 
 /**
  * Rows that a statement leaves as they were raise nothing, and neither does geometry written in the transaction that
- * makes the item: nobody has seen that version yet.
+ * makes the item: nobody has seen that version yet. A function's plan is kept for the whole connection, whether it was
+ * made for one row or for a hundred thousand, so only plans that serve both are allowed: lookups by index.
  */
 const geometryVersions = `
-  CREATE FUNCTION raise_item_versions() RETURNS trigger LANGUAGE plpgsql AS $$
+  CREATE FUNCTION raise_item_versions() RETURNS trigger LANGUAGE plpgsql
+  SET enable_hashjoin = off SET enable_mergejoin = off SET enable_seqscan = off SET jit = off AS $$
   BEGIN
     IF TG_OP = 'INSERT' THEN
       UPDATE items SET version = version + 1

@@ -9,8 +9,9 @@ import type { Knex } from 'knex'
  * share one of these (or one is among the other's), so the index finds the few candidates and `is_one_edit_apart`
  * decides. A term finds an item when
  *
- *     items.search_text LIKE '%term%' OR items.search_words && matching_search_words('term')
+ *     items.search_text LIKE '%term%' OR items.search_words && (SELECT matching_search_words('term'))
  *
+ * where the SELECT has the words looked up once and not again for every row.
  * For example `carbdie` is no substring of `solid carbide ball`, but it and `carbide` both become `carbde` and so
  * `matching_search_words('carbdie')` is `{carbide}`. Digits are never forgiven: no word holds any.
  */
@@ -72,20 +73,22 @@ export async function up(knex: Knex): Promise<void> {
         AND is_one_edit_apart(word, lower(term))
     $$;
 
-    CREATE FUNCTION keep_search_words() RETURNS trigger LANGUAGE plpgsql AS $$
+    -- Its plans are kept for the whole connection, so only those are allowed that serve one row and many.
+    CREATE FUNCTION keep_search_words() RETURNS trigger LANGUAGE plpgsql
+    SET enable_hashjoin = off SET enable_mergejoin = off SET enable_seqscan = off SET jit = off AS $$
     BEGIN
       IF TG_OP = 'INSERT' THEN
         INSERT INTO search_words (word)
-          SELECT DISTINCT word FROM new_rows, unnest(new_rows.search_words) AS word
-          WHERE NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = word)
+          SELECT word FROM (SELECT DISTINCT unnest(search_words) AS word FROM new_rows) AS fresh
+          WHERE NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = fresh.word)
           ORDER BY word
           ON CONFLICT DO NOTHING;
       ELSE
         INSERT INTO search_words (word)
-          SELECT DISTINCT word
-          FROM new_rows JOIN old_rows USING (id), unnest(new_rows.search_words) AS word
-          WHERE new_rows.search_words <> old_rows.search_words
-            AND NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = word)
+          SELECT word FROM (
+            SELECT unnest(search_words) AS word FROM new_rows EXCEPT SELECT unnest(search_words) FROM old_rows
+          ) AS fresh
+          WHERE NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = fresh.word)
           ORDER BY word
           ON CONFLICT DO NOTHING;
       END IF;

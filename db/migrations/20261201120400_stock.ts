@@ -32,6 +32,13 @@ const notNegative = (column: string) =>
   `${column} double precision CHECK (${column} >= 0 AND ${column} < 'Infinity')`
 const conditions = `('new', 'used', 'reground', 'worn')`
 
+/**
+ * A function's plans are kept for the whole connection, whether they were made for one movement or for a hundred
+ * thousand, so only such are allowed as serve both: lookups by index.
+ */
+const steadyPlans = `
+  SET enable_hashjoin = off SET enable_mergejoin = off SET enable_seqscan = off SET jit = off`
+
 const pieces = `
   CREATE TABLE pieces (
     id bigint GENERATED ALWAYS AS IDENTITY PRIMARY KEY,
@@ -148,7 +155,7 @@ const checkMovements = `
     END
   $$;
 
-  CREATE FUNCTION check_movements() RETURNS trigger LANGUAGE plpgsql AS $$
+  CREATE FUNCTION check_movements() RETURNS trigger LANGUAGE plpgsql ${steadyPlans} AS $$
   DECLARE
     broken record;
   BEGIN
@@ -184,11 +191,11 @@ const checkMovements = `
         ERRCODE = 'LL012', TABLE = 'movements', CONSTRAINT = 'movements_piece_where_tracked';
     END IF;
 
-    SELECT coalesce(items.code, target.code) AS code INTO broken
+    SELECT CASE WHEN items.archived_at IS NULL THEN target.code ELSE items.code END AS code INTO broken
       FROM new_rows AS posted
-      LEFT JOIN items ON items.id = posted.item_id AND items.archived_at IS NOT NULL
-      LEFT JOIN locations AS target ON target.id = posted.to_location_id AND target.archived_at IS NOT NULL
-      WHERE items.id IS NOT NULL OR target.id IS NOT NULL LIMIT 1;
+      JOIN items ON items.id = posted.item_id
+      JOIN locations AS target ON target.id = posted.to_location_id
+      WHERE items.archived_at IS NOT NULL OR target.archived_at IS NOT NULL LIMIT 1;
     IF FOUND THEN
       RAISE EXCEPTION '% is archived', broken.code USING
         ERRCODE = 'LL013', TABLE = 'movements', CONSTRAINT = 'movements_of_what_is_in_use';
@@ -209,7 +216,7 @@ const checkMovements = `
  * movement takes it from.
  */
 const postMovements = `
-  CREATE FUNCTION post_movements() RETURNS trigger LANGUAGE plpgsql AS $$
+  CREATE FUNCTION post_movements() RETURNS trigger LANGUAGE plpgsql ${steadyPlans} AS $$
   DECLARE
     broken record;
   BEGIN

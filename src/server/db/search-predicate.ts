@@ -21,7 +21,8 @@ export function whereMatchesSearch(query: Knex.QueryBuilder, search: string): vo
 
 function wherePieceMatches(query: Knex.QueryBuilder, piece: string, isPart: boolean): void {
   if (isPart) query.whereLike('items.search_text', `%${piece}%`)
-  if (isForgivable(piece)) query.orWhereRaw('items.search_words && matching_search_words(?)', [piece])
+  if (isForgivable(piece))
+    query.orWhereRaw('items.search_words && (select matching_search_words(?))', [piece])
 }
 
 /** A word of five letters may have lost one on the way here. */
