@@ -11,6 +11,8 @@ export interface LengthFieldProps extends Omit<TextFieldProps, 'value' | 'onChan
   onTextChange: (text: string) => void
   unit: LengthUnit
   decimalComma: boolean
+  /** Whether 0 is an answer, as it is of a tip or an offset. */
+  allowZero?: boolean
 }
 
 /** A dimension as people write it: `1/8`, `3.175 mm`, `#7`. What it was read as stands below where that isn't plain to see. */
@@ -19,11 +21,13 @@ export function LengthField({
   onTextChange,
   unit,
   decimalComma,
+  allowZero,
+  symbol,
   hint,
   error,
   ...rest
 }: LengthFieldProps) {
-  const parsed = value.trim() === '' ? null : parseLength(value, { unit, decimalComma })
+  const parsed = value.trim() === '' ? null : parseLength(value, { unit, decimalComma, allowZero })
   const readAs = parsed?.ok && parsed.as !== 'plain' ? `Read as ${formatLength(parsed.mm, unit)}` : undefined
   const fault = parsed && !parsed.ok ? parsed.message : undefined
   return (
