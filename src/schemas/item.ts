@@ -1,7 +1,14 @@
 import { z } from 'zod'
 import type { GeometryProblem } from '@/core/catalogue/geometry-problem'
 import { catalogueKinds } from '@/core/stock/kinds'
-import { descriptionSchema, lineSchema, minorUnitsSchema, optionalLineSchema, versionSchema } from './fields'
+import {
+  descriptionSchema,
+  idSchema,
+  lineSchema,
+  minorUnitsSchema,
+  optionalLineSchema,
+  versionSchema,
+} from './fields'
 
 /** What every item has, whatever its kind. */
 export const itemFields = {
@@ -56,3 +63,9 @@ export const itemResponseFields = {
 export function addProblems(context: z.RefinementCtx, problems: GeometryProblem[]): void {
   for (const { path, message } of problems) context.addIssue({ code: 'custom', path, message })
 }
+
+/** Stock of one item is summed over all cribs unless one is asked for. */
+export const itemQuerySchema = z.strictObject({ cribId: idSchema.optional() })
+
+export const makerListQuerySchema = z.strictObject({ kind: z.enum(catalogueKinds).optional() })
+export const makerListResponseSchema = z.object({ rows: z.array(z.string()) })

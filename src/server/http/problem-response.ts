@@ -54,7 +54,12 @@ export function problemResponse(
 }
 
 export function fieldProblems(error: z.ZodError): FieldProblem[] {
-  return error.issues.map((issue) => ({ path: issue.path.map(String).join('.'), message: issue.message }))
+  return error.issues.flatMap((issue) => {
+    const path = issue.path.map(String)
+    return issue.code === 'unrecognized_keys'
+      ? issue.keys.map((key) => ({ path: [...path, key].join('.'), message: 'There is no such field here.' }))
+      : [{ path: path.join('.'), message: issue.message }]
+  })
 }
 
 /** 422 where every fault is a value of the right shape that cannot be; 400 otherwise. */

@@ -1,0 +1,125 @@
+import type { Knex } from 'knex'
+import type { CatalogueKind } from '@/core/stock/kinds'
+import type { PageQuery } from '@/schemas/paging'
+import { enumToDb } from '../enum-case'
+import { type GeometryTable, geometryTables } from '../geometry-tables'
+import { type KeyPage, readKeyPage, type SortKey } from '../key-page'
+import { whereMatchesSearch } from '../search-predicate'
+import { isLowSql } from './stock-summaries'
+
+/** A list as it is asked for: paging, and filters by the name of their field. */
+export type CatalogueQuery = PageQuery & Record<string, unknown>
+
+/** Two lengths that differ by less are the same to a filter. */
+const filterToleranceMm = 1e-6
+
+const itemTextColumns: Record<string, string> = {
+  code: 'items.code',
+  maker: 'items.maker',
+  partNumber: 'items.part_number',
+  description: 'items.description',
+}
+
+/** The ids of one block of the catalogue's items of a kind. */
+export function readCatalogueKeys(db: Knex, kind: CatalogueKind, query: CatalogueQuery): Promise<KeyPage> {
+  const table = geometryTables[kind]
+  const sort = (query.sort?.length ? query.sort : [{ field: 'code', isDescending: false }]).map(
+    (term): SortKey => ({ ...sortColumn(table, term.field), isDescending: term.isDescending }),
+  )
+  const matching = db('items').where('items.kind', kind)
+  joinWhatIsAsked(db, matching, table, query, sort)
+  whereArchived(matching, query.archived)
+  if (query.q) whereMatchesSearch(matching, query.q)
+  whereFields(matching, table, query)
+  whereStockState(matching, query)
+  return readKeyPage(db, matching, { sql: 'items.id' }, sort, query)
+}
+
+function sortColumn(table: GeometryTable, field: string): Omit<SortKey, 'isDescending'> {
+  const text = itemTextColumns[field]
+  if (text) return { sql: `lower(${text})`, isNumber: false }
+  if (field === 'unitCost') return { sql: 'items.unit_cost_minor', isNumber: true }
+  if (field === 'onHand') return { sql: 'coalesce(level.on_hand, 0)', isNumber: true }
+  if (field === 'available') return { sql: 'coalesce(level.available, 0)', isNumber: true }
+  const isNumber = /(Mm|Deg|Count|Rpm)$/.test(field)
+  const column = geometryColumn(table, field)
+  return { sql: isNumber ? column : `lower(${column})`, isNumber }
+}
+
+function geometryColumn(table: GeometryTable, field: string): string {
+  return `${table.name}.${field === 'series' && table.hasBore ? 'bore_series' : enumToDb(field)}`
+}
+
+/** Joins cost time in a long list: only what a filter or the sorting looks at is joined. */
+function joinWhatIsAsked(
+  db: Knex,
+  matching: Knex.QueryBuilder,
+  table: GeometryTable,
+  query: CatalogueQuery,
+  sort: readonly SortKey[],
+): void {
+  const sorted = sort.map((key) => key.sql).join()
+  const isGeometryFiltered = geometryFilters(table).some((name) => query[name] !== undefined)
+  if (sorted.includes(`${table.name}.`) || isGeometryFiltered) {
+    matching.join(table.name, `${table.name}.item_id`, 'items.id')
+  }
+  if (!sorted.includes('level.') && !query.stockState) return
+  const levels = db('stock_levels')
+    .select('item_id')
+    .select(db.raw('sum(on_hand)::int as on_hand, sum(on_hand - reserved)::int as available'))
+    .groupBy('item_id')
+  if (query.cribId) levels.where('crib_id', query.cribId as string)
+  matching.leftJoin(levels.as('level'), 'level.item_id', 'items.id')
+}
+
+function geometryFilters(table: GeometryTable): string[] {
+  const fields = table.hasBore ? [...table.fields, 'series', 'boreKind', 'boreDiameterMm'] : table.fields
+  return fields.flatMap((field) => [field, `${field}.min`, `${field}.max`])
+}
+
+function whereArchived(matching: Knex.QueryBuilder, archived: unknown): void {
+  if (archived === 'no') matching.whereNull('items.archived_at')
+  if (archived === 'only') matching.whereNotNull('items.archived_at')
+}
+
+function whereFields(matching: Knex.QueryBuilder, table: GeometryTable, query: CatalogueQuery): void {
+  for (const [field, column] of Object.entries(itemTextColumns)) {
+    const text = query[field]
+    if (typeof text === 'string' && text) {
+      matching.whereRaw(`strpos(lower(${column}), lower(?)) > 0`, [text])
+    }
+  }
+  for (const filter of [...geometryFilters(table), 'unitCost', 'unitCost.min', 'unitCost.max']) {
+    const [field = '', bound] = filter.split('.')
+    const column = field === 'unitCost' ? 'items.unit_cost_minor' : geometryColumn(table, field)
+    whereField(matching, column, bound, query[filter])
+  }
+}
+
+function whereField(
+  matching: Knex.QueryBuilder,
+  column: string,
+  bound: string | undefined,
+  value: unknown,
+): void {
+  if (Array.isArray(value)) {
+    const wanted = value.map((one) => enumToDb(String(one)).toLowerCase())
+    const plain = value.map((one) => String(one).toLowerCase())
+    matching.whereRaw(`lower(${column}) = any(?)`, [[...new Set([...wanted, ...plain])]])
+  }
+  if (typeof value !== 'number') return
+  if (bound !== 'max') matching.whereRaw(`${column} >= ?::double precision`, [value - filterToleranceMm])
+  if (bound !== 'min') matching.whereRaw(`${column} <= ?::double precision`, [value + filterToleranceMm])
+}
+
+/** Any of the states asked for; an item that is out may be low as well. */
+function whereStockState(matching: Knex.QueryBuilder, query: CatalogueQuery): void {
+  const states = query.stockState
+  if (!Array.isArray(states)) return
+  const cribId = (query.cribId as string | undefined) ?? null
+  matching.where((any) => {
+    if (states.includes('inStock')) any.orWhereRaw('coalesce(level.on_hand, 0) > 0')
+    if (states.includes('out')) any.orWhereRaw('coalesce(level.on_hand, 0) = 0')
+    if (states.includes('low')) any.orWhereRaw(isLowSql('items.id'), [cribId, cribId])
+  })
+}
