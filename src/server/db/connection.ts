@@ -16,3 +16,6 @@ export async function closeDb(): Promise<void> {
   await pool?.destroy()
   pool = undefined
 }
+
+/** What a service may hold of the database: the pool, or the transaction it opened. */
+export type Database = Knex

@@ -1,8 +1,7 @@
-import type { Knex } from 'knex'
 import { AppError } from '@/lib/app-error'
 import type { Person, UpdatePersonRequest } from '@/schemas/person'
 import type { Actor } from '../../auth/actor'
-import { db } from '../../db/connection'
+import { type Database, db } from '../../db/connection'
 import { createAuditEntry } from '../../db/stores/audit-store'
 import { endSessionsOfUser } from '../../db/stores/session-store'
 import { countActiveAdmins, findPerson, updateUser } from '../../db/stores/user-store'
@@ -33,13 +32,17 @@ export async function updatePerson(actor: Actor, id: string, request: UpdatePers
   })
 }
 
-export async function getPerson(trx: Knex, id: string): Promise<Person> {
+export async function getPerson(trx: Database, id: string): Promise<Person> {
   const person = await findPerson(trx, id)
   if (!person) throw new AppError('not-found', 'There is no such person.')
   return person
 }
 
-async function refuseLosingLastAdmin(trx: Knex, before: Person, request: UpdatePersonRequest): Promise<void> {
+async function refuseLosingLastAdmin(
+  trx: Database,
+  before: Person,
+  request: UpdatePersonRequest,
+): Promise<void> {
   const staysAdmin = (request.role ?? before.role) === 'admin' && (request.isActive ?? before.isActive)
   if (before.role !== 'admin' || !before.isActive || staysAdmin) return
   if ((await countActiveAdmins(trx)) > 1) return
