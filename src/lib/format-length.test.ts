@@ -30,6 +30,11 @@ describe('formatLength', () => {
     expect(formatLength(3.175, 'in', { fractions: true })).toBe('1/8 (0.125) in')
     expect(formatLength(3.175, 'mm', { fractions: true })).toBe('3.175 mm')
   })
+
+  it('goes finer where it is asked to', () => {
+    expect(formatLength(0.010435, 'mm', { extraDecimals: 1 })).toBe('0.0104 mm')
+    expect(formatLength(0.010435, 'in', { extraDecimals: 1 })).toBe('0.00041 in')
+  })
 })
 
 describe('formatInchSize', () => {

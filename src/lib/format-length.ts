@@ -7,6 +7,8 @@ export interface FormatLengthOptions {
   withUnit?: boolean
   /** Whether inches on a 1/64 read as fractions with the decimal beside, as sizes do; no unless true. */
   fractions?: boolean
+  /** Decimals beyond the usual, for what is much smaller than a tool: a scallop, a deflection. */
+  extraDecimals?: number
 }
 
 /**
@@ -19,7 +21,8 @@ export interface FormatLengthOptions {
  */
 export function formatLength(mm: number, unit: LengthUnit, options: FormatLengthOptions = {}): string {
   if (unit === 'in' && options.fractions) return formatInchSize(mm, options)
-  const number = unit === 'in' ? decimalText(mm / mmPerInch, 3, 4) : decimalText(mm, 0, 3)
+  const extra = options.extraDecimals ?? 0
+  const number = unit === 'in' ? decimalText(mm / mmPerInch, 3, 4 + extra) : decimalText(mm, 0, 3 + extra)
   return options.withUnit === false ? number : `${number} ${unit}`
 }
 

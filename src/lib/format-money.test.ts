@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { formatAngle } from './format-angle'
 import { currencyDecimals, formatMoney } from './format-money'
-import { formatSpeed } from './format-speed'
+import { formatRpm, formatSpeed } from './format-speed'
 
 describe('formatMoney', () => {
   /** ISO 4217's minor units, from memory. */
@@ -32,5 +32,7 @@ describe('formatSpeed and formatAngle', () => {
     expect(formatSpeed(152.4, 'in')).toBe('500 SFM')
     expect(formatAngle(35.5312)).toBe('35.53°')
     expect(formatAngle(30)).toBe('30°')
+    expect(formatRpm(999.6)).toBe('1\u00a0000 rpm')
+    expect(formatRpm(120)).toBe('120 rpm')
   })
 })

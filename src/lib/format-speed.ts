@@ -16,3 +16,13 @@ export function formatSpeed(mPerMin: number, unit: LengthUnit): string {
   const value = unit === 'mm' ? mPerMin : mPerMin / metresPerFoot
   return `${decimalText(value, 0, value < 1000 ? 1 : 0)} ${speedUnitNames[unit]}`
 }
+
+/**
+ * A spindle speed in whole revolutions, thousands apart by a no-break space, which is no decimal sign anywhere.
+ *
+ * @example
+ * formatRpm(14605.4) // => '14\u00a0605 rpm'
+ */
+export function formatRpm(rpm: number): string {
+  return `${decimalText(rpm, 0, 0).replace(/\B(?=(?:\d{3})+$)/g, '\u00a0')} rpm`
+}
