@@ -1,0 +1,234 @@
+import type { ToolPart } from '@/core/outline/types'
+import type { ReachMessage, ReachMessageCode, ReachMessageValues } from '@/core/reach/message-codes'
+import type { Feature, LowerBound, ReachAnswer, ReachLimit, UpperBound } from '@/core/reach/types'
+import { decimalText } from '@/core/units/decimal-text'
+import { type LengthUnit, mmPerInch } from '@/core/units/length-unit'
+import { formatAngle } from './format-angle'
+import { formatLength } from './format-length'
+
+/** Below this a hundredth of a millimetre would round the figure away. */
+const fineBelowMm = 0.1
+
+/**
+ * A length inside a sentence, where a hundredth of a millimetre or a thousandth of an inch is enough to act on; finer
+ * where that would round it away.
+ *
+ * @example
+ * sentenceLength(38.1625, 'mm') // => '38.16 mm'
+ * sentenceLength(38.1625, 'in') // => '1.502 in'
+ * sentenceLength(0.025, 'mm') // => '0.025 mm'
+ */
+export function sentenceLength(mm: number, unit: LengthUnit): string {
+  if (Math.abs(mm) < fineBelowMm) return formatLength(mm, unit)
+  return unit === 'mm' ? `${decimalText(mm, 0, 2)} mm` : `${decimalText(mm / mmPerInch, 3, 3)} in`
+}
+
+export const partNames: Readonly<Record<ToolPart | ReachLimit, string>> = {
+  flute: 'length of cut',
+  runOut: 'run-out',
+  neck: 'neck',
+  transition: 'transition',
+  shank: 'shank',
+  extension: 'extension',
+  nut: 'nut',
+  holder: 'holder',
+  spindle: 'spindle face',
+  usableLength: 'usable length',
+  floor: 'floor',
+}
+
+/** What keeps the stick-out from being shorter. */
+export const lowerBoundNames: Readonly<Record<LowerBound, string>> = {
+  clearance: 'the depth, by what is behind the nose',
+  floor: 'the floor, under the tilted holder',
+  obstacle: 'an obstacle',
+  flutes: 'the end of the flutes: only full shank is clamped',
+  neck: 'the end of the neck: only full shank is clamped',
+  bore: 'the bottom of the bore',
+  sideLock: 'the side-lock’s flat',
+}
+
+/** What keeps the stick-out from being longer. */
+export const upperBoundNames: Readonly<Record<UpperBound, string>> = {
+  grip: 'the least grip',
+  sideLock: 'the side-lock’s flat',
+}
+
+/**
+ * `stops`: the tool can't, or doesn't, because of this. `caution`: it works, and this is to be known. `assumed`: what
+ * was taken for granted.
+ */
+export type MessageKind = 'stops' | 'caution' | 'assumed'
+
+export const messageKinds: Readonly<Record<ReachMessageCode, MessageKind>> = {
+  'length-of-cut-assumed': 'assumed',
+  'flute-length-assumed': 'assumed',
+  'transition-angle-assumed': 'assumed',
+  'neck-without-length': 'caution',
+  'corner-radius-not-used': 'caution',
+  'substrate-assumed': 'assumed',
+  'spindle-width-unknown': 'assumed',
+  'collet-not-given': 'caution',
+  'deflection-not-asked': 'assumed',
+  'spindle-taken-as-rigid': 'assumed',
+  'collet-range-position': 'assumed',
+  'opening-too-narrow': 'stops',
+  'corner-too-tight': 'stops',
+  'floor-radius-too-small': 'stops',
+  'hole-diameter-mismatch': 'stops',
+  'taper-steeper-than-wall': 'stops',
+  'length-of-cut-below-contact': 'stops',
+  'flutes-strike-obstacle': 'stops',
+  'collet-range-misses-shank': 'stops',
+  'collet-of-other-series': 'stops',
+  'bore-misses-shank': 'stops',
+  'bounds-crossed': 'stops',
+  'stick-out-breaks-bound': 'stops',
+  'cutter-rubs': 'stops',
+  'cutter-strikes-floor': 'stops',
+  'holder-strikes-floor': 'stops',
+  'usable-length-too-short': 'stops',
+  'needed-stick-out-over-maximum': 'stops',
+  'longer-stick-out-reaches': 'caution',
+  'depth-in-steps': 'caution',
+  'wall-lower-than-corner': 'caution',
+  'thicker-shank-taken-as-step': 'assumed',
+}
+
+/** A length as the sentence being written says it. */
+type Said = (mm: number) => string
+
+const sentences: {
+  [Code in ReachMessageCode]: (values: ReachMessageValues[Code], said: Said) => string
+} = {
+  'length-of-cut-assumed': ({ lengthOfCutMm }, said) =>
+    `Only the fluted length was given; its ${said(lengthOfCutMm)} are read as the length of cut.`,
+  'flute-length-assumed': ({ fluteLengthMm, runOutMm }, said) =>
+    runOutMm > 0
+      ? `The fluted length was not given: ${said(fluteLengthMm)} is assumed, a run-out of ${said(runOutMm)} behind the length of cut.`
+      : `The fluted length was not given: ${said(fluteLengthMm)} is assumed, the length of cut alone.`,
+  'transition-angle-assumed': ({ transitionAngleDeg }) =>
+    `The transition from neck to shank is assumed at ${formatAngle(transitionAngleDeg)} a side.`,
+  'neck-without-length': ({ neckDiameterMm }, said) =>
+    `The neck of ${said(neckDiameterMm)} has no reach length, so it is left out and the shank begins at the flutes.`,
+  'corner-radius-not-used': ({ cornerRadiusMm }, said) =>
+    `The corner radius of ${said(cornerRadiusMm)} is not used by this form.`,
+  'substrate-assumed': () => 'The tool material was not given; cemented carbide is assumed for stiffness.',
+  'spindle-width-unknown': () =>
+    'The width of the spindle nose is not known; its face is taken as without end.',
+  'collet-not-given': () => 'No collet was given, so nothing checks that one holds this shank.',
+  'deflection-not-asked': () => 'No side load was given, so no deflection is worked out.',
+  'spindle-taken-as-rigid': ({ fluteStiffnessRatio }) =>
+    `Stiffness takes spindle, taper and clamping as rigid, and the flutes as ${decimalText(fluteStiffnessRatio, 0, 2)} of their diameter: the tip gives more than this.`,
+  'collet-range-position': ({ minimumMm, maximumMm, shankDiameterMm, positionRatio }, said) =>
+    `The shank of ${said(shankDiameterMm)} sits ${placeInRange(minimumMm, maximumMm, positionRatio)} of the collet’s range, ${said(minimumMm)} to ${said(maximumMm)}; the small end grips worst.`,
+
+  'opening-too-narrow': ({ openingWidthMm, neededMm, shortfallMm }, said) =>
+    `The opening of ${said(openingWidthMm)} is too narrow by ${said(shortfallMm)}: this cutter needs ${said(neededMm)}.`,
+  'corner-too-tight': ({ insideCornerRadiusMm, toolRadiusMm }, said) =>
+    `The inside corner of ${said(insideCornerRadiusMm)} is tighter than the tool’s radius of ${said(toolRadiusMm)}.`,
+  'floor-radius-too-small': ({ floorRadiusMm, cornerRadiusMm }, said) =>
+    floorRadiusMm > 0
+      ? `The floor’s radius of ${said(floorRadiusMm)} is smaller than the tool’s corner radius of ${said(cornerRadiusMm)}.`
+      : `The floor asks for a square end; this cutter has a corner radius of ${said(cornerRadiusMm)}.`,
+  'hole-diameter-mismatch': ({ holeDiameterMm, cuttingDiameterMm, toleranceMm }, said) =>
+    `A tool of ${said(cuttingDiameterMm)} doesn’t make a hole of ${said(holeDiameterMm)}: they may differ by ${said(toleranceMm)}.`,
+  'taper-steeper-than-wall': ({ taperHalfAngleDeg, wallDeg, uncutAtFootMm }, said) =>
+    `The taper of ${formatAngle(taperHalfAngleDeg)} a side is steeper than the wall, ${formatAngle(wallDeg)} as the tool meets it${
+      uncutAtFootMm ? `: it would leave ${said(uncutAtFootMm)} at the foot` : ''
+    }.`,
+  'length-of-cut-below-contact': ({ lengthOfCutMm, contactHeightMm }, said) =>
+    `The length of cut of ${said(lengthOfCutMm)} ends below ${said(contactHeightMm)}, where the rounded tip meets the wall.`,
+  'flutes-strike-obstacle': ({ depthMm }, said) =>
+    `The length of cut strikes an obstacle at a depth of ${said(depthMm)}.`,
+  'collet-range-misses-shank': ({ minimumMm, maximumMm, shankDiameterMm }, said) =>
+    `The collet takes ${said(minimumMm)} to ${said(maximumMm)}; the shank is ${said(shankDiameterMm)}.`,
+  'collet-of-other-series': ({ colletSeries, boreSeries }) =>
+    boreSeries === null
+      ? `The bore takes a plain shank, no collet; this one is of series ${colletSeries}.`
+      : `The collet is of series ${colletSeries}; the chuck takes ${boreSeries}.`,
+  'bore-misses-shank': ({ boreDiameterMm, shankDiameterMm, toleranceMm }, said) =>
+    `A bore of ${said(boreDiameterMm)} doesn’t take a shank of ${said(shankDiameterMm)}: they may differ by ${said(toleranceMm)}.`,
+  'bounds-crossed': ({ lowerBound, lowerMm, upperBound, upperMm, overlapMm }, said) =>
+    `No stick-out is allowed. It must be at least ${said(lowerMm)} (${lowerBoundNames[lowerBound]}) and at most ${said(upperMm)} (${upperBoundNames[upperBound]}): ${said(overlapMm)} are missing.`,
+  'stick-out-breaks-bound': ({ stickOutMm, bound, boundMm, overlapMm }, said) =>
+    `A stick-out of ${said(stickOutMm)} is ${said(overlapMm)} too ${stickOutMm > boundMm ? 'long' : 'short'}: ${boundName(bound)} ${stickOutMm > boundMm ? 'allows at most' : 'asks for at least'} ${said(boundMm)}.`,
+  'cutter-rubs': ({ part, depthMm }, said) =>
+    `The ${partNames[part]} of the cutter itself stops at ${said(depthMm)}: no stick-out helps.`,
+  'cutter-strikes-floor': ({ part }) =>
+    `Tilted like this, the far side of the ${partNames[part]} stands in the floor: less tilt or another cutter.`,
+  'holder-strikes-floor': ({ neededStickOutMm }, said) =>
+    `The far side of the tilted holder stands in the floor; it clears at ${said(neededStickOutMm)} stick-out.`,
+  'usable-length-too-short': ({ usableDepthMm, shortfallMm }, said) =>
+    `The flutes serve to a depth of ${said(usableDepthMm)}, ${said(shortfallMm)} too little.`,
+  'needed-stick-out-over-maximum': ({ lowerBound, neededMm, maximumMm, shortfallMm }, said) =>
+    `This depth needs ${said(neededMm)} of stick-out (${lowerBoundNames[lowerBound]}), ${said(shortfallMm)} more than the ${said(maximumMm)} allowed.`,
+  'longer-stick-out-reaches': ({ requiredMm }, said) => `A stick-out of ${said(requiredMm)} would reach.`,
+
+  'depth-in-steps': ({ maximumAxialStepMm, steps }, said) =>
+    `One axial step is at most ${said(maximumAxialStepMm)}, so this depth goes in ${steps} steps.`,
+  'wall-lower-than-corner': ({ contactHeightMm, leftAtTopMm }, said) =>
+    `The wall ends below ${said(contactHeightMm)}, where the rounded tip meets it: ${said(leftAtTopMm)} stay at its top edge.`,
+  'thicker-shank-taken-as-step': ({ shankDiameterMm }, said) =>
+    `Without a neck the shank of ${said(shankDiameterMm)} is taken to begin at the end of the flutes as a square step.`,
+}
+
+/**
+ * One message of an answer in words, its lengths in the reader's unit.
+ *
+ * @example
+ * messageSentence({ code: 'cutter-rubs', values: { part: 'shank', depthMm: 12.7, shortfallMm: 3 } }, 'mm') // => 'The shank of the cutter itself stops at 12.7 mm: no stick-out helps.'
+ */
+export function messageSentence(message: ReachMessage, unit: LengthUnit): string {
+  const write = sentences[message.code] as (values: ReachMessage['values'], said: Said) => string
+  return write(message.values, (mm) => sentenceLength(mm, unit))
+}
+
+/**
+ * The verdict as one thing to read, before any figure: does it, at what stick-out, and what touches next.
+ *
+ * An impossible check names its first reason; one that falls short, what stops it and the stick-out that would do.
+ */
+export function verdictSentence(answer: ReachAnswer, feature: Feature, unit: LengthUnit): string {
+  const said: Said = (mm) => sentenceLength(mm, unit)
+  if (answer.verdict === 'impossible') return impossibleSentence(answer, unit)
+  const at = `at ${said(answer.stickOut.usedMm)} stick-out`
+  if (answer.verdict === 'reaches')
+    return `Reaches ${said(feature.depthMm)} ${at}. ${nextSentence(answer, said)}`
+  const longer = answer.messages.find(({ code }) => code === 'longer-stick-out-reaches')
+  const help = longer ? ` ${messageSentence(longer, unit)}` : ''
+  return `${shortSentence(answer, feature, at, said)}${help}`
+}
+
+function impossibleSentence(answer: ReachAnswer, unit: LengthUnit): string {
+  const reason = answer.messages.find(({ code }) => messageKinds[code] === 'stops')
+  return reason ? `Impossible. ${messageSentence(reason, unit)}` : 'Impossible.'
+}
+
+function nextSentence({ limitedBy, reachMm }: ReachAnswer, said: Said): string {
+  if (limitedBy === null || reachMm === null) return 'Nothing touches at any depth.'
+  if (limitedBy === 'usableLength') return `The usable length ends next, at ${said(reachMm)}.`
+  return `The ${partNames[limitedBy]} touches next, at ${said(reachMm)}.`
+}
+
+function shortSentence(answer: ReachAnswer, feature: Feature, at: string, said: Said): string {
+  const { limitedBy, reachMm, shortfallMm } = answer
+  const goal = said(feature.depthMm)
+  if (limitedBy === 'floor' || limitedBy === null || reachMm === null)
+    return `Doesn’t reach ${goal} ${at}. The far side of the tilted tool stands in the floor.`
+  const first =
+    limitedBy === 'usableLength'
+      ? `The usable length ends at ${said(reachMm)}.`
+      : `The ${partNames[limitedBy]} touches first, at ${said(reachMm)}.`
+  return `Falls ${said(shortfallMm)} short of ${goal} ${at}. ${first}`
+}
+
+function boundName(bound: LowerBound | UpperBound): string {
+  return bound === 'grip' ? upperBoundNames.grip : lowerBoundNames[bound]
+}
+
+function placeInRange(minimumMm: number, maximumMm: number, positionRatio: number): string {
+  if (maximumMm - minimumMm <= 0) return 'at the one size'
+  if (positionRatio < 1 / 3) return 'in the small third'
+  return positionRatio > 2 / 3 ? 'in the large third' : 'in the middle'
+}
