@@ -13,7 +13,7 @@ const packageOnlyIn = (name, packagePattern, homes) => ({
   name,
   severity: 'error',
   from: { path: '^src/', pathNot: [...homes, '\\.test\\.tsx?$'] },
-  to: { path: `^node_modules/${packagePattern}` },
+  to: { path: `(^|/)node_modules/${packagePattern}` },
 })
 
 module.exports = {
@@ -89,7 +89,7 @@ module.exports = {
   ],
   options: {
     doNotFollow: { path: 'node_modules' },
-    exclude: { path: '^(\\.next|\\.next-test|node_modules/(?!knex|pg|mathjs|nodemailer))' },
+    exclude: { path: '^(test/guards/import-fixture|\\.next|\\.next-test|node_modules/(?!knex|pg|mathjs|nodemailer))' },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: 'tsconfig.json' },
     enhancedResolveOptions: {

@@ -1,0 +1,3 @@
+import { row } from '../server/db/row'
+
+export const value = row

@@ -1,0 +1,3 @@
+import { schema } from '../schemas/schema'
+
+export const value = schema

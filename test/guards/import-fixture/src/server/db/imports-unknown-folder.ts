@@ -1,0 +1,3 @@
+import { unknown } from '../unknown/unknown'
+
+export const value = unknown

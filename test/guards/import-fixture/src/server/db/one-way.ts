@@ -1,0 +1,3 @@
+import { other } from './other-way'
+
+export const one = () => other

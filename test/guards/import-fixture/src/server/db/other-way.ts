@@ -1,0 +1,3 @@
+import { one } from './one-way'
+
+export const other = () => one

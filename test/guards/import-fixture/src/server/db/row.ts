@@ -1,0 +1,1 @@
+export const row = 1

@@ -1,0 +1,3 @@
+import knex from 'knex'
+
+export const value = knex
