@@ -23,4 +23,4 @@ export type FitsItem = z.infer<typeof fitsItemSchema>
 
 export const fitsListResponseSchema = listResponseSchema(fitsItemSchema)
 
-export const fitsListQuerySchema = listQuerySchema({ kind: setFilter(catalogueKinds) }, [])
+export const fitsListQuerySchema = listQuerySchema({ kind: setFilter(catalogueKinds) })

@@ -59,4 +59,4 @@ export type MovementResponse = z.infer<typeof movementResponseSchema>
 
 export const movementListResponseSchema = listResponseSchema(movementResponseSchema)
 
-export const movementListQuerySchema = listQuerySchema({ kind: setFilter(movementKinds) }, [])
+export const movementListQuerySchema = listQuerySchema({ kind: setFilter(movementKinds) })

@@ -55,7 +55,7 @@ function sortSchema(fields: readonly string[]) {
     )
     .refine(
       (terms) => terms.every(({ field }) => fields.includes(field)),
-      `Sorted only by ${fields.join(', ')}.`,
+      fields.length > 0 ? `Sorted only by ${fields.join(', ')}.` : 'This list has one order.',
     )
 }
 
@@ -131,7 +131,10 @@ export const itemListQueryFields = {
 }
 
 /** The query of a list: a member it does not know is refused, since a filter left out would answer too much. */
-export function listQuerySchema<Fields extends z.ZodRawShape>(fields: Fields, sortFields: readonly string[]) {
+export function listQuerySchema<Fields extends z.ZodRawShape>(
+  fields: Fields,
+  sortFields: readonly string[] = [],
+) {
   return z.strictObject({ ...pageFields, sort: sortSchema(sortFields).optional(), ...fields })
 }
 

@@ -13,3 +13,19 @@ export async function createCrib(trx: Knex, crib: NewCrib): Promise<string> {
     .returning('id')
   return row.id
 }
+
+/** The root of a crib among the locations. */
+export async function getCribLocationId(db: Knex, cribId: string): Promise<string> {
+  const row = await db('locations').where({ crib_id: cribId, kind: 'crib' }).first('id')
+  return row.id
+}
+
+/** What is absent is left alone; the root location follows. */
+export async function updateCrib(
+  trx: Knex,
+  cribId: string,
+  change: { code?: string | undefined; name?: string | undefined },
+): Promise<void> {
+  const set = Object.fromEntries(Object.entries(change).filter(([, value]) => value !== undefined))
+  if (Object.keys(set).length > 0) await trx('cribs').where('id', cribId).update(set)
+}

@@ -1,0 +1,83 @@
+import type { Knex } from 'knex'
+import type { LocationKind } from '@/core/stock/kinds'
+import { enumFromDb, enumToDb } from '../enum-case'
+import type { LocationsRow } from '../row-types'
+
+export interface LocationRecord {
+  id: string
+  version: number
+  kind: LocationKind
+  code: string
+  name: string
+  cribId: string | null
+  parentId: string | null
+  isArchived: boolean
+}
+
+const columns = ['id', 'version', 'kind', 'code', 'name', 'crib_id', 'parent_id', 'archived_at']
+
+export async function findLocation(db: Knex, id: string): Promise<LocationRecord | null> {
+  const row = await db('locations').where('id', id).first(columns)
+  return row ? fromRow(row) : null
+}
+
+/** Held until the transaction ends, against other changes of the location. */
+export async function findLockedLocation(trx: Knex, id: string): Promise<LocationRecord | null> {
+  const row = await trx('locations').where('id', id).forNoKeyUpdate().first(columns)
+  return row ? fromRow(row) : null
+}
+
+/** The one location where everything broken ends. */
+export async function getScrapLocationId(db: Knex): Promise<string> {
+  const row = await db('locations').where('kind', 'scrap').first('id')
+  return row.id
+}
+
+export interface NewLocation {
+  kind: LocationKind
+  code: string
+  name: string
+  cribId: string | null
+  parentId: string | null
+}
+
+export async function createLocation(trx: Knex, location: NewLocation): Promise<string> {
+  const [row] = await trx('locations')
+    .insert({
+      kind: enumToDb(location.kind),
+      code: location.code,
+      name: location.name,
+      crib_id: location.cribId,
+      parent_id: location.parentId,
+    })
+    .returning('id')
+  return row.id
+}
+
+/** What is absent is left alone. */
+export async function updateLocation(
+  trx: Knex,
+  id: string,
+  change: { code?: string | undefined; name?: string | undefined; parentId?: string | undefined },
+): Promise<void> {
+  const given = { code: change.code, name: change.name, parent_id: change.parentId }
+  const set = Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined))
+  if (Object.keys(set).length > 0) await trx('locations').where('id', id).update(set)
+}
+
+export async function archiveLocation(trx: Knex, id: string): Promise<void> {
+  await trx('locations').where('id', id).whereNull('archived_at').update({ archived_at: trx.fn.now() })
+}
+
+function fromRow(row: LocationsRow): LocationRecord {
+  return {
+    id: row.id,
+    version: row.version,
+    kind: enumFromDb(row.kind) as LocationKind,
+    code: row.code,
+    name: row.name,
+    cribId: row.crib_id,
+    parentId: row.parent_id,
+    isArchived: row.archived_at !== null,
+  }
+}
