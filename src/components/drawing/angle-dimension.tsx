@@ -15,7 +15,9 @@ export interface AngleDimensionProps {
 
 function onCircle(vertex: Point, radius: number, deg: number): Point {
   const angle = (deg * Math.PI) / 180
-  return { x: vertex.x + radius * Math.cos(angle), y: vertex.y + radius * Math.sin(angle) }
+  // To a hundredth of a px: sines differ in their last digit between server and browser.
+  const onSheet = (px: number) => Math.round(px * 100) / 100
+  return { x: onSheet(vertex.x + radius * Math.cos(angle)), y: onSheet(vertex.y + radius * Math.sin(angle)) }
 }
 
 /** An angle: its legs drawn out thin, an arc with arrowheads between them, the figure beyond the arc's middle. */

@@ -13,8 +13,8 @@ export interface SheetContent {
 export interface DrawingSheetProps {
   /** What the drawing shows, as one sentence. */
   sentence: string
-  /** What the title block calls it. */
-  code: string
+  /** What the title block calls it, where it is an item of the crib. */
+  code?: string
   unit: LengthUnit
   /** Lays the drawing out for a width in px. */
   draw: (width: number) => SheetContent
@@ -43,7 +43,7 @@ export function DrawingSheet({ sentence, code, unit, draw, note }: DrawingSheetP
         {note ? <span className="text-ink-soft mr-auto px-3 py-1.5">{note}</span> : null}
         <TitleCell name="Scale" value={scaleName} className="print:hidden" />
         <TitleCell name="Dimensions in" value={unit} />
-        <TitleCell name="Code" value={code} />
+        {code ? <TitleCell name="Code" value={code} /> : null}
       </figcaption>
     </figure>
   )

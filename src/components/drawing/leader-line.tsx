@@ -18,7 +18,8 @@ export function LeaderLine({ target, shoulder, text, symbol, ending = 'arrow' }:
   const goesRight = shoulder.x >= target.x
   const width = draftingTextWidth(symbol ? `${symbol} ${text}` : text) + 6
   const end = shoulder.x + (goesRight ? width : -width)
-  const direction = (Math.atan2(target.y - shoulder.y, target.x - shoulder.x) * 180) / Math.PI
+  const direction =
+    Math.round((Math.atan2(target.y - shoulder.y, target.x - shoulder.x) * 18_000) / Math.PI) / 100
   return (
     <g>
       <path
