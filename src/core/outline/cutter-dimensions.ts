@@ -62,7 +62,7 @@ const printedRoundingMm = 0.001
  * Units      Millimetres; angles in degrees, a side.
  * Result     Radii, not diameters. `fluteLengthMm` is at least `lengthOfCutMm` and at most the overall length.
  * Errors     CoreInputError `not-given`, `not-finite`, `not-positive`, `negative`, `length-of-cut-missing`,
- *            `corner-radius-over-half`, `corner-radius-missing`, `taper-out-of-range`, `neck-taper-out-of-range`,
+ *            `corner-radius-over-half`, `corner-radius-missing`, `corner-radius-not-half`, `corner-radius-on-square`, `taper-out-of-range`, `neck-taper-out-of-range`,
  *            `transition-out-of-range`, `point-angle-out-of-range`, `point-longer-than-cut`, `tip-over-diameter`,
  *            `flutes-shorter-than-cut`, `flutes-longer-than-cutter`, `reach-length-longer-than-cutter`.
  *
@@ -102,9 +102,12 @@ function cornerRadius(cutter: CutterGeometry, radiusMm: number, assumptions: Cut
     throw new CoreInputError('corner-radius-missing', path, 'The corner radius is needed for this form.')
   const isHalf = given !== null && Math.abs(given - radiusMm) <= printedRoundingMm
   if (cutter.form === 'ball') {
-    if (given !== null && !isHalf) assumptions.push('cornerRadiusNotUsed')
+    if (given !== null && !isHalf)
+      throw new CoreInputError('corner-radius-not-half', path, 'A ball’s radius is half its cutting diameter.')
     return radiusMm
   }
+  if (cutter.form === 'square' && given)
+    throw new CoreInputError('corner-radius-on-square', path, 'A square end has no corner radius.')
   if (!roundedForms.includes(cutter.form)) {
     if (given) assumptions.push('cornerRadiusNotUsed')
     return 0

@@ -11,7 +11,7 @@ export interface ReachMessageValues {
   'transition-angle-assumed': { transitionAngleDeg: number }
   /** A neck diameter without a reach length: the neck is left out, the shank begins at the flutes. */
   'neck-without-length': { neckDiameterMm: number }
-  /** A corner radius that the form does not use, or a ball's that is not half its diameter. */
+  /** A corner radius on a form that is read as square: a face mill, slotting cutter, thread mill or hole tool. */
   'corner-radius-not-used': { cornerRadiusMm: number }
   /** The substrate was not given; carbide is assumed for stiffness. */
   'substrate-assumed': Record<string, never>
