@@ -1,0 +1,189 @@
+'use client'
+
+import { ListFilter, Plus, Upload } from 'lucide-react'
+import dynamic from 'next/dynamic'
+import { useRouter } from 'next/navigation'
+import { type ReactNode, useMemo, useRef, useState } from 'react'
+import type { PartsListHandle } from '@/components/grid/parts-list-grid'
+import { useCan } from '@/components/layout/shop-context'
+import { Button, ButtonLink } from '@/components/ui/button'
+import { Dialog } from '@/components/ui/dialog'
+import { StateSentence } from '@/components/ui/state-sentence'
+import { useMediaQuery } from '@/components/ui/use-media-query'
+import { itemPagePath } from '@/lib/catalogue-paths'
+import type { CatalogueDefinition } from './catalogue-definition'
+import { filterParamNames } from './catalogue-filter'
+import type { CatalogueGridProps } from './catalogue-grid'
+import { CatalogueList } from './catalogue-list'
+import type { CatalogueRow } from './catalogue-row'
+import { isNarrowed, queryParams } from './catalogue-view'
+import { ColumnChooser } from './column-chooser'
+import { FilterFields } from './filter-fields'
+import { ItemFormDialog } from './item-form-dialog'
+import { SearchBox } from './search-box'
+import { SortSelect } from './sort-select'
+import { useCatalogueView } from './use-catalogue-view'
+
+/** The grid's code comes only where a grid is shown: not on a phone, not on any other page. */
+const CatalogueGrid = dynamic(() => import('./catalogue-grid'), {
+  ssr: false,
+  loading: () => <StateSentence sentence="Loading the list …" />,
+}) as <Row extends CatalogueRow>(props: CatalogueGridProps<Row>) => ReactNode
+
+export function CataloguePage<Row extends CatalogueRow>({
+  definition,
+}: {
+  definition: CatalogueDefinition<Row>
+}) {
+  const router = useRouter()
+  const isWide = useMediaQuery('(min-width: 48rem)')
+  const canSeeCosts = useCan('seeCosts')
+  const filterNames = useMemo(() => filterParamNames(definition.filters), [definition.filters])
+  const columns = useMemo(() => definition.columns(canSeeCosts), [definition, canSeeCosts])
+  const [view, changeView] = useCatalogueView(filterNames)
+  const [total, setTotal] = useState<number | null>(null)
+  const [isAdding, setIsAdding] = useState(false)
+  const grid = useRef<PartsListHandle>(null)
+  const shownIds = useMemo(() => {
+    const known = view.columns?.filter((id) => columns.some((column) => column.id === id)) ?? []
+    return known.length > 0 ? known : columns.filter((column) => column.isUsual).map((column) => column.id)
+  }, [view.columns, columns])
+
+  const shared = {
+    definition,
+    isNarrowed: isNarrowed(view),
+    onClear: () => changeView({ q: '', filters: {} }),
+    onAdd: () => setIsAdding(true),
+  }
+
+  return (
+    <div className="flex flex-1 flex-col md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
+        <h1 className="text-2xl">{definition.title}</h1>
+        {isWide && total !== null ? (
+          <p className="text-ink-soft" role="status">
+            {total.toLocaleString('en')}{' '}
+            {shared.isNarrowed ? 'found' : total === 1 ? definition.one : definition.many}
+          </p>
+        ) : null}
+        <div className="order-last flex w-full min-w-0 items-center gap-2 sm:order-none sm:ml-auto sm:w-auto">
+          <SearchBox
+            value={view.q}
+            label={`Search ${definition.many}`}
+            onSearch={(q) => changeView({ q })}
+            onLeaveDown={() => grid.current?.focusFirstRow()}
+          />
+          {isWide ? null : (
+            <FilterDrawer count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}>
+              <SortSelect columns={columns} value={view.sort} onChange={(sort) => changeView({ sort })} />
+              <FilterFields
+                shape="column"
+                filters={definition.filters}
+                values={view.filters}
+                onChange={(filters) => changeView({ filters })}
+              />
+            </FilterDrawer>
+          )}
+        </div>
+        <CatalogueActions definition={definition} onAdd={shared.onAdd}>
+          {isWide ? (
+            <ColumnChooser
+              columns={columns}
+              shown={shownIds}
+              isUsual={view.columns === null}
+              onChange={(ids) => changeView({ columns: ids })}
+            />
+          ) : null}
+        </CatalogueActions>
+      </div>
+      {isWide === null ? <StateSentence sentence={`Loading the ${definition.many} …`} /> : null}
+      {isWide === true ? (
+        <>
+          <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
+            <FilterFields
+              shape="row"
+              filters={definition.filters}
+              values={view.filters}
+              onChange={(filters) => changeView({ filters })}
+            />
+            {shared.isNarrowed ? (
+              <Button variant="quiet" size="compact" className="self-end" onClick={shared.onClear}>
+                Clear all
+              </Button>
+            ) : null}
+          </div>
+          <CatalogueGrid
+            {...shared}
+            columns={columns}
+            shownIds={shownIds}
+            view={view}
+            onViewChange={changeView}
+            onTotal={setTotal}
+            handleRef={grid}
+          />
+        </>
+      ) : null}
+      {isWide === false ? <CatalogueList {...shared} query={queryParams(view).toString()} /> : null}
+      <ItemFormDialog
+        definition={definition}
+        row={null}
+        isOpen={isAdding}
+        onClose={() => setIsAdding(false)}
+        onSaved={(row) => {
+          setIsAdding(false)
+          router.push(itemPagePath(row.kind, row.id))
+        }}
+      />
+    </div>
+  )
+}
+
+function CatalogueActions<Row extends CatalogueRow>({
+  definition,
+  onAdd,
+  children,
+}: {
+  definition: CatalogueDefinition<Row>
+  onAdd: () => void
+  children: ReactNode
+}) {
+  const mayKeep = useCan('keepCrib')
+  return (
+    <div className="ml-auto flex items-center gap-2 sm:ml-0">
+      {children}
+      {mayKeep ? (
+        <>
+          <ButtonLink href="/imports" size="compact" prefetch={false} className="hidden! md:inline-flex!">
+            <Upload aria-hidden="true" className="size-4.5" />
+            Import
+          </ButtonLink>
+          <Button variant="primary" size="compact" onClick={onAdd}>
+            <Plus aria-hidden="true" className="size-4.5" />
+            Add
+            <span className="sr-only"> a {definition.one}</span>
+          </Button>
+        </>
+      ) : null}
+    </div>
+  )
+}
+
+function FilterDrawer({ count, children }: { count: number; children: ReactNode }) {
+  const [isOpen, setIsOpen] = useState(false)
+  return (
+    <>
+      <Button className="min-h-11" onClick={() => setIsOpen(true)}>
+        <ListFilter aria-hidden="true" className="size-5" />
+        Filters{count > 0 ? ` (${count})` : ''}
+      </Button>
+      <Dialog isOpen={isOpen} onOpenChange={setIsOpen} title="Sort and filter" shape="side">
+        <div className="flex flex-col gap-4">
+          {children}
+          <Button variant="primary" onClick={() => setIsOpen(false)}>
+            Show the list
+          </Button>
+        </div>
+      </Dialog>
+    </>
+  )
+}

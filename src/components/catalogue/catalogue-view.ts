@@ -1,0 +1,45 @@
+/** What of a catalogue is looked at, and how. All of it stands in the address bar. */
+export interface CatalogueView {
+  q: string
+  /** `field,-field`, as the API takes it. */
+  sort: string
+  /** By the names of the API: `form`, `cuttingDiameterMm.min`, … */
+  filters: Readonly<Record<string, string>>
+  /** Ids in their order; null shows the usual ones. */
+  columns: readonly string[] | null
+}
+
+const columnsParam = 'columns'
+
+export function readView(params: URLSearchParams, filterNames: readonly string[]): CatalogueView {
+  const filters: Record<string, string> = {}
+  for (const name of filterNames) {
+    const value = params.get(name)
+    if (value) filters[name] = value
+  }
+  return {
+    q: params.get('q') ?? '',
+    sort: params.get('sort') ?? '',
+    filters,
+    columns: params.get(columnsParam)?.split(',').filter(Boolean) ?? null,
+  }
+}
+
+export function viewParams(view: CatalogueView): URLSearchParams {
+  const params = queryParams(view)
+  if (view.columns) params.set(columnsParam, view.columns.join(','))
+  return params
+}
+
+/** What the API is asked: everything but the columns. */
+export function queryParams(view: Omit<CatalogueView, 'columns'>): URLSearchParams {
+  const params = new URLSearchParams()
+  if (view.q) params.set('q', view.q)
+  for (const [name, value] of Object.entries(view.filters)) params.set(name, value)
+  if (view.sort) params.set('sort', view.sort)
+  return params
+}
+
+export function isNarrowed(view: CatalogueView): boolean {
+  return view.q !== '' || Object.keys(view.filters).length > 0
+}

@@ -1,0 +1,34 @@
+import type { ReactNode } from 'react'
+import type { FieldValues } from 'react-hook-form'
+import type { z } from 'zod'
+import type { SelectOption } from '@/components/ui/select-field'
+
+export interface ItemField {
+  /** The path of the request, `bore.diameterMm`, and so of its errors. */
+  path: string
+  label: string
+  symbol?: string
+  kind: 'line' | 'text' | 'length' | 'angle' | 'count' | 'money' | 'choice'
+  allowZero?: boolean
+  isRequired?: boolean
+  options?: readonly SelectOption[]
+  hint?: string
+  /** Only what this form of the item has is asked for, and only that is kept. */
+  isShown?: (values: FieldValues) => boolean
+}
+
+export interface ItemFieldGroup {
+  title: string
+  fields: readonly ItemField[]
+}
+
+export interface ItemFormDefinition<Row> {
+  groups: readonly ItemFieldGroup[]
+  /** Where the outline is made of segments: whether each is a nut's or the body's. */
+  segments?: { hasPart: boolean; hint: string }
+  /** Choices a new item begins with. */
+  blank: FieldValues
+  requestSchema: z.ZodType
+  /** The drawing of what is typed, as far as it can be. */
+  draw: (item: Pick<Row, Extract<keyof Row, string>> | Row) => ReactNode
+}

@@ -1,0 +1,65 @@
+import type { CatalogueDefinition } from '@/components/catalogue/catalogue-definition'
+import { itemFilters } from '@/components/catalogue/catalogue-filter'
+import {
+  angleColumn,
+  codeColumn,
+  countColumn,
+  itemColumns,
+  lengthColumn,
+  textColumn,
+} from '@/components/catalogue/columns'
+import { cutterForms } from '@/core/tooling'
+import { formatLength } from '@/lib/format-length'
+import type { CutterResponse } from '@/schemas/cutter'
+import { cutterForm } from './cutter-form'
+import { cutterFormNames, substrateNames } from './cutter-words'
+
+export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
+  kind: 'cutter',
+  title: 'Cutters',
+  one: 'cutter',
+  many: 'cutters',
+  columns: (canSeeCosts) => [
+    codeColumn(),
+    textColumn('form', 'Form', (row) => cutterFormNames[row.form], { width: 176 }),
+    lengthColumn('cuttingDiameterMm', 'DC', 'Cutting diameter (DC)'),
+    lengthColumn('cornerRadiusMm', 'RE', 'Corner radius (RE)', { width: 72 }),
+    lengthColumn('lengthOfCutMm', 'APMX', 'Length of cut (APMX)'),
+    lengthColumn('fluteLengthMm', 'LCF', 'Fluted length with run-out (LCF)', { isUsual: false }),
+    lengthColumn('reachLengthMm', 'LU', 'Reach length (LU)'),
+    lengthColumn('neckDiameterMm', 'DN', 'Neck diameter (DN)', { isUsual: false }),
+    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter (DMM)'),
+    lengthColumn('overallLengthMm', 'OAL', 'Overall length (OAL)'),
+    countColumn('fluteCount', 'NOF', 'Number of flutes (NOF)', { width: 70 }),
+    angleColumn('taperHalfAngleDeg', 'κ', 'Taper, a side (κ)'),
+    angleColumn('pointAngleDeg', 'SIG', 'Point angle, included (SIG)'),
+    lengthColumn('tipDiameterMm', 'Tip ⌀', 'Diameter at the tip', { isUsual: false }),
+    angleColumn('neckTaperHalfAngleDeg', 'BHTA', 'Neck taper, a side (BHTA)'),
+    angleColumn('neckTransitionAngleDeg', 'Transition', 'Neck to shank, a side', { width: 100 }),
+    textColumn('substrate', 'Made of', (row) => (row.substrate ? substrateNames[row.substrate] : ''), {
+      width: 100,
+      isUsual: false,
+    }),
+    countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', { isUsual: false, width: 90 }),
+    ...itemColumns<CutterResponse>(canSeeCosts),
+  ],
+  filters: [
+    {
+      kind: 'choice',
+      name: 'form',
+      label: 'Form',
+      anyLabel: 'Any',
+      options: cutterForms.map((form) => ({ value: form, label: cutterFormNames[form] })),
+    },
+    { kind: 'lengthRange', name: 'cuttingDiameterMm', label: 'Cutting diameter' },
+    ...itemFilters,
+  ],
+  facts: (row, unit) => {
+    const figure = (mm: number) => formatLength(mm, unit, { withUnit: false })
+    const depth = row.reachLengthMm
+      ? `LU ${figure(row.reachLengthMm)}`
+      : `APMX ${figure(row.lengthOfCutMm ?? row.fluteLengthMm ?? 0)}`
+    return `⌀${formatLength(row.cuttingDiameterMm, unit, { fractions: true })} · ${cutterFormNames[row.form]} · ${depth}`
+  },
+  form: cutterForm,
+}
