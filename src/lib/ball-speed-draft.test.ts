@@ -1,0 +1,115 @@
+import fc from 'fast-check'
+import { describe, expect, it } from 'vitest'
+import {
+  ballSpeedAddress,
+  ballSpeedFields,
+  draftFromAddress,
+  readBallSpeedDraft,
+  type TypingSettings,
+  withTyped,
+  workedOutText,
+} from './ball-speed-draft'
+
+const inMm: TypingSettings = { unit: 'mm', decimalComma: false }
+const inInches: TypingSettings = { unit: 'in', decimalComma: false }
+
+const draftOf = (address: string, settings = inMm) => draftFromAddress(new URLSearchParams(address), settings)
+
+describe('a ball-end speed as it is typed', () => {
+  it('begins with a cut that can be worked out, in either unit', () => {
+    for (const settings of [inMm, inInches, { unit: 'mm', decimalComma: true } as const]) {
+      const reading = readBallSpeedDraft(draftOf('', settings), settings)
+      expect(reading.faults).toEqual({})
+      expect(reading.answer?.effectiveDiameterMm.largest).toBeGreaterThan(0)
+    }
+    expect(draftOf('', inInches).cuttingDiameterMm).toBe('0.25')
+  })
+
+  it('reads dimensions as people write them', () => {
+    const draft = {
+      ...draftOf(''),
+      cuttingDiameterMm: '1/4',
+      depthOfCutMm: '10 thou',
+      wantedSpeedMPerMin: '500 SFM',
+      spindleRpm: '',
+    }
+    const { request } = readBallSpeedDraft(draft, inMm)
+    expect(request).toMatchObject({ cuttingDiameterMm: 6.35, depthOfCutMm: 0.254, wantedSpeedMPerMin: 152.4 })
+  })
+
+  it('works one half of a pair out from whichever was typed last', () => {
+    const byHeight = withTyped(draftOf('cuttingDiameterMm=10&depthOfCutMm=1'), 'scallopHeightMm', '1')
+    const height = readBallSpeedDraft(byHeight, inMm)
+    expect(height.request?.stepoverMm).toBe(6)
+    expect(workedOutText('stepoverMm', height, inMm)).toBe('6')
+    const byStepover = withTyped(byHeight, 'stepoverMm', '6')
+    expect(byStepover.scallopHeightMm).toBe('')
+    expect(workedOutText('scallopHeightMm', readBallSpeedDraft(byStepover, inMm), inMm)).toBe('1')
+  })
+
+  it('works the spindle speed and the cutting speed out from each other, in the unit of the person', () => {
+    const draft = withTyped(
+      draftOf('cuttingDiameterMm=10&depthOfCutMm=5', inInches),
+      'wantedSpeedMPerMin',
+      '500',
+    )
+    const reading = readBallSpeedDraft(draft, inInches)
+    expect(workedOutText('spindleRpm', reading, inInches)).toBe('4851')
+    const turned = withTyped(draft, 'spindleRpm', '4851')
+    expect(workedOutText('wantedSpeedMPerMin', readBallSpeedDraft(turned, inInches), inInches)).toBe('500')
+  })
+
+  it.each([
+    ['cuttingDiameterMm', '', 'Enter the diameter of the ball.'],
+    ['cuttingDiameterMm', 'six', 'not a length'],
+    ['cuttingDiameterMm', '-6', 'negative'],
+    ['depthOfCutMm', '0', 'more than 0'],
+    ['depthOfCutMm', 'F', 'not a length'],
+    ['tiltDeg', '120', 'from 0 to 90'],
+    ['stepoverMm', '7', 'more than the cutting diameter'],
+    ['scallopHeightMm', '4', 'from 0 to 3'],
+    ['cornerRadiusMm', '4', 'more than half'],
+    ['spindleRpm', '1.5', 'whole number'],
+    ['maximumRpm', '0', 'more than 0'],
+  ] as const)('says beside %s why %j cannot be', (field, text, reason) => {
+    const draft = withTyped(draftOf('cuttingDiameterMm=6&depthOfCutMm=0.3'), field, text)
+    const reading = readBallSpeedDraft(draft, inMm)
+    expect(Object.keys(reading.faults)).toEqual([field])
+    expect(reading.faults[field]).toContain(reason)
+    expect(reading.answer).toBeNull()
+  })
+
+  it('holds the whole cut in its address, whoever opens it in whatever unit', () => {
+    const length = fc.integer({ min: 1_000, max: 90_000_000_000 }).map((steps) => steps / 1e9)
+    const values = fc.record(
+      {
+        cuttingDiameterMm: length,
+        cornerRadiusMm: length,
+        depthOfCutMm: length,
+        tiltDeg: fc.integer({ min: 0, max: 900 }).map((tenths) => tenths / 10),
+        leadDeg: fc.integer({ min: 0, max: 90 }),
+        stepoverMm: length,
+        maximumRpm: fc.integer({ min: 1, max: 60_000 }),
+        spindleRpm: fc.integer({ min: 1, max: 60_000 }),
+      },
+      { requiredKeys: ['cuttingDiameterMm', 'depthOfCutMm'] },
+    )
+    fc.assert(
+      fc.property(
+        values,
+        fc.constantFrom('mm' as const, 'in' as const),
+        fc.boolean(),
+        (given, unit, decimalComma) => {
+          const settings = { unit, decimalComma }
+          const draft = draftOf(ballSpeedAddress(given), settings)
+          expect(readBallSpeedDraft(draft, settings).values).toEqual(given)
+        },
+      ),
+    )
+  })
+
+  it('takes nothing from an address but plain numbers', () => {
+    const draft = draftOf('cuttingDiameterMm=<b>6</b>&depthOfCutMm=-1&tiltDeg=1e3&stepoverMm=0.5&foreign=1')
+    expect(ballSpeedFields.filter((field) => draft[field] !== '')).toEqual(['stepoverMm'])
+  })
+})
