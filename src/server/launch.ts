@@ -9,7 +9,7 @@ import { Started } from './launch/started'
 import { Interrupted, StepFailure } from './launch/step-failure'
 import { aborted, listenForStop } from './launch/stop-signal'
 import { waitForHealth } from './launch/wait-for-health'
-import { demoAccounts, localAddress, welcome } from './launch/welcome'
+import { demoAccounts, isDemoThere, localAddress, welcome } from './launch/welcome'
 
 const goal = 'make start'
 const say = (line: string) => process.stdout.write(`${line}\n`)
@@ -57,8 +57,11 @@ async function runOwnDatabase(logFolder: string, signal: AbortSignal): Promise<s
 
 /** Loads the demo shop where it is wanted and the database is new, and answers how to get in. */
 async function prepareAccounts(run: Run, launch: LaunchSettings): Promise<string> {
-  const demo = launch.wantsDemo ? await runScript(run, 'Demo shop', 'seed:demo') : 'not wanted'
-  if (['loaded', 'present'].includes(lastLine(demo))) return demoAccounts
+  if (launch.wantsDemo) {
+    const told = lastLine(await runScript(run, 'Demo shop', 'seed:demo'))
+    say(told)
+    if (isDemoThere(told)) return demoAccounts
+  }
   const address = lastLine(await runScript(run, 'First administrator', 'first-admin'))
   return address && `Make the first administrator at this address, which works once:\n  ${address}`
 }

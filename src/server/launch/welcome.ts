@@ -33,6 +33,11 @@ export const demoAccounts = [
   '  estimator@leadline.example  an estimator',
 ].join('\n')
 
+/** What db/seeds/demo-shop.ts says tells whether the demo accounts exist: a shop of its own is left alone. */
+export function isDemoThere(told: string): boolean {
+  return /^The demo shop is (?:loaded|here)/.test(told)
+}
+
 export function localAddress({ HOST, PORT }: Pick<Env, 'HOST' | 'PORT'>): string {
   return `http://${reachableHost(HOST)}:${PORT}`
 }
