@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { shopLocationKinds } from '@/core/stock/kinds'
+import { catalogueKinds, conditions, shopLocationKinds } from '@/core/stock/kinds'
 import { idSchema, lineSchema, versionSchema } from './fields'
 import { archivedChoices, listQuerySchema, listResponseSchema, setFilter, textFilter } from './paging'
 
@@ -67,3 +67,20 @@ export type CribResponse = z.infer<typeof cribResponseSchema>
 
 /** Cribs are few: all of them, by code. */
 export const cribListResponseSchema = z.object({ rows: z.array(cribResponseSchema) })
+
+/** What lies in a location and in everything that stands in it. */
+export const locationContentsResponseSchema = z.object({
+  rows: z.array(
+    z.object({
+      itemId: z.string(),
+      itemKind: z.enum(catalogueKinds),
+      code: z.string(),
+      description: z.string(),
+      locationId: z.string(),
+      locationCode: z.string(),
+      condition: z.enum(conditions),
+      quantity: z.number(),
+    }),
+  ),
+})
+export type LocationContents = z.infer<typeof locationContentsResponseSchema>

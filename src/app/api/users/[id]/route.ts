@@ -1,4 +1,4 @@
-import { idParamsSchema } from '@/schemas/id'
+import { idParamsSchema } from '@/schemas/fields'
 import { personResponseSchema, updatePersonRequestSchema } from '@/schemas/person'
 import { route } from '@/server/http/route'
 import { updatePerson } from '@/server/services/people/update-person'

@@ -1,4 +1,4 @@
-import { idParamsSchema } from '@/schemas/id'
+import { idParamsSchema } from '@/schemas/fields'
 import { personLinkResponseSchema } from '@/schemas/person'
 import { route } from '@/server/http/route'
 import { renewPersonLink } from '@/server/services/people/renew-person-link'
