@@ -138,7 +138,8 @@ function Speed({ ballSpeed }: { ballSpeed: BallSpeed }) {
 
 function DepthRange({ ballSpeed }: { ballSpeed: BallSpeed }) {
   const { unit, decimalComma } = useShop()
-  const { cuttingDiameterMm, cornerRadiusMm, depthOfCutMm } = ballSpeed.reading.values
+  const { cuttingDiameterMm, cornerRadiusMm } = ballSpeed.reading.values
+  const depthOfCutMm = ballSpeed.reading.values.depthOfCutMm ?? ballSpeed.answered.request?.depthOfCutMm
   if (cuttingDiameterMm === undefined) return null
   const radiusMm = cornerRadiusMm ?? cuttingDiameterMm / 2
   const stepMm = rangeStepMm(radiusMm, unit === 'in' ? mmPerInch : 1)

@@ -6,7 +6,6 @@ import { useBallSpeed } from '@/hooks/use-ball-speed'
 import { formatLength } from '@/lib/format-length'
 import { PageHeading } from '../layout/page-heading'
 import { useShop } from '../layout/shop-context'
-import { classNames } from '../ui/class-names'
 import { Notice } from '../ui/notice'
 import { BallSpeedCautions, BallSpeedForm } from './ball-speed-form'
 import { type BallSpeedVerdict, ballSpeedVerdict } from './ball-speed-verdict'
@@ -60,7 +59,7 @@ function Fault({ sentence, hasEarlier }: { sentence: string; hasEarlier: boolean
   return (
     <Notice kind="caution" isAnnounced>
       <p className="font-semibold">{sentence}</p>
-      {hasEarlier ? <p>Until then, what stands here is the cut before.</p> : null}
+      {hasEarlier ? <p>Until then, the drawing and the figures are of the cut before.</p> : null}
     </Notice>
   )
 }
@@ -77,14 +76,14 @@ function Answer({
   const { unit } = useShop()
   const verdict = ballSpeedVerdict(request, answer, unit)
   return (
-    <div className={classNames('flex flex-col gap-4', isEarlier && 'opacity-50')}>
-      <Verdict verdict={verdict} />
+    <>
+      {isEarlier ? null : <Verdict verdict={verdict} />}
       <TipDrawing
         request={request}
         answer={answer}
         sentence={[verdict.sentence, ...verdict.remarks].join(' ')}
       />
-    </div>
+    </>
   )
 }
 
