@@ -35,6 +35,8 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: 'api',
+          // Vite has a BASE_URL of its own, which would take the place of the site's address.
+          env: { BASE_URL: process.env.BASE_URL ?? '' },
           include: ['test/api/**/*.test.ts'],
           testTimeout: 60_000,
           hookTimeout: 60_000,
