@@ -3,9 +3,16 @@ import { holderCheckParts } from '@/core/reach/check-parts'
 import { placementOf } from '@/core/reach/placement'
 import { reachAnswer } from '@/core/reach/reach-answer'
 import { clearanceLowerBounds } from '@/core/reach/stick-out-bounds'
-import type { WallFeature } from '@/core/reach/types'
+import type { HoleFeature, WallFeature } from '@/core/reach/types'
 import type { CutterGeometry, HolderGeometry } from '@/core/tooling'
-import { ballCutter, handHolder, neckedCutter, reachRequest, squareCutter } from '../support/reach-requests'
+import {
+  ballCutter,
+  drillCutter,
+  handHolder,
+  neckedCutter,
+  reachRequest,
+  squareCutter,
+} from '../support/reach-requests'
 
 /* The working of every case stands in reach-hand-cases.md, under the same number. */
 
@@ -143,5 +150,64 @@ describe('reach worked by hand', () => {
       code: 'flute-length-assumed',
       values: { fluteLengthMm: 14.2875, runOutMm: 14.2875 - 12.7 },
     })
+  })
+
+  const hole = (diameterMm: number, more: Partial<HoleFeature> = {}): HoleFeature => ({
+    kind: 'hole',
+    depthMm: 20,
+    diameterMm,
+    ...more,
+  })
+
+  it('case 13: it leaves a drill room for its chips and counts off its point and break-through', () => {
+    const answer = reachAnswer(reachRequest({ feature: hole(6), cutter: drillCutter, stickOutMm: 60 }))
+    expect(answer.reachMm).toBeCloseTo(29.19742, 5)
+    expect(answer.limitedBy).toBe('usableLength')
+    expect(answer.firstTouch.find(({ part }) => part === 'runOut')?.depthMm).toBeCloseTo(38.19742, 5)
+    const through = hole(6, { breakThroughMm: 1 })
+    expect(reachAnswer(reachRequest({ feature: through, cutter: drillCutter })).reachMm).toBeCloseTo(
+      28.19742,
+      5,
+    )
+  })
+
+  it('case 13: it lets run-out and shank into a hole that leaves them the clearance', () => {
+    const holder = { ...handHolder, boreDepthMm: 70 }
+    const answer = reachAnswer(reachRequest({ feature: hole(6.1), cutter: drillCutter, holder }))
+    expect(answer.firstTouch.find(({ part }) => part === 'runOut')?.depthMm).toBeNull()
+    const at = placementOf(hole(6.1), drillCutter)
+    const [clearance] = clearanceLowerBounds(at, holderCheckParts(holder, null), {
+      shankMm: 0.025,
+      holderMm: 0.5,
+    })
+    expect(clearance?.mm).toBeCloseTo(22.30258, 5)
+  })
+
+  it('case 13: it refuses a hole a tenth off the drill', () => {
+    const answer = reachAnswer(reachRequest({ feature: hole(6.11), cutter: drillCutter }))
+    expect(answer.verdict).toBe('impossible')
+    expect(answer.messages[0]?.code).toBe('hole-diameter-mismatch')
+  })
+
+  it('case 14: it says what a taper steeper than the wall leaves at its foot', () => {
+    const cutter: CutterGeometry = { ...ballCutter, form: 'tapered', taperHalfAngleDeg: 5, lengthOfCutMm: 10 }
+    const answer = reachAnswer(reachRequest({ feature: wall(8, { draftDeg: 3 }), cutter }))
+    expect(answer.verdict).toBe('impossible')
+    expect(answer.reachMm).toBe(0)
+    expect(answer.uncutAtFootMm).toBeCloseTo(0.280647, 6)
+  })
+
+  it('case 15: it says what stays at the top edge of a wall lower than the corner', () => {
+    const cutter: CutterGeometry = { ...ballCutter, form: 'cornerRadius', cornerRadiusMm: 2 }
+    const { messages } = reachAnswer(reachRequest({ feature: wall(1), cutter }))
+    const message = messages.find(({ code }) => code === 'wall-lower-than-corner')
+    expect(message?.values).toEqual({ contactHeightMm: 2, leftAtTopMm: expect.closeTo(0.267949, 6) })
+  })
+
+  it('case 16: it refuses flutes that end below where the ball would touch', () => {
+    const short: CutterGeometry = { ...ballCutter, lengthOfCutMm: 1.4 }
+    const feature = wall(10, { draftDeg: 30 })
+    expect(reachAnswer(reachRequest({ feature, cutter: short })).verdict).toBe('impossible')
+    expect(reachAnswer(reachRequest({ feature, cutter: ballCutter })).maximumAxialStepMm).toBeCloseTo(10.5, 9)
   })
 })

@@ -1,11 +1,9 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { holderCheckParts } from '@/core/reach/check-parts'
-import { placementOf } from '@/core/reach/placement'
 import { reachAnswer } from '@/core/reach/reach-answer'
-import { clearanceLowerBounds } from '@/core/reach/stick-out-bounds'
 import type { ReachRequest } from '@/core/reach/types'
 import { assembly } from '../support/assemblies'
+import { clearStickOutMm } from '../support/clear-stick-out'
 import { askedDepthMm, naiveWallVerdict } from '../support/naive-verdict'
 import { SampledTool, type Sampling } from '../support/sampled-solids'
 
@@ -107,18 +105,6 @@ describe.each(['straight', 'drafted', 'tilted', 'obstacles', 'circled'] as const
 
 /** A tool that can't lie along the wall, or is wider than the opening, has no reach to compare. */
 const canStand = (tool: SampledTool) => tool.canLieAlongWall && tool.fitsOpening
-
-function clearStickOutMm(request: ReachRequest): number {
-  const at = placementOf(request.feature, request.cutter)
-  const { clearances, settings } = request
-  const bounds = clearanceLowerBounds(at, holderCheckParts(request.holder, request.extension), {
-    shankMm: clearances?.shankMm ?? settings.shankClearanceMm,
-    holderMm: clearances?.holderMm ?? settings.holderClearanceMm,
-  })
-  // The points can't go through the floor: an upright nose stops there at the latest.
-  const standingMm = clearances?.holderMm ?? settings.holderClearanceMm
-  return Math.max(standingMm, ...bounds.map(({ mm }) => mm))
-}
 
 function tiltTangent({ feature }: ReachRequest): number {
   return feature.kind === 'wall' ? Math.tan(((feature.tiltDeg ?? 0) * Math.PI) / 180) : 0

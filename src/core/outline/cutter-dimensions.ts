@@ -103,7 +103,11 @@ function cornerRadius(cutter: CutterGeometry, radiusMm: number, assumptions: Cut
   const isHalf = given !== null && Math.abs(given - radiusMm) <= printedRoundingMm
   if (cutter.form === 'ball') {
     if (given !== null && !isHalf)
-      throw new CoreInputError('corner-radius-not-half', path, 'A ball’s radius is half its cutting diameter.')
+      throw new CoreInputError(
+        'corner-radius-not-half',
+        path,
+        'A ball’s radius is half its cutting diameter.',
+      )
     return radiusMm
   }
   if (cutter.form === 'square' && given)
