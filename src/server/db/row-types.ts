@@ -123,10 +123,9 @@ export interface IdempotencyKeysRow {
 }
 
 export interface ImportMappingsRow {
-  id: string
   kind: string
-  headings: unknown
-  mapping: unknown
+  heading: string
+  field: string | null
   unit: string | null
   updated_by: string
   created_at: Date
@@ -141,6 +140,8 @@ export interface ImportRowsRow {
   cells: unknown
   field_values: unknown
   problems: unknown
+  item_version: number | null
+  changes: unknown
 }
 
 export interface ImportsRow {
@@ -169,6 +170,9 @@ export interface ImportsRow {
   updated_at: Date
   checked_at: Date | null
   ended_at: Date | null
+  attempt: number
+  heading_line: number | null
+  warning_count: number
 }
 
 export interface ItemsRow {

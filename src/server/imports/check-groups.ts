@@ -1,0 +1,14 @@
+import type { Knex } from 'knex'
+import { checkItems, type StagedRecord } from './check-records'
+import { checkStock } from './check-stock'
+import type { ImportRow, RowReader } from './row-reader'
+
+/** Holds what was read against the database as `db` sees it; each group is one item. */
+export function checkGroups(
+  db: Knex,
+  groups: readonly (readonly ImportRow[])[],
+  reader: RowReader,
+): Promise<StagedRecord[]> {
+  const { kind } = reader.settings
+  return kind === 'stock' ? checkStock(db, groups.flat(), reader) : checkItems(db, kind, groups, reader)
+}

@@ -1,0 +1,228 @@
+import { isDeepStrictEqual } from 'node:util'
+import type { Knex } from 'knex'
+import type { z } from 'zod'
+import type { CatalogueKind } from '@/core/stock/kinds'
+import { createColletRequestSchema } from '@/schemas/collet'
+import { createCutterRequestSchema } from '@/schemas/cutter'
+import { createExtensionRequestSchema } from '@/schemas/extension'
+import { createHolderRequestSchema } from '@/schemas/holder'
+import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
+import { geometryFromRow, geometryTables } from '../db/geometry-tables'
+import {
+  findImportMatches,
+  type ItemKey,
+  type KeyMatches,
+  type MatchedItem,
+} from '../db/read-models/import-match'
+import { type FlatRecord, fieldOf, type GivenRecord, givenRecord } from './flat-record'
+import type { ImportRow, RowReader } from './row-reader'
+
+/** An item of the file as it is staged. */
+export interface StagedRecord {
+  line: number
+  outcome: RowOutcome
+  itemId: string | null
+  itemVersion: number | null
+  cells: { line: number; cells: string[] }[]
+  fieldValues: object
+  changes: FieldChange[]
+  problems: RowProblem[]
+}
+
+const requestSchemas: Readonly<Record<CatalogueKind, z.ZodType>> = {
+  cutter: createCutterRequestSchema,
+  holder: createHolderRequestSchema,
+  collet: createColletRequestSchema,
+  extension: createExtensionRequestSchema,
+}
+
+/** How the kinds of a file are called one by one. */
+export const itemKinds = {
+  cutters: 'cutter',
+  holders: 'holder',
+  collets: 'collet',
+  extensions: 'extension',
+} as const satisfies Record<string, CatalogueKind>
+
+/**
+ * Holds the items of a file against the catalogue as `db` sees it: whom each row means, and whether what it gives makes
+ * an item that can be. What a row leaves blank is taken from the item that is there.
+ */
+export async function checkItems(
+  db: Knex,
+  kind: keyof typeof itemKinds,
+  groups: readonly (readonly ImportRow[])[],
+  reader: RowReader,
+): Promise<StagedRecord[]> {
+  const given = groups.map((rows) => givenRecord(kind, rows, reader))
+  const matches = await findImportMatches(
+    db,
+    itemKinds[kind],
+    given.map(({ flat }) => keyOf(flat)),
+  )
+  return groups.map((rows, at) => {
+    const item = new ItemCheck(itemKinds[kind], rows, reader, given[at] as GivenRecord)
+    return item.staged(matches[at] as KeyMatches)
+  })
+}
+
+export function keyOf(flat: FlatRecord): ItemKey {
+  const text = (value: unknown) => (typeof value === 'string' ? value : null)
+  return { code: text(flat.code), maker: text(flat.maker), partNumber: text(flat.part_number) }
+}
+
+/** The item a row means, or why that cannot be said. */
+export function matchedItem(
+  key: ItemKey,
+  matches: KeyMatches,
+): { item: MatchedItem | null } | { field: string; message: string } {
+  const number = `${key.maker} ${key.partNumber}`
+  if (!key.code && !(key.maker && key.partNumber)) {
+    return { field: 'code', message: 'Give the own code, or the maker and the part number.' }
+  }
+  if (matches.byCode) {
+    return matches.byCode.isArchived
+      ? { field: 'code', message: `${key.code} is archived. Restore it first, or use another code.` }
+      : { item: matches.byCode }
+  }
+  if (matches.byNumber.length > 1) {
+    const codes = matches.byNumber.map(({ columns }) => columns.code).filter(Boolean)
+    const which = codes.length > 0 ? ` (${codes.slice(0, 5).join(', ')})` : ''
+    return {
+      field: 'partNumber',
+      message: `${matches.byNumber.length} items are ${number}${which}. Give the own code.`,
+    }
+  }
+  return { item: matches.byNumber[0] ?? null }
+}
+
+class ItemCheck {
+  private readonly problems: RowProblem[]
+
+  constructor(
+    private readonly kind: CatalogueKind,
+    private readonly rows: readonly ImportRow[],
+    private readonly reader: RowReader,
+    private readonly given: GivenRecord,
+  ) {
+    this.problems = [...given.problems]
+  }
+
+  staged(matches: KeyMatches): StagedRecord {
+    const item = this.findItem(matches)
+    const whole: FlatRecord = { ...(item?.columns as FlatRecord | undefined), ...this.given.flat }
+    if (item !== undefined) this.checkWhole(whole, item)
+    const changes = item ? changesBetween(item.columns as FlatRecord, whole) : []
+    return {
+      line: this.rows[0]?.line ?? 1,
+      outcome: this.outcome(item, changes),
+      itemId: item?.id ?? null,
+      itemVersion: item?.version ?? null,
+      cells: this.rows.map(({ line, cells }) => ({ line, cells })),
+      fieldValues: whole,
+      changes: this.problems.length > 0 ? [] : changes,
+      problems: this.problems,
+    }
+  }
+
+  private outcome(item: MatchedItem | null | undefined, changes: FieldChange[]): RowOutcome {
+    if (this.problems.length > 0 || item === undefined) return 'rejected'
+    if (item === null) return 'added'
+    return changes.length > 0 ? 'changed' : 'unchanged'
+  }
+
+  /** The item that is there, null for a new one, undefined where that cannot be said. */
+  private findItem(matches: KeyMatches): MatchedItem | null | undefined {
+    if (this.problems.length > 0 && this.rows.every((row) => row.values.size === 0)) return undefined
+    const found = matchedItem(keyOf(this.given.flat), matches)
+    if ('message' in found) {
+      this.refuse([found.field], found.message)
+      return undefined
+    }
+    if (found.item && found.item.kind !== this.kind) {
+      this.refuse(['code'], `An item of another kind (${found.item.kind}) has this code or number.`)
+      return undefined
+    }
+    return found.item
+  }
+
+  private refuse(fields: readonly string[], message: string, row = this.rows[0]): void {
+    if (row) this.problems.push(this.reader.problemAt(row, fields, message))
+  }
+
+  /** The rules of the form and the route, asked of the item as it would be. */
+  private checkWhole(whole: FlatRecord, item: MatchedItem | null): void {
+    if (item === null && whole.code === undefined) {
+      if (!this.given.failed.has('code')) this.refuse(['code'], 'A new item needs a code of its own.')
+      return
+    }
+    const parsed = requestSchemas[this.kind].safeParse(requestOf(this.kind, whole))
+    if (parsed.success) return
+    const hasFailures = this.problems.length > 0
+    for (const issue of parsed.error.issues) {
+      // A rule across fields says nothing where one of them could not be read.
+      if (hasFailures && issue.code === 'custom') continue
+      const [first, place, member] = issue.path
+      if (first === undefined || this.given.failed.has(String(first))) continue
+      this.refuse(fieldsOf(String(first), member, this.reader), issue.message, this.rowOf(first, place))
+    }
+  }
+
+  private rowOf(first: PropertyKey | undefined, place: PropertyKey | undefined): ImportRow | undefined {
+    return (first === 'segments' && typeof place === 'number' && this.rows[place]) || this.rows[0]
+  }
+}
+
+function fieldsOf(first: string, member: PropertyKey | undefined, reader: RowReader): string[] {
+  if (first === 'bore') return ['boreSeries', 'boreDiameterMm']
+  if (first !== 'segments') return [first]
+  if (typeof member !== 'string') return ['segmentLengthMm', 'bodyLengthMm', 'noseLengthMm', 'nutLengthMm']
+  const name = `segment${member.charAt(0).toUpperCase()}${member.slice(1)}`
+  return reader.has(name) ? [name] : ['bodyLengthMm', 'noseLengthMm', 'nutLengthMm', name]
+}
+
+/** As the form would send it. */
+function requestOf(kind: CatalogueKind, whole: FlatRecord): Record<string, unknown> {
+  const geometry = geometryFromRow(geometryTables[kind], whole)
+  if (whole.bore_kind === undefined) delete geometry.bore
+  return {
+    ...geometry,
+    code: whole.code,
+    maker: whole.maker,
+    partNumber: whole.part_number,
+    description: whole.description,
+    unitCost: whole.unit_cost_minor,
+    ...(Array.isArray(whole.segments)
+      ? { segments: whole.segments.map((piece) => withFieldNames({ ...piece })) }
+      : {}),
+  }
+}
+
+function withFieldNames(columns: Record<string, unknown>): Record<string, unknown> {
+  return Object.fromEntries(Object.entries(columns).map(([column, value]) => [fieldOf(column), value]))
+}
+
+/** Half of what lengths are rounded to. */
+const tolerance = 5e-10
+
+function changesBetween(before: FlatRecord, after: FlatRecord): FieldChange[] {
+  return Object.keys(after)
+    .filter((column) => !isSame(before[column] ?? null, after[column] ?? null))
+    .map((column) => ({
+      field: fieldOf(column),
+      before: before[column] ?? null,
+      after: after[column] ?? null,
+    }))
+}
+
+function isSame(before: unknown, after: unknown): boolean {
+  if (typeof before === 'number' && typeof after === 'number') return Math.abs(before - after) <= tolerance
+  if (Array.isArray(before) && Array.isArray(after)) {
+    return before.length === after.length && before.every((piece, at) => isSamePiece(piece, after[at]))
+  }
+  return isDeepStrictEqual(before, after)
+}
+
+function isSamePiece(before: Record<string, unknown>, after: Record<string, unknown>): boolean {
+  return Object.keys(after).every((column) => isSame(before[column], after[column]))
+}

@@ -1,0 +1,32 @@
+import { AppError } from '@/lib/app-error'
+import type { RecheckImportRequest } from '@/schemas/import'
+import { db } from '../../db/connection'
+import { lockImport, markReading } from '../../db/stores/import-store'
+import { inTransaction } from '../../db/transaction'
+import { checkMapping } from '../../imports/column-mapping'
+import { checkImportJob } from '../../jobs/definitions'
+import { sendJob } from '../../jobs/queue'
+import { noSuchImport } from './import-refusals'
+
+/** Has the file read again, by other columns or another unit. */
+export async function recheckImport(id: string, request: RecheckImportRequest): Promise<{ id: string }> {
+  await inTransaction(db(), async (trx) => {
+    const found = await lockImport(trx, id)
+    if (!found) throw noSuchImport()
+    if (found.state !== 'checked') {
+      throw new AppError(
+        'import-not-ready',
+        `This import is ${found.state}: only a checked one can be checked again.`,
+      )
+    }
+    const mapping = request.mapping ?? found.mapping
+    checkMapping(
+      found.kind,
+      mapping,
+      found.columns.map((column) => column.heading),
+    )
+    await markReading(trx, id, { unit: request.unit ?? found.unit, mapping })
+    await sendJob(trx, checkImportJob, { importId: id })
+  })
+  return { id }
+}
