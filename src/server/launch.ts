@@ -1,4 +1,5 @@
 import { join } from 'node:path'
+import type { Env } from './env'
 import { type Run, runScript, startWebServer, startWorker } from './launch/application'
 import { buildIfChanged } from './launch/build'
 import { startCluster, stopCluster } from './launch/cluster'
@@ -31,7 +32,7 @@ async function main(signal: AbortSignal): Promise<void> {
 
   say('Bringing the database up to date')
   await runScript(run, 'Migration', 'migrate')
-  const accounts = await prepareAccounts(run, launch)
+  const accounts = await prepareAccounts(run, launch, settings)
   await buildIfChanged({
     projectFolder: process.cwd(),
     environment,
@@ -56,13 +57,15 @@ async function runOwnDatabase(logFolder: string, signal: AbortSignal): Promise<s
 }
 
 /** Loads the demo shop where it is wanted and the database is new, and answers how to get in. */
-async function prepareAccounts(run: Run, launch: LaunchSettings): Promise<string> {
+async function prepareAccounts(run: Run, launch: LaunchSettings, settings: Env): Promise<string> {
   if (launch.wantsDemo) {
     const told = lastLine(await runScript(run, 'Demo shop', 'seed:demo'))
     say(told)
     if (isDemoThere(told)) return demoAccounts
   }
-  const address = lastLine(await runScript(run, 'First administrator', 'first-admin'))
+  // A server that listens on every interface has no address by that name.
+  const environment = { ...run.environment, PUBLIC_URL: settings.PUBLIC_URL ?? localAddress(settings) }
+  const address = lastLine(await runScript({ ...run, environment }, 'First administrator', 'first-admin'))
   return address && `Make the first administrator at this address, which works once:\n  ${address}`
 }
 
