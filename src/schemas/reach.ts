@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { toolParts } from '@/core/outline/types'
 import { cutterForms, holderSegmentParts, substrates } from '@/core/tooling'
 import { boreSchema } from './bore'
-import { idSchema } from './id'
+import { idSchema } from './fields'
 
 /**
  * Shapes alone: what a size may be is the core's to say, and its refusal answers 422 with the place. A member nobody

@@ -1,0 +1,37 @@
+import { Arrowhead } from './arrowhead'
+import { draftingTextWidth, extensionGap, extensionOvershoot, lineWidths, type Point } from './drafting-style'
+import { DraftingText } from './drafting-text'
+
+export interface OpenDimensionProps {
+  /** The lower place measured from; the upper one is beyond the drawing. */
+  from: Point
+  /** Where the drawing ends, as a y. */
+  toY: number
+  /** The x of the dimension line. */
+  at: number
+  text: string
+  symbol?: string
+}
+
+/** A vertical dimension whose upper end is off the drawing: no arrow there, but the sign of a broken line. */
+export function OpenDimension({ from, toY, at, text, symbol }: OpenDimensionProps) {
+  const away = Math.sign(at - from.x)
+  const middle = (from.y + toY) / 2
+  const textWidth = draftingTextWidth(symbol ? `${symbol} ${text}` : text)
+  const textY = Math.max(middle, toY + textWidth / 2 + 14)
+  return (
+    <g>
+      <g fill="none" strokeWidth={lineWidths.thin}>
+        <path
+          stroke="var(--ink-soft)"
+          d={`M${from.x + away * extensionGap} ${from.y}H${at + away * extensionOvershoot}`}
+        />
+        <path stroke="var(--ink)" d={`M${at} ${from.y}V${toY + 8}l-4 -3l8 -4l-4 -3V${toY - 8}`} />
+      </g>
+      <Arrowhead tip={{ x: at, y: from.y }} directionDeg={90} />
+      <g transform={`rotate(-90 ${at} ${textY})`}>
+        <DraftingText x={at} y={textY - 4} text={text} symbol={symbol} />
+      </g>
+    </g>
+  )
+}

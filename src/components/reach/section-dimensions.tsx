@@ -1,0 +1,136 @@
+import { memo } from 'react'
+import type { LengthUnit } from '@/core/units/length-unit'
+import { formatAngle } from '@/lib/format-angle'
+import { formatLength } from '@/lib/format-length'
+import { AngleDimension } from '../drawing/angle-dimension'
+import { DimensionLine } from '../drawing/dimension-line'
+import { dimensionSpacing } from '../drawing/drafting-style'
+import { OpenDimension } from '../drawing/open-dimension'
+import { onSheet, type SectionLayout } from './section-layout'
+import { type SectionScene, topFaceMm } from './section-scene'
+import { toolTransform, toolY } from './section-tool'
+
+export interface SectionDimensionsProps {
+  scene: SectionScene
+  layout: SectionLayout
+  unit: LengthUnit
+  /** null where it is without limit, or there is no answer. */
+  reachMm: number | null
+}
+
+/** The figures of the part: depth and reach at its side, draft and tilt at their angles. */
+export const PartDimensions = memo(function PartDimensions({
+  scene,
+  layout,
+  unit,
+  reachMm,
+}: SectionDimensionsProps) {
+  const { at, feature } = scene
+  const said = (mm: number) => formatLength(mm, unit, { withUnit: false })
+  const footMm = topFaceMm(at) - feature.depthMm
+  const x = layout.right
+  const leadMm = at.kind === 'wall' ? at.leadMm : 0
+  const reachTop = reachMm === null ? null : onSheet(layout, 0, reachMm + leadMm).y
+  const isReachSeen = reachTop !== null && reachTop > 14 && reachMm !== null && reachMm > 0
+  const floor = onSheet(layout, 0, footMm).y
+  return (
+    <g>
+      <DimensionLine
+        axis="vertical"
+        from={{ x, y: floor }}
+        to={{ x, y: onSheet(layout, 0, topFaceMm(at)).y }}
+        at={x + dimensionSpacing}
+        symbol="depth"
+        text={said(feature.depthMm)}
+      />
+      {isReachSeen && reachTop !== null && reachMm !== null ? (
+        <DimensionLine
+          axis="vertical"
+          from={{ x, y: onSheet(layout, 0, leadMm).y }}
+          to={{ x, y: reachTop }}
+          at={x + 2 * dimensionSpacing}
+          symbol="reach"
+          text={said(reachMm)}
+        />
+      ) : null}
+      <Angles scene={scene} layout={layout} />
+    </g>
+  )
+})
+
+function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layout'>) {
+  const { at } = scene
+  if (at.kind === 'hole') return null
+  const heightPx = topFaceMm(at) * layout.pxPerMm
+  const turn = onSheet(layout, layout.turn.uMm, layout.turn.hMm)
+  return (
+    <g>
+      {at.draftDeg > 0 ? (
+        <AngleDimension
+          vertex={onSheet(layout, 0, 0)}
+          radius={Math.max(44, heightPx * 0.62)}
+          fromDeg={-90}
+          toDeg={-90 + at.draftDeg}
+          symbol="draft"
+          text={formatAngle(at.draftDeg)}
+        />
+      ) : null}
+      {at.tiltDeg > 0 ? (
+        <AngleDimension
+          vertex={turn}
+          radius={Math.max(90, (layout.cutZMm * 0.62 - layout.turn.zMm) * layout.pxPerMm)}
+          fromDeg={-90 - at.tiltDeg}
+          toDeg={-90}
+          symbol="tilt"
+          text={formatAngle(at.tiltDeg)}
+        />
+      ) : null}
+    </g>
+  )
+}
+
+/** The figures of the tool, along its own axis: stick-out and grip on one line, gauge length outside. */
+export const ToolDimensions = memo(function ToolDimensions({
+  scene,
+  layout,
+  unit,
+}: Omit<SectionDimensionsProps, 'reachMm'>) {
+  const { noseMm, overallMm, gaugeLineMm } = scene.heights
+  const said = (mm: number) => formatLength(mm, unit, { withUnit: false })
+  const edge = -layout.toolRadiusMm * layout.pxPerMm
+  const at = edge - 24
+  const y = (zMm: number) => toolY(layout, zMm)
+  const cut = y(layout.cutZMm)
+  const dimension = (fromMm: number, toMm: number, line: number, symbol: string) =>
+    toMm <= layout.cutZMm ? (
+      <DimensionLine
+        axis="vertical"
+        from={{ x: fromMm === 0 ? -scene.cutter.radiusMm * layout.pxPerMm : edge, y: y(fromMm) }}
+        to={{ x: edge, y: y(toMm) }}
+        at={line}
+        symbol={symbol}
+        text={said(toMm - fromMm)}
+      />
+    ) : (
+      <OpenDimension
+        from={{ x: fromMm === 0 ? -scene.cutter.radiusMm * layout.pxPerMm : edge, y: y(fromMm) }}
+        toY={cut}
+        at={line}
+        symbol={symbol}
+        text={said(toMm - fromMm)}
+      />
+    )
+  return (
+    <g transform={toolTransform(layout)}>
+      {noseMm === null ? (
+        dimension(0, overallMm, at, 'OAL')
+      ) : (
+        <>
+          {dimension(0, noseMm, at, 'stick-out')}
+          {overallMm > noseMm ? dimension(noseMm, overallMm, at, 'grip') : null}
+        </>
+      )}
+      {gaugeLineMm === null ? null : dimension(0, gaugeLineMm, at - dimensionSpacing, 'gauge length')}
+    </g>
+  )
+})

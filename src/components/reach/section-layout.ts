@@ -1,0 +1,166 @@
+import { strokesBetween } from '@/core/outline/stroke-chain'
+import { toPartFrame } from '@/core/reach/placement'
+import type { Point } from '../drawing/drafting-style'
+import { drawingScale } from '../drawing/drawing-scale'
+import { type SectionScene, topFaceMm } from './section-scene'
+
+/** `tip`: the cutter and the nose that holds it. `whole`: up to the spindle's face. */
+export type SectionView = 'tip' | 'whole'
+
+export interface Sheet {
+  width: number
+  height: number
+}
+
+/** Where the part's frame lies on the sheet, and how large. Held still while something is dragged. */
+export interface SectionFrame {
+  pxPerMm: number
+  scaleName: string
+  /** The foot of the wall on the sheet. */
+  foot: Point
+}
+
+export interface SectionLayout extends SectionFrame {
+  sheet: Sheet
+  /** Height above the tip at which the drawing of the tool ends. */
+  cutZMm: number
+  /** The room the part is drawn in, px. */
+  left: number
+  right: number
+  bottom: number
+  /** Where the tool's own frame turns: on the axis, so much above the tip. */
+  turn: { uMm: number; hMm: number; zMm: number; tiltDeg: number }
+  /** Half the width of the tool as drawn. */
+  toolRadiusMm: number
+}
+
+const wideMargins = { left: 96, right: 92, top: 40, bottom: 58 }
+const narrowMargins = { left: 66, right: 70, top: 34, bottom: 46 }
+const narrowSheet = 560
+
+/** Material shown beyond the last edge, as a share of the height drawn. */
+const materialShare = 0.16
+const spindleStubShare = 0.04
+
+/** Where everything goes on a sheet of this size; `held` keeps the frame of before. */
+export function sectionLayout(
+  scene: SectionScene,
+  view: SectionView,
+  sheet: Sheet,
+  held: SectionFrame | null,
+): SectionLayout {
+  const margins = sheet.width < narrowSheet ? narrowMargins : wideMargins
+  const cutZMm = cutHeightMm(scene, view)
+  const extent = extentOf(scene, cutZMm)
+  const frame = held ?? fittedFrame(extent, sheet, margins)
+  return {
+    ...frame,
+    sheet,
+    cutZMm,
+    left: 12,
+    right: sheet.width - margins.right,
+    bottom: Math.min(sheet.height - 10, frame.foot.y - Math.min(0, extent.hMin) * frame.pxPerMm + 44),
+    turn: turnOf(scene),
+    toolRadiusMm: extent.toolRadiusMm,
+  }
+}
+
+/** A place of the part's frame on the sheet. */
+export function onSheet(frame: SectionFrame, uMm: number, hMm: number): Point {
+  return { x: frame.foot.x + uMm * frame.pxPerMm, y: frame.foot.y - hMm * frame.pxPerMm }
+}
+
+/** A place of the tool's own frame, radius to the right and height above the tip, on the sheet. */
+export function toolOnSheet(layout: SectionLayout, radiusMm: number, zMm: number): Point {
+  const { uMm, hMm, zMm: turnZMm, tiltDeg } = layout.turn
+  const tilt = (tiltDeg * Math.PI) / 180
+  const up = zMm - turnZMm
+  return onSheet(
+    layout,
+    uMm - up * Math.sin(tilt) + radiusMm * Math.cos(tilt),
+    hMm + up * Math.cos(tilt) + radiusMm * Math.sin(tilt),
+  )
+}
+
+function cutHeightMm({ heights }: SectionScene, view: SectionView): number {
+  const { overallMm, noseMm, gaugeLineMm } = heights
+  if (noseMm === null || gaugeLineMm === null) return overallMm
+  if (view === 'whole') return gaugeLineMm * (1 + spindleStubShare)
+  const insideMm = Math.max(0, overallMm - noseMm)
+  const shownMm = insideMm <= noseMm * 0.6 ? insideMm * 1.08 : noseMm * 0.3
+  return Math.min(gaugeLineMm, noseMm + Math.max(shownMm, noseMm * 0.16))
+}
+
+interface Extent {
+  uMin: number
+  uMax: number
+  hMin: number
+  hMax: number
+  toolRadiusMm: number
+}
+
+function extentOf(scene: SectionScene, cutZMm: number): Extent {
+  const { at, parts } = scene
+  const extent: Extent = { uMin: 0, uMax: 0, hMin: 0, hMax: 0, toolRadiusMm: 0 }
+  const take = ({ uMm, hMm }: { uMm: number; hMm: number }) => {
+    extent.uMin = Math.min(extent.uMin, uMm)
+    extent.uMax = Math.max(extent.uMax, uMm)
+    extent.hMin = Math.min(extent.hMin, hMm)
+    extent.hMax = Math.max(extent.hMax, hMm)
+  }
+  for (const { segments } of parts)
+    for (const stroke of strokesBetween(segments, 0, cutZMm))
+      for (const [zMm, radiusMm] of [
+        [stroke.fromZMm, stroke.fromRadiusMm],
+        [stroke.toZMm, stroke.toRadiusMm],
+      ] as const) {
+        if (!Number.isFinite(radiusMm)) continue
+        extent.toolRadiusMm = Math.max(extent.toolRadiusMm, radiusMm)
+        take(toPartFrame(at, zMm, radiusMm))
+        take(toPartFrame(at, zMm, -radiusMm))
+      }
+  take(toPartFrame(at, cutZMm, 0))
+  const topMm = topFaceMm(at)
+  const edgeMm = at.kind === 'wall' ? topMm * at.tanDraft : 0
+  const obstacles = at.kind === 'wall' ? at.obstacles : []
+  const riseMm = Math.max(0, ...obstacles.map((obstacle) => obstacle.riseMm))
+  take({ uMm: edgeMm, hMm: (topMm + riseMm) * 1.04 })
+  const shownMm = (extent.hMax - extent.hMin) * materialShare
+  take({ uMm: edgeMm + Math.max(0, ...obstacles.map((obstacle) => obstacle.setbackMm)) + shownMm, hMm: 0 })
+  const farMm = farWallMm(scene)
+  if (farMm !== null) take({ uMm: farMm - edgeMm - shownMm, hMm: 0 })
+  return extent
+}
+
+/** Where the far wall's foot is, from this wall's; null where the wall is open. */
+export function farWallMm({ feature, at }: SectionScene): number | null {
+  if (at.kind === 'hole') return -2 * at.roomRadiusMm
+  if (feature.kind === 'hole') return -feature.diameterMm
+  return feature.openingWidthMm == null ? null : -feature.openingWidthMm
+}
+
+function turnOf({ at }: SectionScene): SectionLayout['turn'] {
+  if (at.kind === 'hole') return { uMm: -at.roomRadiusMm, hMm: 0, zMm: at.leadMm, tiltDeg: 0 }
+  return { uMm: at.axisUMm, hMm: at.pivotMm, zMm: at.pivotMm, tiltDeg: at.tiltDeg }
+}
+
+function fittedFrame(extent: Extent, sheet: Sheet, margins: typeof wideMargins): SectionFrame {
+  const room = {
+    width: sheet.width - margins.left - margins.right,
+    height: sheet.height - margins.top - margins.bottom,
+  }
+  const size = { widthMm: extent.uMax - extent.uMin, heightMm: extent.hMax - extent.hMin }
+  const { pxPerMm, name } = drawingScale(size, room)
+  const spare = {
+    width: room.width - size.widthMm * pxPerMm,
+    height: room.height - size.heightMm * pxPerMm,
+  }
+  return {
+    pxPerMm,
+    scaleName: name,
+    foot: {
+      x: margins.left + spare.width / 2 - extent.uMin * pxPerMm,
+      y: sheet.height - margins.bottom - spare.height / 2 + extent.hMin * pxPerMm,
+    },
+  }
+}

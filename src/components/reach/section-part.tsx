@@ -1,0 +1,79 @@
+import { memo } from 'react'
+import { lineWidths } from '../drawing/drafting-style'
+import { HatchPattern } from '../drawing/hatch-pattern'
+import { materialPaths, obstaclePaths } from './material-paths'
+import type { SectionLayout } from './section-layout'
+import type { SectionScene } from './section-scene'
+import { toolTransform } from './section-tool'
+import { envelopePaths } from './tool-paths'
+
+export interface SectionPartProps {
+  scene: SectionScene
+  layout: SectionLayout
+}
+
+/** What is cut through is hatched; two solids that touch the two ways. */
+export function SectionPatterns({ layout }: Pick<SectionPartProps, 'layout'>) {
+  const { sheet } = layout
+  return (
+    <defs>
+      <HatchPattern id="reach-hatch-part" />
+      <HatchPattern id="reach-hatch-obstacle" isMirrored />
+      <clipPath id="reach-section-sheet">
+        <rect x={0} y={0} width={sheet.width} height={sheet.height} />
+      </clipPath>
+      <clipPath id="reach-section-cut">
+        <rect x={-4000} y={-(layout.cutZMm - layout.turn.zMm) * layout.pxPerMm} width={8000} height={8000} />
+      </clipPath>
+    </defs>
+  )
+}
+
+/** The part in section, and what stands on it. */
+export const SectionPart = memo(function SectionPart({ scene, layout }: SectionPartProps) {
+  return (
+    <g strokeLinejoin="round">
+      {obstaclePaths(scene, layout).map(({ area, edges }) => (
+        <g key={area}>
+          <path d={area} fill="var(--sheet)" />
+          <path d={area} fill="url(#reach-hatch-obstacle)" />
+          <path d={edges} fill="none" stroke="var(--ink)" strokeWidth={lineWidths.outline} />
+        </g>
+      ))}
+      {materialPaths(scene, layout).map(({ area, edges }) => (
+        <g key={area}>
+          <path d={area} fill="url(#reach-hatch-part)" />
+          <path d={edges} fill="none" stroke="var(--ink)" strokeWidth={lineWidths.outline} />
+        </g>
+      ))}
+    </g>
+  )
+})
+
+/** Where the tool, with the room it must keep, is inside the part. */
+export const SectionCollision = memo(function SectionCollision({ scene, layout }: SectionPartProps) {
+  const solids = [...materialPaths(scene, layout), ...obstaclePaths(scene, layout)]
+  return (
+    <g>
+      <clipPath id="reach-collision">
+        {solids.map(({ area }) => (
+          <path key={area} d={area} />
+        ))}
+      </clipPath>
+      <g clipPath="url(#reach-collision)">
+        <g
+          transform={toolTransform(layout)}
+          clipPath="url(#reach-section-cut)"
+          fill="var(--collision)"
+          fillOpacity={0.5}
+          stroke="var(--collision)"
+          strokeWidth={4}
+        >
+          {envelopePaths(scene, layout).map(({ part, d }) => (
+            <path key={part} d={d} />
+          ))}
+        </g>
+      </g>
+    </g>
+  )
+})
