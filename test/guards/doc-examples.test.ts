@@ -2,11 +2,13 @@ import { readdirSync, readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { pathToFileURL } from 'node:url'
 import { describe, expect, it } from 'vitest'
+import * as samples from '../support/reach-requests'
 
 /*
  * Every `@example` in src/core is run, so a comment can't promise what the code no longer does. An example is one
  * expression, over one line or several, ended by `// => value`; `// => throws code` expects a refusal with that code.
- * Names come from the file itself first, then from the rest of the core.
+ * Names come from the file itself first, then from the rest of the core, then from the samples of
+ * test/support/reach-requests.ts (`squareCutter`, `handHolder`, `reachRequest`).
  */
 
 const coreFolder = join(process.cwd(), 'src/core')
@@ -69,7 +71,7 @@ for (const file of files) {
   const module: Scope = await import(/* @vite-ignore */ pathToFileURL(join(coreFolder, file)).href)
   modules.set(file, { ...module })
 }
-const everything: Scope = Object.assign({}, ...modules.values())
+const everything: Scope = Object.assign({ ...samples }, ...modules.values())
 
 describe('examples in doc comments of the core', () => {
   const examples = files.flatMap(examplesIn)

@@ -10,6 +10,9 @@ import type { ReachRequest } from './types'
  * What was taken for granted, as messages: gaps in the cutter's figures, an unknown spindle, a rigid machine.
  *
  * Units      Millimetres and degrees, in the messages' own names.
+ *
+ * @example
+ * assumptionMessages(reachRequest({ sideLoadN: 50 }), cutterDimensions(squareCutter)).map(({ code }) => code) // => ['spindle-width-unknown', 'spindle-taken-as-rigid']
  */
 export function assumptionMessages(request: ReachRequest, cutter: CutterDimensions): ReachMessage[] {
   const messages = cutter.assumptions.map((assumption) => cutterMessage(assumption, request, cutter))

@@ -42,6 +42,9 @@ export function cutterCheckParts(cutter: CutterGeometry): CheckPart[] {
  * As `cutterCheckParts`, from figures already checked.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * checkPartsOfDimensions(cutterDimensions(squareCutter))[1].lines[0] // => { z0: 12.7, r0: 0, z1: 12.7, r1: 1.5875, arc: null }
  */
 export function checkPartsOfDimensions(cutter: CutterDimensions): CheckPart[] {
   const parts = outlineOfDimensions(cutter).map((part) =>

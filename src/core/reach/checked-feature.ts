@@ -37,6 +37,9 @@ const draftLimitDeg = 60
  * Errors     CoreInputError `not-given`, `not-finite`, `not-positive`, `negative`, `draft-out-of-range`,
  *            `tilt-out-of-range`, `tilt-without-spherical-tip`, `tilt-with-closed-wall`, `chamfer-not-checked`,
  *            `hole-tool-on-wall`.
+ *
+ * @example
+ * checkedFeature({ kind: 'wall', depthMm: 5, tiltDeg: 10 }, cutterDimensions(squareCutter)) // => throws tilt-without-spherical-tip
  */
 export function checkedFeature(feature: Feature, cutter: CutterDimensions): CheckedFeature {
   if (cutter.form === 'chamfer')

@@ -13,6 +13,9 @@ type LineBound = (a0: number, r0: number, a1: number, r1: number) => number
  *
  * Units      Millimetres.
  * Result     -Infinity where any stick-out does.
+ *
+ * @example
+ * clearanceBoundMm(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter), holderCheckParts(handHolder, null), 0.5) // => 25.5
  */
 export function clearanceBoundMm(at: Placement, holderParts: CheckPart[], clearanceMm: number): number {
   if (at.kind === 'hole')
@@ -28,6 +31,9 @@ export function clearanceBoundMm(at: Placement, holderParts: CheckPart[], cleara
  *
  * Units      Millimetres.
  * Result     -Infinity where any stick-out does.
+ *
+ * @example
+ * obstaclesBoundMm(placementOf({ kind: 'wall', depthMm: 25, obstacles: [{ setbackMm: 5, riseMm: 12 }] }, squareCutter), holderCheckParts(handHolder, null), 0.5) // => 37.5
  */
 export function obstaclesBoundMm(at: WallPlacement, holderParts: CheckPart[], clearanceMm: number): number {
   let boundMm = none
@@ -43,6 +49,9 @@ export function obstaclesBoundMm(at: WallPlacement, holderParts: CheckPart[], cl
  *
  * Units      Millimetres.
  * Result     -Infinity without tilt.
+ *
+ * @example
+ * floorBoundMm(placementOf({ kind: 'wall', depthMm: 30, tiltDeg: 30 }, ballCutter), holderCheckParts(handHolder, null), 0.5).toFixed(3) // => '8.407'
  */
 export function floorBoundMm(at: WallPlacement, holderParts: CheckPart[], clearanceMm: number): number {
   if (at.tiltDeg === 0) return none

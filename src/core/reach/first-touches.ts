@@ -47,6 +47,9 @@ export interface LeastTouch {
  *
  * Units      Millimetres.
  * Result     Depth of the tip, not of the feature: a hole tool's point counts. Infinity and null where none touches.
+ *
+ * @example
+ * leastTouch(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter), cutterCheckParts(squareCutter), 0, { shankMm: 0.025, holderMm: 0.5 }) // => { part: 'shank', tipDepthMm: 12.7 }
  */
 export function leastTouch(
   at: Placement,
@@ -72,6 +75,9 @@ export function leastTouch(
  *
  * Units      Millimetres.
  * Result     0 or more; Infinity where it never touches.
+ *
+ * @example
+ * partTipDepthMm(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter), holderCheckParts(handHolder, null)[0], 20, { shankMm: 0.025, holderMm: 0.5 }) // => 19.5
  */
 export function partTipDepthMm(
   at: Placement,
@@ -124,6 +130,9 @@ function obstaclesTouchMm(at: WallPlacement, part: CheckPart, liftMm: number, cl
  * Assumes the length of cut stays off it: a ball on the floor does.
  *
  * Result     null where none does, as always without tilt.
+ *
+ * @example
+ * partInFloor(placementOf({ kind: 'wall', depthMm: 25, tiltDeg: 60 }, ballCutter), cutterCheckParts({ ...ballCutter, shankDiameterMm: 20 }), { shankMm: 0.025, holderMm: 0.5 }) // => 'shank'
  */
 export function partInFloor(
   at: Placement,

@@ -12,6 +12,9 @@ const angleToleranceDeg = 1e-9
  *
  * Units      Millimetres and degrees, in the messages' own names.
  * Tolerance  1e-9 mm, 1e-9 degrees.
+ *
+ * @example
+ * fitMessages(checkedFeature({ kind: 'wall', depthMm: 5, openingWidthMm: 3 }, cutterDimensions(squareCutter)), cutterDimensions(squareCutter), placementOf({ kind: 'wall', depthMm: 5 }, squareCutter), defaultReachSettings)[0].code // => 'opening-too-narrow'
  */
 export function fitMessages(
   feature: CheckedFeature,
@@ -90,6 +93,9 @@ function wallFormMessages(cutter: CutterDimensions, at: WallPlacement): ReachMes
  * Whether the cutter leans more than the wall does as it sees it, so that it can't lie along it.
  *
  * Tolerance  1e-9 degrees.
+ *
+ * @example
+ * isTaperTooSteep(cutterDimensions(squareCutter), placementOf({ kind: 'wall', depthMm: 5 }, squareCutter)) // => false
  */
 export function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): boolean {
   return cutter.taperHalfAngleDeg > at.draftDeg + at.tiltDeg + angleToleranceDeg
@@ -97,6 +103,9 @@ export function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): bo
 
 /**
  * Whether this tool can't lie along this wall at all: its reach there is 0.
+ *
+ * @example
+ * cutsNothing(cutterDimensions({ ...ballCutter, lengthOfCutMm: 2 }), placementOf({ kind: 'wall', depthMm: 5 }, ballCutter)) // => true
  */
 export function cutsNothing(cutter: CutterDimensions, at: Placement): boolean {
   return at.kind === 'wall' && wallFormMessages(cutter, at).length > 0
@@ -107,6 +116,9 @@ export function cutsNothing(cutter: CutterDimensions, at: Placement): boolean {
  *
  * Units      Millimetres.
  * Result     0 for a sharp end.
+ *
+ * @example
+ * contactZMm(cutterDimensions(ballCutter), placementOf({ kind: 'wall', depthMm: 5 }, ballCutter)) // => 3
  */
 export function contactZMm(cutter: CutterDimensions, at: WallPlacement): number {
   return cutter.cornerRadiusMm * (1 - at.sinWall)
@@ -117,6 +129,9 @@ export function contactZMm(cutter: CutterDimensions, at: WallPlacement): number 
  *
  * Units      Millimetres, measured along the floor.
  * Result     0 where the taper is not too steep; null for a rounded tip, for which it is not defined.
+ *
+ * @example
+ * uncutAtFootMm(cutterDimensions(squareCutter), placementOf({ kind: 'wall', depthMm: 5 }, squareCutter)) // => 0
  */
 export function uncutAtFootMm(cutter: CutterDimensions, at: Placement): number | null {
   if (at.kind === 'hole' || !isTaperTooSteep(cutter, at)) return 0
@@ -130,6 +145,9 @@ export function uncutAtFootMm(cutter: CutterDimensions, at: Placement): number |
  *
  * Units      Millimetres.
  * Result     0 or more: the length of cut above where the tool touches the wall.
+ *
+ * @example
+ * maximumAxialStepMm(cutterDimensions(ballCutter), placementOf({ kind: 'wall', depthMm: 5 }, ballCutter)) // => 9
  */
 export function maximumAxialStepMm(cutter: CutterDimensions, at: Placement): number {
   return at.kind === 'hole'

@@ -15,6 +15,9 @@ export interface Holding {
  * Assumes a bore that was not given takes anything.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * holdingOf(reachRequest({ bore: { kind: 'fixed', diameterMm: 3 } })).refusals[0].code // => 'bore-misses-shank'
  */
 export function holdingOf({ bore, collet, cutter }: ReachRequest): Holding {
   const shankDiameterMm = cutter.shankDiameterMm

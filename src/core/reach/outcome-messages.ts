@@ -14,6 +14,9 @@ import type { ReachRequest, ReachVerdict } from './types'
  *
  * Units      Millimetres, in the messages' own names.
  * Result     Empty unless the verdict is `short`.
+ *
+ * @example
+ * shortMessages(reachRequest({}), reachCase(reachRequest({})), stickOutRange(reachCase(reachRequest({})), true), 'reaches') // => []
  */
 export function shortMessages(
   request: ReachRequest,
@@ -71,6 +74,9 @@ function cutterMessages(reach: ReachCase): ReachMessage[] {
  * Cautions that hold whatever the verdict: a depth in steps, a wall below the rounded corner.
  *
  * Units      Millimetres, in the messages' own names.
+ *
+ * @example
+ * cautionMessages(reachCase(reachRequest({ feature: { kind: 'wall', depthMm: 25.4 } })))[0].values.steps // => 2
  */
 export function cautionMessages({ at, cutter }: ReachCase): ReachMessage[] {
   const messages: ReachMessage[] = []

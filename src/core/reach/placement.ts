@@ -69,6 +69,9 @@ export function placementOf(feature: Feature, cutter: CutterGeometry): Placement
  *
  * Units      Millimetres and degrees.
  * Errors     None.
+ *
+ * @example
+ * placement(checkedFeature({ kind: 'hole', depthMm: 20, diameterMm: 6 }, cutterDimensions(drillCutter)), cutterDimensions(drillCutter)).roomRadiusMm // => 3
  */
 export function placement(feature: CheckedFeature, cutter: CutterDimensions): Placement {
   if (feature.kind === 'wall') return wallPlacement(feature, cutter)
@@ -127,6 +130,8 @@ export function wallStandOffMm(radiusMm: number, cornerRadiusMm: number, wallDeg
 /**
  * Where a point of the outline stands in the part's frame, on the wall's side; on the far side for a negative radius.
  *
+ * Assumes, for a hole tool, a frame whose wall is the hole's and whose floor is where its full diameter ends.
+ *
  * Units      Millimetres.
  *
  * @example
@@ -141,6 +146,9 @@ export function toPartFrame(at: Placement, zMm: number, radiusMm: number): PartP
  * The `uMm` of `toPartFrame` on a wall, without making a point.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * partU(placementOf({ kind: 'wall', depthMm: 10 }, ballCutter), 20, 14) // => 11
  */
 export function partU(at: WallPlacement, zMm: number, radiusMm: number): number {
   return at.axisUMm - (zMm - at.pivotMm) * at.sinTilt + radiusMm * at.cosTilt
@@ -150,6 +158,9 @@ export function partU(at: WallPlacement, zMm: number, radiusMm: number): number 
  * The `hMm` of `toPartFrame` on a wall, without making a point.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * partHeight(placementOf({ kind: 'wall', depthMm: 10 }, ballCutter), 20, 14) // => 20
  */
 export function partHeight(at: WallPlacement, zMm: number, radiusMm: number): number {
   if (at.tiltDeg === 0) return zMm

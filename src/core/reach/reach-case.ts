@@ -37,6 +37,9 @@ export interface TipReach {
  * Units      Millimetres and degrees.
  * Errors     CoreInputError as `cutterDimensions`, `checkedFeature`, `holderOutline`, `extensionOutline`,
  *            `checkedClamping`; `not-finite`, `not-positive`, `negative` for stick-out, clearances and side load.
+ *
+ * @example
+ * reachCase(reachRequest({ stickOutMm: -1 })) // => throws not-positive
  */
 export function reachCase(request: ReachRequest): ReachCase {
   const { settings } = request
@@ -87,6 +90,9 @@ function usableTipDepth(
  *
  * Units      Millimetres.
  * Result     Infinity and null where nothing does; 0 and `flute` where the tool can't lie along the wall at all.
+ *
+ * @example
+ * tipReach(reachCase(reachRequest({})), 20) // => { tipDepthMm: 12.7, limitedBy: 'shank' }
  */
 export function tipReach(reach: ReachCase, stickOutMm: number): TipReach {
   if (cutsNothing(reach.cutter, reach.at)) return { tipDepthMm: 0, limitedBy: 'flute' }
@@ -101,6 +107,9 @@ export function tipReach(reach: ReachCase, stickOutMm: number): TipReach {
  * The depth asked of the feature, counted as its reach is.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * askedDepthMm(reachCase(reachRequest({ feature: { kind: 'wall', depthMm: 10, throughMm: 1 } }))) // => 11
  */
 export function askedDepthMm({ at }: ReachCase): number {
   return at.tipDepthMm - at.leadMm
@@ -111,6 +120,9 @@ export function askedDepthMm({ at }: ReachCase): number {
  *
  * Units      Millimetres.
  * Result     null where it is without limit; never below 0.
+ *
+ * @example
+ * featureDepthMm(reachCase(reachRequest({})), Infinity) // => null
  */
 export function featureDepthMm({ at }: ReachCase, tipDepthMm: number): number | null {
   return Number.isFinite(tipDepthMm) ? Math.max(0, tipDepthMm - at.leadMm) : null
@@ -120,12 +132,20 @@ export function featureDepthMm({ at }: ReachCase, tipDepthMm: number): number | 
  * Whether a depth of the tip falls short of the one asked.
  *
  * Tolerance  1e-9 mm.
+ *
+ * @example
+ * isShort(reachCase(reachRequest({ feature: { kind: 'wall', depthMm: 10 } })), 9.5) // => true
  */
 export function isShort({ at }: ReachCase, tipDepthMm: number): boolean {
   return tipDepthMm < at.tipDepthMm - overlapToleranceMm
 }
 
-/** Settings a shop can get wrong; the edge checks them where they are entered. */
+/**
+ * Settings a shop can get wrong; the edge checks them where they are entered.
+ *
+ * @example
+ * refuseBadSettings({ ...defaultReachSettings, stickOutStepMm: 0 }) // => throws not-positive
+ */
 export function refuseBadSettings(settings: ReachSettings): void {
   const named: [keyof ReachSettings, boolean][] = [
     ['stickOutStepMm', settings.stickOutStepMm > 0],

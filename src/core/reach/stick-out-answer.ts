@@ -30,6 +30,9 @@ export interface StickOutRange {
  * Assumes `fits` is false where the feature does not take the tool, or nothing holds it.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * stickOutRange(reachCase(reachRequest({})), true).lower.by // => 'flutes'
  */
 export function stickOutRange(reach: ReachCase, fits: boolean): StickOutRange {
   const { at, cutter, clamping, holderParts, clearances, settings } = reach
@@ -61,6 +64,9 @@ function doesCutterBreakRule(reach: ReachCase): boolean {
  * Whether the far side of a tilted tool stands in the floor at a stick-out.
  *
  * Tolerance  1e-9 mm.
+ *
+ * @example
+ * standsInFloor(reachCase(reachRequest({})), stickOutRange(reachCase(reachRequest({})), true), 20) // => false
  */
 export function standsInFloor(reach: ReachCase, range: StickOutRange, stickOutMm: number): boolean {
   const { at } = reach
@@ -75,6 +81,9 @@ export function standsInFloor(reach: ReachCase, range: StickOutRange, stickOutMm
  *
  * Units      Millimetres.
  * Result     Empty where they don't.
+ *
+ * @example
+ * crossedMessages(stickOutRange(reachCase(reachRequest({})), true)) // => []
  */
 export function crossedMessages({ fixed, upper, isCrossed }: StickOutRange): ReachMessage[] {
   if (!isCrossed) return []
@@ -97,6 +106,9 @@ export function crossedMessages({ fixed, upper, isCrossed }: StickOutRange): Rea
  *
  * Units      Millimetres.
  * Result     Empty where it keeps them all.
+ *
+ * @example
+ * brokenBoundMessages(stickOutRange(reachCase(reachRequest({})), true), 13)[0].values.bound // => 'flutes'
  */
 export function brokenBoundMessages({ bounds }: StickOutRange, stickOutMm: number): ReachMessage[] {
   const low = bounds.fixedLower.filter(({ mm }) => stickOutMm < mm - overlapToleranceMm)

@@ -89,6 +89,9 @@ function gripOf(ofHolderMm: number | null, collet: ColletGeometry | null | undef
  * Result     Lists, each bound with its name; a bound that does not apply is left out.
  * Source     Worked by hand in test/reference/reach-hand-cases.md.
  * Tolerance  1e-9 mm.
+ *
+ * @example
+ * stickOutBounds(placementOf({ kind: 'wall', depthMm: 10 }, squareCutter), cutterDimensions(squareCutter), checkedClamping(handHolder, null, null), holderCheckParts(handHolder, null), { shankMm: 0.025, holderMm: 0.5 }, defaultReachSettings).clearanceLower // => [{ by: 'clearance', mm: 10.5 }]
  */
 export function stickOutBounds(
   at: Placement,
@@ -130,6 +133,9 @@ function upperBounds(cutter: CutterDimensions, clamping: CheckedClamping): Bound
  *
  * Units      Millimetres.
  * Result     At most one each of clearance, obstacle, floor; left out where nothing is asked.
+ *
+ * @example
+ * clearanceLowerBounds(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter), holderCheckParts(handHolder, null), { shankMm: 0.025, holderMm: 0.5 }) // => [{ by: 'clearance', mm: 25.5 }]
  */
 export function clearanceLowerBounds(
   at: Placement,
@@ -150,6 +156,9 @@ export function clearanceLowerBounds(
  * The largest bound, the first named where two are alike.
  *
  * Errors     None; a list without bounds has none: -Infinity is never returned from `stickOutBounds`' lists.
+ *
+ * @example
+ * largestBound([{ by: 'bore', mm: 10 }, { by: 'flutes', mm: 13 }]).by // => 'flutes'
  */
 export function largestBound<Name>(bounds: Bound<Name>[]): Bound<Name> {
   return bounds.reduce((largest, bound) => (bound.mm > largest.mm ? bound : largest))
@@ -157,6 +166,9 @@ export function largestBound<Name>(bounds: Bound<Name>[]): Bound<Name> {
 
 /**
  * The smallest bound, the first named where two are alike.
+ *
+ * @example
+ * smallestBound([{ by: 'sideLock', mm: 20 }, { by: 'grip', mm: 20 }]).by // => 'sideLock'
  */
 export function smallestBound<Name>(bounds: Bound<Name>[]): Bound<Name> {
   return bounds.reduce((smallest, bound) => (bound.mm < smallest.mm ? bound : smallest))

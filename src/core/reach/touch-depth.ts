@@ -10,6 +10,9 @@ import type { Obstacle } from './types'
  *
  * Units      Millimetres; z from the tip, radii widened by the clearance already.
  * Result     Infinity where it never touches. May be negative below the floor.
+ *
+ * @example
+ * wallTouchMm(placementOf({ kind: 'wall', depthMm: 10 }, ballCutter), 12, 2, 20, 4) // => 16
  */
 export function wallTouchMm(at: WallPlacement, z0: number, r0: number, z1: number, r1: number): number {
   const g0 = beyondWall(at, z0, r0)
@@ -39,6 +42,9 @@ function beyondWall(at: WallPlacement, z: number, r: number): number {
  *
  * Units      Millimetres; the line widened and lowered by the clearance already.
  * Result     0 or more; Infinity where it never touches.
+ *
+ * @example
+ * obstacleTouchMm(placementOf({ kind: 'wall', depthMm: 10 }, ballCutter), { setbackMm: 5, riseMm: 12 }, 20, 0, 20, 14) // => 8
  */
 export function obstacleTouchMm(
   at: WallPlacement,
@@ -68,6 +74,9 @@ export function obstacleTouchMm(
  *
  * Units      Millimetres.
  * Result     0 or more; Infinity where it never touches.
+ *
+ * @example
+ * arcObstacleTouchMm(placementOf({ kind: 'wall', depthMm: 10 }, ballCutter), { setbackMm: 0, riseMm: 12 }, cornerArc(3, 0, 3, 3), 0.5) // => 0
  */
 export function arcObstacleTouchMm(
   at: WallPlacement,
@@ -103,6 +112,9 @@ export function arcObstacleTouchMm(
  *
  * Units      Millimetres; radii widened by the clearance already.
  * Result     Infinity where it never is.
+ *
+ * @example
+ * holeTouchMm(placementOf({ kind: 'hole', depthMm: 20, diameterMm: 6 }, drillCutter), 10, 2, 20, 4) // => 15
  */
 export function holeTouchMm(at: HolePlacement, z0: number, r0: number, z1: number, r1: number): number {
   if (Math.max(r0, r1) <= at.roomRadiusMm + overlapToleranceMm) return Number.POSITIVE_INFINITY

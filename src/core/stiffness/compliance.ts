@@ -56,6 +56,9 @@ export function tipComplianceUmPerN(pieces: BeamPiece[]): number {
  * Units      Millimetres, gigapascals; micrometres per newton.
  * Errors     As `extensionOutline`, `holderOutline`.
  * Source     Share 0.8: Kops and Vo, CIRP Annals 39 (1990); test/reference/deflection.md.
+ *
+ * @example
+ * assemblyComplianceUmPerN(cutterDimensions(ballCutter), 'carbide', handHolder, null, 40, defaultReachSettings).toFixed(3) // => '0.742'
  */
 export function assemblyComplianceUmPerN(
   cutter: CutterDimensions,
