@@ -1,5 +1,5 @@
 import { beforeAll, describe, expect, it } from 'vitest'
-import { type AnswerBody, type ApiClient, faultPaths, signedInAs, uniqueCode } from '../support/api'
+import { type AnswerBody, type ApiClient, allRows, faultPaths, signedInAs, uniqueCode } from '../support/api'
 import { createCutter, createShelf, putOnShelf, type Shelf, siteDatabase } from '../support/api-stock'
 
 /** Seven cutters under one maker of the test's own, so that a list of that maker is theirs alone. */
@@ -174,13 +174,7 @@ describe('blocks', () => {
     'by cursor join up to the whole list: %s',
     async (sort) => {
       const whole = idsOf((await list(sort)).body)
-      const walked: string[] = []
-      let cursor: string | null = ''
-      while (cursor !== null) {
-        const block: AnswerBody = (await list(`${sort}&limit=2${cursor ? `&cursor=${cursor}` : ''}`)).body
-        walked.push(...idsOf(block))
-        cursor = block.nextCursor
-      }
+      const walked = (await allRows(crib, `/api/cutters?maker=${maker}&${sort}&limit=2`)).map((row) => row.id)
       expect(walked).toEqual(whole)
       expect(new Set(walked).size).toBe(7)
     },

@@ -66,9 +66,13 @@ export function asNobody(): ApiClient {
 }
 
 /** A session of its own for the demo account of a role. */
-export async function signedInAs(role: Role): Promise<ApiClient> {
-  const answer = await asNobody().post('/api/session', { email: emails[role], password: demoPassword })
-  if (answer.status !== 200) throw new Error(`Signing in as ${role} answered ${answer.status}.`)
+export function signedInAs(role: Role): Promise<ApiClient> {
+  return signIn(emails[role], demoPassword)
+}
+
+export async function signIn(email: string, password: string): Promise<ApiClient> {
+  const answer = await asNobody().post('/api/session', { email, password })
+  if (answer.status !== 200) throw new Error(`Signing in as ${email} answered ${answer.status}.`)
   const cookie = answer.headers
     .getSetCookie()
     .map((line) => line.split(';')[0])
@@ -79,6 +83,20 @@ export async function signedInAs(role: Role): Promise<ApiClient> {
 /** A code that no other row has. */
 export function uniqueCode(prefix: string): string {
   return `${prefix}-${randomUUID().slice(0, 13)}`
+}
+
+/** All rows of a list, block by block as a script reads them. */
+export async function allRows(client: ApiClient, path: string): Promise<AnswerBody[]> {
+  const rows: AnswerBody[] = []
+  let cursor: string | null = ''
+  while (cursor !== null) {
+    const query: string = cursor ? `&cursor=${cursor}` : ''
+    const block: Answer = await client.get(`${path}${query}`)
+    if (block.status !== 200) throw new Error(`${path} answered ${block.status}.`)
+    rows.push(...block.body.rows)
+    cursor = block.body.nextCursor
+  }
+  return rows
 }
 
 /** The paths a problem names, in order. */
