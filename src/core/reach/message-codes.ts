@@ -1,5 +1,5 @@
 import type { ToolPart } from '@/core/outline/types'
-import type { LowerBound, UpperBound } from './types'
+import type { LowerBound, UpperBound } from './bound-names'
 
 /** Every message a reach answer may carry, with the figures its sentence needs. Sentences are made at the edge. */
 export interface ReachMessageValues {

@@ -1,4 +1,5 @@
 import { overlapToleranceMm } from '@/core/outline/types'
+import type { LowerBound, UpperBound } from './bound-names'
 import { partInFloor } from './first-touches'
 import type { ReachMessage } from './message-codes'
 import { isShort, type ReachCase } from './reach-case'
@@ -10,7 +11,6 @@ import {
   smallestBound,
   stickOutBounds,
 } from './stick-out-bounds'
-import type { LowerBound, UpperBound } from './types'
 
 /** What stick-outs there are, before one is chosen. */
 export interface StickOutRange {

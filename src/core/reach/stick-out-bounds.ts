@@ -2,10 +2,11 @@ import { CoreInputError } from '@/core/core-input-error'
 import { notNegative, notNegativeOr, positiveOrNull } from '@/core/outline/checked-number'
 import type { CutterDimensions } from '@/core/outline/cutter-dimensions'
 import type { ColletGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
+import type { LowerBound, UpperBound } from './bound-names'
 import type { CheckPart } from './check-parts'
 import { clearanceBoundMm, floorBoundMm, obstaclesBoundMm } from './clearance-bounds'
 import type { Placement } from './placement'
-import type { Clearances, LowerBound, ReachSettings, UpperBound } from './types'
+import type { Clearances, ReachSettings } from './types'
 
 /** How whatever holds the cutter clamps it. */
 export interface CheckedClamping {

@@ -1,6 +1,9 @@
 import type { ToolPart } from '@/core/outline/types'
 import type { Bore, ColletGeometry, CutterGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
+import type { LowerBound, UpperBound } from './bound-names'
 import type { ReachMessage } from './message-codes'
+
+export type { LowerBound, UpperBound }
 
 /** A boss, clamp or jaw: an upright face behind the wall's top edge, standing above the top face. */
 export interface Obstacle {
@@ -88,8 +91,6 @@ export interface ReachRequest {
 
 export type ReachVerdict = 'reaches' | 'short' | 'impossible'
 export type ReachLimit = ToolPart | 'usableLength' | 'floor'
-export type LowerBound = 'clearance' | 'floor' | 'obstacle' | 'flutes' | 'neck' | 'bore' | 'sideLock'
-export type UpperBound = 'grip' | 'sideLock'
 
 export interface FirstTouch {
   part: ToolPart
