@@ -3,6 +3,7 @@
 import { type ReactNode, useEffect, useMemo, useState } from 'react'
 import { type Control, type FieldValues, type UseFormReturn, useForm, useWatch } from 'react-hook-form'
 import { toast } from 'sonner'
+import { NoDrawing } from '@/components/drawing/no-drawing'
 import { useCan, useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Notice } from '@/components/ui/notice'
@@ -70,7 +71,7 @@ export function ItemForm<Row extends CatalogueRow>(props: ItemFormProps<Row>) {
     <form
       noValidate
       onSubmit={form.handleSubmit((body) => saving.save(body, base))}
-      className="flex flex-col gap-5"
+      className="flex flex-col gap-5 [&_:is(input,select,textarea)]:scroll-mt-24 [&_:is(input,select,textarea)]:scroll-mb-28"
     >
       {stale && base ? (
         <StaleNotice
@@ -198,11 +199,7 @@ function FormDrawing<Row extends CatalogueRow>({
   const drawing: ReactNode = checked.success ? definition.form.draw(checked.data as Row) : null
   return (
     <div className="min-h-40">
-      {drawing ?? (
-        <p className="border-hairline text-ink-soft grid min-h-40 place-items-center border border-dashed px-6 text-center">
-          The drawing appears here as soon as the dimensions make a whole.
-        </p>
-      )}
+      {drawing ?? <NoDrawing reason="The drawing appears here as soon as the dimensions make a whole." />}
     </div>
   )
 }

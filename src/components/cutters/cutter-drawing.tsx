@@ -1,6 +1,7 @@
 'use client'
 
 import { AngleDimension } from '@/components/drawing/angle-dimension'
+import { attemptedOutline } from '@/components/drawing/attempted-outline'
 import { ChainLine } from '@/components/drawing/chain-line'
 import { DimensionLine } from '@/components/drawing/dimension-line'
 import { dimensionSpacing, draftingTextWidth } from '@/components/drawing/drafting-style'
@@ -8,7 +9,9 @@ import { drawingScale } from '@/components/drawing/drawing-scale'
 import { DrawingSheet, type SheetContent } from '@/components/drawing/drawing-sheet'
 import { FluteLines } from '@/components/drawing/flute-lines'
 import { LeaderLine } from '@/components/drawing/leader-line'
+import { NoDrawing } from '@/components/drawing/no-drawing'
 import type { ToSheet } from '@/components/drawing/outline-path'
+import { sheetFrame } from '@/components/drawing/outline-path'
 import { ScaleBar } from '@/components/drawing/scale-bar'
 import { TurnedBody } from '@/components/drawing/turned-body'
 import { useShop } from '@/components/layout/shop-context'
@@ -40,13 +43,15 @@ export interface CutterDrawingProps {
 /** The cutter lying, tip to the right, with the dimensions its catalogue gives. */
 export function CutterDrawing({ code, cutter }: CutterDrawingProps) {
   const { unit } = useShop()
+  const { parts, reason } = attemptedOutline(() => cutterOutline(cutter))
+  if (parts === null) return <NoDrawing reason={reason} />
   return (
     <DrawingSheet
       code={code}
       unit={unit}
       sentence={cutterSentence(cutter, unit)}
       note="Flutes drawn as a sign"
-      draw={(width) => drawCutter(cutter, unit, width)}
+      draw={(width) => drawCutter(cutter, parts, unit, width)}
     />
   )
 }
@@ -62,8 +67,12 @@ interface CutterLayout {
   toSheet: ToSheet
 }
 
-function drawCutter(cutter: CutterGeometry, unit: LengthUnit, width: number): SheetContent {
-  const parts = cutterOutline(cutter)
+function drawCutter(
+  cutter: CutterGeometry,
+  parts: OutlinePart[],
+  unit: LengthUnit,
+  width: number,
+): SheetContent {
   const widestMm = Math.max(
     ...parts.flatMap((part) =>
       part.segments.map((stroke) => 2 * Math.max(stroke.toRadiusMm, stroke.fromRadiusMm)),
@@ -79,7 +88,7 @@ function drawCutter(cutter: CutterGeometry, unit: LengthUnit, width: number): Sh
   const tipX = left + (width - left - right + lengthPx) / 2
   const radiusPx = (widestMm / 2) * pxPerMm
   const axisY = Math.max(radiusPx + 50, draftingTextWidth('DC 00.0000') + 34)
-  const toSheet: ToSheet = (zMm, radiusMm) => ({ x: tipX - zMm * pxPerMm, y: axisY - radiusMm * pxPerMm })
+  const toSheet = sheetFrame({ datumX: tipX, axisY, pxPerMm })
   const layout: CutterLayout = {
     cutter,
     parts,

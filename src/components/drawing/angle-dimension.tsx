@@ -11,6 +11,8 @@ export interface AngleDimensionProps {
   toDeg: number
   text: string
   symbol?: string
+  /** Where round the vertex the figure stands; the arc's middle unless something is in its way there. */
+  labelDeg?: number
 }
 
 function onCircle(vertex: Point, radius: number, deg: number): Point {
@@ -21,10 +23,17 @@ function onCircle(vertex: Point, radius: number, deg: number): Point {
 }
 
 /** An angle: its legs drawn out thin, an arc with arrowheads between them, the figure beyond the arc's middle. */
-export function AngleDimension({ vertex, radius, fromDeg, toDeg, text, symbol }: AngleDimensionProps) {
+export function AngleDimension({
+  vertex,
+  radius,
+  fromDeg,
+  toDeg,
+  text,
+  symbol,
+  labelDeg = (fromDeg + toDeg) / 2,
+}: AngleDimensionProps) {
   const [start, end] = [onCircle(vertex, radius, fromDeg), onCircle(vertex, radius, toDeg)]
-  const middle = (fromDeg + toDeg) / 2
-  const label = onCircle(vertex, radius + 8, middle)
+  const label = onCircle(vertex, radius + 8, labelDeg)
   const isToTheLeft = label.x < vertex.x - 2
   return (
     <g>

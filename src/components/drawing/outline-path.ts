@@ -4,6 +4,17 @@ import type { Point } from './drafting-style'
 /** From height above the datum and distance from the axis, negative on its far side, to a place on the sheet. */
 export type ToSheet = (zMm: number, radiusMm: number) => Point
 
+/**
+ * Lying, tip or nose to the right. To a hundredth of a px: the last digit of a sine may differ between server and
+ * browser, and the drawing must not.
+ */
+export function sheetFrame(frame: { datumX: number; axisY: number; pxPerMm: number }): ToSheet {
+  return (zMm, radiusMm) => ({
+    x: round(frame.datumX - zMm * frame.pxPerMm),
+    y: round(frame.axisY - radiusMm * frame.pxPerMm),
+  })
+}
+
 interface Step {
   from: Point
   to: Point

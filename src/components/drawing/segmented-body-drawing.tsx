@@ -12,7 +12,7 @@ import { drawingScale } from './drawing-scale'
 import { DrawingSheet, type SheetContent } from './drawing-sheet'
 import { HatchPattern } from './hatch-pattern'
 import { LeaderLine } from './leader-line'
-import type { ToSheet } from './outline-path'
+import { sheetFrame, type ToSheet } from './outline-path'
 import { type PlacedSegment, placedSegments } from './placed-segments'
 import { ScaleBar } from './scale-bar'
 import { TurnedBody } from './turned-body'
@@ -68,7 +68,7 @@ function drawBody(props: SegmentedBodyDrawingProps, width: number, hatchId: stri
   const noseX = left + (width - left - right + lengthPx) / 2
   const radiusPx = (widestMm / 2) * pxPerMm
   const axisY = Math.max(radiusPx + 52, draftingTextWidth('⌀00.0000') + 30)
-  const toSheet: ToSheet = (zMm, radiusMm) => ({ x: noseX - zMm * pxPerMm, y: axisY - radiusMm * pxPerMm })
+  const toSheet = sheetFrame({ datumX: noseX, axisY, pxPerMm })
   const layout: BodyLayout = { ...props, noseX, axisY, radiusPx, pxPerMm, toSheet, placed }
   const rows = placed.length > 1 ? 2 : 1
   const height = axisY + radiusPx + 22 + rows * dimensionSpacing + 34
@@ -164,6 +164,16 @@ function BodyLengths({ layout }: { layout: BodyLayout }) {
   )
 }
 
+/** On the segment's own side of its edge, where a thicker neighbour may stand above it. */
+function justBehindNose(segment: PlacedSegment, toSheet: ToSheet, pxPerMm: number) {
+  const insideMm = Math.min(4 / pxPerMm, segment.lengthMm / 2)
+  const riseMm = (segment.spindleDiameterMm - segment.noseDiameterMm) / 2
+  return toSheet(
+    segment.fromMm + insideMm,
+    segment.noseDiameterMm / 2 + (riseMm * insideMm) / segment.lengthMm,
+  )
+}
+
 function BodyDiameters({ layout }: { layout: BodyLayout }) {
   const { placed, toSheet, unit, noseX, pxPerMm, length, axisY, radiusPx, bore } = layout
   const first = placed[0]
@@ -189,11 +199,15 @@ function BodyDiameters({ layout }: { layout: BodyLayout }) {
         at={noseX - length.mm * pxPerMm - 30}
         text={figure(last.spindleDiameterMm)}
       />
-      {inner.map((segment) => (
+      {inner.map((segment, index) => (
         <LeaderLine
           key={segment.key}
-          target={toSheet(segment.fromMm, segment.noseDiameterMm / 2)}
-          shoulder={{ x: toSheet(segment.fromMm, 0).x - 12, y: axisY - radiusPx - 16 }}
+          target={justBehindNose(segment, toSheet, pxPerMm)}
+          // Neighbours stand at two heights, so that short segments keep their figures apart.
+          shoulder={{
+            x: toSheet(segment.fromMm, 0).x + 10,
+            y: axisY - radiusPx - (index % 2 === 0 ? 14 : 32),
+          }}
           text={figure(segment.noseDiameterMm)}
         />
       ))}

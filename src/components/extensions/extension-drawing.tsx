@@ -1,6 +1,8 @@
 'use client'
 
 import { boreWords } from '@/components/catalogue/bore-words'
+import { attemptedOutline } from '@/components/drawing/attempted-outline'
+import { NoDrawing } from '@/components/drawing/no-drawing'
 import { SegmentedBodyDrawing } from '@/components/drawing/segmented-body-drawing'
 import { useShop } from '@/components/layout/shop-context'
 import { extensionOutline } from '@/core/outline/holder-outline'
@@ -15,6 +17,8 @@ export interface ExtensionDrawingProps {
 /** The extension lying, its own nose to the right, the holder's nose face to the left. */
 export function ExtensionDrawing({ code, extension }: ExtensionDrawingProps) {
   const { unit } = useShop()
+  const { parts, reason } = attemptedOutline(() => extensionOutline(extension))
+  if (parts === null) return <NoDrawing reason={reason} />
   const length = (mm: number) => formatLength(mm, unit)
   const segments = extension.segments.map(
     (segment) =>
@@ -25,7 +29,7 @@ export function ExtensionDrawing({ code, extension }: ExtensionDrawingProps) {
       code={code}
       unit={unit}
       sentence={`Drawing to scale: extension, projection ${length(extension.projectionMm)}, ${boreWords(extension.bore, unit)}; from the nose: ${segments.join('; ')}.`}
-      parts={extensionOutline(extension)}
+      parts={parts}
       segments={extension.segments}
       length={{ symbol: 'E', mm: extension.projectionMm }}
       datum="Holder's nose"

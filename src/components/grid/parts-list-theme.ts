@@ -1,7 +1,13 @@
-import { themeQuartz } from 'ag-grid-community'
+import { createPart, themeQuartz } from 'ag-grid-community'
+
+/** Whoever moves by arrow keys sees the whole row they are on, not a cell alone. */
+const focusedRow = createPart({
+  feature: 'partsListFocusedRow',
+  css: '.ag-row-focus { background-color: var(--accent-wash); }',
+})
 
 /** A parts list as a drawing office rules it: thin rules, one heavy rule under the headings, no stripes, no boxes. */
-export const partsListTheme = themeQuartz.withParams({
+export const partsListTheme = themeQuartz.withPart(focusedRow).withParams({
   accentColor: 'var(--accent)',
   backgroundColor: 'var(--sheet)',
   foregroundColor: 'var(--ink)',

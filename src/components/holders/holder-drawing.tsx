@@ -1,6 +1,8 @@
 'use client'
 
 import { boreWords } from '@/components/catalogue/bore-words'
+import { attemptedOutline } from '@/components/drawing/attempted-outline'
+import { NoDrawing } from '@/components/drawing/no-drawing'
 import { SegmentedBodyDrawing } from '@/components/drawing/segmented-body-drawing'
 import { useShop } from '@/components/layout/shop-context'
 import { holderOutline } from '@/core/outline/holder-outline'
@@ -16,12 +18,14 @@ export interface HolderDrawingProps {
 /** The holder lying, nose to the right, the gauge line to the left. */
 export function HolderDrawing({ code, holder }: HolderDrawingProps) {
   const { unit } = useShop()
+  const { parts, reason } = attemptedOutline(() => holderOutline(holder))
+  if (parts === null) return <NoDrawing reason={reason} />
   return (
     <SegmentedBodyDrawing
       code={code}
       unit={unit}
       sentence={holderSentence(holder, unit)}
-      parts={holderOutline(holder).filter((part) => part.part !== 'spindle')}
+      parts={parts.filter((part) => part.part !== 'spindle')}
       segments={holder.segments}
       length={{ symbol: 'A', mm: holder.gaugeLengthMm }}
       datum="Gauge line"

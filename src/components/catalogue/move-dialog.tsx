@@ -1,0 +1,232 @@
+'use client'
+
+import { type FormEvent, useState } from 'react'
+import { toast } from 'sonner'
+import { useShop } from '@/components/layout/shop-context'
+import { Button } from '@/components/ui/button'
+import { Dialog } from '@/components/ui/dialog'
+import { Notice } from '@/components/ui/notice'
+import { SelectField, type SelectOption } from '@/components/ui/select-field'
+import { TextField } from '@/components/ui/text-field'
+import { type Condition, conditions } from '@/core/stock/kinds'
+import { parseCount } from '@/core/units/parse-count'
+import { useMoveStock } from '@/hooks/use-move-stock'
+import { usePlaces } from '@/hooks/use-places'
+import { ApiError } from '@/lib/api-client'
+import { newIdempotencyKey } from '@/lib/new-idempotency-key'
+import type { BalanceResponse } from '@/schemas/stock'
+import { conditionNames } from './stock-words'
+
+export interface MoveDialogProps {
+  kind: 'issue' | 'return'
+  item: { id: string; code: string }
+  balances: readonly BalanceResponse[]
+  onClose: () => void
+}
+
+/** Pieces out of a bin into hands or a machine, or back. One opened dialog is one movement, however often it is sent. */
+export function MoveDialog(props: MoveDialogProps) {
+  const { kind, item, onClose } = props
+  const sources = props.balances.filter((balance) => isSource(kind, balance))
+  return (
+    <Dialog
+      isOpen
+      onOpenChange={(isOpen) => (isOpen ? undefined : onClose())}
+      title={kind === 'issue' ? `Issue ${item.code}` : `Return ${item.code}`}
+    >
+      {sources.length === 0 ? (
+        <p>
+          {kind === 'issue'
+            ? 'No bin has a piece of it: there is nothing to issue.'
+            : 'Nobody and no machine has a piece of it: there is nothing to return.'}
+        </p>
+      ) : (
+        <MoveForm {...props} sources={sources} />
+      )}
+    </Dialog>
+  )
+}
+
+function isSource(kind: MoveDialogProps['kind'], balance: BalanceResponse): boolean {
+  const isBin = balance.locationKind === 'bin'
+  const isInUse = balance.locationKind === 'person' || balance.locationKind === 'machine'
+  return balance.quantity > 0 && (kind === 'issue' ? isBin : isInUse)
+}
+
+function MoveForm({
+  kind,
+  item,
+  balances,
+  sources,
+  onClose,
+}: MoveDialogProps & { sources: BalanceResponse[] }) {
+  const moveStock = useMoveStock()
+  const { actor } = useShop()
+  const [key] = useState(newIdempotencyKey)
+  // One's own hands first: whoever returns has it there.
+  const own = sources.findIndex((source) => source.locationId === actor.locationId)
+  const [sourceIndex, setSourceIndex] = useState(Math.max(own, 0))
+  const [quantity, setQuantity] = useState('1')
+  const [target, setTarget] = useState<string | null>(null)
+  const [returnedAs, setReturnedAs] = useState<Condition | null>(null)
+  const [note, setNote] = useState('')
+  const [errors, setErrors] = useState<Record<string, string>>({})
+  const [isBusy, setIsBusy] = useState(false)
+  const source = sources[sourceIndex] ?? sources[0]
+  const targets = useTargets(kind, balances)
+  const chosen = target ?? targets.options[0]?.value ?? ''
+  const toCondition = kind === 'issue' ? source?.condition : (returnedAs ?? worst(source?.condition))
+
+  async function handleSubmit(event: FormEvent) {
+    event.preventDefault()
+    const count = parseCount(quantity)
+    if (!count.ok) return setErrors({ quantity: count.message })
+    if (!source || !toCondition) return
+    setErrors({})
+    setIsBusy(true)
+    try {
+      await moveStock(
+        {
+          kind,
+          itemId: item.id,
+          quantity: count.count,
+          fromLocationId: source.locationId,
+          fromCondition: source.condition,
+          toLocationId: chosen,
+          toCondition,
+          note,
+        },
+        key,
+      )
+      toast.success(`${count.count} × ${item.code} ${kind === 'issue' ? 'issued' : 'returned'}.`)
+      onClose()
+    } catch (error) {
+      setErrors(refusals(error))
+      setIsBusy(false)
+    }
+  }
+
+  return (
+    <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <SelectField
+        label="From"
+        value={String(sourceIndex)}
+        onChange={(event) => setSourceIndex(Number(event.target.value))}
+        options={sources.map((balance, index) => ({ value: String(index), label: sourceWords(balance) }))}
+        error={errors.fromLocationId ?? errors.fromCondition}
+      />
+      <TextField
+        label="Pieces"
+        inputMode="numeric"
+        autoComplete="off"
+        value={quantity}
+        onChange={(event) => setQuantity(event.target.value)}
+        error={errors.quantity}
+        hint={source ? `${source.quantity} there` : undefined}
+      />
+      {targets.isNarrowable ? (
+        <TextField
+          label="Find a bin by its code"
+          autoComplete="off"
+          spellCheck={false}
+          value={targets.search}
+          onChange={(event) => {
+            targets.setSearch(event.target.value)
+            setTarget(null)
+          }}
+        />
+      ) : null}
+      <SelectField
+        label="To"
+        value={chosen}
+        onChange={(event) => setTarget(event.target.value)}
+        options={
+          targets.options.length > 0 ? targets.options : [{ value: '', label: 'No bin has this code' }]
+        }
+        error={errors.toLocationId}
+      />
+      {kind === 'return' ? (
+        <SelectField
+          label="Condition it comes back in"
+          value={toCondition}
+          onChange={(event) => setReturnedAs(conditions.find((name) => name === event.target.value) ?? null)}
+          options={conditions.map((name) => ({ value: name, label: conditionNames[name] }))}
+          error={errors.toCondition}
+        />
+      ) : null}
+      <TextField
+        label="Note"
+        value={note}
+        maxLength={1000}
+        onChange={(event) => setNote(event.target.value)}
+        error={errors.note}
+      />
+      {errors.whole ? (
+        <Notice kind="collision" isAnnounced>
+          {errors.whole}
+        </Notice>
+      ) : null}
+      <div className="flex flex-wrap gap-2">
+        <Button type="submit" variant="primary" disabled={isBusy || chosen === ''}>
+          {kind === 'issue' ? (isBusy ? 'Issuing …' : 'Issue') : isBusy ? 'Returning …' : 'Return'}
+        </Button>
+        <Button variant="quiet" onClick={onClose}>
+          Cancel
+        </Button>
+      </div>
+    </form>
+  )
+}
+
+/** What was used does not come back new. */
+function worst(condition: Condition | undefined): Condition {
+  return condition === undefined || condition === 'new' ? 'used' : condition
+}
+
+function sourceWords(balance: BalanceResponse): string {
+  const place =
+    balance.cribCode === null ? balance.locationName : `${balance.cribCode} ${balance.locationCode}`
+  return `${place}, ${conditionNames[balance.condition].toLowerCase()}: ${balance.quantity}`
+}
+
+const fewBins = 30
+
+function useTargets(kind: MoveDialogProps['kind'], balances: readonly BalanceResponse[]) {
+  const { actor } = useShop()
+  const [search, setSearch] = useState('')
+  const machines = usePlaces(kind === 'issue' ? 'machine' : null)
+  const bins = usePlaces(kind === 'return' ? 'bin' : null, search)
+  if (kind === 'issue') {
+    const options: SelectOption[] = [
+      { value: actor.locationId, label: `My hands (${actor.name})` },
+      ...machines.places.map((place) => ({ value: place.id, label: place.name })),
+    ]
+    return { options, isNarrowable: false, search, setSearch }
+  }
+  // Where it lies already comes first, the fullest before the others.
+  const homes = balances
+    .filter((balance) => balance.locationKind === 'bin')
+    .toSorted((one, other) => other.quantity - one.quantity)
+    .map((balance) => balance.locationId)
+  const rank = (id: string) => (homes.includes(id) ? homes.indexOf(id) : homes.length)
+  const options = bins.places
+    .toSorted((one, other) => rank(one.id) - rank(other.id))
+    .map((place) => ({ value: place.id, label: `${place.cribCode} ${place.code}` }))
+  return {
+    options,
+    isNarrowable: search !== '' || (bins.total ?? options.length) > fewBins,
+    search,
+    setSearch,
+  }
+}
+
+const formFields = ['fromLocationId', 'fromCondition', 'toLocationId', 'toCondition', 'quantity', 'note']
+
+function refusals(error: unknown): Record<string, string> {
+  if (!(error instanceof ApiError))
+    return { whole: error instanceof Error ? error.message : 'It was not posted.' }
+  const beside = error.fieldProblems.filter((problem) => formFields.includes(problem.path))
+  return beside.length > 0
+    ? Object.fromEntries(beside.map((problem) => [problem.path, problem.message]))
+    : { whole: error.message }
+}

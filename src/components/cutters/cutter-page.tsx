@@ -1,0 +1,9 @@
+'use client'
+
+import { ItemPage } from '@/components/catalogue/item-page'
+import type { CutterResponse } from '@/schemas/cutter'
+import { cutterCatalogue } from './cutter-catalogue'
+
+export function CutterPage({ cutter }: { cutter: CutterResponse }) {
+  return <ItemPage definition={cutterCatalogue} first={cutter} />
+}

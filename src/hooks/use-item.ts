@@ -1,0 +1,71 @@
+'use client'
+
+import useSWR from 'swr'
+import useSWRInfinite from 'swr/infinite'
+import type { CatalogueKind } from '@/core/stock/kinds'
+import { getJson } from '@/lib/api-client'
+import { itemApiPath } from '@/lib/catalogue-paths'
+import type { FitsItem } from '@/schemas/fits'
+import type { MovementResponse } from '@/schemas/movement'
+import type { ItemStockResponse } from '@/schemas/stock'
+
+/** The item as it is now; the page comes with it, so there is no first wait. */
+export function useItem<Row extends { id: string }>(kind: CatalogueKind, first: Row): Row {
+  const { data } = useSWR<Row, Error>(itemApiPath(kind, first.id), getJson, { fallbackData: first })
+  return data ?? first
+}
+
+export function useItemStock(itemId: string) {
+  const { data, error, isLoading, mutate } = useSWR<ItemStockResponse, Error>(
+    `/api/items/${itemId}/stock`,
+    getJson,
+  )
+  return { stock: data, error, isLoading, retry: () => mutate() }
+}
+
+interface MovementPage {
+  rows: MovementResponse[]
+  nextCursor: string | null
+  total?: number
+}
+
+const movementsOnPage = 20
+
+/** What happened to an item, newest first, a page more whenever asked. */
+export function useItemMovements(itemId: string) {
+  const { data, error, isLoading, size, setSize, mutate } = useSWRInfinite<MovementPage, Error>(
+    (index: number, before: MovementPage | null) => {
+      if (before && before.nextCursor === null) return null
+      const cursor = before?.nextCursor ? `&cursor=${encodeURIComponent(before.nextCursor)}` : ''
+      return index === 0
+        ? `/api/items/${itemId}/movements?limit=${movementsOnPage}`
+        : `/api/items/${itemId}/movements?limit=${movementsOnPage}${cursor}`
+    },
+    getJson,
+  )
+  return {
+    movements: data?.flatMap((page) => page.rows) ?? [],
+    total: data?.[0]?.total,
+    error,
+    isLoading,
+    hasMore: data?.at(-1)?.nextCursor != null,
+    isLoadingMore: size > (data?.length ?? 0),
+    loadMore: () => setSize(size + 1),
+    refresh: () => mutate(),
+  }
+}
+
+interface FitsPage {
+  rows: FitsItem[]
+  total?: number
+}
+
+/** What of one kind fits an item, the first few or as many as an answer holds. */
+export function useItemFits(itemId: string, kind: CatalogueKind, limit: number) {
+  const { data, error, isLoading, mutate } = useSWR<FitsPage, Error>(
+    `/api/items/${itemId}/fits?kind=${kind}&limit=${limit}`,
+    getJson,
+    { keepPreviousData: true },
+  )
+  return { rows: data?.rows ?? [], total: data?.total, error, isLoading, retry: () => mutate() }
+}
