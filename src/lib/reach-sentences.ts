@@ -1,10 +1,13 @@
 import type { ToolPart } from '@/core/outline/types'
 import type { ReachMessage, ReachMessageCode, ReachMessageValues } from '@/core/reach/message-codes'
-import type { Feature, LowerBound, ReachAnswer, ReachLimit, UpperBound } from '@/core/reach/types'
+import type { Feature, ReachAnswer, ReachLimit, StickOutAnswer } from '@/core/reach/types'
 import { decimalText } from '@/core/units/decimal-text'
 import { type LengthUnit, mmPerInch } from '@/core/units/length-unit'
 import { formatAngle } from './format-angle'
 import { formatLength } from './format-length'
+
+type LowerBound = StickOutAnswer['boundBy']
+type UpperBound = StickOutAnswer['upperBoundBy']
 
 /** Below this a hundredth of a millimetre would round the figure away. */
 const fineBelowMm = 0.1

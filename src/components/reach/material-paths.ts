@@ -1,3 +1,4 @@
+import { breakPath } from './break-path'
 import { farWallMm, onSheet, type SectionLayout } from './section-layout'
 import { type SectionScene, topFaceMm } from './section-scene'
 
@@ -5,15 +6,20 @@ import { type SectionScene, topFaceMm } from './section-scene'
 export interface MaterialPath {
   area: string
   edges: string
+  /** Where it goes on beyond the drawing. */
+  breaks: string[]
 }
 
 type Place = (uMm: number, hMm: number) => string
+type Upright = (uMm: number, fromMm: number, toMm: number) => string
 
 /** The part being cut, with its far wall where it has one. */
 export function materialPaths(scene: SectionScene, layout: SectionLayout): MaterialPath[] {
   const place = placer(layout)
   const wall = wallOf(scene, layout)
-  return wall.isThrough ? throughPaths(wall, place) : [blindPath(wall, place)]
+  const upright = (uMm: number, fromMm: number, toMm: number) =>
+    breakPath(onSheet(layout, uMm, fromMm), onSheet(layout, uMm, toMm))
+  return wall.isThrough ? throughPaths(wall, place, upright) : [blindPath(wall, place, upright)]
 }
 
 /** What stands on the part, each behind its own upright face. */
@@ -25,7 +31,8 @@ export function obstaclePaths({ at }: SectionScene, layout: SectionLayout): Mate
   return at.obstacles.map(({ setbackMm, riseMm }) => {
     const faceMm = topMm * at.tanDraft + setbackMm
     const edges = `M${place(faceMm, topMm)}L${place(faceMm, topMm + riseMm)}L${place(rightMm, topMm + riseMm)}`
-    return { edges, area: `${edges}L${place(rightMm, topMm)}Z` }
+    const breaks = [breakPath(onSheet(layout, rightMm, topMm), onSheet(layout, rightMm, topMm + riseMm))]
+    return { edges, area: `${edges}L${place(rightMm, topMm)}Z`, breaks }
   })
 }
 
@@ -99,7 +106,7 @@ function roundedFoot(arcMm: number, draftDeg: number, depthMm: number): FootShap
   return { inMm, uMm, hMm, arcMm, pointMm: 0 }
 }
 
-function blindPath(wall: Wall, place: Place): MaterialPath {
+function blindPath(wall: Wall, place: Place, upright: Upright): MaterialPath {
   const { depthMm, tanDraft, foot, farMm, leftMm, rightMm, bottomMm } = wall
   const arc = (sweep: 0 | 1) => {
     const px = Math.round(foot.arcMm * wall.pxPerMm * 100) / 100
@@ -118,14 +125,18 @@ function blindPath(wall: Wall, place: Place): MaterialPath {
           `L${place(farMm - Math.max(depthMm * tanDraft, foot.uMm), depthMm)}L${place(leftMm, depthMm)}`,
         ].join('')
   const edges = near + far
-  return { edges, area: `${edges}L${place(leftMm, bottomMm)}L${place(rightMm, bottomMm)}Z` }
+  return {
+    edges,
+    area: `${edges}L${place(leftMm, bottomMm)}L${place(rightMm, bottomMm)}Z`,
+    breaks: [upright(rightMm, depthMm, bottomMm), upright(leftMm, farMm === null ? 0 : depthMm, bottomMm)],
+  }
 }
 
-function throughPaths(wall: Wall, place: Place): MaterialPath[] {
+function throughPaths(wall: Wall, place: Place, upright: Upright): MaterialPath[] {
   const { depthMm, tanDraft, undersideMm, farMm, leftMm, rightMm } = wall
   const side = (outerMm: number, at: (hMm: number) => number): MaterialPath => {
     const edges = `M${place(outerMm, depthMm)}L${place(at(depthMm), depthMm)}L${place(at(undersideMm), undersideMm)}L${place(outerMm, undersideMm)}`
-    return { edges, area: `${edges}Z` }
+    return { edges, area: `${edges}Z`, breaks: [upright(outerMm, depthMm, undersideMm)] }
   }
   const near = side(rightMm, (hMm) => hMm * tanDraft)
   return farMm === null ? [near] : [near, side(leftMm, (hMm) => farMm - hMm * tanDraft)]

@@ -74,36 +74,38 @@ export function ReachPage({ query, date }: ReachPageProps) {
   const inputs = { rows, reading, errors, onChange: change }
 
   return (
-    <div className="grid flex-1 grid-cols-[minmax(0,1fr)] content-start gap-4 p-3 lg:grid-cols-[minmax(0,1fr)_26rem] lg:p-4 print:block print:p-0">
-      <div className="border-ink bg-sheet min-w-0 border">
+    <div className="grid flex-1 grid-cols-[minmax(0,1fr)] content-start gap-4 p-3 lg:grid-cols-[minmax(0,1fr)_26rem] lg:grid-rows-[auto_1fr] lg:p-4 print:block print:p-0">
+      <div className="border-ink bg-sheet min-w-0 self-start border">
         <h1 className="sr-only">Reach check</h1>
         <VerdictLine {...verdict} />
-        <div className="border-hairline flex items-center justify-between gap-2 border-b px-3 py-1.5 print:hidden">
-          <ViewSwitch view={view} onView={setView} isDisabled={scene?.heights.noseMm == null} />
-          <SheetActions />
+        <div className="relative">
+          <div className="border-hairline flex items-center justify-between gap-2 border-b px-3 py-1.5 sm:absolute sm:top-2 sm:right-2 sm:z-20 sm:border-0 sm:p-0 print:hidden">
+            <ViewSwitch view={view} onView={setView} isDisabled={scene?.heights.noseMm == null} />
+            <SheetActions />
+          </div>
+          {scene ? (
+            <SectionDrawing
+              scene={scene}
+              answer={answered?.answer ?? null}
+              verdict={verdict.sentence}
+              unit={unit}
+              stickOutStepMm={reachSettings.stickOutStepMm}
+              view={view}
+              highlighted={highlighted}
+              onStickOut={setStickOut}
+              onDepth={setFigure('feature', 'depthMm', 'length')}
+              onDraft={setFigure('feature', 'draftDeg', 'angle')}
+              onTilt={setFigure('feature', 'tiltDeg', 'angle')}
+            />
+          ) : (
+            <StartSheet
+              missing={compiled.missing}
+              isFresh={isFresh}
+              onExample={() => change({ type: 'replace', draft: workedExample(reading) })}
+            />
+          )}
         </div>
-        {scene ? (
-          <SectionDrawing
-            scene={scene}
-            answer={answered?.answer ?? null}
-            verdict={verdict.sentence}
-            unit={unit}
-            stickOutStepMm={reachSettings.stickOutStepMm}
-            view={view}
-            highlighted={highlighted}
-            onStickOut={setStickOut}
-            onDepth={setFigure('feature', 'depthMm', 'length')}
-            onDraft={setFigure('feature', 'draftDeg', 'angle')}
-            onTilt={setFigure('feature', 'tiltDeg', 'angle')}
-          />
-        ) : (
-          <StartSheet
-            missing={compiled.missing}
-            isFresh={isFresh}
-            onExample={() => change({ type: 'replace', draft: workedExample(reading) })}
-          />
-        )}
-        <TitleBlock date={date} scaleName={null} />
+        <TitleBlock date={date} />
         <StickOutStepper
           {...inputs}
           texts={draft.texts.check}
@@ -115,7 +117,7 @@ export function ReachPage({ query, date }: ReachPageProps) {
       </div>
       <aside
         aria-label="What is checked"
-        className="border-ink bg-sheet min-w-0 self-start border lg:col-start-2 lg:row-span-2 lg:row-start-1 print:hidden"
+        className="border-ink bg-sheet min-w-0 self-start border lg:sticky lg:top-16 lg:col-start-2 lg:row-span-2 lg:row-start-1 lg:max-h-[calc(100dvh-5rem)] lg:overflow-y-auto print:hidden"
       >
         <ReachInputsColumn
           {...inputs}
@@ -125,7 +127,7 @@ export function ReachPage({ query, date }: ReachPageProps) {
           settings={reachSettings}
         />
       </aside>
-      <div className="border-ink bg-sheet flex min-w-0 flex-col gap-5 border p-4 print:gap-2 print:border-t-0 print:p-2 print:text-xs">
+      <div className="border-ink bg-sheet flex min-w-0 flex-col gap-5 self-start border p-4 print:gap-2 print:border-t-0 print:p-2 print:text-xs">
         {answered ? (
           <div className="grid gap-x-8 gap-y-5 xl:grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)] print:grid-cols-[1.4fr_1fr] print:gap-x-4">
             <ReachFigures answer={answered.answer} request={answered.request} unit={unit} />

@@ -4,7 +4,7 @@ import { formatAngle } from '@/lib/format-angle'
 import { formatLength } from '@/lib/format-length'
 import { AngleDimension } from '../drawing/angle-dimension'
 import { DimensionLine } from '../drawing/dimension-line'
-import { dimensionSpacing } from '../drawing/drafting-style'
+import { dimensionSpacing, draftingTextWidth } from '../drawing/drafting-style'
 import { OpenDimension } from '../drawing/open-dimension'
 import { onSheet, type SectionLayout } from './section-layout'
 import { type SectionScene, topFaceMm } from './section-scene'
@@ -35,14 +35,6 @@ export const PartDimensions = memo(function PartDimensions({
   const floor = onSheet(layout, 0, footMm).y
   return (
     <g>
-      <DimensionLine
-        axis="vertical"
-        from={{ x, y: floor }}
-        to={{ x, y: onSheet(layout, 0, topFaceMm(at)).y }}
-        at={x + dimensionSpacing}
-        symbol="depth"
-        text={said(feature.depthMm)}
-      />
       {isReachSeen && reachTop !== null && reachMm !== null ? (
         <DimensionLine
           axis="vertical"
@@ -53,6 +45,14 @@ export const PartDimensions = memo(function PartDimensions({
           text={said(reachMm)}
         />
       ) : null}
+      <DimensionLine
+        axis="vertical"
+        from={{ x, y: floor }}
+        to={{ x, y: onSheet(layout, 0, topFaceMm(at)).y }}
+        at={x + dimensionSpacing}
+        symbol="depth"
+        text={said(feature.depthMm)}
+      />
       <Angles scene={scene} layout={layout} />
     </g>
   )
@@ -62,15 +62,18 @@ function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layou
   const { at } = scene
   if (at.kind === 'hole') return null
   const heightPx = topFaceMm(at) * layout.pxPerMm
+  const draftRadius = Math.max(44, heightPx * 0.74)
+  const tiltRadius = Math.max(90, (layout.cutZMm * 0.62 - layout.turn.zMm) * layout.pxPerMm)
   const turn = onSheet(layout, layout.turn.uMm, layout.turn.hMm)
   return (
     <g>
       {at.draftDeg > 0 ? (
         <AngleDimension
           vertex={onSheet(layout, 0, 0)}
-          radius={Math.max(44, heightPx * 0.62)}
+          radius={draftRadius}
           fromDeg={-90}
           toDeg={-90 + at.draftDeg}
+          labelDeg={besideDeg(-90 + at.draftDeg, draftRadius)}
           symbol="draft"
           text={formatAngle(at.draftDeg)}
         />
@@ -78,15 +81,25 @@ function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layou
       {at.tiltDeg > 0 ? (
         <AngleDimension
           vertex={turn}
-          radius={Math.max(90, (layout.cutZMm * 0.62 - layout.turn.zMm) * layout.pxPerMm)}
+          radius={tiltRadius}
           fromDeg={-90 - at.tiltDeg}
           toDeg={-90}
+          labelDeg={besideDeg(-90, tiltRadius)}
           symbol="tilt"
           text={formatAngle(at.tiltDeg)}
         />
       ) : null}
     </g>
   )
+}
+
+const labelGap = 16
+const textRoom = 26
+const uprightTextDeg = 15
+
+/** Past the end of an arc, clear of the tool that stands in its middle. */
+function besideDeg(toDeg: number, radius: number): number {
+  return toDeg + (labelGap / radius) * (180 / Math.PI)
 }
 
 /** The figures of the tool, along its own axis: stick-out and grip on one line, gauge length outside. */
@@ -97,40 +110,42 @@ export const ToolDimensions = memo(function ToolDimensions({
 }: Omit<SectionDimensionsProps, 'reachMm'>) {
   const { noseMm, overallMm, gaugeLineMm } = scene.heights
   const said = (mm: number) => formatLength(mm, unit, { withUnit: false })
+  // Figures are read from below or from the right: past a lean they are turned about to stay so.
+  const turn = layout.turn.tiltDeg > uprightTextDeg ? -1 : 1
   const edge = -layout.toolRadiusMm * layout.pxPerMm
   const at = edge - 24
-  const y = (zMm: number) => toolY(layout, zMm)
-  const cut = y(layout.cutZMm)
-  const dimension = (fromMm: number, toMm: number, line: number, symbol: string) =>
-    toMm <= layout.cutZMm ? (
-      <DimensionLine
-        axis="vertical"
-        from={{ x: fromMm === 0 ? -scene.cutter.radiusMm * layout.pxPerMm : edge, y: y(fromMm) }}
-        to={{ x: edge, y: y(toMm) }}
-        at={line}
-        symbol={symbol}
-        text={said(toMm - fromMm)}
-      />
+  const place = (zMm: number) => ({
+    x: turn * (zMm === 0 ? -scene.cutter.radiusMm * layout.pxPerMm : edge),
+    y: turn * toolY(layout, zMm),
+  })
+  const dimension = (fromMm: number, toMm: number, line: number, symbol: string) => {
+    const common = { from: place(fromMm), at: turn * line, symbol, text: said(toMm - fromMm) }
+    return toMm <= layout.cutZMm ? (
+      <DimensionLine {...common} axis="vertical" to={place(toMm)} overflow={turn > 0 ? 'end' : 'start'} />
     ) : (
-      <OpenDimension
-        from={{ x: fromMm === 0 ? -scene.cutter.radiusMm * layout.pxPerMm : edge, y: y(fromMm) }}
-        toY={cut}
-        at={line}
-        symbol={symbol}
-        text={said(toMm - fromMm)}
-      />
+      <OpenDimension {...common} toY={turn * toolY(layout, layout.cutZMm)} />
     )
+  }
+  const fits = (mm: number, words: string) => mm * layout.pxPerMm > draftingTextWidth(words) + textRoom
+  // One line carries both, end to end, where each figure stands between its own arrows.
+  const isOneLine =
+    noseMm !== null &&
+    fits(noseMm, `stick-out ${said(noseMm)}`) &&
+    fits(overallMm - noseMm, `grip ${said(overallMm - noseMm)}`)
+  const gripOffset = isOneLine ? 0 : dimensionSpacing
   return (
-    <g transform={toolTransform(layout)}>
+    <g transform={`${toolTransform(layout)}${turn < 0 ? ' rotate(180)' : ''}`}>
       {noseMm === null ? (
         dimension(0, overallMm, at, 'OAL')
       ) : (
         <>
           {dimension(0, noseMm, at, 'stick-out')}
-          {overallMm > noseMm ? dimension(noseMm, overallMm, at, 'grip') : null}
+          {overallMm > noseMm ? dimension(noseMm, overallMm, at - gripOffset, 'grip') : null}
         </>
       )}
-      {gaugeLineMm === null ? null : dimension(0, gaugeLineMm, at - dimensionSpacing, 'gauge length')}
+      {gaugeLineMm === null
+        ? null
+        : dimension(0, gaugeLineMm, at - gripOffset - dimensionSpacing, 'gauge length')}
     </g>
   )
 })

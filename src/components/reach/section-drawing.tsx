@@ -9,9 +9,15 @@ import { ScaleBar } from '../drawing/scale-bar'
 import { useElementWidth } from '../drawing/use-element-width'
 import { PartDimensions, ToolDimensions } from './section-dimensions'
 import { type SectionChanges, SectionHandles } from './section-handles'
-import { type SectionFrame, type SectionLayout, type SectionView, sectionLayout } from './section-layout'
+import {
+  isNarrow,
+  type SectionFrame,
+  type SectionLayout,
+  type SectionView,
+  sectionLayout,
+} from './section-layout'
 import { SectionCollision, SectionPart, SectionPatterns } from './section-part'
-import type { SectionScene } from './section-scene'
+import { type SectionScene, topFaceMm } from './section-scene'
 import { sectionSentence } from './section-sentence'
 import { SectionTool } from './section-tool'
 import { TouchMark } from './touch-mark'
@@ -30,9 +36,9 @@ export interface SectionDrawingProps extends SectionChanges {
 const firstWidth = 900
 
 function sheetHeight(width: number): number {
-  return width < 560
+  return isNarrow({ width })
     ? Math.round(Math.min(480, Math.max(400, width * 1.12)))
-    : Math.round(Math.min(760, Math.max(460, width * 0.7)))
+    : Math.round(Math.min(640, Math.max(460, width * 0.7)))
 }
 
 /** The section: cutter, chuck and part in true proportion, dimensioned, with the first touch and what can be dragged. */
@@ -80,6 +86,7 @@ function Touches({
     asked && asked.depthMm !== null && asked.part !== answer.limitedBy
       ? touchPoint(scene, asked.part, asked.depthMm)
       : null
+  const hasRoomBelow = (hMm: number) => (hMm - topFaceMm(scene.at)) * layout.pxPerMm > 44
   return (
     <g>
       {askedPoint && asked && asked.depthMm !== null ? (
@@ -88,14 +95,16 @@ function Touches({
           layout={layout}
           text={`${partNames[asked.part]} ${sentenceLength(asked.depthMm, unit)}`}
           tone="asked"
+          isBelow={hasRoomBelow(askedPoint.hMm)}
         />
       ) : null}
       {limit && answer.limitedBy !== null && answer.reachMm !== null ? (
         <TouchMark
           at={limit}
           layout={layout}
-          text={limitText(answer, answer.limitedBy, answer.reachMm, unit)}
+          text={limitText(answer, answer.limitedBy, answer.reachMm, unit, layout)}
           tone={answer.verdict === 'reaches' ? 'next' : 'collision'}
+          isBelow={hasRoomBelow(limit.hMm)}
         />
       ) : null}
     </g>
@@ -107,9 +116,11 @@ function limitText(
   limitedBy: NonNullable<ReachAnswer['limitedBy']>,
   reachMm: number,
   unit: LengthUnit,
+  layout: SectionLayout,
 ): string {
   if (limitedBy === 'floor') return 'collision: the far side is in the floor'
   const name = partNames[limitedBy]
   const at = sentenceLength(reachMm, unit)
-  return answer.verdict === 'reaches' ? `${name} touches next, ${at}` : `collision: ${name}, ${at}`
+  if (answer.verdict !== 'reaches') return `collision: ${name}, ${at}`
+  return isNarrow(layout.sheet) ? `${name}, ${at}` : `${name} touches next, ${at}`
 }

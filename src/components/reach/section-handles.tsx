@@ -120,7 +120,7 @@ function DraftHandle({
   onHold,
   draftDeg,
 }: SectionHandlesProps & { draftDeg: number }) {
-  const atMm = topFaceMm(scene.at) * 0.55
+  const atMm = topFaceMm(scene.at) * 0.45
   const draft = (draftDeg * Math.PI) / 180
   const leverHeight = Math.max(leverPx, atMm * layout.pxPerMm)
   return (

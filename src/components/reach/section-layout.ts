@@ -1,7 +1,6 @@
 import { strokesBetween } from '@/core/outline/stroke-chain'
 import { toPartFrame } from '@/core/reach/placement'
 import type { Point } from '../drawing/drafting-style'
-import { drawingScale } from '../drawing/drawing-scale'
 import { type SectionScene, topFaceMm } from './section-scene'
 
 /** `tip`: the cutter and the nose that holds it. `whole`: up to the spindle's face. */
@@ -15,7 +14,6 @@ export interface Sheet {
 /** Where the part's frame lies on the sheet, and how large. Held still while something is dragged. */
 export interface SectionFrame {
   pxPerMm: number
-  scaleName: string
   /** The foot of the wall on the sheet. */
   foot: Point
 }
@@ -34,9 +32,14 @@ export interface SectionLayout extends SectionFrame {
   toolRadiusMm: number
 }
 
-const wideMargins = { left: 96, right: 92, top: 40, bottom: 58 }
+const wideMargins = { left: 96, right: 92, top: 54, bottom: 58 }
 const narrowMargins = { left: 66, right: 70, top: 34, bottom: 46 }
-const narrowSheet = 560
+const narrowSheetWidth = 560
+
+/** A phone's width: figures stand closer and words are fewer. */
+export function isNarrow(sheet: Pick<Sheet, 'width'>): boolean {
+  return sheet.width < narrowSheetWidth
+}
 
 /** Material shown beyond the last edge, as a share of the height drawn. */
 const materialShare = 0.16
@@ -49,7 +52,7 @@ export function sectionLayout(
   sheet: Sheet,
   held: SectionFrame | null,
 ): SectionLayout {
-  const margins = sheet.width < narrowSheet ? narrowMargins : wideMargins
+  const margins = isNarrow(sheet) ? narrowMargins : wideMargins
   const cutZMm = cutHeightMm(scene, view)
   const extent = extentOf(scene, cutZMm)
   const frame = held ?? fittedFrame(extent, sheet, margins)
@@ -144,20 +147,29 @@ function turnOf({ at }: SectionScene): SectionLayout['turn'] {
   return { uMm: at.axisUMm, hMm: at.pivotMm, zMm: at.pivotMm, tiltDeg: at.tiltDeg }
 }
 
+const stepsPerTen = 20
+
+/**
+ * The largest px a millimetre of a series of preferred numbers (R 20 of ISO 3) that fits: a step of the stick-out
+ * seldom changes it, so the drawing rests while the tool moves.
+ */
+function preferredScale(most: number): number {
+  return 10 ** (Math.floor(Math.log10(most) * stepsPerTen) / stepsPerTen)
+}
+
 function fittedFrame(extent: Extent, sheet: Sheet, margins: typeof wideMargins): SectionFrame {
   const room = {
     width: sheet.width - margins.left - margins.right,
     height: sheet.height - margins.top - margins.bottom,
   }
   const size = { widthMm: extent.uMax - extent.uMin, heightMm: extent.hMax - extent.hMin }
-  const { pxPerMm, name } = drawingScale(size, room)
+  const pxPerMm = preferredScale(Math.min(room.width / size.widthMm, room.height / size.heightMm))
   const spare = {
     width: room.width - size.widthMm * pxPerMm,
     height: room.height - size.heightMm * pxPerMm,
   }
   return {
     pxPerMm,
-    scaleName: name,
     foot: {
       x: margins.left + spare.width / 2 - extent.uMin * pxPerMm,
       y: sheet.height - margins.bottom - spare.height / 2 + extent.hMin * pxPerMm,

@@ -1,7 +1,7 @@
 import { memo } from 'react'
 import { lineWidths } from '../drawing/drafting-style'
 import { HatchPattern } from '../drawing/hatch-pattern'
-import { materialPaths, obstaclePaths } from './material-paths'
+import { type MaterialPath, materialPaths, obstaclePaths } from './material-paths'
 import type { SectionLayout } from './section-layout'
 import type { SectionScene } from './section-scene'
 import { toolTransform } from './section-tool'
@@ -33,22 +33,28 @@ export function SectionPatterns({ layout }: Pick<SectionPartProps, 'layout'>) {
 export const SectionPart = memo(function SectionPart({ scene, layout }: SectionPartProps) {
   return (
     <g strokeLinejoin="round">
-      {obstaclePaths(scene, layout).map(({ area, edges }) => (
-        <g key={area}>
-          <path d={area} fill="var(--sheet)" />
-          <path d={area} fill="url(#reach-hatch-obstacle)" />
-          <path d={edges} fill="none" stroke="var(--ink)" strokeWidth={lineWidths.outline} />
-        </g>
+      {obstaclePaths(scene, layout).map((obstacle) => (
+        <Solid key={obstacle.area} solid={obstacle} hatch="reach-hatch-obstacle" />
       ))}
-      {materialPaths(scene, layout).map(({ area, edges }) => (
-        <g key={area}>
-          <path d={area} fill="url(#reach-hatch-part)" />
-          <path d={edges} fill="none" stroke="var(--ink)" strokeWidth={lineWidths.outline} />
-        </g>
+      {materialPaths(scene, layout).map((material) => (
+        <Solid key={material.area} solid={material} hatch="reach-hatch-part" />
       ))}
     </g>
   )
 })
+
+function Solid({ solid, hatch }: { solid: MaterialPath; hatch: string }) {
+  return (
+    <g fill="none" stroke="var(--ink)">
+      <path d={solid.area} fill="var(--sheet)" stroke="none" />
+      <path d={solid.area} fill={`url(#${hatch})`} stroke="none" />
+      <path d={solid.edges} strokeWidth={lineWidths.outline} />
+      {solid.breaks.map((d) => (
+        <path key={d} d={d} strokeWidth={lineWidths.thin} />
+      ))}
+    </g>
+  )
+}
 
 /** Where the tool, with the room it must keep, is inside the part. */
 export const SectionCollision = memo(function SectionCollision({ scene, layout }: SectionPartProps) {

@@ -2,9 +2,10 @@ import { memo } from 'react'
 import type { ToolPart } from '@/core/outline/types'
 import { ChainLine } from '../drawing/chain-line'
 import { hiddenDashes, lineWidths } from '../drawing/drafting-style'
+import { breakPath } from './break-path'
 import type { SectionLayout } from './section-layout'
 import type { SectionScene } from './section-scene'
-import { breakPath, envelopePaths, toolPaths } from './tool-paths'
+import { envelopePaths, toolPaths } from './tool-paths'
 
 export interface SectionToolProps {
   scene: SectionScene
@@ -144,7 +145,11 @@ function Break({ scene, layout }: Omit<SectionToolProps, 'highlighted'>) {
   return (
     <g fill="none">
       <path d={`M${-half} ${y}H${half}`} stroke="var(--sheet)" strokeWidth={lineWidths.outline * 2} />
-      <path d={breakPath(-half - 4, half + 4, y)} stroke="var(--ink)" strokeWidth={lineWidths.thin} />
+      <path
+        d={breakPath({ x: -half - 4, y }, { x: half + 4, y })}
+        stroke="var(--ink)"
+        strokeWidth={lineWidths.thin}
+      />
     </g>
   )
 }

@@ -6,11 +6,10 @@ import { useShop } from '../layout/shop-context'
 export interface TitleBlockProps {
   /** ISO 8601, the day the sheet was made. */
   date: string
-  scaleName: string | null
 }
 
 /** The foot of the sheet, as on any drawing: whose, when, by whom, at what scale, by which projection. */
-export function TitleBlock({ date, scaleName }: TitleBlockProps) {
+export function TitleBlock({ date }: TitleBlockProps) {
   const { shopName, actor, unit } = useShop()
   return (
     <dl className="border-ink hidden border-t text-sm sm:flex sm:flex-wrap print:flex">
@@ -20,11 +19,6 @@ export function TitleBlock({ date, scaleName }: TitleBlockProps) {
       <Cell name="Drawn for">{actor.name}</Cell>
       <Cell name="Date">{date}</Cell>
       <Cell name="Dimensions in">{unit}</Cell>
-      {scaleName ? (
-        <Cell name="Scale on screen" className="print:hidden">
-          {scaleName}
-        </Cell>
-      ) : null}
       <Cell name="Projection">
         <FirstAngle />
       </Cell>
@@ -32,21 +26,9 @@ export function TitleBlock({ date, scaleName }: TitleBlockProps) {
   )
 }
 
-function Cell({
-  name,
-  isWide,
-  className = '',
-  children,
-}: {
-  name: string
-  isWide?: boolean
-  className?: string
-  children: ReactNode
-}) {
+function Cell({ name, isWide, children }: { name: string; isWide?: boolean; children: ReactNode }) {
   return (
-    <div
-      className={`border-hairline border-l px-3 py-1 first:border-l-0 ${isWide ? 'flex-1' : ''} ${className}`}
-    >
+    <div className={`border-hairline border-l px-3 py-1 first:border-l-0 ${isWide ? 'flex-1' : ''}`}>
       <dt className="text-ink-soft text-xs">{name}</dt>
       <dd className="font-semibold">{children}</dd>
     </div>

@@ -72,14 +72,3 @@ export function envelopePaths(scene: SectionScene, layout: SectionLayout): ToolP
       return { part: part.part, d: `M${[...right, ...left].join('L')}Z` }
     })
 }
-
-/** The edge of a body that goes on beyond the drawing: a thin line drawn freehand. */
-export function breakPath(fromX: number, toX: number, y: number): string {
-  const steps = Math.max(2, Math.round((toX - fromX) / 22))
-  const step = (toX - fromX) / steps
-  const waves = Array.from({ length: steps }, (_, index) => {
-    const side = index % 2 === 0 ? -3 : 3
-    return `q${round(step / 2)} ${side} ${round(step)} 0`
-  })
-  return `M${round(fromX)} ${round(y)}${waves.join('')}`
-}

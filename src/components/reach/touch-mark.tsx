@@ -1,5 +1,5 @@
 import type { PartPoint } from '@/core/reach/placement'
-import { draftingFontSize, draftingTextWidth, lineWidths } from '../drawing/drafting-style'
+import { draftingFontSize, draftingTextWidth, lineWidths, type Point } from '../drawing/drafting-style'
 import { onSheet, type SectionLayout } from './section-layout'
 
 export interface TouchMarkProps {
@@ -7,32 +7,32 @@ export interface TouchMarkProps {
   layout: SectionLayout
   text: string
   tone: 'collision' | 'next' | 'asked'
+  /** Whether the words stand below the cross: above it the holder would be in the way. */
+  isBelow: boolean
 }
 
 const colours = { collision: 'var(--collision)', next: 'var(--ink)', asked: 'var(--accent)' } as const
 const arm = 7
 
 /** A cross where a part of the tool first touches, and a leader with its name and height in words. */
-export function TouchMark({ at, layout, text, tone }: TouchMarkProps) {
+export function TouchMark({ at, layout, text, tone, isBelow }: TouchMarkProps) {
   const point = onSheet(layout, at.uMm, at.hMm)
   const isSeen = point.y > 8 && point.y < layout.sheet.height && point.x > 0 && point.x < layout.sheet.width
   if (!isSeen) return null
-  const width = draftingTextWidth(text) + 8
-  const goesRight = point.x + 34 + width < layout.sheet.width - 6
-  const side = goesRight ? 1 : -1
-  const shoulder = { x: point.x + side * 26, y: Math.max(20, point.y - 26) }
-  const isWide = shoulder.x + side * width > 0
-  const end = isWide ? shoulder.x + side * width : 4
+  const shoulder = shoulderOf(point, draftingTextWidth(text) + 8, layout.sheet.width, isBelow)
   const colour = colours[tone]
   return (
     <g stroke={colour} fill="none" strokeLinecap="round">
-      <path strokeWidth={lineWidths.thin} d={`M${point.x} ${point.y}L${shoulder.x} ${shoulder.y}H${end}`} />
+      <path
+        strokeWidth={lineWidths.thin}
+        d={`M${point.x} ${point.y}L${shoulder.x} ${shoulder.y}H${shoulder.endX}`}
+      />
       <path
         strokeWidth={2.6}
         d={`M${point.x - arm} ${point.y - arm}l${2 * arm} ${2 * arm}M${point.x + arm} ${point.y - arm}l${-2 * arm} ${2 * arm}`}
       />
       <text
-        x={(shoulder.x + end) / 2}
+        x={(shoulder.x + shoulder.endX) / 2}
         y={shoulder.y - 5}
         textAnchor="middle"
         fontSize={draftingFontSize + 0.5}
@@ -46,4 +46,17 @@ export function TouchMark({ at, layout, text, tone }: TouchMarkProps) {
       </text>
     </g>
   )
+}
+
+const reachOut = 26
+const rim = 6
+
+/** To the right where the words fit there, else to the left, else as far right as the sheet goes. */
+function shoulderOf(point: Point, width: number, sheetWidth: number, isBelow: boolean) {
+  const y = isBelow ? point.y + reachOut + 4 : Math.max(20, point.y - reachOut)
+  const [right, left] = [point.x + reachOut, point.x - reachOut]
+  if (right + width <= sheetWidth - rim) return { x: right, endX: right + width, y }
+  if (left - width >= rim) return { x: left, endX: left - width, y }
+  const x = Math.max(rim, sheetWidth - rim - width)
+  return { x, endX: x + width, y }
 }
