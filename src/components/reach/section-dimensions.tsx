@@ -4,7 +4,7 @@ import { formatAngle } from '@/lib/format-angle'
 import { formatLength } from '@/lib/format-length'
 import { AngleDimension } from '../drawing/angle-dimension'
 import { DimensionLine } from '../drawing/dimension-line'
-import { dimensionSpacing, draftingTextWidth } from '../drawing/drafting-style'
+import { dimensionSpacing } from '../drawing/drafting-style'
 import { OpenDimension } from '../drawing/open-dimension'
 import { onSheet, type SectionLayout } from './section-layout'
 import { type SectionScene, topFaceMm } from './section-scene'
@@ -94,7 +94,7 @@ function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layou
 }
 
 const labelGap = 16
-const textRoom = 26
+const firstLine = 24
 const uprightTextDeg = 15
 
 /** Past the end of an arc, clear of the tool that stands in its middle. */
@@ -102,7 +102,7 @@ function besideDeg(toDeg: number, radius: number): number {
   return toDeg + (labelGap / radius) * (180 / Math.PI)
 }
 
-/** The figures of the tool, along its own axis: stick-out and grip on one line, gauge length outside. */
+/** The figures of the tool, along its own axis: stick-out beside the cutter, grip and gauge length outside the chuck. */
 export const ToolDimensions = memo(function ToolDimensions({
   scene,
   layout,
@@ -113,39 +113,34 @@ export const ToolDimensions = memo(function ToolDimensions({
   // Figures are read from below or from the right: past a lean they are turned about to stay so.
   const turn = layout.turn.tiltDeg > uprightTextDeg ? -1 : 1
   const edge = -layout.toolRadiusMm * layout.pxPerMm
-  const at = edge - 24
-  const place = (zMm: number) => ({
-    x: turn * (zMm === 0 ? -scene.cutter.radiusMm * layout.pxPerMm : edge),
-    y: turn * toolY(layout, zMm),
-  })
+  const cutterEdge = -Math.max(scene.cutter.radiusMm, scene.cutter.shankRadiusMm) * layout.pxPerMm
+  const outside = edge - firstLine
+  const place = (zMm: number, x: number) => ({ x: turn * x, y: turn * toolY(layout, zMm) })
   const dimension = (fromMm: number, toMm: number, line: number, symbol: string) => {
-    const common = { from: place(fromMm), at: turn * line, symbol, text: said(toMm - fromMm) }
+    const from = place(fromMm, fromMm === 0 ? cutterEdge : edge)
+    const common = { from, at: turn * line, symbol, text: said(toMm - fromMm) }
     return toMm <= layout.cutZMm ? (
-      <DimensionLine {...common} axis="vertical" to={place(toMm)} overflow={turn > 0 ? 'end' : 'start'} />
+      <DimensionLine
+        {...common}
+        axis="vertical"
+        to={place(toMm, toMm === noseMm ? line : edge)}
+        overflow={turn > 0 ? 'end' : 'start'}
+      />
     ) : (
       <OpenDimension {...common} toY={turn * toolY(layout, layout.cutZMm)} />
     )
   }
-  const fits = (mm: number, words: string) => mm * layout.pxPerMm > draftingTextWidth(words) + textRoom
-  // One line carries both, end to end, where each figure stands between its own arrows.
-  const isOneLine =
-    noseMm !== null &&
-    fits(noseMm, `stick-out ${said(noseMm)}`) &&
-    fits(overallMm - noseMm, `grip ${said(overallMm - noseMm)}`)
-  const gripOffset = isOneLine ? 0 : dimensionSpacing
   return (
     <g transform={`${toolTransform(layout)}${turn < 0 ? ' rotate(180)' : ''}`}>
       {noseMm === null ? (
-        dimension(0, overallMm, at, 'OAL')
+        dimension(0, overallMm, cutterEdge - firstLine, 'OAL')
       ) : (
         <>
-          {dimension(0, noseMm, at, 'stick-out')}
-          {overallMm > noseMm ? dimension(noseMm, overallMm, at - gripOffset, 'grip') : null}
+          {dimension(0, noseMm, cutterEdge - firstLine, 'stick-out')}
+          {overallMm > noseMm ? dimension(noseMm, overallMm, outside, 'grip') : null}
         </>
       )}
-      {gaugeLineMm === null
-        ? null
-        : dimension(0, gaugeLineMm, at - gripOffset - dimensionSpacing, 'gauge length')}
+      {gaugeLineMm === null ? null : dimension(0, gaugeLineMm, outside - dimensionSpacing, 'gauge length')}
     </g>
   )
 })

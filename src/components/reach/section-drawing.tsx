@@ -104,7 +104,7 @@ function Touches({
           layout={layout}
           text={limitText(answer, answer.limitedBy, answer.reachMm, unit, layout)}
           tone={answer.verdict === 'reaches' ? 'next' : 'collision'}
-          isBelow={hasRoomBelow(limit.hMm)}
+          isBelow={answer.limitedBy === 'floor' || hasRoomBelow(limit.hMm)}
         />
       ) : null}
     </g>

@@ -43,6 +43,10 @@ export function isNarrow(sheet: Pick<Sheet, 'width'>): boolean {
 
 /** Material shown beyond the last edge, as a share of the height drawn. */
 const materialShare = 0.16
+/** Floor shown below the lowest place of the tool. */
+const slabPx = 44
+/** Room for two dimension lines outside a leaning chuck, as a share of its radius. */
+const leaningRoom = 1.25
 const spindleStubShare = 0.04
 
 /** Where everything goes on a sheet of this size; `held` keeps the frame of before. */
@@ -62,7 +66,7 @@ export function sectionLayout(
     cutZMm,
     left: 12,
     right: sheet.width - margins.right,
-    bottom: Math.min(sheet.height - 10, frame.foot.y - Math.min(0, extent.hMin) * frame.pxPerMm + 44),
+    bottom: Math.min(sheet.height - 10, frame.foot.y - extent.toolLowMm * frame.pxPerMm + slabPx),
     turn: turnOf(scene),
     toolRadiusMm: extent.toolRadiusMm,
   }
@@ -99,12 +103,14 @@ interface Extent {
   uMax: number
   hMin: number
   hMax: number
+  /** How deep the tool itself goes. */
+  toolLowMm: number
   toolRadiusMm: number
 }
 
 function extentOf(scene: SectionScene, cutZMm: number): Extent {
   const { at, parts } = scene
-  const extent: Extent = { uMin: 0, uMax: 0, hMin: 0, hMax: 0, toolRadiusMm: 0 }
+  const extent: Extent = { uMin: 0, uMax: 0, hMin: 0, hMax: 0, toolLowMm: 0, toolRadiusMm: 0 }
   const take = ({ uMm, hMm }: { uMm: number; hMm: number }) => {
     extent.uMin = Math.min(extent.uMin, uMm)
     extent.uMax = Math.max(extent.uMax, uMm)
@@ -123,6 +129,10 @@ function extentOf(scene: SectionScene, cutZMm: number): Extent {
         take(toPartFrame(at, zMm, -radiusMm))
       }
   take(toPartFrame(at, cutZMm, 0))
+  extent.toolLowMm = extent.hMin
+  // Leaning, the gauge length is measured from below the floor.
+  if (at.kind === 'wall' && at.tiltDeg > 0 && scene.heights.noseMm !== null)
+    take(toPartFrame(at, 0, -extent.toolRadiusMm * leaningRoom))
   const topMm = topFaceMm(at)
   const edgeMm = at.kind === 'wall' ? topMm * at.tanDraft : 0
   const obstacles = at.kind === 'wall' ? at.obstacles : []
