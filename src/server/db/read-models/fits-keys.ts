@@ -23,23 +23,27 @@ const colletTakes = (shank: string) =>
 const boreTakes = (bore: string, shank: string) =>
   `abs(${bore} - ${shank}) <= ${fixedBoreToleranceMm} + ${roundingMm}`
 
-/** A collet in use of this series that takes this shank. */
-const someColletTakes = (series: string, shank: string) => `exists (
-  select from collets join items as collet_item on collet_item.id = collets.item_id
-  where collet_item.archived_at is null and ${plain('collets.series')} = ${plain(series)} and ${colletTakes(shank)})`
+/** The series of which some collet in use takes this shank. Asked once for all chucks, not once for each. */
+const seriesThatTake = (shank: string) => `(
+  select ${plain('collets.series')} from collets join items as collet_item on collet_item.id = collets.item_id
+  where collet_item.archived_at is null and ${colletTakes(shank)})`
+
+const shankBetween = 'cutters.shank_diameter_mm between ?::double precision and ?::double precision'
 
 interface Condition {
   sql: string
   values: (string | number)[]
 }
 
+type Conditions = Partial<Record<CatalogueKind, Condition>>
+
 /** Under what condition the items of each kind fit; a kind that is not named never does. */
-function conditionsFor(fitting: Fitting): Partial<Record<CatalogueKind, Condition>> {
+async function conditionsFor(db: Knex, fitting: Fitting): Promise<Conditions> {
   if ('shankMm' in fitting) {
     const { shankMm } = fitting
     const bored = (table: string): Condition => ({
       sql: `case ${table}.bore_kind when 'fixed' then ${boreTakes(`${table}.bore_diameter_mm`, '?::double precision')}
-        else ${someColletTakes(`${table}.bore_series`, '?::double precision')} end`,
+        else ${plain(`${table}.bore_series`)} in ${seriesThatTake('?::double precision')} end`,
       values: [shankMm, shankMm],
     })
     return {
@@ -56,17 +60,17 @@ function conditionsFor(fitting: Fitting): Partial<Record<CatalogueKind, Conditio
     })
     return {
       cutter: {
-        sql: `cutters.shank_diameter_mm between ?::double precision and ?::double precision`,
+        sql: shankBetween,
         values: [minimumMm - roundingMm, maximumMm + roundingMm],
       },
       holder: bored('holders'),
       extension: bored('extensions'),
     }
   }
-  return conditionsForBore(fitting.bore)
+  return conditionsForBore(db, fitting.bore)
 }
 
-function conditionsForBore(bore: Bore): Partial<Record<CatalogueKind, Condition>> {
+async function conditionsForBore(db: Knex, bore: Bore): Promise<Conditions> {
   if (bore.kind === 'fixed') {
     return {
       cutter: {
@@ -75,10 +79,35 @@ function conditionsForBore(bore: Bore): Partial<Record<CatalogueKind, Condition>
       },
     }
   }
+  const ranges = await readShankRanges(db, bore.series)
   return {
     collet: { sql: `${plain('collets.series')} = ${plain('?::text')}`, values: [bore.series] },
-    cutter: { sql: someColletTakes('?::text', 'cutters.shank_diameter_mm'), values: [bore.series] },
+    cutter: {
+      sql: ['false', ...ranges.map(() => shankBetween)].join(' or '),
+      values: ranges.flatMap(({ minimumMm, maximumMm }) => [minimumMm, maximumMm]),
+    },
   }
+}
+
+/** What the collets of a series take together: a full set is one range or a few, however many collets there are. */
+async function readShankRanges(
+  db: Knex,
+  series: string,
+): Promise<{ minimumMm: number; maximumMm: number }[]> {
+  const rows = await db('collets')
+    .join('items', 'items.id', 'collets.item_id')
+    .whereNull('items.archived_at')
+    .whereRaw(`${plain('collets.series')} = ${plain('?::text')}`, [series])
+    .orderBy('collets.minimum_mm')
+    .select('collets.minimum_mm', 'collets.maximum_mm')
+  const ranges: { minimumMm: number; maximumMm: number }[] = []
+  for (const row of rows) {
+    const [minimumMm, maximumMm] = [row.minimum_mm - roundingMm, row.maximum_mm + roundingMm]
+    const last = ranges.at(-1)
+    if (last && minimumMm <= last.maximumMm) last.maximumMm = Math.max(last.maximumMm, maximumMm)
+    else ranges.push({ minimumMm, maximumMm })
+  }
+  return ranges
 }
 
 const geometryTable: Record<CatalogueKind, string> = {
@@ -89,12 +118,12 @@ const geometryTable: Record<CatalogueKind, string> = {
 }
 
 /** One block of the ids of what fits, kind by kind and by code; archived items are left out. */
-export function readFitsKeys(
+export async function readFitsKeys(
   db: Knex,
   fitting: Fitting,
   query: PageQuery & { kind?: CatalogueKind[] | undefined },
 ): Promise<KeyPage> {
-  const conditions = Object.entries(conditionsFor(fitting)) as [CatalogueKind, Condition][]
+  const conditions = Object.entries(await conditionsFor(db, fitting)) as [CatalogueKind, Condition][]
   const matching = db('items')
     .whereNull('items.archived_at')
     .where((any) => {
