@@ -5,6 +5,7 @@ import { AppError } from '@/lib/app-error'
 import { type CatalogueTypes, geometryProblemsOf } from '@/schemas/catalogue'
 import type { Actor } from '../../auth/actor'
 import { db } from '../../db/connection'
+import { findLastChangerName } from '../../db/read-models/last-change'
 import { createAuditEntry } from '../../db/stores/audit-store'
 import { updateGeometry } from '../../db/stores/geometry-store'
 import { lockItem, restoreItem, updateItem as writeItem } from '../../db/stores/item-store'
@@ -30,7 +31,7 @@ export async function updateItem<Kind extends CatalogueKind>(
     inTransaction(db(), async (trx) => {
       await lockItem(trx, kind, id)
       const before = await readItem(trx, kind, id)
-      refuseStale(actor, kind, before, request.version)
+      await refuseStale(trx, actor, kind, before, request.version)
       const change = changedFields(before, request)
       refuseImpossible(kind, { ...before, ...change })
       const after = await applyChange(trx, kind, id, change)
@@ -49,15 +50,20 @@ export async function updateItem<Kind extends CatalogueKind>(
   )
 }
 
-function refuseStale<Kind extends CatalogueKind>(
+/** With the row as it is now and, where it is known, who made it so: the form shows both sides. */
+async function refuseStale<Kind extends CatalogueKind>(
+  trx: Knex,
   actor: Actor,
   kind: Kind,
   before: CatalogueTypes[Kind]['row'],
   version: number,
-): void {
+): Promise<void> {
   if (before.version === version) return
   throw new AppError('stale-version', `Someone changed this ${kindWords[kind].one} meanwhile.`, {
-    extra: { current: visibleItem<Kind>(actor, before) },
+    extra: {
+      current: visibleItem<Kind>(actor, before),
+      changedBy: await findLastChangerName(trx, before.id),
+    },
   })
 }
 
