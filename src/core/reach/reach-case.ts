@@ -1,4 +1,3 @@
-import { CoreInputError } from '@/core/core-input-error'
 import { notNegative, positive } from '@/core/outline/checked-number'
 import { type CutterDimensions, cutterDimensions } from '@/core/outline/cutter-dimensions'
 import { overlapToleranceMm } from '@/core/outline/types'
@@ -8,7 +7,13 @@ import { type LeastTouch, leastTouch } from './first-touches'
 import { cutsNothing } from './fit-messages'
 import { type Placement, placement } from './placement'
 import { type CheckedClamping, checkedClamping } from './stick-out-bounds'
-import type { Clearances, ReachLimit, ReachRequest, ReachSettings } from './types'
+import {
+  type Clearances,
+  defaultReachSettings,
+  type ReachLimit,
+  type ReachRequest,
+  type ReachSettings,
+} from './types'
 
 /** A request with everything checked and every outline ready. */
 export interface ReachCase {
@@ -140,20 +145,24 @@ export function isShort({ at }: ReachCase, tipDepthMm: number): boolean {
   return tipDepthMm < at.tipDepthMm - overlapToleranceMm
 }
 
+const settingsAboveZero: readonly (keyof ReachSettings)[] = [
+  'stickOutStepMm',
+  'fluteStiffnessRatio',
+  'carbideModulusGpa',
+  'steelModulusGpa',
+]
+
 /**
- * Settings a shop can get wrong; the edge checks them where they are entered.
+ * Refuses settings no answer can be worked out with; a shop's are checked where they are entered, too.
+ *
+ * Errors     CoreInputError `not-given`, `not-finite`, `not-positive`, `negative` at `settings.…`.
  *
  * @example
  * refuseBadSettings({ ...defaultReachSettings, stickOutStepMm: 0 }) // => throws not-positive
  */
 export function refuseBadSettings(settings: ReachSettings): void {
-  const named: [keyof ReachSettings, boolean][] = [
-    ['stickOutStepMm', settings.stickOutStepMm > 0],
-    ['fluteStiffnessRatio', settings.fluteStiffnessRatio > 0],
-    ['carbideModulusGpa', settings.carbideModulusGpa > 0],
-    ['steelModulusGpa', settings.steelModulusGpa > 0],
-  ]
-  for (const [name, isGood] of named)
-    if (!isGood)
-      throw new CoreInputError('not-positive', `settings.${name}`, 'The setting must be more than zero.')
+  for (const name of Object.keys(defaultReachSettings) as (keyof ReachSettings)[]) {
+    const refuse = settingsAboveZero.includes(name) ? positive : notNegative
+    refuse(settings[name], `settings.${name}`, 'The setting')
+  }
 }
