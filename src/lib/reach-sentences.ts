@@ -2,7 +2,7 @@ import type { ToolPart } from '@/core/outline/types'
 import type { ReachMessage, ReachMessageCode, ReachMessageValues } from '@/core/reach/message-codes'
 import type { Feature, ReachAnswer, ReachLimit, StickOutAnswer } from '@/core/reach/types'
 import { decimalText } from '@/core/units/decimal-text'
-import { type LengthUnit, mmPerInch } from '@/core/units/length-unit'
+import { type LengthUnit, lengthDecimals, mmPerInch } from '@/core/units/length-unit'
 import { formatAngle } from './format-angle'
 import { formatLength } from './format-length'
 
@@ -21,7 +21,9 @@ const fineBelowMm = 0.1
  * sentenceLength(38.1625, 'in') // => '1.502 in'
  * sentenceLength(0.025, 'mm') // => '0.025 mm'
  */
-export function sentenceLength(mm: number, unit: LengthUnit): string {
+export function sentenceLength(lengthMm: number, unit: LengthUnit): string {
+  // A difference of two lengths carries the arithmetic's own rounding: 3.175 less 3 is a hair below 0.175.
+  const mm = Number(lengthMm.toFixed(lengthDecimals))
   if (Math.abs(mm) < fineBelowMm) return formatLength(mm, unit)
   return unit === 'mm' ? `${decimalText(mm, 0, 2)} mm` : `${decimalText(mm / mmPerInch, 3, 3)} in`
 }
