@@ -1,12 +1,17 @@
-import type { Knex } from 'knex'
 import { AppError } from '@/lib/app-error'
 import type { Actor } from '../auth/actor'
-import { db } from '../db/connection'
+import { type Database, db } from '../db/connection'
 import { claimKey, findKeptAnswer, keepAnswer } from '../db/stores/idempotency-store'
 import { inTransaction } from '../db/transaction'
-import type { IdempotencyClaim } from '../http/route'
 
 const createdStatus = 201
+
+/** What makes a repeated call recognisable, as the route hands it over. */
+export interface RepeatableCall {
+  key: string
+  route: string
+  bodyHash: string
+}
 
 /**
  * Does the work of a call once, however often it is sent: the key is claimed first in the work's own transaction, so a
@@ -15,8 +20,8 @@ const createdStatus = 201
  */
 export async function onceInTransaction<Answer>(
   actor: Actor,
-  claim: IdempotencyClaim,
-  work: (trx: Knex.Transaction) => Promise<Answer>,
+  claim: RepeatableCall,
+  work: (trx: Database) => Promise<Answer>,
 ): Promise<Answer> {
   const call = { actorId: actor.id, route: claim.route, key: claim.key }
   return inTransaction(db(), async (trx) => {

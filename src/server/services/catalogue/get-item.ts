@@ -1,9 +1,8 @@
-import type { Knex } from 'knex'
 import type { CatalogueKind } from '@/core/stock/kinds'
 import { AppError } from '@/lib/app-error'
 import type { CatalogueTypes } from '@/schemas/catalogue'
 import type { Actor } from '../../auth/actor'
-import { db } from '../../db/connection'
+import { type Database, db } from '../../db/connection'
 import { readCatalogueRows } from '../../db/read-models/catalogue-rows'
 import { kindWords } from './kind-words'
 import { visibleItem } from './visible-item'
@@ -20,7 +19,7 @@ export async function getItem<Kind extends CatalogueKind>(
 
 /** The whole row, for services that change it. */
 export async function readItem<Kind extends CatalogueKind>(
-  database: Knex,
+  database: Database,
   kind: Kind,
   id: string,
   cribId: string | null = null,

@@ -1,10 +1,9 @@
 import { isDeepStrictEqual } from 'node:util'
-import type { Knex } from 'knex'
 import type { CatalogueKind } from '@/core/stock/kinds'
 import { AppError } from '@/lib/app-error'
 import { type CatalogueTypes, geometryProblemsOf } from '@/schemas/catalogue'
 import type { Actor } from '../../auth/actor'
-import { db } from '../../db/connection'
+import { type Database, db } from '../../db/connection'
 import { findLastChangerName } from '../../db/read-models/last-change'
 import { createAuditEntry } from '../../db/stores/audit-store'
 import { updateGeometry } from '../../db/stores/geometry-store'
@@ -52,7 +51,7 @@ export async function updateItem<Kind extends CatalogueKind>(
 
 /** With the row as it is now and, where it is known, who made it so: the form shows both sides. */
 async function refuseStale<Kind extends CatalogueKind>(
-  trx: Knex,
+  trx: Database,
   actor: Actor,
   kind: Kind,
   before: CatalogueTypes[Kind]['row'],
@@ -86,7 +85,7 @@ function refuseImpossible<Kind extends CatalogueKind>(kind: Kind, row: Fields): 
 }
 
 async function applyChange<Kind extends CatalogueKind>(
-  trx: Knex,
+  trx: Database,
   kind: Kind,
   id: string,
   change: Fields,

@@ -1,8 +1,7 @@
-import type { Knex } from 'knex'
 import { AppError } from '@/lib/app-error'
 import type { CreateLocationRequest, LocationResponse } from '@/schemas/location'
 import type { Actor } from '../../auth/actor'
-import { db } from '../../db/connection'
+import { type Database, db } from '../../db/connection'
 import { databaseErrorCode } from '../../db/database-errors'
 import { createAuditEntry } from '../../db/stores/audit-store'
 import { createCrib, getCribLocationId } from '../../db/stores/crib-store'
@@ -36,7 +35,7 @@ export async function createLocation(
   )
 }
 
-async function insertRequested(trx: Knex, request: CreateLocationRequest): Promise<string> {
+async function insertRequested(trx: Database, request: CreateLocationRequest): Promise<string> {
   const { code, name, kind } = request
   if (request.kind === 'crib') return getCribLocationId(trx, await insertCrib(trx, request))
   if (!('parentId' in request)) return insertLocation(trx, { kind, code, name, cribId: null, parentId: null })
@@ -52,7 +51,7 @@ function parentOf(parent: LocationRecord | null): LocationRecord {
 
 /** invalid_parameter_value: the database knows the world's time zones. */
 async function insertCrib(
-  trx: Knex,
+  trx: Database,
   crib: { code: string; name: string; timeZone: string },
 ): Promise<string> {
   try {

@@ -1,4 +1,3 @@
-import type { Knex } from 'knex'
 import { canPostMovement } from '@/core/policies/movement-policy'
 import {
   isNoMove,
@@ -10,13 +9,14 @@ import { AppError } from '@/lib/app-error'
 import type { CreateMovementRequest } from '@/schemas/movement'
 import type { FieldProblem } from '@/schemas/problem'
 import type { Actor } from '../../auth/actor'
+import type { Database } from '../../db/connection'
 import { findItem, type ItemInBrief } from '../../db/stores/item-store'
 import { findLocation, getScrapLocationId, type LocationRecord } from '../../db/stores/location-store'
 import { findItemOfPiece, type NewMovement } from '../../db/stores/movement-store'
 
 /** The movement a request asks for, or what is wrong with it, each fault beside its field. */
 export async function checkedMovement(
-  trx: Knex,
+  trx: Database,
   actor: Actor,
   request: CreateMovementRequest,
 ): Promise<NewMovement> {
@@ -69,7 +69,7 @@ function kindAllowedTo(actor: Actor, request: CreateMovementRequest): PostedMove
 
 /** What is broken goes to the one scrap of the books, which nobody needs to name. */
 async function findTarget(
-  trx: Knex,
+  trx: Database,
   kind: PostedMovementKind,
   locationId: string | null,
 ): Promise<LocationRecord | null> {
@@ -85,7 +85,7 @@ function itemFaults(item: ItemInBrief | null): FieldProblem[] {
 }
 
 async function pieceFaults(
-  trx: Knex,
+  trx: Database,
   item: ItemInBrief | null,
   request: CreateMovementRequest,
 ): Promise<FieldProblem[]> {

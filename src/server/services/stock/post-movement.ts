@@ -2,8 +2,7 @@ import type { CreateMovementRequest, MovementResponse } from '@/schemas/movement
 import type { Actor } from '../../auth/actor'
 import { readMovementRows } from '../../db/read-models/movement-rows'
 import { createMovement } from '../../db/stores/movement-store'
-import type { IdempotencyClaim } from '../../http/route'
-import { onceInTransaction } from '../idempotency'
+import { onceInTransaction, type RepeatableCall } from '../idempotency'
 import { checkedMovement } from './checked-movement'
 import { explainingMovementRefusals } from './explain-movement-refusal'
 import { visibleMovement } from './visible-movement'
@@ -12,7 +11,7 @@ import { visibleMovement } from './visible-movement'
 export async function postMovement(
   actor: Actor,
   request: CreateMovementRequest,
-  claim: IdempotencyClaim,
+  claim: RepeatableCall,
 ): Promise<MovementResponse> {
   return explainingMovementRefusals(() =>
     onceInTransaction(actor, claim, async (trx) => {

@@ -1,12 +1,11 @@
-import type { Knex } from 'knex'
 import { canReverseMovement } from '@/core/policies/movement-policy'
 import { AppError } from '@/lib/app-error'
 import type { MovementResponse } from '@/schemas/movement'
 import type { Actor } from '../../auth/actor'
+import type { Database } from '../../db/connection'
 import { readMovementRows } from '../../db/read-models/movement-rows'
 import { createMovement, findMovement, type MovementRecord } from '../../db/stores/movement-store'
-import type { IdempotencyClaim } from '../../http/route'
-import { onceInTransaction } from '../idempotency'
+import { onceInTransaction, type RepeatableCall } from '../idempotency'
 import { explainingMovementRefusals } from './explain-movement-refusal'
 import { visibleMovement } from './visible-movement'
 
@@ -14,7 +13,7 @@ import { visibleMovement } from './visible-movement'
 export async function reverseMovement(
   actor: Actor,
   movementId: string,
-  claim: IdempotencyClaim,
+  claim: RepeatableCall,
 ): Promise<MovementResponse> {
   return explainingMovementRefusals(() =>
     onceInTransaction(actor, claim, async (trx) => {
@@ -38,7 +37,7 @@ export async function reverseMovement(
   )
 }
 
-async function reversibleMovement(trx: Knex, actor: Actor, id: string): Promise<MovementRecord> {
+async function reversibleMovement(trx: Database, actor: Actor, id: string): Promise<MovementRecord> {
   const movement = await findMovement(trx, id)
   const [row] = await readMovementRows(trx, [id])
   if (!movement || !row) throw new AppError('not-found', 'There is no such movement.')
