@@ -248,24 +248,24 @@ const geometryTables = [
 
 /**
  * Rows that a statement leaves as they were raise nothing, and neither does geometry written in the transaction that
- * makes the item: nobody has seen that version yet. A function's plan is kept for the whole connection, whether it was
- * made for one row or for a hundred thousand, so only plans that serve both are allowed: lookups by index.
+ * makes the item: nobody has seen that version yet. A connection keeps a function's plan, whether it was made for one
+ * row or for a hundred thousand, so the items are looked up from a list by their index, which serves both.
  */
 const geometryVersions = `
   CREATE FUNCTION raise_item_versions() RETURNS trigger LANGUAGE plpgsql
-  SET enable_hashjoin = off SET enable_mergejoin = off SET enable_seqscan = off SET jit = off AS $$
+  SET enable_seqscan = off SET jit = off AS $$
+  DECLARE
+    changed bigint[];
   BEGIN
     IF TG_OP = 'INSERT' THEN
-      UPDATE items SET version = version + 1
-        WHERE id IN (SELECT item_id FROM new_rows) AND created_at <> transaction_timestamp();
+      changed := ARRAY(SELECT DISTINCT item_id FROM new_rows);
     ELSIF TG_OP = 'DELETE' THEN
-      UPDATE items SET version = version + 1
-        WHERE id IN (SELECT item_id FROM old_rows) AND created_at <> transaction_timestamp();
+      changed := ARRAY(SELECT DISTINCT item_id FROM old_rows);
     ELSE
-      UPDATE items SET version = version + 1
-        WHERE id IN (SELECT item_id FROM (SELECT * FROM new_rows EXCEPT SELECT * FROM old_rows) AS changed)
-          AND created_at <> transaction_timestamp();
+      changed := ARRAY(
+        SELECT DISTINCT item_id FROM (SELECT * FROM new_rows EXCEPT SELECT * FROM old_rows) AS changed_rows);
     END IF;
+    UPDATE items SET version = version + 1 WHERE id = ANY (changed) AND created_at <> transaction_timestamp();
     RETURN NULL;
   END $$;
   ${geometryTables

@@ -75,23 +75,20 @@ export async function up(knex: Knex): Promise<void> {
 
     -- Its plans are kept for the whole connection, so only those are allowed that serve one row and many.
     CREATE FUNCTION keep_search_words() RETURNS trigger LANGUAGE plpgsql
-    SET enable_hashjoin = off SET enable_mergejoin = off SET enable_seqscan = off SET jit = off AS $$
+    SET enable_seqscan = off SET enable_hashjoin = off SET enable_mergejoin = off SET jit = off AS $$
+    DECLARE
+      words text[];
     BEGIN
       IF TG_OP = 'INSERT' THEN
-        INSERT INTO search_words (word)
-          SELECT word FROM (SELECT DISTINCT unnest(search_words) AS word FROM new_rows) AS fresh
-          WHERE NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = fresh.word)
-          ORDER BY word
-          ON CONFLICT DO NOTHING;
+        words := ARRAY(SELECT DISTINCT unnest(search_words) FROM new_rows);
       ELSE
-        INSERT INTO search_words (word)
-          SELECT word FROM (
-            SELECT unnest(search_words) AS word FROM new_rows EXCEPT SELECT unnest(search_words) FROM old_rows
-          ) AS fresh
-          WHERE NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = fresh.word)
-          ORDER BY word
-          ON CONFLICT DO NOTHING;
+        words := ARRAY(SELECT unnest(search_words) FROM new_rows EXCEPT SELECT unnest(search_words) FROM old_rows);
       END IF;
+      INSERT INTO search_words (word)
+        SELECT fresh.word FROM unnest(words) AS fresh (word)
+        WHERE NOT EXISTS (SELECT FROM search_words AS known WHERE known.word = fresh.word)
+        ORDER BY fresh.word
+        ON CONFLICT DO NOTHING;
       RETURN NULL;
     END $$;
     CREATE TRIGGER items_words_added AFTER INSERT ON items REFERENCING NEW TABLE AS new_rows

@@ -33,11 +33,11 @@ const notNegative = (column: string) =>
 const conditions = `('new', 'used', 'reground', 'worn')`
 
 /**
- * A function's plans are kept for the whole connection, whether they were made for one movement or for a hundred
- * thousand, so only such are allowed as serve both: lookups by index.
+ * A connection keeps a function's plans, whether they were made for one movement or for a hundred thousand, and the
+ * planner may think a table empty that no longer is. So the posted rows always lead and all else is looked up by key:
+ * LATERAL with OFFSET 0 is not turned round, and without sequential scans the lookup goes by the index.
  */
-const steadyPlans = `
-  SET enable_hashjoin = off SET enable_mergejoin = off SET enable_seqscan = off SET jit = off`
+const steadyPlans = `SET enable_seqscan = off SET enable_hashjoin = off SET enable_mergejoin = off SET jit = off`
 
 const pieces = `
   CREATE TABLE pieces (
@@ -161,8 +161,8 @@ const checkMovements = `
   BEGIN
     SELECT posted.kind, source.kind AS from_kind, target.kind AS to_kind INTO broken
       FROM new_rows AS posted
-      JOIN locations AS source ON source.id = posted.from_location_id
-      JOIN locations AS target ON target.id = posted.to_location_id
+      CROSS JOIN LATERAL (SELECT kind, crib_id FROM locations WHERE id = posted.from_location_id OFFSET 0) AS source
+      CROSS JOIN LATERAL (SELECT kind, crib_id FROM locations WHERE id = posted.to_location_id OFFSET 0) AS target
       WHERE NOT movement_runs_between(posted.kind, source.kind, target.kind, source.crib_id, target.crib_id) LIMIT 1;
     IF FOUND THEN
       RAISE EXCEPTION 'no % runs from this % to this %', broken.kind, broken.from_kind, broken.to_kind USING
@@ -170,32 +170,35 @@ const checkMovements = `
     END IF;
 
     SELECT posted.reverses_id INTO broken
-      FROM new_rows AS posted JOIN movements AS reversed ON reversed.id = posted.reverses_id
-      WHERE reversed.kind = 'reversal'
+      FROM new_rows AS posted
+      CROSS JOIN LATERAL (SELECT * FROM movements WHERE id = posted.reverses_id OFFSET 0) AS reversed
+      WHERE posted.reverses_id IS NOT NULL AND (
+        reversed.kind = 'reversal'
         OR (posted.item_id, posted.quantity, posted.from_location_id, posted.from_condition,
             posted.to_location_id, posted.to_condition)
           <> (reversed.item_id, reversed.quantity, reversed.to_location_id, reversed.to_condition,
             reversed.from_location_id, reversed.from_condition)
-        OR posted.piece_id IS DISTINCT FROM reversed.piece_id LIMIT 1;
+        OR posted.piece_id IS DISTINCT FROM reversed.piece_id) LIMIT 1;
     IF FOUND THEN
       RAISE EXCEPTION 'this does not reverse movement %', broken.reverses_id USING
         ERRCODE = 'LL011', TABLE = 'movements', CONSTRAINT = 'movements_reversal_mirrors';
     END IF;
 
-    SELECT items.code, items.is_tracked_by_piece INTO broken
-      FROM new_rows AS posted JOIN items ON items.id = posted.item_id
-      WHERE items.is_tracked_by_piece <> (posted.piece_id IS NOT NULL) LIMIT 1;
+    SELECT item.code, item.is_tracked_by_piece INTO broken
+      FROM new_rows AS posted
+      CROSS JOIN LATERAL (SELECT * FROM items WHERE id = posted.item_id OFFSET 0) AS item
+      WHERE item.is_tracked_by_piece <> (posted.piece_id IS NOT NULL) LIMIT 1;
     IF FOUND THEN
       RAISE EXCEPTION '% is % piece by piece', broken.code,
         CASE WHEN broken.is_tracked_by_piece THEN 'tracked' ELSE 'not tracked' END USING
         ERRCODE = 'LL012', TABLE = 'movements', CONSTRAINT = 'movements_piece_where_tracked';
     END IF;
 
-    SELECT CASE WHEN items.archived_at IS NULL THEN target.code ELSE items.code END AS code INTO broken
+    SELECT CASE WHEN item.archived_at IS NULL THEN target.code ELSE item.code END AS code INTO broken
       FROM new_rows AS posted
-      JOIN items ON items.id = posted.item_id
-      JOIN locations AS target ON target.id = posted.to_location_id
-      WHERE items.archived_at IS NOT NULL OR target.archived_at IS NOT NULL LIMIT 1;
+      CROSS JOIN LATERAL (SELECT code, archived_at FROM items WHERE id = posted.item_id OFFSET 0) AS item
+      CROSS JOIN LATERAL (SELECT code, archived_at FROM locations WHERE id = posted.to_location_id OFFSET 0) AS target
+      WHERE item.archived_at IS NOT NULL OR target.archived_at IS NOT NULL LIMIT 1;
     IF FOUND THEN
       RAISE EXCEPTION '% is archived', broken.code USING
         ERRCODE = 'LL013', TABLE = 'movements', CONSTRAINT = 'movements_of_what_is_in_use';
@@ -207,11 +210,24 @@ const checkMovements = `
     FOR EACH STATEMENT EXECUTE FUNCTION check_movements();
 `
 
+/** Both ends of the posted movements, each with what it gains, summed by balance. */
+const movedByBalance = `
+        SELECT item_id, location_id, condition, sum(quantity)::integer AS quantity FROM (
+          SELECT item_id, from_location_id AS location_id, from_condition AS condition, -quantity AS quantity FROM new_rows
+          UNION ALL
+          SELECT item_id, to_location_id, to_condition, quantity FROM new_rows
+        ) AS an_end GROUP BY item_id, location_id, condition`
+
+/** The same with the place of each. */
+const movedWithPlace = `(${movedByBalance}
+      ) AS moved
+      CROSS JOIN LATERAL (SELECT kind, crib_id, is_outside FROM locations WHERE id = moved.location_id OFFSET 0) AS place`
+
 /**
  * Locks are taken in one order, by whoever posts: levels, then balances, then pieces, each by key. An upsert whose
- * WHERE is false inserts what is missing and locks what is there, in the order it meets them, and changes nothing.
- * (A plain upsert of the difference would not do: its proposed row, below zero, breaks the CHECK before it meets the
- * row that is there.)
+ * WHERE is false inserts what is missing and locks what is there, in the order it meets them, and changes nothing; a
+ * second one then writes what the locked rows come to. (One upsert of the difference would not do: its proposed row,
+ * below zero, breaks the CHECK before it meets the row that is there.)
  * LL014 less than nothing would be left, with what is held as JSON in DETAIL; LL015 the piece is not where the
  * movement takes it from.
  */
@@ -219,69 +235,71 @@ const postMovements = `
   CREATE FUNCTION post_movements() RETURNS trigger LANGUAGE plpgsql ${steadyPlans} AS $$
   DECLARE
     broken record;
+    moved_piece record;
   BEGIN
     IF NOT EXISTS (SELECT FROM new_rows) THEN
       RETURN NULL;
     END IF;
 
     INSERT INTO stock_levels AS level (item_id, crib_id)
-      SELECT DISTINCT posted.item_id, place.crib_id
-      FROM new_rows AS posted JOIN locations AS place ON place.id IN (posted.from_location_id, posted.to_location_id)
+      SELECT DISTINCT moved.item_id, place.crib_id
+      FROM ${movedWithPlace}
       WHERE place.kind = 'bin'
       ORDER BY 1, 2
       ON CONFLICT (item_id, crib_id) DO UPDATE SET on_hand = level.on_hand WHERE false;
 
     INSERT INTO balances AS balance (item_id, location_id, condition, is_outside, quantity)
-      SELECT DISTINCT an_end.item_id, an_end.location_id, an_end.condition, place.is_outside, 0
-      FROM (
-        SELECT item_id, from_location_id AS location_id, from_condition AS condition FROM new_rows
-        UNION ALL SELECT item_id, to_location_id, to_condition FROM new_rows
-      ) AS an_end JOIN locations AS place ON place.id = an_end.location_id
+      SELECT moved.item_id, moved.location_id, moved.condition, place.is_outside, 0
+      FROM ${movedWithPlace}
       ORDER BY 1, 2, 3
       ON CONFLICT (item_id, location_id, condition) DO UPDATE SET quantity = balance.quantity WHERE false;
 
-    SELECT balance.item_id, balance.location_id, balance.condition, balance.quantity, moved.quantity AS moved INTO broken
-      FROM (
-        SELECT item_id, location_id, condition, sum(quantity) AS quantity FROM (
-          SELECT item_id, from_location_id AS location_id, from_condition AS condition, -quantity AS quantity FROM new_rows
-          UNION ALL SELECT item_id, to_location_id, to_condition, quantity FROM new_rows
-        ) AS an_end GROUP BY 1, 2, 3
-      ) AS moved JOIN balances AS balance USING (item_id, location_id, condition)
-      WHERE NOT balance.is_outside AND balance.quantity + moved.quantity < 0
+    SELECT moved.item_id, moved.location_id, moved.condition, held.quantity AS held, -moved.quantity AS wanted INTO broken
+      FROM (${movedByBalance}
+      ) AS moved
+      CROSS JOIN LATERAL (
+        SELECT quantity, is_outside FROM balances
+        WHERE (item_id, location_id, condition) = (moved.item_id, moved.location_id, moved.condition) OFFSET 0
+      ) AS held
+      WHERE NOT held.is_outside AND held.quantity + moved.quantity < 0
       ORDER BY 1, 2, 3 LIMIT 1;
     IF FOUND THEN
-      RAISE EXCEPTION 'only % there, % wanted', broken.quantity, -broken.moved USING
+      RAISE EXCEPTION 'only % there, % wanted', broken.held, broken.wanted USING
         ERRCODE = 'LL014', TABLE = 'balances', CONSTRAINT = 'balances_not_below_zero',
         DETAIL = json_build_object('itemId', broken.item_id::text, 'locationId', broken.location_id::text,
-          'condition', broken.condition, 'held', broken.quantity, 'wanted', -broken.moved);
+          'condition', broken.condition, 'held', broken.held, 'wanted', broken.wanted);
     END IF;
 
-    UPDATE balances AS balance SET quantity = balance.quantity + moved.quantity
-      FROM (
-        SELECT item_id, location_id, condition, sum(quantity) AS quantity FROM (
-          SELECT item_id, from_location_id AS location_id, from_condition AS condition, -quantity AS quantity FROM new_rows
-          UNION ALL SELECT item_id, to_location_id, to_condition, quantity FROM new_rows
-        ) AS an_end GROUP BY 1, 2, 3 HAVING sum(quantity) <> 0
+    INSERT INTO balances AS balance (item_id, location_id, condition, is_outside, quantity)
+      SELECT moved.item_id, moved.location_id, moved.condition, held.is_outside, held.quantity + moved.quantity
+      FROM (${movedByBalance}
       ) AS moved
-      WHERE (balance.item_id, balance.location_id, balance.condition)
-        = (moved.item_id, moved.location_id, moved.condition);
+      CROSS JOIN LATERAL (
+        SELECT quantity, is_outside FROM balances
+        WHERE (item_id, location_id, condition) = (moved.item_id, moved.location_id, moved.condition) OFFSET 0
+      ) AS held
+      WHERE moved.quantity <> 0
+      ON CONFLICT (item_id, location_id, condition) DO UPDATE SET quantity = excluded.quantity;
 
-    UPDATE stock_levels AS level SET on_hand = level.on_hand + moved.quantity
+    INSERT INTO stock_levels AS level (item_id, crib_id, on_hand)
+      SELECT gained.item_id, gained.crib_id, held.on_hand + gained.quantity
       FROM (
-        SELECT an_end.item_id, place.crib_id, sum(an_end.quantity) AS quantity FROM (
-          SELECT item_id, from_location_id AS location_id, from_condition AS condition, -quantity AS quantity FROM new_rows
-          UNION ALL SELECT item_id, to_location_id, to_condition, quantity FROM new_rows
-        ) AS an_end JOIN locations AS place ON place.id = an_end.location_id
-        WHERE place.kind = 'bin' AND an_end.condition <> 'worn'
-        GROUP BY 1, 2 HAVING sum(an_end.quantity) <> 0
-      ) AS moved
-      WHERE (level.item_id, level.crib_id) = (moved.item_id, moved.crib_id);
+        SELECT moved.item_id, place.crib_id, sum(moved.quantity)::integer AS quantity
+        FROM ${movedWithPlace}
+        WHERE place.kind = 'bin' AND moved.condition <> 'worn'
+        GROUP BY moved.item_id, place.crib_id
+      ) AS gained
+      CROSS JOIN LATERAL (
+        SELECT on_hand FROM stock_levels WHERE (item_id, crib_id) = (gained.item_id, gained.crib_id) OFFSET 0
+      ) AS held
+      WHERE gained.quantity <> 0
+      ON CONFLICT (item_id, crib_id) DO UPDATE SET on_hand = excluded.on_hand;
 
     IF NOT EXISTS (SELECT FROM new_rows WHERE piece_id IS NOT NULL) THEN
       RETURN NULL;
     END IF;
 
-    PERFORM FROM pieces WHERE id IN (SELECT piece_id FROM new_rows) ORDER BY id FOR UPDATE;
+    PERFORM FROM pieces WHERE id = ANY (ARRAY(SELECT piece_id FROM new_rows)) ORDER BY id FOR UPDATE;
 
     -- A piece without a place has not come in yet: it comes from outside. The movements of one statement follow each
     -- other by id.
@@ -294,8 +312,8 @@ const postMovements = `
         FROM new_rows WHERE piece_id IS NOT NULL
         WINDOW by_piece AS (PARTITION BY piece_id ORDER BY id)
       ) AS posted
-      JOIN pieces AS piece ON piece.id = posted.piece_id
-      JOIN locations AS source ON source.id = posted.from_location_id
+      CROSS JOIN LATERAL (SELECT tag, location_id, condition FROM pieces WHERE id = posted.piece_id OFFSET 0) AS piece
+      CROSS JOIN LATERAL (SELECT is_outside FROM locations WHERE id = posted.from_location_id OFFSET 0) AS source
       WHERE CASE
         WHEN posted.step > 1 THEN
           (posted.last_location_id, posted.last_condition) <> (posted.from_location_id, posted.from_condition)
@@ -307,12 +325,13 @@ const postMovements = `
         ERRCODE = 'LL015', TABLE = 'pieces', CONSTRAINT = 'pieces_move_from_where_they_are';
     END IF;
 
-    UPDATE pieces AS piece SET location_id = posted.to_location_id, condition = posted.to_condition
-      FROM (
-        SELECT DISTINCT ON (piece_id) piece_id, to_location_id, to_condition
-        FROM new_rows WHERE piece_id IS NOT NULL ORDER BY piece_id, id DESC
-      ) AS posted
-      WHERE piece.id = posted.piece_id;
+    FOR moved_piece IN
+      SELECT DISTINCT ON (piece_id) piece_id, to_location_id, to_condition
+      FROM new_rows WHERE piece_id IS NOT NULL ORDER BY piece_id, id DESC
+    LOOP
+      UPDATE pieces SET location_id = moved_piece.to_location_id, condition = moved_piece.to_condition
+        WHERE id = moved_piece.piece_id;
+    END LOOP;
     RETURN NULL;
   END $$;
   CREATE TRIGGER movements_posted AFTER INSERT ON movements REFERENCING NEW TABLE AS new_rows

@@ -70,9 +70,16 @@ const step: fc.Arbitrary<Step> = fc.record({
 const commands: fc.Arbitrary<Command[]> = fc.array(
   fc.oneof(
     { weight: 5, arbitrary: fc.record({ post: fc.array(step, { minLength: 1, maxLength: 5 }) }) },
-    { weight: 1, arbitrary: fc.record({ reverse: fc.nat(100) }) },
+    { weight: 2, arbitrary: fc.record({ reverse: fc.nat(8) }) },
   ),
   { minLength: 5, maxLength: 25 },
+)
+
+/** Something of everything to begin with; else most of what follows would find nothing there. */
+const openingStock: Step[] = [0, 1].flatMap((item) =>
+  conditions.flatMap((kept) =>
+    [0, 1].map((way) => ({ way, item, quantity: 4, fromCondition: kept, toCondition: kept })),
+  ),
 )
 
 const counts = { posted: 0, short: 0, reversed: 0, refused: 0 }
@@ -179,6 +186,7 @@ test('it keeps the same books as a naive ledger, whatever is posted and reversed
         await createItem(trx, { code: `M-${serial}-2` }),
       ]
       const run = new Run(trx, items)
+      await run.obey({ post: openingStock })
       for (const command of sequence) await run.obey(command)
       await run.compare()
       expect((await ledgerFaults(trx)).faults).toEqual([])
@@ -190,7 +198,8 @@ test('it keeps the same books as a naive ledger, whatever is posted and reversed
   for (const [what, count] of Object.entries(counts)) expect(count, what).toBeGreaterThan(5)
 })
 
-test('it takes twenty thousand movements in one statement', async () => {
+test('it takes twenty thousand movements in one statement, into tables that the planner takes for empty', async () => {
+  await database.db.raw('vacuum analyze')
   const itemId = await createItem(database.db, { code: 'MANY' })
   await post(database.db, books, {
     kind: 'receipt',
