@@ -19,7 +19,7 @@ export interface SolidRegion {
 }
 
 /** Stands in for a face without end. */
-export const endlessMm = 5000
+const endlessMm = 5000
 
 const degree = Math.PI / 180
 const isHoleTool = (cutter: CutterGeometry) => ['drill', 'reamer', 'tap'].includes(cutter.form)
@@ -28,7 +28,7 @@ export function lengthOfCutMm(cutter: CutterGeometry): number {
   return cutter.lengthOfCutMm ?? cutter.fluteLengthMm ?? 0
 }
 
-export function fluteLengthMm(cutter: CutterGeometry): number {
+function fluteLengthMm(cutter: CutterGeometry): number {
   if (cutter.lengthOfCutMm != null && cutter.fluteLengthMm != null) return cutter.fluteLengthMm
   const hasNeck = cutter.neckDiameterMm != null && (cutter.reachLengthMm ?? 0) > lengthOfCutMm(cutter)
   const runOutMm = hasNeck ? 0 : 0.5 * cutter.cuttingDiameterMm
@@ -59,12 +59,12 @@ function neckEndRadiusMm(cutter: CutterGeometry): number {
   return (cutter.neckDiameterMm ?? 0) / 2 + lengthMm * Math.tan((cutter.neckTaperHalfAngleDeg ?? 0) * degree)
 }
 
-export function hasNeck(cutter: CutterGeometry): boolean {
+function hasNeck(cutter: CutterGeometry): boolean {
   return cutter.neckDiameterMm != null && (cutter.reachLengthMm ?? 0) > fluteLengthMm(cutter)
 }
 
 /** Where full shank begins. */
-export function shankFromMm(cutter: CutterGeometry): number {
+function shankFromMm(cutter: CutterGeometry): number {
   if (!hasNeck(cutter)) return fluteLengthMm(cutter)
   const riseMm = Math.max(0, cutter.shankDiameterMm / 2 - neckEndRadiusMm(cutter))
   const angleDeg = cutter.neckTransitionAngleDeg ?? 45
@@ -195,10 +195,6 @@ export function clampingRange({ cutter, holder, extension, collet }: ReachReques
     fromMm: Math.max(cutter.overallLengthMm - (owner.boreDepthMm ?? 0), fullShankMm),
     toMm: cutter.overallLengthMm - gripMm - (owner.gripStartMm ?? 0),
   }
-}
-
-export function isCircling({ feature, cutter }: ReachRequest): boolean {
-  return feature.kind === 'hole' && !isHoleTool(cutter)
 }
 
 export function drillsHole({ feature, cutter }: ReachRequest): boolean {

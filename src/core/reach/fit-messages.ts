@@ -93,11 +93,8 @@ function wallFormMessages(cutter: CutterDimensions, at: WallPlacement): ReachMes
  * Whether the cutter leans more than the wall does as it sees it, so that it can't lie along it.
  *
  * Tolerance  1e-9 degrees.
- *
- * @example
- * isTaperTooSteep(cutterDimensions(squareCutter), placementOf({ kind: 'wall', depthMm: 5 }, squareCutter)) // => false
  */
-export function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): boolean {
+function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): boolean {
   return cutter.taperHalfAngleDeg > at.draftDeg + at.tiltDeg + angleToleranceDeg
 }
 
@@ -116,11 +113,8 @@ export function cutsNothing(cutter: CutterDimensions, at: Placement): boolean {
  *
  * Units      Millimetres.
  * Result     0 for a sharp end.
- *
- * @example
- * contactZMm(cutterDimensions(ballCutter), placementOf({ kind: 'wall', depthMm: 5 }, ballCutter)) // => 3
  */
-export function contactZMm(cutter: CutterDimensions, at: WallPlacement): number {
+function contactZMm(cutter: CutterDimensions, at: WallPlacement): number {
   return cutter.cornerRadiusMm * (1 - at.sinWall)
 }
 
