@@ -6,6 +6,7 @@ import { lockItem, archiveItem as writeArchived } from '../../db/stores/item-sto
 import { inTransaction } from '../../db/transaction'
 import { explainingRefusals } from './explain-refusal'
 import { readItem } from './get-item'
+import { auditedItem } from './visible-item'
 
 /** Archives an item that is nowhere in the shop any more; done again, it changes nothing. */
 export async function archiveItem(actor: Actor, kind: CatalogueKind, id: string): Promise<void> {
@@ -20,8 +21,8 @@ export async function archiveItem(actor: Actor, kind: CatalogueKind, id: string)
         action: `${kind}-archived`,
         entity: 'item',
         entityId: id,
-        before,
-        after: await readItem(trx, kind, id),
+        before: auditedItem(before),
+        after: auditedItem(await readItem(trx, kind, id)),
       })
     }),
   )

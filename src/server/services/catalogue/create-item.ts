@@ -8,7 +8,7 @@ import { createItem as insertItem } from '../../db/stores/item-store'
 import { inTransaction } from '../../db/transaction'
 import { explainingRefusals } from './explain-refusal'
 import { readItem } from './get-item'
-import { visibleItem } from './visible-item'
+import { auditedItem, visibleItem } from './visible-item'
 
 /** Adds an item to the catalogue. The request is taken to have passed its schema, rules of geometry included. */
 export async function createItem<Kind extends CatalogueKind>(
@@ -26,7 +26,7 @@ export async function createItem<Kind extends CatalogueKind>(
         action: `${kind}-added`,
         entity: 'item',
         entityId: id,
-        after: added,
+        after: auditedItem<Kind>(added),
       })
       return added
     }),

@@ -12,7 +12,7 @@ import { inTransaction } from '../../db/transaction'
 import { explainingRefusals } from './explain-refusal'
 import { readItem } from './get-item'
 import { kindWords } from './kind-words'
-import { visibleItem } from './visible-item'
+import { auditedItem, visibleItem } from './visible-item'
 
 type Fields = Record<string, unknown>
 
@@ -40,8 +40,8 @@ export async function updateItem<Kind extends CatalogueKind>(
           action: `${kind}-changed`,
           entity: 'item',
           entityId: id,
-          before,
-          after,
+          before: auditedItem<Kind>(before),
+          after: auditedItem<Kind>(after),
         })
       }
       return visibleItem<Kind>(actor, after)

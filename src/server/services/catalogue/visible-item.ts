@@ -14,6 +14,12 @@ export function visibleItem<Kind extends CatalogueKind>(
   return visible as CatalogueTypes[Kind]['row']
 }
 
+/** What the audit keeps of a row: the item itself, not the stock that happened to be there. */
+export function auditedItem<Kind extends CatalogueKind>(row: CatalogueTypes[Kind]['row']): object {
+  const { stock: _, ...item } = row
+  return item
+}
+
 /** Sorting or filtering by a cost tells the cost. */
 export function refuseHiddenCosts(
   actor: Actor,
