@@ -104,15 +104,15 @@ function decodeWindows1252(bytes: Uint8Array): string {
 }
 
 /** A decoder that is fed piece by piece; bytes the encoding does not have throw TypeError. */
-function pieceDecoder(encoding: TextEncoding): (bytes: Uint8Array | null) => string {
+function pieceDecoder(encoding: TextEncoding, fatal = true): (bytes: Uint8Array | null) => string {
   if (encoding === 'windows-1252') return (bytes) => (bytes ? decodeWindows1252(bytes) : '')
-  const decoder = new TextDecoder(encoding, { fatal: true })
+  const decoder = new TextDecoder(encoding, { fatal })
   return (bytes) => (bytes ? decoder.decode(bytes, { stream: true }) : decoder.decode())
 }
 
-/** The text of a head, without what was cut in the middle of a character. */
+/** The text of a head, without what was cut in the middle of a character; bytes that are wrong are told when all is read. */
 export function decodeHead(head: Uint8Array, encoding: TextEncoding): string {
-  return pieceDecoder(encoding)(head)
+  return pieceDecoder(encoding, false)(head)
 }
 
 /** The text of a file, in pieces; a mark at its beginning is left out. */

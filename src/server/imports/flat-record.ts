@@ -65,7 +65,8 @@ export function givenRecord(kind: ImportKind, rows: readonly ImportRow[], reader
     const outline = outlineSegments(rows, reader, given.flat)
     given.problems.push(...outline.problems)
     if (outline.segments.length > 0) given.flat.segments = outline.segments
-    if (outline.problems.length > 0) given.failed.add('segments')
+    const hasFailed = [...given.failed].some((field) => helperFields.has(field))
+    if (outline.problems.length > 0 || hasFailed) given.failed.add('segments')
   }
   return given
 }

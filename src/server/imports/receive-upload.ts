@@ -47,9 +47,10 @@ async function receive(request: Request, path: string): Promise<ReceivedUpload> 
   if (!/^multipart\/form-data;.*boundary=/i.test(contentType) || !request.body) throw noFile()
   const form = new Busboy({
     headers: { 'content-type': contentType },
-    limits: { fileSize: importLimits.fileBytes + 1, files: 1, fields: 20, fieldSize: 500_000 },
+    limits: { fileSize: importLimits.fileBytes, files: 1, fields: 20, fieldSize: 500_000 },
   })
   const received: ReceivedUpload = { fields: {}, fileName: '', fileSizeBytes: 0 }
+  let part: Readable | undefined
   let writing: Promise<void> | undefined
   form.on('field', (name, value) => {
     received.fields[name] = value
@@ -59,17 +60,22 @@ async function receive(request: Request, path: string): Promise<ReceivedUpload> 
       file.resume()
       return
     }
+    part = file
     received.fileName = plainName(fileName)
     file.on('data', (piece: Buffer) => {
       received.fileSizeBytes += piece.length
-      if (received.fileSizeBytes > importLimits.fileBytes) form.destroy(tooLarge())
     })
+    // As soon as it is known, so that the rest of the body is not read at all.
+    file.on('limit', () => form.destroy(tooLarge()))
     writing = pipeline(file, createWriteStream(path, { mode: 0o600 }))
     writing.catch(() => undefined)
   })
   try {
     await pipeline(Readable.fromWeb(request.body as ReadableStream), form)
   } catch (error) {
+    // The writer must let go of the file before it is removed.
+    part?.destroy()
+    await writing?.catch(() => undefined)
     if (error instanceof AppError) throw error
     throw new AppError('unreadable-body', 'The upload broke off or is no multipart form.', {
       note: String(error),
