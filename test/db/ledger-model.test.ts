@@ -22,7 +22,7 @@ beforeAll(async () => {
   const inside = { isOutside: false, binOfCrib: null }
   const outside = { isOutside: true, binOfCrib: null }
   const bin = { isOutside: false, binOfCrib: books.cribId }
-  places = new Map([
+  places = new Map<string, NaivePlace>([
     [books.supplierId, outside],
     [books.scrapId, outside],
     [books.countAdjustmentId, outside],
