@@ -28,16 +28,14 @@ export async function readCatalogueRows<Kind extends CatalogueKind>(
 ): Promise<CatalogueTypes[Kind]['row'][]> {
   if (ids.length === 0) return []
   const table = geometryTables[kind]
-  const query = db('items')
+  // One after another: within a transaction there is one connection.
+  const rows = await db('items')
     .join(table.name, `${table.name}.item_id`, 'items.id')
     .crossJoin(db.raw('shop_settings'))
     .whereRaw('items.id = any(?::bigint[])', [ids])
     .select(...itemColumns, ...geometryColumns(table), 'shop_settings.currency')
-  const [rows, segments, stocks] = await Promise.all([
-    query,
-    readSegments(db, kind, ids),
-    readStockSummaries(db, ids, cribId),
-  ])
+  const segments = await readSegments(db, kind, ids)
+  const stocks = await readStockSummaries(db, ids, cribId)
   const byId = new Map<string, CatalogueTypes[Kind]['row']>()
   for (const row of rows) {
     byId.set(row.id, {

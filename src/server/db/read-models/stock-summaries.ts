@@ -19,10 +19,8 @@ export async function readStockSummaries(
   itemIds: string[],
   cribId: string | null,
 ): Promise<Map<string, StockSummary>> {
-  const [levels, places] = await Promise.all([
-    readLevels(db, itemIds, cribId),
-    readPlaces(db, itemIds, cribId),
-  ])
+  const levels = await readLevels(db, itemIds, cribId)
+  const places = await readPlaces(db, itemIds, cribId)
   const summaries = new Map<string, StockSummary>()
   for (const level of levels) {
     summaries.set(level.id, {

@@ -21,11 +21,9 @@ export async function checkedMovement(
   request: CreateMovementRequest,
 ): Promise<NewMovement> {
   const kind = kindAllowedTo(actor, request)
-  const [item, from, to] = await Promise.all([
-    findItem(trx, request.itemId),
-    findLocation(trx, request.fromLocationId),
-    findTarget(trx, kind, request.toLocationId ?? null),
-  ])
+  const item = await findItem(trx, request.itemId)
+  const from = await findLocation(trx, request.fromLocationId)
+  const to = await findTarget(trx, kind, request.toLocationId ?? null)
   const faults = [
     ...itemFaults(item),
     ...(await pieceFaults(trx, item, request)),
