@@ -7,8 +7,9 @@ const projectFolder = dirname(fileURLToPath(import.meta.url))
 const nextConfig = {
   // Tests build into a folder of their own so that they never break a running start.
   distDir: process.env.NEXT_DIST_DIR ?? '.next',
-  // Next adds the build folder to the tsconfig.json it is given, but leaves one alone that extends another.
-  typescript: { tsconfigPath: process.env.NEXT_DIST_DIR ? 'tsconfig.test-build.json' : 'tsconfig.json' },
+  // A build looks at what it is made from, not at the tests. Next writes build folders into the tsconfig.json it is given,
+  // but leaves one alone that extends another.
+  typescript: { tsconfigPath: 'tsconfig.build.json' },
   reactStrictMode: true,
   poweredByHeader: false,
   // Knex looks its dialects up at run time and pino starts its transports as threads: neither survives bundling.

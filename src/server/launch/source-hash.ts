@@ -8,6 +8,7 @@ const sourceFiles = [
   'package-lock.json',
   'package.json',
   'postcss.config.js',
+  'tsconfig.build.json',
   'tsconfig.json',
 ]
 
