@@ -16,7 +16,7 @@ export interface FirstTouchTableProps {
 /** The depth at which every part of the tool first touches; a row shows its part on the drawing. */
 export function FirstTouchTable({ answer, unit, highlighted, onHighlight }: FirstTouchTableProps) {
   return (
-    <section aria-labelledby="reach-touches" className="flex flex-col gap-2">
+    <section aria-labelledby="reach-touches" className="flex flex-col gap-2 print:gap-0">
       <h2 id="reach-touches" className="text-lg">
         First touch
       </h2>

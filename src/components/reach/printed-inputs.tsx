@@ -1,5 +1,6 @@
 import { formatLength } from '@/lib/format-length'
 import { catalogueValue } from './catalogue-values'
+import { stockPlace } from './item-words'
 import { isSlotUsed, type ReachDraft } from './reach-draft'
 import { type FieldGroup, formNames, type ReachField, reachFields, toolSlots } from './reach-fields'
 import type { InputsProps } from './reach-inputs'
@@ -51,7 +52,10 @@ function groupWords(
     group === 'feature'
       ? draft.obstacles.map(({ setback, rise }) => `obstacle set back ${setback}, rising ${rise}`)
       : []
-  return [row?.code, kind, ...figures, ...obstacles].filter(Boolean).join(' · ')
+  const outline =
+    group === 'holder' || group === 'extension' ? outlineWords(group, draft, rows, reading) : null
+  const place = row ? stockPlace(row.stock).text : null
+  return [row?.code, kind, ...figures, ...obstacles, outline, place].filter(Boolean).join(' · ')
 }
 
 function figureWords(
@@ -68,5 +72,25 @@ function figureWords(
   if (field.name === 'form') return formNames[value as keyof typeof formNames] ?? String(value)
   if (typeof value === 'string') return `${name} ${value}`
   if (field.kind === 'angle') return `${name} ${value}°`
-  return field.kind === 'number' ? `${name} ${value}` : `${name} ${formatLength(value, reading.unit)}`
+  return field.kind === 'number' ? `${name} ${value} N` : `${name} ${formatLength(value, reading.unit)}`
+}
+
+/** `outline 18 × Ø28, 50 × Ø32 to 36`, from the nose face up. */
+function outlineWords(
+  owner: 'holder' | 'extension',
+  draft: ReachDraft,
+  rows: PrintedInputsProps['rows'],
+  reading: Reading,
+): string | null {
+  const said = (mm: number) => formatLength(mm, reading.unit, { withUnit: false })
+  const typed = draft.segments[owner]?.map(({ length, nose, spindle }) => [length, nose, spindle || nose])
+  const ofCatalogue = rows[owner]?.segments.map((segment) =>
+    [segment.lengthMm, segment.noseDiameterMm, segment.spindleDiameterMm].map(said),
+  )
+  const segments = typed ?? ofCatalogue ?? []
+  if (segments.length === 0) return null
+  const words = segments.map(
+    ([length, nose, spindle]) => `${length} × Ø${nose}${spindle === nose ? '' : ` to ${spindle}`}`,
+  )
+  return `outline ${words.join(', ')}`
 }

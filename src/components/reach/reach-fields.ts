@@ -118,7 +118,7 @@ export const reachFields: readonly ReachField[] = [
     ['stickOutMm', 'stickout', 'Stick-out', 'length'],
     ['clearanceShankMm', 'cs', 'Clearance at the shank', 'lengthOrZero'],
     ['clearanceHolderMm', 'ch', 'Clearance at the holder', 'lengthOrZero'],
-    ['sideLoadN', 'load', 'Side load in N', 'number'],
+    ['sideLoadN', 'load', 'Side load', 'number', undefined, 'In newtons, for the deflection at the tip'],
   ]),
 ]
 

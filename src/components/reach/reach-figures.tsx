@@ -20,7 +20,7 @@ export function ReachFigures({ answer, request, unit }: ReachFiguresProps) {
   const holdsMm = request.cutter.overallLengthMm - stickOut.usedMm
   const isFromTool = request.stickOutMm == null
   return (
-    <section aria-labelledby="reach-figures" className="flex flex-col gap-2">
+    <section aria-labelledby="reach-figures" className="flex flex-col gap-2 print:gap-0">
       <h2 id="reach-figures" className="text-lg">
         Figures
       </h2>

@@ -80,7 +80,7 @@ const CheckFields = memo(function CheckFields({ texts, settings, errors, ...rest
             name="clearanceHolderMm"
             hint={`Blank: ${formatLength(settings.holderClearanceMm, reading.unit)}, the shop’s`}
           />
-          <ReachFieldInput {...fields} name="sideLoadN" hint="For the deflection at the tip" />
+          <ReachFieldInput {...fields} name="sideLoadN" />
         </div>
       </details>
     </section>

@@ -16,7 +16,10 @@ export function ReachMessages({ messages, unit }: ReachMessagesProps) {
       .map((message) => messageSentence(message, unit))
   const [stops, cautions, assumed] = [ofKind('stops'), ofKind('caution'), ofKind('assumed')]
   return (
-    <section aria-labelledby="reach-messages" className="flex flex-col gap-2">
+    <section
+      aria-labelledby="reach-messages"
+      className="flex flex-col gap-2 print:block print:columns-2 print:[&_svg]:hidden"
+    >
       <h2 id="reach-messages" className="text-lg">
         To know
       </h2>
@@ -31,7 +34,7 @@ export function ReachMessages({ messages, unit }: ReachMessagesProps) {
         </Notice>
       ))}
       {assumed.length > 0 ? (
-        <ul className="text-ink-soft flex list-disc flex-col gap-1 pl-5 text-[0.9375rem]">
+        <ul className="text-ink-soft flex list-disc flex-col gap-1 pl-5 text-[0.9375rem] print:block">
           {assumed.map((text) => (
             <li key={text}>{text}</li>
           ))}

@@ -105,7 +105,7 @@ export function ReachPage({ query, date }: ReachPageProps) {
             />
           )}
         </div>
-        <TitleBlock date={date} />
+        <TitleBlock date={date} className="hidden sm:flex sm:flex-wrap print:hidden" />
         <StickOutStepper
           {...inputs}
           texts={draft.texts.check}
@@ -127,9 +127,9 @@ export function ReachPage({ query, date }: ReachPageProps) {
           settings={reachSettings}
         />
       </aside>
-      <div className="border-ink bg-sheet flex min-w-0 flex-col gap-5 self-start border p-4 print:gap-2 print:border-t-0 print:p-2 print:text-xs">
+      <div className="border-ink bg-sheet flex min-w-0 flex-col gap-5 self-start border p-4 print:**:min-h-0 print:**:py-px print:**:text-[8pt] print:**:leading-tight print:gap-1.5 print:border-t-0 print:p-2">
         {answered ? (
-          <div className="grid gap-x-8 gap-y-5 xl:grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)] print:grid-cols-[1.4fr_1fr] print:gap-x-4">
+          <div className="grid gap-x-8 gap-y-5 xl:grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)] print:gap-y-0 print:grid-cols-[1.4fr_1fr] print:gap-x-4">
             <ReachFigures answer={answered.answer} request={answered.request} unit={unit} />
             <FirstTouchTable
               answer={answered.answer}
@@ -143,6 +143,7 @@ export function ReachPage({ query, date }: ReachPageProps) {
         <PrintedInputs draft={draft} rows={rows} reading={reading} />
         <ReachCautions />
       </div>
+      <TitleBlock date={date} className="border-x border-b hidden print:flex" />
     </div>
   )
 }

@@ -54,7 +54,7 @@ export function SectionDrawing(props: SectionDrawingProps) {
         role="img"
         aria-label={sectionSentence(scene, verdict, unit)}
         viewBox={`0 0 ${sheet.width} ${sheet.height}`}
-        className="block h-auto w-full print:mx-auto print:max-h-[118mm]"
+        className="block h-auto w-full print:mx-auto print:max-h-[100mm]"
       >
         <SectionPatterns layout={layout} />
         <g clipPath="url(#reach-section-sheet)">

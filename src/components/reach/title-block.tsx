@@ -6,13 +6,14 @@ import { useShop } from '../layout/shop-context'
 export interface TitleBlockProps {
   /** ISO 8601, the day the sheet was made. */
   date: string
+  className?: string
 }
 
 /** The foot of the sheet, as on any drawing: whose, when, by whom, at what scale, by which projection. */
-export function TitleBlock({ date }: TitleBlockProps) {
+export function TitleBlock({ date, className = '' }: TitleBlockProps) {
   const { shopName, actor, unit } = useShop()
   return (
-    <dl className="border-ink hidden border-t text-sm sm:flex sm:flex-wrap print:flex">
+    <dl className={`border-ink border-t text-sm ${className}`}>
       <Cell name="Reach check" isWide>
         {shopName || 'Leadline'}
       </Cell>

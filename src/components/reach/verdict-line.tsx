@@ -25,9 +25,11 @@ export function VerdictLine({ tone, sentence }: VerdictLineProps) {
   const { look, mark, Mark } = tones[tone]
   const rested = useDebounced(sentence, restMs)
   return (
-    <div className={`flex min-h-16 items-center gap-3 border-l-[6px] px-4 py-2.5 ${look}`}>
-      <Mark aria-hidden="true" className={`size-7 shrink-0 ${mark}`} />
-      <p className="text-lg leading-snug font-semibold sm:text-xl" data-testid="verdict">
+    <div
+      className={`flex min-h-16 items-center gap-3 border-l-[6px] px-4 py-2.5 print:min-h-0 print:py-1 ${look}`}
+    >
+      <Mark aria-hidden="true" className={`size-7 shrink-0 print:size-5 ${mark}`} />
+      <p className="text-lg leading-snug font-semibold sm:text-xl print:text-[11pt]" data-testid="verdict">
         {sentence}
       </p>
       <p role="status" className="sr-only">

@@ -1,0 +1,42 @@
+import { expect, signIn, test } from '../support/browser'
+
+const check =
+  'depth=25&c.form=square&c.DC=3.175&c.APMX=6.35&c.LCF=6.35&c.DN=3&c.LU=38.1&c.DMM=3.175&c.OAL=76.2' +
+  '&h.A=100&h.depth=75&h.grip=10&h.segments=nut:18x28'
+
+test.beforeEach(async ({ page }) => {
+  await signIn(page, 'machinist')
+  await page.request.patch('/api/me', { data: { lengthUnit: 'mm' } })
+  await page.goto(`/reach?${check}`)
+  await expect(page.getByTestId('verdict')).toContainText('Reaches 25 mm')
+})
+
+test.afterEach(async ({ page }) => {
+  await page.request.patch('/api/me', { data: { lengthUnit: null } })
+})
+
+test('verdict, drawing and stick-out come first, and nothing runs off the side', async ({ page }) => {
+  const verdict = await page.getByTestId('verdict').boundingBox()
+  const drawing = await page.getByRole('img', { name: /^Section of/ }).boundingBox()
+  const fields = await page.getByRole('region', { name: 'Feature' }).boundingBox()
+  expect(verdict?.y).toBeLessThan(drawing?.y ?? 0)
+  expect(drawing?.y).toBeLessThan(fields?.y ?? 0)
+  const overflow = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
+  expect(overflow).toBeLessThanOrEqual(0)
+})
+
+test('the stick-out is stepped with gloves on, everything else with a finger', async ({ page }) => {
+  const longer = page.getByRole('button', { name: /^Stick-out longer/ })
+  const box = await longer.boundingBox()
+  expect(Math.min(box?.width ?? 0, box?.height ?? 0)).toBeGreaterThanOrEqual(64)
+  await longer.tap()
+  await expect(page.getByTestId('verdict')).toContainText('at 40 mm stick-out')
+  for (const name of ['Wall', 'Hole', 'At the tip', 'Whole assembly', 'Print']) {
+    const target = await page.getByRole('button', { name, exact: true }).boundingBox()
+    expect(target?.height, name).toBeGreaterThanOrEqual(44)
+  }
+  for (const handle of await page.getByRole('slider').all()) {
+    const target = await handle.boundingBox()
+    expect(Math.min(target?.width ?? 0, target?.height ?? 0)).toBeGreaterThanOrEqual(44)
+  }
+})
