@@ -1,5 +1,7 @@
 /** The cutters of the demo shop: invented makers and numbers, sizes as shops own them. */
 
+import { randomFrom } from './random'
+
 export interface CutterPlan {
   code: string
   maker: string
@@ -70,12 +72,14 @@ function geometryOf(body: Body): CutterPlan['geometry'] {
   }
 }
 
+const makerSeed = 4711
 const makers = ['Corvane', 'Hallbeck', 'Nordvane', 'Brightmoor'] as const
 
 /** Gives each family its own run of codes, and every cutter a maker, a cost and a share of the use. */
 class Drawer {
   readonly plans: CutterPlan[] = []
   private readonly counts = new Map<string, number>()
+  private readonly random = randomFrom(makerSeed)
 
   add(prefix: string, description: string, body: Body, options: { isInch: boolean; use?: number }): void {
     const count = (this.counts.get(prefix) ?? 0) + 1
@@ -84,7 +88,7 @@ class Drawer {
     const cost = 900 + dc * dc * 28 + dc * oal * 5 + (body.neck ? 1400 : 0) + (body.re ? 500 : 0)
     this.plans.push({
       code: `${prefix}-${String(count).padStart(3, '0')}`,
-      maker: makers[(this.plans.length * 7 + count) % makers.length]!,
+      maker: this.random.pick(makers),
       description,
       unitCostMinor: Math.round((cost * (substrate === 'hss' ? 0.45 : 1)) / 5) * 5,
       use: options.use ?? 1,

@@ -68,12 +68,12 @@ function Bins({
 }) {
   if (bins.length === 0) return <p className="text-ink-soft px-3 py-2 text-sm">No bins yet</p>
   return (
-    <ul className="flex min-w-0 flex-wrap">
+    <ul className="grid min-w-0 flex-1 grid-cols-6 sm:grid-cols-12">
       {bins.map(({ location }) => (
         <li key={location.id}>
           <button
             type="button"
-            className="border-hairline text-accent hover:bg-accent-wash h-9 min-w-9 border-r px-1.5 text-sm pointer-coarse:h-11 pointer-coarse:min-w-11"
+            className="border-hairline text-accent hover:bg-accent-wash -mb-px h-9 w-full truncate border-r border-b px-0.5 text-sm pointer-coarse:h-11"
             aria-label={`Bin ${location.code}`}
             onClick={() => onOpen(location)}
           >

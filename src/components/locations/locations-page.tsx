@@ -81,7 +81,7 @@ function Crib({ crib, onOpen, onAdd }: CribProps) {
           ) : null}
         </span>
       </div>
-      <div className="grid items-start gap-6 md:grid-cols-[repeat(auto-fill,minmax(26rem,1fr))]">
+      <div className="grid items-start gap-6 lg:grid-cols-2">
         {children
           .filter((child) => child.location.kind === 'cabinet')
           .map((cabinet) => (
