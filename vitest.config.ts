@@ -27,6 +27,7 @@ export default defineConfig({
         test: {
           name: 'db',
           include: ['test/db/**/*.test.ts', 'test/jobs/**/*.test.ts'],
+          globalSetup: ['test/support/database-teardown.ts'],
           testTimeout: 60_000,
           hookTimeout: 60_000,
         },
