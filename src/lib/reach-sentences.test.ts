@@ -60,6 +60,13 @@ describe('a verdict', () => {
     )
   })
 
+  it('counts a wall’s through allowance with its depth, since the tip has to go there too', () => {
+    const short: ReachAnswer = { ...held, verdict: 'short', limitedBy: 'shank', reachMm: 12, shortfallMm: 10 }
+    expect(verdictSentence(short, { kind: 'wall', depthMm: 20, throughMm: 2 }, 'mm')).toBe(
+      'Falls 10 mm short of 20 mm and 2 mm through at 39.5 mm stick-out. The shank touches first, at 12 mm.',
+    )
+  })
+
   it('says so where nothing ever touches', () => {
     const free = { ...held, reachMm: null, limitedBy: null }
     expect(verdictSentence(free, wall, 'mm')).toBe(

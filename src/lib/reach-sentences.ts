@@ -199,7 +199,7 @@ export function verdictSentence(answer: ReachAnswer, feature: Feature, unit: Len
   if (answer.verdict === 'impossible') return impossibleSentence(answer, unit)
   const at = `at ${said(answer.stickOut.usedMm)} stick-out`
   if (answer.verdict === 'reaches')
-    return `Reaches ${said(feature.depthMm)} ${at}. ${nextSentence(answer, said)}`
+    return `Reaches ${goalWords(feature, said)} ${at}. ${nextSentence(answer, said)}`
   const longer = answer.messages.find(({ code }) => code === 'longer-stick-out-reaches')
   const help = longer ? ` ${messageSentence(longer, unit)}` : ''
   return `${shortSentence(answer, feature, at, said)}${help}`
@@ -210,6 +210,12 @@ function impossibleSentence(answer: ReachAnswer, unit: LengthUnit): string {
   return reason ? `Impossible. ${messageSentence(reason, unit)}` : 'Impossible.'
 }
 
+/** A wall's through allowance is part of its depth; a hole's break-through is not counted. */
+function goalWords(feature: Feature, said: Said): string {
+  const throughMm = feature.kind === 'wall' ? (feature.throughMm ?? 0) : 0
+  return throughMm > 0 ? `${said(feature.depthMm)} and ${said(throughMm)} through` : said(feature.depthMm)
+}
+
 function nextSentence({ limitedBy, reachMm }: ReachAnswer, said: Said): string {
   if (limitedBy === null || reachMm === null) return 'Nothing touches at any depth.'
   if (limitedBy === 'usableLength') return `The usable length ends next, at ${said(reachMm)}.`
@@ -218,7 +224,7 @@ function nextSentence({ limitedBy, reachMm }: ReachAnswer, said: Said): string {
 
 function shortSentence(answer: ReachAnswer, feature: Feature, at: string, said: Said): string {
   const { limitedBy, reachMm, shortfallMm } = answer
-  const goal = said(feature.depthMm)
+  const goal = goalWords(feature, said)
   if (limitedBy === 'floor' || limitedBy === null || reachMm === null)
     return `Doesn’t reach ${goal} ${at}. The far side of the tilted tool stands in the floor.`
   const first =

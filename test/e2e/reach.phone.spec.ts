@@ -5,7 +5,7 @@ const check =
   '&h.A=100&h.depth=75&h.grip=10&h.segments=nut:18x28'
 
 test.beforeEach(async ({ page }) => {
-  await signIn(page, 'machinist')
+  await signIn(page, 'admin')
   await page.request.patch('/api/me', { data: { lengthUnit: 'mm' } })
   await page.goto(`/reach?${check}`)
   await expect(page.getByTestId('verdict')).toContainText('Reaches 25 mm')

@@ -11,7 +11,7 @@ const field = (page: Page, name: string) => page.getByRole('textbox', { name: ne
 const slider = (page: Page, name: string) => page.getByRole('slider', { name, exact: true })
 
 test.beforeEach(async ({ page }) => {
-  await signIn(page, 'machinist')
+  await signIn(page, 'cribManager')
   await page.request.patch('/api/me', { data: { lengthUnit: 'mm' } })
 })
 

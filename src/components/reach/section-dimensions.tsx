@@ -6,7 +6,7 @@ import { AngleDimension } from '../drawing/angle-dimension'
 import { DimensionLine } from '../drawing/dimension-line'
 import { dimensionSpacing } from '../drawing/drafting-style'
 import { OpenDimension } from '../drawing/open-dimension'
-import { onSheet, type SectionLayout } from './section-layout'
+import { farWallMm, onSheet, type SectionLayout } from './section-layout'
 import { type SectionScene, topFaceMm } from './section-scene'
 import { toolTransform, toolY } from './section-tool'
 
@@ -53,10 +53,44 @@ export const PartDimensions = memo(function PartDimensions({
         symbol="depth"
         text={said(feature.depthMm)}
       />
+      <FeatureWidths scene={scene} layout={layout} unit={unit} />
       <Angles scene={scene} layout={layout} />
     </g>
   )
 })
+
+/** The width of an opening or a hole, and how far the tallest obstacle stands above the top face. */
+function FeatureWidths({ scene, layout, unit }: Omit<SectionDimensionsProps, 'reachMm'>) {
+  const { at, feature } = scene
+  const said = (mm: number) => formatLength(mm, unit, { withUnit: false })
+  const farMm = farWallMm(scene)
+  const riseMm = at.kind === 'wall' ? Math.max(0, ...at.obstacles.map((obstacle) => obstacle.riseMm)) : 0
+  const topMm = topFaceMm(at)
+  return (
+    <g>
+      {farMm === null ? null : (
+        <DimensionLine
+          axis="horizontal"
+          from={onSheet(layout, farMm, 0)}
+          to={onSheet(layout, 0, 0)}
+          at={onSheet(layout, 0, -at.leadMm).y + dimensionSpacing}
+          symbol={feature.kind === 'hole' ? 'Ø' : 'opening'}
+          text={said(-farMm)}
+        />
+      )}
+      {riseMm > 0 ? (
+        <DimensionLine
+          axis="vertical"
+          from={{ x: layout.right, y: onSheet(layout, 0, topMm).y }}
+          to={{ x: layout.right, y: onSheet(layout, 0, topMm + riseMm).y }}
+          at={layout.right + dimensionSpacing}
+          symbol="rises"
+          text={said(riseMm)}
+        />
+      ) : null}
+    </g>
+  )
+}
 
 function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layout'>) {
   const { at } = scene
