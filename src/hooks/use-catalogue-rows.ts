@@ -20,10 +20,7 @@ export function useCatalogueRows<Row>(apiPath: string, query: string) {
   const { data, error, isLoading, isValidating, size, setSize, mutate } = useSWRInfinite<
     CatalogueBlock<Row>,
     Error
-  >((index: number) => catalogueBlockUrl(apiPath, query, index * blockSize), getJson, {
-    revalidateFirstPage: false,
-    keepPreviousData: false,
-  })
+  >((index: number) => catalogueBlockUrl(apiPath, query, index * blockSize), getJson)
   const rows = data?.flatMap((block) => block.rows) ?? []
   const total = data?.[0]?.total
   const isLastLoaded = data !== undefined && data.length === size

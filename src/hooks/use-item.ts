@@ -29,17 +29,18 @@ interface MovementPage {
   total?: number
 }
 
-const movementsOnPage = 20
+/** The first page of an item's movements; also the name of the whole list among what SWR keeps. */
+export function itemMovementsUrl(itemId: string): string {
+  return `/api/items/${itemId}/movements?limit=20`
+}
 
 /** What happened to an item, newest first, a page more whenever asked. */
 export function useItemMovements(itemId: string) {
   const { data, error, isLoading, size, setSize, mutate } = useSWRInfinite<MovementPage, Error>(
-    (index: number, before: MovementPage | null) => {
-      if (before && before.nextCursor === null) return null
-      const cursor = before?.nextCursor ? `&cursor=${encodeURIComponent(before.nextCursor)}` : ''
-      return index === 0
-        ? `/api/items/${itemId}/movements?limit=${movementsOnPage}`
-        : `/api/items/${itemId}/movements?limit=${movementsOnPage}${cursor}`
+    (_index: number, before: MovementPage | null) => {
+      if (before === null) return itemMovementsUrl(itemId)
+      if (before.nextCursor === null) return null
+      return `${itemMovementsUrl(itemId)}&cursor=${encodeURIComponent(before.nextCursor)}`
     },
     getJson,
   )

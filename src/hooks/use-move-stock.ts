@@ -1,10 +1,12 @@
 'use client'
 
 import { useSWRConfig } from 'swr'
-import type { CatalogueKind } from '@/core/stock/kinds'
+import { unstable_serialize } from 'swr/infinite'
+import { catalogueKinds } from '@/core/stock/kinds'
 import { callApi } from '@/lib/api-client'
-import { cataloguePaths } from '@/lib/catalogue-paths'
+import { itemApiPath } from '@/lib/catalogue-paths'
 import type { MovementResponse } from '@/schemas/movement'
+import { itemMovementsUrl } from './use-item'
 
 export interface MoveStockRequest {
   kind: 'issue' | 'return'
@@ -20,14 +22,15 @@ export interface MoveStockRequest {
 /** Everything that shows an item's stock reads again. */
 function useStockRefresh() {
   const { mutate } = useSWRConfig()
-  return (itemId: string) =>
-    mutate((key) => {
+  return async (itemId: string) => {
+    // A list read page by page goes by a name of its own, which no filter is shown.
+    await mutate(unstable_serialize(() => itemMovementsUrl(itemId)))
+    await mutate((key) => {
       if (typeof key !== 'string') return false
-      const isOfItem =
-        key.includes(`/api/items/${itemId}/`) ||
-        Object.values(cataloguePaths).some((path) => key === `/api${path}/${itemId}`)
-      return isOfItem || Object.values(cataloguePaths).some((path) => key.includes(`/api${path}?`))
+      if (key.startsWith(`/api/items/${itemId}/`)) return true
+      return catalogueKinds.some((kind) => key === itemApiPath(kind, itemId))
     })
+  }
 }
 
 /** Issues or returns; the key makes a repeat of the same call harmless. */
@@ -48,16 +51,5 @@ export function useReverseMovement() {
   return async (movement: Pick<MovementResponse, 'id' | 'itemId'>, idempotencyKey: string): Promise<void> => {
     await callApi('POST', `/api/movements/${movement.id}/reversal`, { body: {}, idempotencyKey })
     await refresh(movement.itemId)
-  }
-}
-
-/** What a change of the item's own row is told to, apart from its stock. */
-export function useArchiveItem(kind: CatalogueKind) {
-  const { mutate } = useSWRConfig()
-  return async (row: { id: string; version: number }, isArchived: boolean): Promise<void> => {
-    const path = `/api${cataloguePaths[kind]}/${row.id}`
-    if (isArchived) await callApi('DELETE', path)
-    else await callApi('PATCH', path, { body: { version: row.version, archivedAt: null } })
-    await mutate((key) => typeof key === 'string' && key.includes(`/api${cataloguePaths[kind]}`))
   }
 }

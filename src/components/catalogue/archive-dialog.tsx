@@ -5,7 +5,7 @@ import { toast } from 'sonner'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
-import { useArchiveItem } from '@/hooks/use-move-stock'
+import { useArchiveItem } from '@/hooks/use-archive-item'
 import type { CatalogueRow } from './catalogue-row'
 
 /** An item is never deleted: it leaves the lists and stays in the books. Refused while a piece of it is in the shop. */

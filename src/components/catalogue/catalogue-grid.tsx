@@ -20,10 +20,10 @@ export interface CatalogueGridProps<Row extends CatalogueRow> {
   columns: readonly CatalogueColumn<Row>[]
   shownIds: readonly string[]
   view: CatalogueView
-  isNarrowed: boolean
   onViewChange: (change: Partial<CatalogueView>) => void
   onTotal: (total: number | null) => void
   onClear: () => void
+  onReset: () => void
   onAdd: () => void
   handleRef: RefObject<PartsListHandle | null>
 }

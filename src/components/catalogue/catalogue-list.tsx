@@ -9,20 +9,22 @@ import { catalogueApiPath, itemPagePath } from '@/lib/catalogue-paths'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import { CatalogueState } from './catalogue-state'
+import { type CatalogueView, queryParams } from './catalogue-view'
 import { placeCodes } from './columns'
 import { StockWord } from './stock-word'
 
 export interface CatalogueListProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
-  query: string
-  isNarrowed: boolean
+  view: CatalogueView
   onClear: () => void
+  onReset: () => void
   onAdd: () => void
 }
 
 /** The same rows for a thumb: what it is, what there is, where it lies. It grows as it is scrolled. */
 export function CatalogueList<Row extends CatalogueRow>(props: CatalogueListProps<Row>) {
-  const { definition, query } = props
+  const { definition, view } = props
+  const query = queryParams(view).toString()
   const { unit } = useShop()
   const list = useCatalogueRows<Row>(catalogueApiPath(definition.kind), query)
   const end = useEndReached(list.hasMore && !list.isLoadingMore && !list.error, list.loadMore)

@@ -11,12 +11,13 @@ import { Dialog } from '@/components/ui/dialog'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
 import { itemPagePath } from '@/lib/catalogue-paths'
+import type { CatalogueColumn } from './catalogue-column'
 import type { CatalogueDefinition } from './catalogue-definition'
 import { filterParamNames } from './catalogue-filter'
 import type { CatalogueGridProps } from './catalogue-grid'
 import { CatalogueList } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
-import { isNarrowed, queryParams } from './catalogue-view'
+import { type CatalogueView, isNarrowed } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
@@ -40,90 +41,22 @@ export function CataloguePage<Row extends CatalogueRow>({
   const canSeeCosts = useCan('seeCosts')
   const filterNames = useMemo(() => filterParamNames(definition.filters), [definition.filters])
   const columns = useMemo(() => definition.columns(canSeeCosts), [definition, canSeeCosts])
-  const [view, changeView] = useCatalogueView(filterNames)
-  const [total, setTotal] = useState<number | null>(null)
+  const [view, onViewChange] = useCatalogueView(filterNames)
   const [isAdding, setIsAdding] = useState(false)
-  const grid = useRef<PartsListHandle>(null)
-  const shownIds = useMemo(() => {
-    const known = view.columns?.filter((id) => columns.some((column) => column.id === id)) ?? []
-    return known.length > 0 ? known : columns.filter((column) => column.isUsual).map((column) => column.id)
-  }, [view.columns, columns])
-
   const shared = {
     definition,
-    isNarrowed: isNarrowed(view),
-    onClear: () => changeView({ q: '', filters: {} }),
+    columns,
+    view,
+    onViewChange,
+    onClear: () => onViewChange({ q: '', filters: {} }),
+    onReset: () => onViewChange({ q: '', filters: {}, sort: '', columns: null }),
     onAdd: () => setIsAdding(true),
   }
-
   return (
     <div className="flex flex-1 flex-col md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
-        <h1 className="text-2xl">{definition.title}</h1>
-        {isWide && total !== null ? (
-          <p className="text-ink-soft" role="status">
-            {total.toLocaleString('en')}{' '}
-            {shared.isNarrowed ? 'found' : total === 1 ? definition.one : definition.many}
-          </p>
-        ) : null}
-        <div className="order-last flex w-full min-w-0 items-center gap-2 sm:order-none sm:ml-auto sm:w-auto">
-          <SearchBox
-            value={view.q}
-            label={`Search ${definition.many}`}
-            onSearch={(q) => changeView({ q })}
-            onLeaveDown={() => grid.current?.focusFirstRow()}
-          />
-          {isWide ? null : (
-            <FilterDrawer count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}>
-              <SortSelect columns={columns} value={view.sort} onChange={(sort) => changeView({ sort })} />
-              <FilterFields
-                shape="column"
-                filters={definition.filters}
-                values={view.filters}
-                onChange={(filters) => changeView({ filters })}
-              />
-            </FilterDrawer>
-          )}
-        </div>
-        <CatalogueActions definition={definition} onAdd={shared.onAdd}>
-          {isWide ? (
-            <ColumnChooser
-              columns={columns}
-              shown={shownIds}
-              isUsual={view.columns === null}
-              onChange={(ids) => changeView({ columns: ids })}
-            />
-          ) : null}
-        </CatalogueActions>
-      </div>
       {isWide === null ? <StateSentence sentence={`Loading the ${definition.many} …`} /> : null}
-      {isWide === true ? (
-        <>
-          <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
-            <FilterFields
-              shape="row"
-              filters={definition.filters}
-              values={view.filters}
-              onChange={(filters) => changeView({ filters })}
-            />
-            {shared.isNarrowed ? (
-              <Button variant="quiet" size="compact" className="self-end" onClick={shared.onClear}>
-                Clear all
-              </Button>
-            ) : null}
-          </div>
-          <CatalogueGrid
-            {...shared}
-            columns={columns}
-            shownIds={shownIds}
-            view={view}
-            onViewChange={changeView}
-            onTotal={setTotal}
-            handleRef={grid}
-          />
-        </>
-      ) : null}
-      {isWide === false ? <CatalogueList {...shared} query={queryParams(view).toString()} /> : null}
+      {isWide === true ? <WideCatalogue {...shared} /> : null}
+      {isWide === false ? <NarrowCatalogue {...shared} /> : null}
       <ItemFormDialog
         definition={definition}
         row={null}
@@ -138,6 +71,106 @@ export function CataloguePage<Row extends CatalogueRow>({
   )
 }
 
+interface CatalogueShapeProps<Row extends CatalogueRow> {
+  definition: CatalogueDefinition<Row>
+  columns: readonly CatalogueColumn<Row>[]
+  view: CatalogueView
+  onViewChange: (change: Partial<CatalogueView>) => void
+  onClear: () => void
+  onReset: () => void
+  onAdd: () => void
+}
+
+function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
+  const { definition, columns, view, onViewChange, onClear } = props
+  const [total, setTotal] = useState<number | null>(null)
+  const grid = useRef<PartsListHandle>(null)
+  const shownIds = useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns])
+  return (
+    <>
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
+        <h1 className="text-2xl">{definition.title}</h1>
+        <p className="text-ink-soft mr-auto" role="status">
+          {total === null
+            ? ''
+            : `${total.toLocaleString('en')} ${isNarrowed(view) ? 'found' : total === 1 ? definition.one : definition.many}`}
+        </p>
+        <SearchBox
+          value={view.q}
+          label={`Search ${definition.many}`}
+          onSearch={(q) => onViewChange({ q })}
+          onLeaveDown={() => grid.current?.focusFirstRow()}
+        />
+        <CatalogueActions definition={definition} onAdd={props.onAdd}>
+          <ColumnChooser
+            columns={columns}
+            shown={shownIds}
+            isUsual={view.columns === null}
+            onChange={(ids) => onViewChange({ columns: ids })}
+          />
+        </CatalogueActions>
+      </div>
+      <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
+        <FilterFields
+          shape="row"
+          filters={definition.filters}
+          values={view.filters}
+          onChange={(filters) => onViewChange({ filters })}
+        />
+        {isNarrowed(view) ? (
+          <Button variant="quiet" size="compact" className="self-end" onClick={onClear}>
+            Clear all
+          </Button>
+        ) : null}
+      </div>
+      <CatalogueGrid {...props} shownIds={shownIds} onTotal={setTotal} handleRef={grid} />
+    </>
+  )
+}
+
+function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
+  const { definition, columns, view, onViewChange } = props
+  return (
+    <>
+      <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
+        <div className="flex items-center justify-between">
+          <h1 className="text-2xl">{definition.title}</h1>
+          <CatalogueActions definition={definition} onAdd={props.onAdd} />
+        </div>
+        <div className="flex items-center gap-2">
+          <SearchBox
+            value={view.q}
+            label={`Search ${definition.many}`}
+            onSearch={(q) => onViewChange({ q })}
+          />
+          <FilterDrawer
+            count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
+            onClear={() => onViewChange({ filters: {}, sort: '' })}
+          >
+            <SortSelect columns={columns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
+            <FilterFields
+              shape="column"
+              filters={definition.filters}
+              values={view.filters}
+              onChange={(filters) => onViewChange({ filters })}
+            />
+          </FilterDrawer>
+        </div>
+      </div>
+      <CatalogueList {...props} />
+    </>
+  )
+}
+
+/** Those the address names and that are there; the usual ones where it names none. */
+function shownColumnIds(
+  columns: readonly { id: string; isUsual: boolean }[],
+  asked: readonly string[] | null,
+): string[] {
+  const known = asked?.filter((id) => columns.some((column) => column.id === id)) ?? []
+  return known.length > 0 ? known : columns.filter((column) => column.isUsual).map((column) => column.id)
+}
+
 function CatalogueActions<Row extends CatalogueRow>({
   definition,
   onAdd,
@@ -145,11 +178,11 @@ function CatalogueActions<Row extends CatalogueRow>({
 }: {
   definition: CatalogueDefinition<Row>
   onAdd: () => void
-  children: ReactNode
+  children?: ReactNode
 }) {
   const mayKeep = useCan('keepCrib')
   return (
-    <div className="ml-auto flex items-center gap-2 sm:ml-0">
+    <div className="flex items-center gap-2">
       {children}
       {mayKeep ? (
         <>
@@ -168,7 +201,15 @@ function CatalogueActions<Row extends CatalogueRow>({
   )
 }
 
-function FilterDrawer({ count, children }: { count: number; children: ReactNode }) {
+function FilterDrawer({
+  count,
+  onClear,
+  children,
+}: {
+  count: number
+  onClear: () => void
+  children: ReactNode
+}) {
   const [isOpen, setIsOpen] = useState(false)
   return (
     <>
@@ -181,6 +222,9 @@ function FilterDrawer({ count, children }: { count: number; children: ReactNode 
           {children}
           <Button variant="primary" onClick={() => setIsOpen(false)}>
             Show the list
+          </Button>
+          <Button disabled={count === 0} onClick={onClear}>
+            Clear all
           </Button>
         </div>
       </Dialog>

@@ -3,23 +3,26 @@
 import { useCan } from '@/components/layout/shop-context'
 import { Button, ButtonLink } from '@/components/ui/button'
 import { StateSentence } from '@/components/ui/state-sentence'
+import { ApiError } from '@/lib/api-client'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
+import { type CatalogueView, isNarrowed } from './catalogue-view'
 
 export interface CatalogueStateProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
   state: 'loading' | 'failed' | 'empty'
-  /** Whether a search or a filter may be why there is nothing. */
-  isNarrowed: boolean
+  view: CatalogueView
   failure?: Error | null
   onRetry: () => void
   onClear: () => void
+  /** Begins with an address that says nothing: what it said could not be read. */
+  onReset: () => void
   onAdd: () => void
 }
 
 /** What stands where the rows would: loading, failed, nothing found or nothing there, each with its next step. */
 export function CatalogueState<Row extends CatalogueRow>(props: CatalogueStateProps<Row>) {
-  const { definition, state, isNarrowed, failure, onRetry, onClear, onAdd } = props
+  const { definition, state, view, failure, onRetry, onClear, onAdd } = props
   const mayKeep = useCan('keepCrib')
   if (state === 'loading') return <StateSentence sentence={`Loading the ${definition.many} …`} />
   if (state === 'failed')
@@ -28,11 +31,14 @@ export function CatalogueState<Row extends CatalogueRow>(props: CatalogueStatePr
         sentence={`The ${definition.many} could not be loaded. ${failure?.message ?? 'The server did not answer.'}`}
       >
         <Button onClick={onRetry}>Try again</Button>
+        {failure instanceof ApiError && failure.code === 'wrong-shape' ? (
+          <Button onClick={props.onReset}>Show the whole list</Button>
+        ) : null}
       </StateSentence>
     )
-  if (isNarrowed)
+  if (isNarrowed(view))
     return (
-      <StateSentence sentence={`No ${definition.one} matches this search and these filters.`}>
+      <StateSentence sentence={nothingFound(definition.one, view)}>
         <Button onClick={onClear}>Clear the search and filters</Button>
       </StateSentence>
     )
@@ -48,4 +54,11 @@ export function CatalogueState<Row extends CatalogueRow>(props: CatalogueStatePr
       <Button onClick={onAdd}>Add a {definition.one}</Button>
     </StateSentence>
   )
+}
+
+function nothingFound(one: string, { q, filters }: CatalogueView): string {
+  if (q === '') return `No ${one} passes these filters.`
+  return Object.keys(filters).length === 0
+    ? `No ${one} matches “${q}”.`
+    : `No ${one} that passes these filters matches “${q}”.`
 }

@@ -6,7 +6,6 @@ import { buttonClass } from '@/components/ui/button'
 
 export interface ChoosableColumn {
   id: string
-  heading: string
   name: string
 }
 
@@ -118,9 +117,6 @@ function ColumnCheck({
         onChange={onToggle}
       />
       <span className="min-w-0 flex-1 truncate">{column.name}</span>
-      {column.heading === column.name ? null : (
-        <span className="text-ink-soft text-xs">{column.heading}</span>
-      )}
     </label>
   )
 }

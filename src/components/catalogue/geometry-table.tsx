@@ -23,18 +23,18 @@ export function GeometryTable<Row extends CatalogueRow>({
       <table className="w-full">
         <thead className="sr-only">
           <tr>
-            <th scope="col">Dimension</th>
             <th scope="col">Symbol</th>
+            <th scope="col">Dimension</th>
             <th scope="col">Value</th>
           </tr>
         </thead>
         <tbody>
           {facts.map((fact) => (
             <tr key={fact.path} className="border-hairline border-b">
+              <td className={`${cellClass} text-ink-soft w-14 text-sm`}>{fact.symbol}</td>
               <th scope="row" className={`${cellClass} text-left font-normal`}>
                 {fact.label}
               </th>
-              <td className={`${cellClass} text-ink-soft text-sm`}>{fact.symbol}</td>
               <td className={`${cellClass} text-right font-semibold`}>{fact.text}</td>
             </tr>
           ))}

@@ -5,6 +5,7 @@ import { useState } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
+import type { LengthUnit } from '@/core/units/length-unit'
 import { useItemFits } from '@/hooks/use-item'
 import { itemPagePath } from '@/lib/catalogue-paths'
 import { formatLength } from '@/lib/format-length'
@@ -58,6 +59,11 @@ function FitsList({ itemId, kind }: { itemId: string; kind: CatalogueKind }) {
       </h3>
       {total === 0 ? null : (
         <table className="w-full table-fixed">
+          <colgroup>
+            <col className="w-[34%]" />
+            <col />
+            <col className="w-18" />
+          </colgroup>
           <thead className="sr-only">
             <tr>
               <th scope="col">Code</th>
@@ -85,7 +91,7 @@ function FitsRow({ row }: { row: FitsItem }) {
   const { unit } = useShop()
   return (
     <tr className="border-hairline border-b align-baseline">
-      <th scope="row" className={`${cellClass} w-[38%] truncate text-left font-normal`}>
+      <th scope="row" className={`${cellClass} truncate text-left font-normal`}>
         <Link
           href={itemPagePath(row.kind, row.id)}
           prefetch={false}
@@ -94,8 +100,8 @@ function FitsRow({ row }: { row: FitsItem }) {
           {row.code}
         </Link>
       </th>
-      <td className={`${cellClass} text-sm`}>{fitWords(row, (mm) => formatLength(mm, unit))}</td>
-      <td className={`${cellClass} w-20 text-right whitespace-nowrap`}>
+      <td className={`${cellClass} text-sm`}>{fitWords(row, unit)}</td>
+      <td className={`${cellClass} text-right whitespace-nowrap`}>
         <StockWord stock={{ onHand: row.onHand, isLow: false }} className="text-sm" /> {row.onHand}
       </td>
     </tr>
@@ -103,14 +109,16 @@ function FitsRow({ row }: { row: FitsItem }) {
 }
 
 /** What makes it fit; where in a collet's range the shank sits, since the small end grips worst. */
-function fitWords(row: FitsItem, length: (mm: number) => string): string {
+function fitWords(row: FitsItem, unit: LengthUnit): string {
+  const length = (mm: number) => formatLength(mm, unit)
   const parts: string[] = []
   if (row.series) parts.push(row.series)
   if (row.minimumMm !== null && row.maximumMm !== null)
-    parts.push(`${length(row.minimumMm)} to ${length(row.maximumMm)}`)
+    parts.push(`${formatLength(row.minimumMm, unit, { withUnit: false })} to ${length(row.maximumMm)}`)
   if (row.boreDiameterMm !== null) parts.push(`bore ${length(row.boreDiameterMm)}`)
   if (row.shankDiameterMm !== null) parts.push(`shank ${length(row.shankDiameterMm)}`)
   if (row.placeInRange !== null) parts.push(rangeWords(row.placeInRange))
+  if (row.kind !== 'collet' && row.description) parts.push(row.description)
   return parts.join(' · ')
 }
 

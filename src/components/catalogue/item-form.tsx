@@ -28,6 +28,10 @@ export interface ItemFormProps<Row extends CatalogueRow> {
   onDirtyChange: (isDirty: boolean) => void
 }
 
+/** A field that gets the focus stands clear of the heading, of the drawing that stays in sight, and of the buttons. */
+const formClass =
+  'flex flex-col gap-5 [&_:is(input,select,textarea)]:scroll-mb-28 [&_:is(input,select,textarea)]:scroll-mt-24 [@media(min-height:50rem)_and_(min-width:40rem)]:[&_:is(input,select,textarea)]:scroll-mt-[28rem]'
+
 type Form = UseFormReturn<FieldValues, unknown, FieldValues>
 
 interface Stale<Row> {
@@ -68,11 +72,7 @@ export function ItemForm<Row extends CatalogueRow>(props: ItemFormProps<Row>) {
   }
 
   return (
-    <form
-      noValidate
-      onSubmit={form.handleSubmit((body) => saving.save(body, base))}
-      className="flex flex-col gap-5 [&_:is(input,select,textarea)]:scroll-mt-24 [&_:is(input,select,textarea)]:scroll-mb-28"
-    >
+    <form noValidate onSubmit={form.handleSubmit((body) => saving.save(body, base))} className={formClass}>
       {stale && base ? (
         <StaleNotice
           fields={staleFields(
@@ -198,7 +198,7 @@ function FormDrawing<Row extends CatalogueRow>({
   const checked = definition.form.requestSchema.safeParse({ ...body, code: body.code || '–' })
   const drawing: ReactNode = checked.success ? definition.form.draw(checked.data as Row) : null
   return (
-    <div className="min-h-40">
+    <div className="bg-sheet [@media(min-height:50rem)_and_(min-width:40rem)]:sticky top-[4.5rem] z-5 -mt-4 pt-4 pb-1">
       {drawing ?? <NoDrawing reason="The drawing appears here as soon as the dimensions make a whole." />}
     </div>
   )
