@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { cutterProblems } from '@/core/catalogue/cutter-problems'
+import { withPrintedBallRadius } from '@/core/catalogue/printed-ball-radius'
 import { cutterForms, substrates } from '@/core/tooling'
 import { countSchema, distanceMmSchema, lengthMmSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
@@ -51,9 +52,9 @@ const cutterGeometryFields = {
 const cutterFieldsSchema = z.object({ ...itemFields, ...cutterGeometryFields })
 
 /** Members it does not know are ignored, so a row as read may be sent back; so for every kind of item. */
-export const createCutterRequestSchema = cutterFieldsSchema.superRefine((cutter, context) =>
-  addProblems(context, cutterProblems(cutter)),
-)
+export const createCutterRequestSchema = cutterFieldsSchema
+  .transform(withPrintedBallRadius)
+  .superRefine((cutter, context) => addProblems(context, cutterProblems(cutter)))
 export type CreateCutterRequest = z.output<typeof createCutterRequestSchema>
 
 /** Absent leaves alone, null clears; how the numbers stand to each other is asked of the changed row as a whole. */

@@ -39,5 +39,9 @@ export const updateShopSettingsRequestSchema = shopSettingsSchema
   .extend({ version: z.number().int(), reach: reachSettingsSchema.partial().optional() })
 export type UpdateShopSettingsRequest = z.output<typeof updateShopSettingsRequestSchema>
 
-export const shopSettingsResponseSchema = shopSettingsSchema.extend({ version: z.number() })
+/** The name is empty until the shop is set up. */
+export const shopSettingsResponseSchema = shopSettingsSchema.extend({
+  version: z.number(),
+  shopName: z.string(),
+})
 export type ShopSettingsResponse = z.infer<typeof shopSettingsResponseSchema>
