@@ -1,10 +1,5 @@
 import fc from 'fast-check'
-import {
-  defaultReachSettings,
-  type Feature,
-  type ReachRequest,
-  type WallFeature,
-} from '@/core/reach/types'
+import { defaultReachSettings, type Feature, type ReachRequest, type WallFeature } from '@/core/reach/types'
 import type {
   CutterGeometry,
   ExtensionGeometry,
