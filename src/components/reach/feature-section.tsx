@@ -5,9 +5,10 @@ import { memo } from 'react'
 import { Button } from '../ui/button'
 import { classNames } from '../ui/class-names'
 import { LengthField } from '../ui/length-field'
+import { FieldsFold } from './fields-fold'
 import { newRowKey, type ObstacleDraft, type ReachDraft } from './reach-draft'
 import { ReachFieldInput } from './reach-field-input'
-import type { InputsProps } from './reach-inputs'
+import { hasFaultIn, type InputsProps } from './reach-inputs'
 
 export interface FeatureSectionProps extends InputsProps {
   kind: ReachDraft['featureKind']
@@ -50,11 +51,11 @@ export const FeatureSection = memo(function FeatureSection(props: FeatureSection
   )
 })
 
+const limits = ['throughMm', 'openingWidthMm', 'insideCornerRadiusMm', 'floorRadiusMm', 'obstacles']
+
 function WallFields(props: FeatureSectionProps) {
-  const { texts, obstacles } = props
-  const hasLimits =
-    obstacles.length > 0 ||
-    ['throughMm', 'openingWidthMm', 'insideCornerRadiusMm', 'floorRadiusMm'].some((name) => texts[name])
+  const { texts, obstacles, errors } = props
+  const hasLimits = obstacles.length > 0 || limits.some((name) => texts[name])
   const field = (name: string) => <ReachFieldInput {...props} group="feature" name={name} />
   return (
     <>
@@ -63,20 +64,20 @@ function WallFields(props: FeatureSectionProps) {
         {field('draftDeg')}
         {field('tiltDeg')}
       </div>
-      <details open={hasLimits || undefined}>
-        <summary className="text-accent flex min-h-9 cursor-pointer items-center font-semibold pointer-coarse:min-h-11">
-          Opening, corners, obstacles
-        </summary>
-        <div className="flex flex-col gap-3 pt-2">
-          <div className="grid grid-cols-2 gap-3">
-            {field('openingWidthMm')}
-            {field('insideCornerRadiusMm')}
-            {field('floorRadiusMm')}
-            {field('throughMm')}
-          </div>
-          <Obstacles {...props} />
+      <FieldsFold
+        summary="Opening, corners, obstacles"
+        isOpenAtFirst={hasLimits}
+        hasFault={limits.some((name) => hasFaultIn(errors, `feature.${name}`))}
+        className="flex flex-col gap-3"
+      >
+        <div className="grid grid-cols-2 gap-3">
+          {field('openingWidthMm')}
+          {field('insideCornerRadiusMm')}
+          {field('floorRadiusMm')}
+          {field('throughMm')}
         </div>
-      </details>
+        <Obstacles {...props} />
+      </FieldsFold>
     </>
   )
 }

@@ -5,9 +5,10 @@ import { formatLength } from '@/lib/format-length'
 import { catalogueValue } from './catalogue-values'
 import type { CompiledCheck } from './compile-check'
 import { FeatureSection } from './feature-section'
+import { FieldsFold } from './fields-fold'
 import { isSlotUsed, type ReachDraft, type ToolDraft } from './reach-draft'
 import { ReachFieldInput } from './reach-field-input'
-import type { InputsProps } from './reach-inputs'
+import { hasFaultIn, type InputsProps } from './reach-inputs'
 import { ColletSection, CutterSection, ExtensionSection, HolderSection } from './tool-sections'
 import type { ReachCheck } from './use-reach-check'
 import { useToolDraft } from './use-reach-check'
@@ -65,24 +66,27 @@ const CheckFields = memo(function CheckFields({ texts, settings, errors, ...rest
   const fields = { ...rest, errors, texts, group: 'check' as const }
   return (
     <section aria-labelledby="reach-check" className="border-hairline border-t px-4 py-3">
-      <details open={Object.keys(texts).some((name) => name !== 'stickOutMm') || undefined}>
-        <summary className="flex min-h-9 cursor-pointer items-center text-lg pointer-coarse:min-h-11">
-          <h2 id="reach-check">Clearances and side load</h2>
-        </summary>
-        <div className="grid grid-cols-2 gap-3 pt-2">
-          <ReachFieldInput
-            {...fields}
-            name="clearanceShankMm"
-            hint={`Blank: ${formatLength(settings.shankClearanceMm, reading.unit)}, the shop’s`}
-          />
-          <ReachFieldInput
-            {...fields}
-            name="clearanceHolderMm"
-            hint={`Blank: ${formatLength(settings.holderClearanceMm, reading.unit)}, the shop’s`}
-          />
-          <ReachFieldInput {...fields} name="sideLoadN" />
-        </div>
-      </details>
+      <h2 id="reach-check" className="text-lg">
+        Given besides
+      </h2>
+      <FieldsFold
+        summary="Clearances and side load"
+        isOpenAtFirst={Object.keys(texts).some((name) => name !== 'stickOutMm')}
+        hasFault={hasFaultIn(errors, 'clearances') || hasFaultIn(errors, 'sideLoadN')}
+        className="grid grid-cols-2 gap-3"
+      >
+        <ReachFieldInput
+          {...fields}
+          name="clearanceShankMm"
+          hint={`Blank: ${formatLength(settings.shankClearanceMm, reading.unit)}, the shop’s`}
+        />
+        <ReachFieldInput
+          {...fields}
+          name="clearanceHolderMm"
+          hint={`Blank: ${formatLength(settings.holderClearanceMm, reading.unit)}, the shop’s`}
+        />
+        <ReachFieldInput {...fields} name="sideLoadN" />
+      </FieldsFold>
     </section>
   )
 })

@@ -11,3 +11,8 @@ export interface InputsProps {
   errors: FieldErrors
   onChange: Dispatch<DraftChange>
 }
+
+/** Whether a fault lies in a place or in anything inside it. */
+export function hasFaultIn(errors: FieldErrors, place: string): boolean {
+  return Object.keys(errors).some((path) => path === place || path.startsWith(`${place}.`))
+}

@@ -27,6 +27,7 @@ const angleStepDeg = 0.5
 const draftLimitDeg = 59.5
 const tiltLimitDeg = 85
 const leverPx = 60
+const deepestMm = 1000
 
 /** Depths are stepped by half a millimetre or two hundredths of an inch. */
 export function depthStepMm(unit: LengthUnit): number {
@@ -104,7 +105,7 @@ function DepthHandle({ scene, layout, unit, onDepth, onHold }: SectionHandlesPro
       value={depthMm}
       valueText={sentenceLength(depthMm, unit)}
       minimum={step}
-      maximum={1000}
+      maximum={Math.max(deepestMm, depthMm)}
       step={step}
       valueAfter={({ y }) => depthMm - y / layout.pxPerMm}
       onChange={onDepth}

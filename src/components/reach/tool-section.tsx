@@ -1,10 +1,11 @@
 'use client'
 
 import type { ReactNode } from 'react'
+import { FieldsFold } from './fields-fold'
 import { ItemPicker } from './item-picker'
 import { PickedItem } from './picked-item'
 import type { ToolSlot } from './reach-fields'
-import type { InputsProps } from './reach-inputs'
+import { hasFaultIn, type InputsProps } from './reach-inputs'
 
 export interface ToolSectionProps extends InputsProps {
   slot: ToolSlot
@@ -26,6 +27,7 @@ export function ToolSection(props: ToolSectionProps) {
     title,
     pickedId,
     rows,
+    errors,
     loadError,
     reading,
     onChange,
@@ -62,12 +64,16 @@ export function ToolSection(props: ToolSectionProps) {
           onRemove={() => onChange({ type: 'pick', slot, id: null })}
         />
       )}
-      <details key={`${slot}-${isOpen}`} open={isOpen} className="group">
-        <summary className="text-accent flex min-h-9 cursor-pointer items-center font-semibold pointer-coarse:min-h-11">
-          {summary}
-        </summary>
-        <div className="grid grid-cols-2 gap-x-3 gap-y-3 pt-2">{children}</div>
-      </details>
+      <FieldsFold
+        // What is picked comes folded; what is to be typed stands open.
+        key={pickedId ?? 'typed'}
+        summary={summary}
+        isOpenAtFirst={isOpen}
+        hasFault={hasFaultIn(errors, slot)}
+        className="grid grid-cols-2 gap-x-3 gap-y-3"
+      >
+        {children}
+      </FieldsFold>
     </section>
   )
 }

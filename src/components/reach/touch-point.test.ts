@@ -83,6 +83,17 @@ describe('the cross of the first touch', () => {
     expect(limitPoint(scene, answer.limitedBy, answer.reachMm)).toEqual({ uMm: 5, hMm: 52 })
   })
 
+  it('is at the obstacle that is struck, not at a nearer one that is not', () => {
+    const obstacles = [
+      { setbackMm: 3, riseMm: 2 },
+      { setbackMm: 8, riseMm: 20 },
+    ]
+    const { scene, answer } = sceneOf({ kind: 'wall', depthMm: 15, obstacles }, necked, 45)
+    // The nut, 0.5 wider and lower, stands 44.5 above the tip: 24.5 deep on the one rising 20, 42.5 on the other.
+    expect(answer).toMatchObject({ limitedBy: 'nut', reachMm: 24.5 })
+    expect(limitPoint(scene, answer.limitedBy, answer.reachMm)).toEqual({ uMm: 8, hMm: 35 })
+  })
+
   it('is not drawn for a length that ends without touching', () => {
     const { scene } = sceneOf({ kind: 'wall', depthMm: 25 }, necked, 45)
     expect(limitPoint(scene, 'usableLength', 20)).toBeNull()

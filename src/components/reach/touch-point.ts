@@ -63,13 +63,45 @@ function widenedLines(scene: SectionScene, part: ToolPart, side: 1 | -1 = 1): [P
     })
 }
 
-/** What strikes an obstacle may do so on the way down: the place is shown at the obstacle's own edge. */
-function obstaclePoint({ at }: SectionScene, part: ToolPart, tipDepthMm: number): PartPoint | null {
-  if (at.kind === 'hole' || at.obstacles.length === 0) return null
+/** What strikes an obstacle may do so on the way down: the place is shown at that obstacle's own edge. */
+function obstaclePoint(scene: SectionScene, part: ToolPart, tipDepthMm: number): PartPoint | null {
+  const { at } = scene
+  if (at.kind === 'hole') return null
+  const lines = checkedLines(scene, part, scene.clearances.holderMm)
+  const struck = at.obstacles.filter(({ setbackMm, riseMm }) => {
+    const zMm = tipDepthMm + riseMm
+    const clearMm = at.standOffMm + setbackMm + tipDepthMm * at.tanDraft
+    return lines.some((line) => radiusAt(line, zMm) >= clearMm - sameMm)
+  })
   const topMm = topFaceMm(at)
-  const edges = at.obstacles.map(({ setbackMm, riseMm }) => ({
-    uMm: topMm * at.tanDraft + setbackMm,
-    hMm: topMm + riseMm,
-  }))
-  return part === 'spindle' && tipDepthMm > topMm ? null : leftmost(edges)
+  return leftmost(
+    struck.map(({ setbackMm, riseMm }) => ({ uMm: topMm * at.tanDraft + setbackMm, hMm: topMm + riseMm })),
+  )
+}
+
+interface WidenedLine {
+  z0: number
+  r0: number
+  z1: number
+  r1: number
+}
+
+function checkedLines(scene: SectionScene, name: ToolPart, outMm: number): WidenedLine[] {
+  return scene.checked
+    .filter(({ part }) => part.part === name)
+    .flatMap(({ part, liftMm }) =>
+      part.lines.map((line) => ({
+        z0: line.z0 + liftMm - outMm,
+        r0: widenedStart(line, outMm),
+        z1: line.z1 + liftMm - outMm,
+        r1: line.r1 + outMm,
+      })),
+    )
+}
+
+/** The widest of a line at a height; less than nothing where it isn't there. */
+function radiusAt({ z0, r0, z1, r1 }: WidenedLine, zMm: number): number {
+  if (zMm < z0 - sameMm || zMm > z1 + sameMm) return -1
+  if (z1 - z0 < sameMm) return Math.max(r0, r1)
+  return r0 + ((zMm - z0) / (z1 - z0)) * (r1 - r0)
 }

@@ -1,36 +1,45 @@
 'use client'
 
-import { type Dispatch, useEffect, useReducer, useRef } from 'react'
+import { type Dispatch, useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { changedDraft, type DraftChange, type ReachDraft } from './reach-draft'
 import { draftInUnit, draftQuery, queryDraft } from './reach-query'
 import type { Reading } from './read-field'
 
 const restMs = 250
 
+interface HeldDraft {
+  draft: ReachDraft
+  /** How its texts are meant. */
+  reading: Reading
+}
+
+/** The draft in the reader's unit, before anything is worked out: a bare number never changes its meaning. */
+function draftRead(held: HeldDraft, reading: Reading): ReachDraft {
+  return held.reading === reading ? held.draft : draftInUnit(held.draft, held.reading, reading)
+}
+
 /**
  * The draft, kept in the address bar so that it can be shared and read again. Another query, from a link of an item or
  * of a colleague, replaces it; another unit writes the same figures anew.
  */
 export function useDraftInAddress(query: string, reading: Reading): [ReachDraft, Dispatch<DraftChange>] {
-  const [draft, change] = useReducer(changedDraft, null, () => queryDraft(query, reading))
+  const [held, setHeld] = useState<HeldDraft>(() => ({ draft: queryDraft(query, reading), reading }))
   const written = useRef(query)
-  const lastReading = useRef(reading)
-
-  useEffect(() => {
-    if (lastReading.current === reading) return
-    change({ type: 'replace', draft: draftInUnit(draft, lastReading.current, reading) })
-    lastReading.current = reading
-  }, [draft, reading])
+  const draft = useMemo(() => draftRead(held, reading), [held, reading])
+  const change = useCallback(
+    (made: DraftChange) =>
+      setHeld((before) => ({ draft: changedDraft(draftRead(before, reading), made), reading })),
+    [reading],
+  )
 
   useEffect(() => {
     if (isSameQuery(query, written.current)) return
     written.current = query
-    change({ type: 'replace', draft: queryDraft(query, reading) })
+    setHeld({ draft: queryDraft(query, reading), reading })
   }, [query, reading])
 
   useEffect(() => {
     const timer = setTimeout(() => {
-      if (lastReading.current !== reading) return
       const next = draftQuery(draft, reading)
       if (isSameQuery(next, written.current)) return
       written.current = next
