@@ -1,3 +1,4 @@
+import { withPrintedBallRadius } from '@/core/catalogue/printed-ball-radius'
 import { CoreInputError } from '@/core/core-input-error'
 import type { CutterForm, CutterGeometry } from '@/core/tooling'
 import { notNegativeOr, positive, positiveOrNull, radians, tangent } from './checked-number'
@@ -95,7 +96,7 @@ export function cutterDimensions(cutter: CutterGeometry): CutterDimensions {
 
 function cornerRadius(cutter: CutterGeometry, radiusMm: number, assumptions: CutterAssumption[]): number {
   const path = 'cutter.cornerRadiusMm'
-  const given = notNegativeOr(cutter.cornerRadiusMm, null, path, 'The corner radius')
+  const given = notNegativeOr(withPrintedBallRadius(cutter).cornerRadiusMm, null, path, 'The corner radius')
   if (given !== null && given > radiusMm + printedRoundingMm)
     throw new CoreInputError('corner-radius-over-half', path, 'The corner radius is over half the diameter.')
   if (cutter.form === 'cornerRadius' && given === null)
