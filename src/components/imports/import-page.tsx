@@ -1,0 +1,145 @@
+'use client'
+
+import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { useState } from 'react'
+import { cancelImport, commitImport, recheckImport, useImport } from '@/hooks/use-import'
+import { isUnderWay } from '@/hooks/use-imports'
+import { faultSentence } from '@/lib/field-faults'
+import type { ImportResponse } from '@/schemas/import'
+import { importKindLabels } from '@/schemas/import-fields'
+import { PageHeading } from '../layout/page-heading'
+import { ButtonLink } from '../ui/button'
+import { Notice } from '../ui/notice'
+import { CancelDialog } from './cancel-dialog'
+import { ColumnsTable } from './columns-table'
+import { CommitBar, RejectsLink } from './commit-bar'
+import { ImportProgress } from './import-progress'
+import { ImportTabs, type ImportView, viewsOf } from './import-tabs'
+import { countText, formatWords, sizeText } from './import-words'
+import { OutcomeSentence } from './outcome-sentence'
+import { StagedRows } from './staged-rows'
+import { WarningsTable } from './warnings-table'
+
+/** One import from the upload to its end: progress, verdict, decision, and every row and column behind it. */
+export function ImportPage({ initial }: { initial: ImportResponse }) {
+  const { found, error, refresh } = useImport(initial)
+  const [failure, setFailure] = useState<string | null>(null)
+  const [isBusy, setIsBusy] = useState(false)
+  const [isAsking, setIsAsking] = useState(false)
+
+  async function run(work: () => Promise<void>) {
+    setIsBusy(true)
+    setFailure(null)
+    try {
+      await work()
+    } catch (fault) {
+      setFailure(faultSentence(fault))
+    }
+    await refresh()
+    setIsBusy(false)
+  }
+
+  const handleCancel = () => run(() => cancelImport(found.id))
+  return (
+    <>
+      <PageHeading title={<span className="break-all">{found.fileName}</span>} note={headingNote(found)}>
+        <ButtonLink href="/imports" size="compact" variant="quiet">
+          All imports
+        </ButtonLink>
+      </PageHeading>
+      {(failure ?? error) ? (
+        <Notice kind="collision" isAnnounced className="mx-4 mb-3 lg:mx-6">
+          {failure ?? faultSentence(error)}
+        </Notice>
+      ) : null}
+      <div className="border-ink bg-sheet flex flex-1 flex-col border-t">
+        {isUnderWay(found) ? (
+          <ImportProgress found={found} isCancelling={isBusy} onCancel={handleCancel} />
+        ) : (
+          <>
+            <div className="flex flex-col gap-3 px-4 py-4 lg:px-6">
+              <OutcomeSentence found={found} />
+              <KeyNotice found={found} />
+              {found.state === 'checked' ? (
+                <CommitBar
+                  found={found}
+                  isBusy={isBusy}
+                  onCommit={(rejects) => run(() => commitImport(found.id, rejects))}
+                  onCancel={() => setIsAsking(true)}
+                />
+              ) : null}
+              {found.state === 'committed' && found.rejectedCount > 0 ? <RejectsLink id={found.id} /> : null}
+            </div>
+            <Views
+              found={found}
+              isBusy={isBusy}
+              onRecheck={(change) => run(() => recheckImport(found.id, change))}
+            />
+          </>
+        )}
+      </div>
+      <CancelDialog
+        isOpen={isAsking}
+        onClose={() => setIsAsking(false)}
+        onCancelImport={() => {
+          setIsAsking(false)
+          void handleCancel()
+        }}
+      />
+    </>
+  )
+}
+
+function headingNote(found: ImportResponse): string {
+  const rows = found.rows === null ? null : `${countText(found.rows)} rows`
+  return [importKindLabels[found.kind], rows, sizeText(found.fileSizeBytes), formatWords(found)]
+    .filter(Boolean)
+    .join(', ')
+}
+
+/** Without a column that names the item no row can be taken: said once, where it can be set. */
+function KeyNotice({ found }: { found: ImportResponse }) {
+  const fields = new Set(found.columns.map((column) => column.field))
+  const hasKey = fields.has('code') || (fields.has('maker') && fields.has('partNumber'))
+  if (found.state !== 'checked' || hasKey || found.columns.length === 0) return null
+  return (
+    <Notice kind="caution">
+      No column gives the own code, or maker and part number, so no row says which item it means. Say under
+      Columns which one does, and check again.
+    </Notice>
+  )
+}
+
+function Views({
+  found,
+  isBusy,
+  onRecheck,
+}: {
+  found: ImportResponse
+  isBusy: boolean
+  onRecheck: Parameters<typeof ColumnsTable>[0]['onRecheck']
+}) {
+  const router = useRouter()
+  const pathname = usePathname()
+  const asked = useSearchParams().get('show')
+  const views = viewsOf(found)
+  const shown = views.find(({ view }) => view === asked)?.view ?? views[0]?.view
+  if (!shown) return null
+  const handleShow = (view: ImportView) => router.replace(`${pathname}?show=${view}`, { scroll: false })
+  return (
+    <ImportTabs views={views} shown={shown} onShow={handleShow}>
+      {shown === 'columns' ? (
+        <ColumnsTable
+          key={found.checkedAt}
+          found={found}
+          isBusy={isBusy}
+          {...(found.state === 'checked' && onRecheck ? { onRecheck } : {})}
+        />
+      ) : shown === 'warnings' ? (
+        <WarningsTable found={found} />
+      ) : (
+        <StagedRows key={shown} found={found} outcome={shown} />
+      )}
+    </ImportTabs>
+  )
+}

@@ -1,0 +1,40 @@
+import type { ImportResponse } from '@/schemas/import'
+import { Button } from '../ui/button'
+import { countText } from './import-words'
+
+export interface ImportProgressProps {
+  found: ImportResponse
+  isCancelling: boolean
+  onCancel: () => void
+}
+
+/** What the worker is at, how far it is, and the way out. */
+export function ImportProgress({ found, isCancelling, onCancel }: ImportProgressProps) {
+  const isReading = found.state === 'reading'
+  const done = isReading && found.rows ? found.rowsRead / found.rows : null
+  return (
+    <section aria-label="Progress" className="max-w-3xl px-4 py-6 lg:px-6">
+      <p className="text-xl font-semibold" role="status">
+        {isReading ? readingSentence(found) : 'Putting it into the catalogue …'}
+      </p>
+      <progress
+        aria-label={isReading ? 'Rows read' : 'Committing'}
+        className="accent-accent mt-3 h-3 w-full"
+        {...(done === null ? {} : { value: done, max: 1 })}
+      />
+      <p className="text-ink-soft mt-2 text-[0.9375rem]">
+        {isReading
+          ? 'You may leave this page; the check goes on and waits for you.'
+          : 'All of it goes in at once, or nothing. Cancelling now leaves the catalogue as it was.'}
+      </p>
+      <Button variant="danger" className="mt-4" disabled={isCancelling} onClick={onCancel}>
+        {isCancelling ? 'Cancelling …' : 'Cancel the import'}
+      </Button>
+    </section>
+  )
+}
+
+function readingSentence({ rows, rowsRead }: ImportResponse): string {
+  if (rows === null) return 'Looking at the file …'
+  return `Checked ${countText(rowsRead)} of ${countText(rows)} rows`
+}

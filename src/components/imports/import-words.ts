@@ -1,0 +1,57 @@
+import type { ImportListRow, ImportState } from '@/schemas/import'
+import type { ImportKind } from '@/schemas/import-fields'
+
+export const stateWords: Readonly<Record<ImportState, string>> = {
+  reading: 'Being read',
+  checked: 'Checked, waiting for you',
+  committing: 'Being committed',
+  committed: 'Committed',
+  failed: 'Failed',
+  cancelled: 'Cancelled',
+}
+
+export const kindWords: Readonly<Record<ImportKind, { many: string; page: string }>> = {
+  cutters: { many: 'cutters', page: '/cutters' },
+  holders: { many: 'holders', page: '/holders' },
+  collets: { many: 'collets', page: '/collets' },
+  extensions: { many: 'extensions', page: '/extensions' },
+  stock: { many: 'bins of opening stock', page: '/locations' },
+}
+
+const encodingNames: Readonly<Record<string, string>> = {
+  'utf-8': 'UTF-8',
+  'utf-16le': 'UTF-16',
+  'utf-16be': 'UTF-16',
+  'windows-1252': 'Windows-1252',
+}
+const delimiterNames: Readonly<Record<string, string>> = { ',': 'commas', ';': 'semicolons', '\t': 'tabs' }
+
+export function countText(count: number): string {
+  return count.toLocaleString('en')
+}
+
+/** What the reader found of the file: `Windows-1252, semicolons, bare numbers in inches`. */
+export function formatWords(found: Pick<ImportListRow, 'encoding' | 'delimiter' | 'unit' | 'kind'>): string {
+  const words = [
+    encodingNames[found.encoding ?? ''],
+    delimiterNames[found.delimiter ?? ''],
+    found.kind === 'stock' ? undefined : `bare numbers in ${found.unit === 'in' ? 'inches' : 'millimetres'}`,
+  ]
+  return words.filter(Boolean).join(', ')
+}
+
+/** What a checked import would do, or a committed one did: `18 added, 3 changed, 5 left as they are, 2 rejected`. */
+export function outcomeWords(found: ImportListRow): string {
+  const parts = [
+    found.added > 0 ? `${countText(found.added)} added` : null,
+    found.changed > 0 ? `${countText(found.changed)} changed` : null,
+    found.unchanged > 0 ? `${countText(found.unchanged)} left as they are` : null,
+    found.rejectedCount > 0 ? `${countText(found.rejectedCount)} rejected` : null,
+  ].filter(Boolean)
+  return parts.length > 0 ? parts.join(', ') : 'nothing'
+}
+
+export function sizeText(bytes: number): string {
+  if (bytes < 1024) return `${bytes} bytes`
+  return bytes < 1024 * 1024 ? `${Math.round(bytes / 1024)} KB` : `${(bytes / 1024 / 1024).toFixed(1)} MB`
+}

@@ -1,0 +1,27 @@
+import useSWR from 'swr'
+import { callApi, getJson } from '@/lib/api-client'
+import type { ImportResponse, RecheckImportRequest, RejectChoice } from '@/schemas/import'
+import { isUnderWay } from './use-imports'
+
+const whileBusyMs = 400
+
+/** One import, followed while the worker is at it. */
+export function useImport(initial: ImportResponse) {
+  const { data, error, mutate } = useSWR<ImportResponse, Error>(`/api/imports/${initial.id}`, getJson, {
+    fallbackData: initial,
+    refreshInterval: (latest) => (latest && isUnderWay(latest) ? whileBusyMs : 0),
+  })
+  return { found: data ?? initial, error, refresh: mutate }
+}
+
+export async function commitImport(id: string, rejects: RejectChoice): Promise<void> {
+  await callApi('POST', `/api/imports/${id}/commit`, { body: { rejects } })
+}
+
+export async function recheckImport(id: string, change: RecheckImportRequest): Promise<void> {
+  await callApi('POST', `/api/imports/${id}/check`, { body: change })
+}
+
+export async function cancelImport(id: string): Promise<void> {
+  await callApi('DELETE', `/api/imports/${id}`)
+}
