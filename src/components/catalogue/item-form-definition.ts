@@ -29,6 +29,7 @@ export interface ItemFormDefinition<Row> {
   /** Choices a new item begins with. */
   blank: FieldValues
   requestSchema: z.ZodType
-  /** The drawing of what is typed, as far as it can be. */
-  draw: (item: Pick<Row, Extract<keyof Row, string>> | Row) => ReactNode
+  draw: (row: Row) => ReactNode
+  /** What was read so far with what a drawing can do without filled in, so that it appears early while typing. */
+  completeForDrawing?: (body: FieldValues) => FieldValues
 }

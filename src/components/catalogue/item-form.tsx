@@ -1,6 +1,6 @@
 'use client'
 
-import { type ReactNode, useEffect, useMemo, useState } from 'react'
+import { useEffect, useMemo, useState } from 'react'
 import { type Control, type FieldValues, type UseFormReturn, useForm, useWatch } from 'react-hook-form'
 import { toast } from 'sonner'
 import { NoDrawing } from '@/components/drawing/no-drawing'
@@ -195,11 +195,17 @@ function FormDrawing<Row extends CatalogueRow>({
 }) {
   const values = useWatch({ control })
   const { body } = readTyped(definition.form, values, manner)
-  const checked = definition.form.requestSchema.safeParse({ ...body, code: body.code || '–' })
-  const drawing: ReactNode = checked.success ? definition.form.draw(checked.data as Row) : null
+  const completed = { ...(definition.form.completeForDrawing?.(body) ?? body), code: body.code || '–' }
+  const checked = definition.form.requestSchema.safeParse(completed)
+  // Faults the geometry itself has come last and under this code; before them something is not typed yet.
+  const fault = checked.success ? null : checked.error.issues[0]
+  const reason =
+    fault?.code === 'custom'
+      ? fault.message
+      : 'The drawing appears here as soon as the dimensions make a whole.'
   return (
     <div className="bg-sheet [@media(min-height:50rem)_and_(min-width:40rem)]:sticky top-[4.5rem] z-5 -mt-4 pt-4 pb-1">
-      {drawing ?? <NoDrawing reason="The drawing appears here as soon as the dimensions make a whole." />}
+      {checked.success ? definition.form.draw(checked.data as Row) : <NoDrawing reason={reason} />}
     </div>
   )
 }

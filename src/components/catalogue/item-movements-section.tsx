@@ -112,7 +112,10 @@ function MovementRow({
         <span className="text-ink-soft text-sm sm:hidden">to </span>
         <End end={movement.to} condition={conditionNames[movement.toCondition]} />
       </td>
-      <td className={`${cellClass} ${phoneCell}`}>{movement.actorName}</td>
+      <td className={`${cellClass} ${phoneCell}`}>
+        <span className="text-ink-soft text-sm sm:hidden">by </span>
+        {movement.actorName}
+      </td>
       <td className={`${cellClass} ${phoneCell} text-ink-soft max-w-64 text-sm`}>{movement.note}</td>
       <td className={`${cellClass} ${phoneCell} text-right print:hidden`}>
         {movement.canReverse ? (

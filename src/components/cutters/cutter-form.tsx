@@ -18,9 +18,7 @@ const mayHaveNeck = (values: FieldValues) => !neckless(values)
 export const cutterForm: ItemFormDefinition<CutterResponse> = {
   requestSchema: createCutterRequestSchema,
   blank: { form: 'square', substrate: 'carbide' },
-  draw: (cutter) => (
-    <CutterDrawing code={'code' in cutter ? cutter.code : ''} cutter={cutter as CutterResponse} />
-  ),
+  draw: (cutter) => <CutterDrawing code={cutter.code} cutter={cutter} />,
   groups: [
     identityGroup,
     {

@@ -22,7 +22,8 @@ export function FluteLines({ parts, toSheet, fluteCount, diameterMm, helixDeg }:
   const endMm = strokes.at(-1)?.toZMm ?? 0
   const turnPerMm = (2 * Math.tan((helixDeg * Math.PI) / 180)) / diameterMm
   const paths = Array.from({ length: fluteCount }, (_, flute) => {
-    const phase = (2 * Math.PI * (flute + 0.25)) / fluteCount
+    // Straight edges start off the axis, whose own line would hide one.
+    const phase = (2 * Math.PI * (flute + (helixDeg === 0 ? 0.35 : 0.25))) / fluteCount
     let isDrawing = false
     let path = ''
     for (let index = 0; index <= samples; index++) {

@@ -1,3 +1,4 @@
+import { withWholeSegments } from '@/components/catalogue/complete-segments'
 import { boreFields, identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
 import { createExtensionRequestSchema, type ExtensionResponse } from '@/schemas/extension'
@@ -7,6 +8,7 @@ export const extensionForm: ItemFormDefinition<ExtensionResponse> = {
   requestSchema: createExtensionRequestSchema,
   blank: { bore: { kind: 'collet' } },
   draw: (extension) => <ExtensionDrawing code={extension.code} extension={extension} />,
+  completeForDrawing: (body) => withWholeSegments(body, 'projectionMm'),
   groups: [
     identityGroup,
     {

@@ -1,4 +1,5 @@
 import type { FieldValues } from 'react-hook-form'
+import { withWholeSegments } from '@/components/catalogue/complete-segments'
 import { boreFields, identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
 import { createHolderRequestSchema, type HolderResponse } from '@/schemas/holder'
@@ -10,6 +11,7 @@ export const holderForm: ItemFormDefinition<HolderResponse> = {
   requestSchema: createHolderRequestSchema,
   blank: { bore: { kind: 'collet' } },
   draw: (holder) => <HolderDrawing code={holder.code} holder={holder} />,
+  completeForDrawing: (body) => withWholeSegments(body, 'gaugeLengthMm'),
   groups: [
     identityGroup,
     {
