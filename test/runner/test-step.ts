@@ -22,14 +22,14 @@ export function runCheck(run: TestRun, script: string): Promise<Tally> {
 /** One of the projects in vitest.config.ts. */
 export function runVitest(run: TestRun, project: string): Promise<Tally> {
   const report = join(run.logFolder, `${project}.json`)
-  const argv = ['npx', 'vitest', 'run', '--project', project]
+  const argv = ['node_modules/.bin/vitest', 'run', '--project', project]
   argv.push('--reporter=default', '--reporter=json', `--outputFile.json=${report}`)
   return runTestStep(run, project, argv, run.environment, (exit) => tallyOfVitest(textOrNull(report), exit))
 }
 
 export function runPlaywright(run: TestRun): Promise<Tally> {
   const report = join(run.logFolder, 'browser.json')
-  const argv = ['npx', 'playwright', 'test', '--reporter=list,json']
+  const argv = ['node_modules/.bin/playwright', 'test', '--reporter=list,json']
   const environment = { ...run.environment, PLAYWRIGHT_JSON_OUTPUT_FILE: report }
   return runTestStep(run, 'browser', argv, environment, (exit) => tallyOfPlaywright(textOrNull(report), exit))
 }
