@@ -2,6 +2,7 @@
 
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
+import { cancelLabel } from './import-words'
 
 export interface CancelDialogProps {
   isOpen: boolean
@@ -22,7 +23,7 @@ export function CancelDialog({ isOpen, onClose, onCancelImport }: CancelDialogPr
         <p>The uploaded file and its check are dropped. The catalogue and the stock stay as they are.</p>
         <div className="flex flex-wrap gap-3">
           <Button variant="danger" onClick={onCancelImport}>
-            Cancel the import
+            {cancelLabel}
           </Button>
           <Button onClick={onClose}>Keep it</Button>
         </div>

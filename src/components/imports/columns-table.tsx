@@ -45,9 +45,11 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
     <div>
       <div className="flex flex-wrap items-end justify-between gap-3 px-4 py-3 lg:px-6">
         <p className="text-ink-soft max-w-[70ch] text-[0.9375rem]">
-          What you set here is kept by the shop when the import is committed, and known the next time.
+          {onRecheck
+            ? 'What you set here is kept by the shop when the import is committed, and known the next time.'
+            : 'How the columns of this file were read.'}
         </p>
-        {found.kind === 'stock' ? null : <FileUnit unit={unit} onChange={setUnit} isFixed={!onRecheck} />}
+        {found.kind === 'stock' || !onRecheck ? null : <FileUnit unit={unit} onChange={setUnit} />}
       </div>
       <table className="border-ink w-full border-t text-left text-[0.9375rem]">
         <thead className="border-ink border-b max-md:hidden">
@@ -56,6 +58,7 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
             <th scope="col">Samples</th>
             <th scope="col">Field</th>
             <th scope="col">Unit</th>
+            <th scope="col">How it is known</th>
           </tr>
         </thead>
         <tbody>
@@ -110,22 +113,13 @@ function mappingOf(
   )
 }
 
-function FileUnit({
-  unit,
-  onChange,
-  isFixed,
-}: {
-  unit: 'mm' | 'in'
-  onChange: (unit: 'mm' | 'in') => void
-  isFixed: boolean
-}) {
+function FileUnit({ unit, onChange }: { unit: 'mm' | 'in'; onChange: (unit: 'mm' | 'in') => void }) {
   return (
     <label className="flex items-center gap-2 text-[0.9375rem] font-semibold">
       <span className="whitespace-nowrap">Bare numbers in</span>
       <select
         className={controlClass}
         value={unit}
-        disabled={isFixed}
         onChange={(event) => onChange(event.target.value === 'in' ? 'in' : 'mm')}
       >
         <option value="mm">millimetres</option>
@@ -134,8 +128,6 @@ function FileUnit({
     </label>
   )
 }
-
-const originWords = { set: 'set here', kept: 'kept from last time', known: 'known by its heading' } as const
 
 interface ColumnRowProps {
   kind: ImportKind
@@ -148,15 +140,8 @@ interface ColumnRowProps {
 
 function ColumnRow({ kind, column, target, isChanged, isFixed, onChange }: ColumnRowProps) {
   const id = useId()
-  const type = importField(kind, target.field)?.type
-  const word =
-    target.field === ''
-      ? 'left out'
-      : isChanged
-        ? 'not checked yet'
-        : column.origin && originWords[column.origin]
   return (
-    <tr className="border-hairline border-b align-top max-md:grid max-md:grid-cols-[1fr_auto] max-md:gap-x-3 max-md:px-4 max-md:py-3 md:[&>td]:px-4 md:[&>td]:py-2 lg:[&>td]:px-6">
+    <tr className="border-hairline border-b align-middle max-md:grid max-md:grid-cols-[1fr_auto] max-md:gap-x-3 max-md:px-4 max-md:py-3 md:[&>td]:px-4 md:[&>td]:py-1 lg:[&>td]:px-6">
       <td id={id} className="font-semibold break-words max-md:col-span-2">
         {column.heading}
       </td>
@@ -164,41 +149,77 @@ function ColumnRow({ kind, column, target, isChanged, isFixed, onChange }: Colum
         {column.samples.join(' · ') || 'empty'}
       </td>
       <td className="md:w-80">
-        <select
-          aria-labelledby={id}
-          className={controlClass}
-          value={target.field}
-          disabled={isFixed}
-          onChange={(event) => onChange({ ...target, field: event.target.value })}
-        >
-          <option value="">Leave out</option>
-          {importFields[kind].map((field) => (
-            <option key={field.field} value={field.field}>
-              {field.symbol ? `${field.label} [${field.symbol}]` : field.label}
-            </option>
-          ))}
-        </select>
-        <span
-          className={target.field === '' && column.note ? 'text-caution text-sm' : 'text-ink-soft text-sm'}
-        >
-          {target.field === '' && column.note ? column.note : word}
-        </span>
+        {isFixed ? (
+          (importField(kind, target.field)?.label ?? <span className="text-ink-soft">left out</span>)
+        ) : (
+          <FieldSelect kind={kind} labelledBy={id} target={target} onChange={onChange} />
+        )}
       </td>
       <td className="md:w-36">
-        {type && hasLengthUnit(type) ? (
-          <select
-            aria-label={`Unit of ${column.heading}`}
-            className={controlClass}
-            value={target.unit}
-            disabled={isFixed}
-            onChange={(event) => onChange({ ...target, unit: event.target.value as Target['unit'] })}
-          >
-            <option value="">file’s</option>
-            <option value="mm">mm</option>
-            <option value="in">in</option>
-          </select>
-        ) : null}
+        <UnitSelect kind={kind} column={column} target={target} isFixed={isFixed} onChange={onChange} />
+      </td>
+      <td className="text-sm max-md:col-span-2 md:w-56">
+        <ColumnStanding column={column} target={target} isChanged={isChanged} />
       </td>
     </tr>
+  )
+}
+
+function FieldSelect({
+  kind,
+  labelledBy,
+  target,
+  onChange,
+}: Pick<ColumnRowProps, 'kind' | 'target' | 'onChange'> & { labelledBy: string }) {
+  return (
+    <select
+      aria-labelledby={labelledBy}
+      className={controlClass}
+      value={target.field}
+      onChange={(event) => onChange({ ...target, field: event.target.value })}
+    >
+      <option value="">Leave out</option>
+      {importFields[kind].map((field) => (
+        <option key={field.field} value={field.field}>
+          {field.symbol ? `${field.label} [${field.symbol}]` : field.label}
+        </option>
+      ))}
+    </select>
+  )
+}
+
+/** Of bare numbers in the column; fields that are no length have none. */
+function UnitSelect({ kind, column, target, isFixed, onChange }: Omit<ColumnRowProps, 'isChanged'>) {
+  const type = importField(kind, target.field)?.type
+  if (!type || !hasLengthUnit(type)) return null
+  if (isFixed) return target.unit === '' ? 'file’s unit' : target.unit
+  return (
+    <select
+      aria-label={`Unit of ${column.heading}`}
+      className={controlClass}
+      value={target.unit}
+      onChange={(event) => onChange({ ...target, unit: event.target.value as Target['unit'] })}
+    >
+      <option value="">file’s unit</option>
+      <option value="mm">mm</option>
+      <option value="in">in</option>
+    </select>
+  )
+}
+
+const originWords = { set: 'set here', kept: 'kept from last time', known: 'known by its heading' } as const
+
+function ColumnStanding({
+  column,
+  target,
+  isChanged,
+}: Pick<ColumnRowProps, 'column' | 'target' | 'isChanged'>) {
+  if (isChanged) return <span className="text-caution">not checked yet</span>
+  if (target.field !== '')
+    return <span className="text-ink-soft">{column.origin && originWords[column.origin]}</span>
+  return column.note ? (
+    <span className="text-caution">{column.note}</span>
+  ) : (
+    <span className="text-ink-soft">{column.origin ? originWords[column.origin] : 'not known'}</span>
   )
 }

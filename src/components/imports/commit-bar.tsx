@@ -4,7 +4,7 @@ import { Download } from 'lucide-react'
 import { useState } from 'react'
 import type { ImportResponse, RejectChoice } from '@/schemas/import'
 import { Button } from '../ui/button'
-import { countText } from './import-words'
+import { cancelLabel, countText } from './import-words'
 
 export interface CommitBarProps {
   found: ImportResponse
@@ -42,7 +42,7 @@ export function CommitBar({ found, isBusy, onCommit, onCancel }: CommitBarProps)
       ) : null}
       {hasRejects ? <RejectsLink id={found.id} /> : null}
       <Button variant="danger" disabled={isBusy} onClick={onCancel}>
-        Cancel the import
+        {cancelLabel}
       </Button>
     </div>
   )

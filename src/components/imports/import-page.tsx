@@ -1,6 +1,6 @@
 'use client'
 
-import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { usePathname, useSearchParams } from 'next/navigation'
 import { useState } from 'react'
 import { cancelImport, commitImport, recheckImport, useImport } from '@/hooks/use-import'
 import { isUnderWay } from '@/hooks/use-imports'
@@ -59,6 +59,7 @@ export function ImportPage({ initial }: { initial: ImportResponse }) {
           <>
             <div className="flex flex-col gap-3 px-4 py-4 lg:px-6">
               <OutcomeSentence found={found} />
+              <LeftOutLine found={found} />
               <KeyNotice found={found} />
               {found.state === 'checked' ? (
                 <CommitBar
@@ -97,6 +98,19 @@ function headingNote(found: ImportResponse): string {
     .join(', ')
 }
 
+/** Columns nobody has a field for are passed over; said, so that a forgotten one is not found out later. */
+function LeftOutLine({ found }: { found: ImportResponse }) {
+  const leftOut = found.columns.filter((column) => column.field === null).map((column) => column.heading)
+  if (found.state !== 'checked' || leftOut.length === 0) return null
+  const [shown, rest] = [leftOut.slice(0, 8), leftOut.length - 8]
+  return (
+    <p className="text-ink-soft text-[0.9375rem]">
+      {leftOut.length === 1 ? 'One column is' : `${leftOut.length} columns are`} left out: {shown.join(', ')}
+      {rest > 0 ? ` and ${rest} more` : ''}.
+    </p>
+  )
+}
+
 /** Without a column that names the item no row can be taken: said once, where it can be set. */
 function KeyNotice({ found }: { found: ImportResponse }) {
   const fields = new Set(found.columns.map((column) => column.field))
@@ -119,13 +133,12 @@ function Views({
   isBusy: boolean
   onRecheck: Parameters<typeof ColumnsTable>[0]['onRecheck']
 }) {
-  const router = useRouter()
   const pathname = usePathname()
   const asked = useSearchParams().get('show')
   const views = viewsOf(found)
   const shown = views.find(({ view }) => view === asked)?.view ?? views[0]?.view
   if (!shown) return null
-  const handleShow = (view: ImportView) => router.replace(`${pathname}?show=${view}`, { scroll: false })
+  const handleShow = (view: ImportView) => window.history.replaceState(null, '', `${pathname}?show=${view}`)
   return (
     <ImportTabs views={views} shown={shown} onShow={handleShow}>
       {shown === 'columns' ? (

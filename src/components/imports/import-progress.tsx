@@ -1,6 +1,6 @@
 import type { ImportResponse } from '@/schemas/import'
 import { Button } from '../ui/button'
-import { countText } from './import-words'
+import { cancelLabel, countText } from './import-words'
 
 export interface ImportProgressProps {
   found: ImportResponse
@@ -28,7 +28,7 @@ export function ImportProgress({ found, isCancelling, onCancel }: ImportProgress
           : 'All of it goes in at once, or nothing. Cancelling now leaves the catalogue as it was.'}
       </p>
       <Button variant="danger" className="mt-4" disabled={isCancelling} onClick={onCancel}>
-        {isCancelling ? 'Cancelling …' : 'Cancel the import'}
+        {isCancelling ? 'Cancelling …' : cancelLabel}
       </Button>
     </section>
   )

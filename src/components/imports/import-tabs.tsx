@@ -49,7 +49,7 @@ export function ImportTabs({ views, shown, onShow, children }: ImportTabsProps) 
     >
       <Tabs.List
         aria-label="What the file holds"
-        className="border-ink flex gap-1 overflow-x-auto border-b px-2 lg:px-4"
+        className="border-ink flex flex-wrap gap-x-1 border-b px-2 lg:px-4"
       >
         {views.map(({ view, label, count }) => (
           <Tabs.Trigger

@@ -18,6 +18,9 @@ export const kindWords: Readonly<Record<ImportKind, { many: string; page: string
   stock: { many: 'bins of opening stock', page: '/locations' },
 }
 
+/** On every button that ends an import before its commit. */
+export const cancelLabel = 'Cancel the import'
+
 const encodingNames: Readonly<Record<string, string>> = {
   'utf-8': 'UTF-8',
   'utf-16le': 'UTF-16',
@@ -40,7 +43,21 @@ export function formatWords(found: Pick<ImportListRow, 'encoding' | 'delimiter' 
   return words.filter(Boolean).join(', ')
 }
 
-/** What a checked import would do, or a committed one did: `18 added, 3 changed, 5 left as they are, 2 rejected`. */
+/** What a checked import would do: `add 18, change 3, leave 5 as they are; 2 are rejected`. */
+export function planWords(found: ImportListRow): string {
+  const plans = [
+    found.added > 0 ? `add ${countText(found.added)}` : null,
+    found.changed > 0 ? `change ${countText(found.changed)}` : null,
+    found.unchanged > 0
+      ? `leave ${countText(found.unchanged)} as ${found.unchanged === 1 ? 'it is' : 'they are'}`
+      : null,
+  ].filter(Boolean)
+  const rejects =
+    found.rejectedCount === 1 ? '1 is rejected' : `${countText(found.rejectedCount)} are rejected`
+  return found.rejectedCount > 0 ? `${plans.join(', ')}; ${rejects}` : plans.join(', ')
+}
+
+/** What a committed import did: `18 added, 3 changed, 5 left as they are, 2 rejected`. */
 export function outcomeWords(found: ImportListRow): string {
   const parts = [
     found.added > 0 ? `${countText(found.added)} added` : null,

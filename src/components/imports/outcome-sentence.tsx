@@ -1,7 +1,7 @@
 import type { ImportResponse } from '@/schemas/import'
 import { ButtonLink } from '../ui/button'
 import { Notice } from '../ui/notice'
-import { countText, kindWords, outcomeWords } from './import-words'
+import { countText, kindWords, outcomeWords, planWords } from './import-words'
 
 /** The verdict first: what it would do, what it did, or why it did nothing. */
 export function OutcomeSentence({ found }: { found: ImportResponse }) {
@@ -20,7 +20,7 @@ export function OutcomeSentence({ found }: { found: ImportResponse }) {
   if (found.state === 'cancelled') {
     return (
       <Notice kind="plain">
-        <p className="text-lg font-semibold">This import was cancelled. Nothing was changed.</p>
+        <p className="text-lg font-semibold">Cancelled. Nothing was changed.</p>
         <ButtonLink href="/imports/new" size="compact" className="mt-2">
           Import another file
         </ButtonLink>
@@ -62,5 +62,5 @@ function wouldSentence(found: ImportResponse): string {
   if (taken === 0 && found.rejectedCount === 0)
     return `Nothing would change: all ${countText(found.unchanged)} are there as they are.`
   if (taken === 0) return `Nothing can be taken: ${outcomeWords(found)}.`
-  return `This would be: ${outcomeWords(found)}.`
+  return `This file would ${planWords(found)}.`
 }

@@ -14,7 +14,8 @@ import {
   type KeyMatches,
   type MatchedItem,
 } from '../db/read-models/import-match'
-import { type FlatRecord, fieldOf, type GivenRecord, givenRecord } from './flat-record'
+import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
+import type { FlatRecord } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
 
 /** An item of the file as it is staged. */

@@ -3,7 +3,8 @@ import { openingStockSchema, type RowProblem } from '@/schemas/import'
 import { findImportMatches, type KeyMatches } from '../db/read-models/import-match'
 import { type BinMatch, findImportPlaces } from '../db/read-models/import-places'
 import { keyOf, matchedItem, type StagedRecord } from './check-records'
-import { type FlatRecord, givenRecord } from './flat-record'
+import { givenRecord } from './flat-record'
+import type { FlatRecord } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
 
 /**

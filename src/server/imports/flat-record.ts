@@ -1,12 +1,9 @@
 import type { RowProblem } from '@/schemas/import'
 import { type ImportKind, importFields, importKinds } from '@/schemas/import-fields'
 import { enumFromDb, enumToDb } from '../db/enum-case'
-import { type FlatSegment, outlineSegments } from './outline-segments'
+import type { FlatRecord } from './flat-values'
+import { outlineSegments } from './outline-segments'
 import type { ImportRow, RowReader, RowValue } from './row-reader'
-
-/** An item by the columns of its tables, as it is staged; `segments` is its outline. */
-export type FlatRecord = Record<string, FlatValue>
-export type FlatValue = string | number | boolean | null | FlatSegment[]
 
 export interface GivenRecord {
   /** What the rows give; a field that is not given is absent. */

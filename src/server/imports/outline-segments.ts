@@ -1,14 +1,6 @@
 import type { RowProblem } from '@/schemas/import'
-import type { FlatRecord } from './flat-record'
+import type { FlatRecord, FlatSegment } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
-
-/** A piece of the outline as it is staged; an extension's has no part. */
-export interface FlatSegment {
-  part?: 'nut' | 'holder'
-  length_mm: number
-  nose_diameter_mm: number
-  spindle_diameter_mm: number
-}
 
 interface Outline {
   segments: FlatSegment[]

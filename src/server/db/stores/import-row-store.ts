@@ -1,7 +1,7 @@
 import { Readable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
 import type { Knex } from 'knex'
-import { from as copyFrom } from 'pg-copy-streams'
+import * as copyStreams from 'pg-copy-streams'
 import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
 import { withRawConnection } from '../raw-connection'
 import type { OutcomeCounts } from './import-store'
@@ -24,7 +24,7 @@ const copyStatement = `copy import_rows
 export async function copyImportRows(trx: Knex, importId: string, rows: readonly StagedRow[]): Promise<void> {
   if (rows.length === 0) return
   await withRawConnection(trx, (connection) =>
-    pipeline(Readable.from(copyLines(importId, rows)), connection.query(copyFrom(copyStatement))),
+    pipeline(Readable.from(copyLines(importId, rows)), connection.query(copyStreams.from(copyStatement))),
   )
 }
 

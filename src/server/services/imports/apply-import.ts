@@ -1,6 +1,5 @@
-import type { Knex } from 'knex'
 import { columnTarget } from '@/schemas/import-mapping'
-import { db } from '../../db/connection'
+import { type Database, db } from '../../db/connection'
 import { databaseErrorCode } from '../../db/database-errors'
 import { createAuditEntry } from '../../db/stores/audit-store'
 import {
@@ -63,7 +62,7 @@ export async function applyImport(importId: string): Promise<void> {
   })
 }
 
-async function apply(trx: Knex.Transaction, found: ImportRecord, claim: ImportClaim): Promise<void> {
+async function apply(trx: Database, found: ImportRecord, claim: ImportClaim): Promise<void> {
   if (found.kind === 'stock') await lockStagedItems(trx, found.id)
   else await lockCatalogue(trx)
   const isStale = await checkAgain(trx, found)
@@ -88,7 +87,7 @@ async function apply(trx: Knex.Transaction, found: ImportRecord, claim: ImportCl
 }
 
 /** Holds rows whose verdict may have changed against the catalogue once more; true where there were any. */
-async function checkAgain(trx: Knex.Transaction, found: ImportRecord): Promise<boolean> {
+async function checkAgain(trx: Database, found: ImportRecord): Promise<boolean> {
   const stale =
     found.kind === 'stock' ? await listStaleStockLines(trx, found.id) : await listStaleLines(trx, found.id)
   if (stale.length === 0) return false
@@ -108,7 +107,7 @@ async function checkAgain(trx: Knex.Transaction, found: ImportRecord): Promise<b
 
 const batchSize = 1000
 
-async function writeDown(trx: Knex.Transaction, found: ImportRecord, counts: OutcomeCounts): Promise<void> {
+async function writeDown(trx: Database, found: ImportRecord, counts: OutcomeCounts): Promise<void> {
   const said = Object.entries(found.mapping).map(
     ([heading, value]) => [headingKey(heading), columnTarget(value)] as const,
   )
@@ -126,7 +125,7 @@ const lookMs = 300
 
 /** A cancel marks the import at once; this ends the statement that may still be running for it. */
 async function breakingOffWhenCancelled(
-  trx: Knex.Transaction,
+  trx: Database,
   importId: string,
   work: () => Promise<void>,
 ): Promise<void> {

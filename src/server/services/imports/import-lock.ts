@@ -1,5 +1,4 @@
-import type { Knex } from 'knex'
-import { db } from '../../db/connection'
+import { type Database, db } from '../../db/connection'
 
 /** First half of the advisory locks of imports; the second is the import's id. */
 const lockClass = 72_616
@@ -9,7 +8,7 @@ const lockClass = 72_616
  * held it, however that ends.
  */
 export async function whileAlone(importId: string, work: () => Promise<void>): Promise<void> {
-  await db().transaction(async (lock: Knex.Transaction) => {
+  await db().transaction(async (lock: Database) => {
     const { rows } = await lock.raw('select pg_try_advisory_xact_lock(?, ?::int) as is_held', [
       lockClass,
       importId,
