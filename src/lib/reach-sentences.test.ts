@@ -148,7 +148,7 @@ describe('a message', () => {
         code: 'collet-range-position',
         values: { minimumMm: 3, maximumMm: 4, shankDiameterMm: 3.175, positionRatio: 0.175 },
       },
-      'The shank of 3.18 mm sits in the small third of the collet’s range, 3 mm to 4 mm; the small end grips worst.',
+      'The shank of 3.175 mm sits in the small third of the collet’s range, 3 mm to 4 mm; the small end grips worst.',
     ],
     [
       { code: 'flute-length-assumed', values: { fluteLengthMm: 12, runOutMm: 0 } },

@@ -100,11 +100,11 @@ export const messageKinds: Readonly<Record<ReachMessageCode, MessageKind>> = {
   'thicker-shank-taken-as-step': 'assumed',
 }
 
-/** A length as the sentence being written says it. */
+/** A length as the sentence being written says it; `size` is for what a tool or a feature is called by, in full. */
 type Said = (mm: number) => string
 
 const sentences: {
-  [Code in ReachMessageCode]: (values: ReachMessageValues[Code], said: Said) => string
+  [Code in ReachMessageCode]: (values: ReachMessageValues[Code], said: Said, size: Said) => string
 } = {
   'length-of-cut-assumed': ({ lengthOfCutMm }, said) =>
     `Only the fluted length was given; its ${said(lengthOfCutMm)} are read as the length of cut.`,
@@ -114,10 +114,10 @@ const sentences: {
       : `The fluted length was not given: ${said(fluteLengthMm)} is assumed, the length of cut alone.`,
   'transition-angle-assumed': ({ transitionAngleDeg }) =>
     `The transition from neck to shank is assumed at ${formatAngle(transitionAngleDeg)} a side.`,
-  'neck-without-length': ({ neckDiameterMm }, said) =>
-    `The neck of ${said(neckDiameterMm)} has no reach length, so it is left out and the shank begins at the flutes.`,
-  'corner-radius-not-used': ({ cornerRadiusMm }, said) =>
-    `The corner radius of ${said(cornerRadiusMm)} is not used by this form.`,
+  'neck-without-length': ({ neckDiameterMm }, _, size) =>
+    `The neck of ${size(neckDiameterMm)} has no reach length, so it is left out and the shank begins at the flutes.`,
+  'corner-radius-not-used': ({ cornerRadiusMm }, _, size) =>
+    `The corner radius of ${size(cornerRadiusMm)} is not used by this form.`,
   'substrate-assumed': () => 'The tool material was not given; cemented carbide is assumed for stiffness.',
   'spindle-width-unknown': () =>
     'The width of the spindle nose is not known; its face is taken as without end.',
@@ -125,35 +125,35 @@ const sentences: {
   'deflection-not-asked': () => 'No side load was given, so no deflection is worked out.',
   'spindle-taken-as-rigid': ({ fluteStiffnessRatio }) =>
     `Stiffness takes spindle, taper and clamping as rigid, and the flutes as ${decimalText(fluteStiffnessRatio, 0, 2)} of their diameter: the tip gives more than this.`,
-  'collet-range-position': ({ minimumMm, maximumMm, shankDiameterMm, positionRatio }, said) =>
-    `The shank of ${said(shankDiameterMm)} sits ${placeInRange(minimumMm, maximumMm, positionRatio)} of the collet’s range, ${said(minimumMm)} to ${said(maximumMm)}; the small end grips worst.`,
+  'collet-range-position': ({ minimumMm, maximumMm, shankDiameterMm, positionRatio }, _, size) =>
+    `The shank of ${size(shankDiameterMm)} sits ${placeInRange(minimumMm, maximumMm, positionRatio)} of the collet’s range, ${size(minimumMm)} to ${size(maximumMm)}; the small end grips worst.`,
 
-  'opening-too-narrow': ({ openingWidthMm, neededMm, shortfallMm }, said) =>
-    `The opening of ${said(openingWidthMm)} is too narrow by ${said(shortfallMm)}: this cutter needs ${said(neededMm)}.`,
-  'corner-too-tight': ({ insideCornerRadiusMm, toolRadiusMm }, said) =>
-    `The inside corner of ${said(insideCornerRadiusMm)} is tighter than the tool’s radius of ${said(toolRadiusMm)}.`,
-  'floor-radius-too-small': ({ floorRadiusMm, cornerRadiusMm }, said) =>
+  'opening-too-narrow': ({ openingWidthMm, neededMm, shortfallMm }, _, size) =>
+    `The opening of ${size(openingWidthMm)} is too narrow by ${size(shortfallMm)}: this cutter needs ${size(neededMm)}.`,
+  'corner-too-tight': ({ insideCornerRadiusMm, toolRadiusMm }, _, size) =>
+    `The inside corner of ${size(insideCornerRadiusMm)} is tighter than the tool’s radius of ${size(toolRadiusMm)}.`,
+  'floor-radius-too-small': ({ floorRadiusMm, cornerRadiusMm }, _, size) =>
     floorRadiusMm > 0
-      ? `The floor’s radius of ${said(floorRadiusMm)} is smaller than the tool’s corner radius of ${said(cornerRadiusMm)}.`
-      : `The floor asks for a square end; this cutter has a corner radius of ${said(cornerRadiusMm)}.`,
-  'hole-diameter-mismatch': ({ holeDiameterMm, cuttingDiameterMm, toleranceMm }, said) =>
-    `A tool of ${said(cuttingDiameterMm)} doesn’t make a hole of ${said(holeDiameterMm)}: they may differ by ${said(toleranceMm)}.`,
-  'taper-steeper-than-wall': ({ taperHalfAngleDeg, wallDeg, uncutAtFootMm }, said) =>
+      ? `The floor’s radius of ${size(floorRadiusMm)} is smaller than the tool’s corner radius of ${size(cornerRadiusMm)}.`
+      : `The floor asks for a square end; this cutter has a corner radius of ${size(cornerRadiusMm)}.`,
+  'hole-diameter-mismatch': ({ holeDiameterMm, cuttingDiameterMm, toleranceMm }, _, size) =>
+    `A tool of ${size(cuttingDiameterMm)} doesn’t make a hole of ${size(holeDiameterMm)}: they may differ by ${size(toleranceMm)}.`,
+  'taper-steeper-than-wall': ({ taperHalfAngleDeg, wallDeg, uncutAtFootMm }, _, size) =>
     `The taper of ${formatAngle(taperHalfAngleDeg)} a side is steeper than the wall, ${formatAngle(wallDeg)} as the tool meets it${
-      uncutAtFootMm ? `: it would leave ${said(uncutAtFootMm)} at the foot` : ''
+      uncutAtFootMm ? `: it would leave ${size(uncutAtFootMm)} at the foot` : ''
     }.`,
   'length-of-cut-below-contact': ({ lengthOfCutMm, contactHeightMm }, said) =>
     `The length of cut of ${said(lengthOfCutMm)} ends below ${said(contactHeightMm)}, where the rounded tip meets the wall.`,
   'flutes-strike-obstacle': ({ depthMm }, said) =>
     `The length of cut strikes an obstacle at a depth of ${said(depthMm)}.`,
-  'collet-range-misses-shank': ({ minimumMm, maximumMm, shankDiameterMm }, said) =>
-    `The collet takes ${said(minimumMm)} to ${said(maximumMm)}; the shank is ${said(shankDiameterMm)}.`,
+  'collet-range-misses-shank': ({ minimumMm, maximumMm, shankDiameterMm }, _, size) =>
+    `The collet takes ${size(minimumMm)} to ${size(maximumMm)}; the shank is ${size(shankDiameterMm)}.`,
   'collet-of-other-series': ({ colletSeries, boreSeries }) =>
     boreSeries === null
       ? `The bore takes a plain shank, no collet; this one is of series ${colletSeries}.`
       : `The collet is of series ${colletSeries}; the chuck takes ${boreSeries}.`,
-  'bore-misses-shank': ({ boreDiameterMm, shankDiameterMm, toleranceMm }, said) =>
-    `A bore of ${said(boreDiameterMm)} doesn’t take a shank of ${said(shankDiameterMm)}: they may differ by ${said(toleranceMm)}.`,
+  'bore-misses-shank': ({ boreDiameterMm, shankDiameterMm, toleranceMm }, _, size) =>
+    `A bore of ${size(boreDiameterMm)} doesn’t take a shank of ${size(shankDiameterMm)}: they may differ by ${size(toleranceMm)}.`,
   'bounds-crossed': ({ lowerBound, lowerMm, upperBound, upperMm, overlapMm }, said) =>
     `No stick-out is allowed. It must be at least ${said(lowerMm)} (${lowerBoundNames[lowerBound]}) and at most ${said(upperMm)} (${upperBoundNames[upperBound]}): ${said(overlapMm)} are missing.`,
   'stick-out-breaks-bound': ({ stickOutMm, bound, boundMm, overlapMm }, said) =>
@@ -174,8 +174,8 @@ const sentences: {
     `One axial step is at most ${said(maximumAxialStepMm)}, so this depth goes in ${steps} steps.`,
   'wall-lower-than-corner': ({ contactHeightMm, leftAtTopMm }, said) =>
     `The wall ends below ${said(contactHeightMm)}, where the rounded tip meets it: ${said(leftAtTopMm)} stay at its top edge.`,
-  'thicker-shank-taken-as-step': ({ shankDiameterMm }, said) =>
-    `Without a neck the shank of ${said(shankDiameterMm)} is taken to begin at the end of the flutes as a square step.`,
+  'thicker-shank-taken-as-step': ({ shankDiameterMm }, _, size) =>
+    `Without a neck the shank of ${size(shankDiameterMm)} is taken to begin at the end of the flutes as a square step.`,
 }
 
 /**
@@ -185,8 +185,12 @@ const sentences: {
  * messageSentence({ code: 'cutter-rubs', values: { part: 'shank', depthMm: 12.7, shortfallMm: 3 } }, 'mm') // => 'The shank of the cutter itself stops at 12.7 mm: no stick-out helps.'
  */
 export function messageSentence(message: ReachMessage, unit: LengthUnit): string {
-  const write = sentences[message.code] as (values: ReachMessage['values'], said: Said) => string
-  return write(message.values, (mm) => sentenceLength(mm, unit))
+  const write = sentences[message.code] as (values: ReachMessage['values'], said: Said, size: Said) => string
+  return write(
+    message.values,
+    (mm) => sentenceLength(mm, unit),
+    (mm) => formatLength(mm, unit),
+  )
 }
 
 /**

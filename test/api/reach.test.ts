@@ -137,7 +137,7 @@ describe('an answer', () => {
       messages: expect.arrayContaining([
         {
           code: 'opening-too-narrow',
-          text: 'The opening of 3 mm is too narrow by 0.18 mm: this cutter needs 3.18 mm.',
+          text: 'The opening of 3 mm is too narrow by 0.175 mm: this cutter needs 3.175 mm.',
         },
       ]),
     })

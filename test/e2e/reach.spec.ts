@@ -35,10 +35,18 @@ test('the verdict, the drawing and the figures agree on the hand case', async ({
     'Reaches 25 mm at 39.5 mm stick-out. The transition touches next, at 38.16 mm.',
   )
   await expect(
-    page.getByRole('img', { name: /^Section of a square end mill of 3\.18 mm, 39\.5 mm out/ }),
+    page.getByRole('img', { name: /^Section of a square end mill of 3\.175 mm, 39\.5 mm out/ }),
   ).toBeVisible()
   await expect(page.getByRole('row', { name: /^Spindle face 139 mm$/i })).toBeVisible()
   await expect(page.getByText('the end of the neck: only full shank is clamped')).toBeVisible()
+})
+
+test('a row of the first touches marks its part on the drawing', async ({ page }) => {
+  await page.goto(`/reach?depth=25&${necked}&${chuck}`)
+  const nut = page.getByRole('button', { name: 'nut', exact: true })
+  await nut.click()
+  await expect(nut).toHaveAttribute('aria-pressed', 'true')
+  await expect(page.locator('svg text', { hasText: 'nut 39 mm' })).toBeInViewport()
 })
 
 test('the stick-out follows the arrow keys, the buttons and the typed field', async ({ page }) => {
@@ -125,7 +133,9 @@ test('a cutter and a chuck are picked from the crib by keyboard, and a changed s
   await expect(collet.getByText(/^Those that fit ER16 and hold a shank of/)).toBeVisible()
   await cutter.getByText('Its sizes').click()
   const overall = cutter.getByLabel(/^Overall length/)
-  await overall.fill('99')
+  await overall.press('ControlOrMeta+a')
+  await overall.pressSequentially('99')
+  await expect(overall).toBeFocused()
   await expect(cutter.getByText(/^Changed from the catalogue’s/)).toBeVisible()
   await expect(page).toHaveURL(/c\.OAL=99/)
   await cutter.getByRole('button', { name: 'Undo' }).click()

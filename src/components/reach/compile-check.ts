@@ -12,7 +12,7 @@ import type {
 } from '@/core/tooling'
 import { type CatalogueRows, catalogueValue } from './catalogue-values'
 import { missingFigures } from './missing-figures'
-import { isSlotUsed, type ObstacleDraft, type ReachDraft, type SegmentDraft } from './reach-draft'
+import { isSlotUsed, type ReachDraft } from './reach-draft'
 import {
   type FieldGroup,
   isFieldOfFeature,
@@ -22,6 +22,7 @@ import {
   toolSlots,
 } from './reach-fields'
 import { type FieldValue, type Reading, readField } from './read-field'
+import { readObstacles, readSegments } from './read-lists'
 
 /** What is wrong, by the request's own names of the places. */
 export type FieldErrors = Readonly<Record<string, string>>
@@ -32,6 +33,9 @@ export interface CompiledCheck {
   cutter: CutterGeometry | null
   holder: HolderGeometry | null
   extension: ExtensionGeometry | null
+  stickOutMm: number | null
+  /** null where the shop's own stands. */
+  clearances: { shankMm: number | null; holderMm: number | null }
   request: ReachRequest | null
   /** What is still needed, in words. */
   missing: readonly string[]
@@ -56,59 +60,89 @@ export interface CheckContext {
 /** Puts the check together from what is picked and typed; what is typed stands before the catalogue. */
 export function compileCheck(draft: ReachDraft, context: CheckContext): CompiledCheck {
   const unread: Record<string, string> = {}
-  const values = (group: FieldGroup) => groupValues(draft, group, context, unread)
-  const [feature, cutter, holder] = [values('feature'), cutterValues(values('cutter')), values('holder')]
-  const [collet, extension, check] = [values('collet'), values('extension'), values('check')]
-  const usesCollet = isSlotUsed(draft, 'collet')
-  const usesExtension = isSlotUsed(draft, 'extension')
-  const obstacles = readObstacles(draft.obstacles, context.reading, unread)
-  const segments = readSegments('holder', draft, context, unread)
-  const extensionSegments = readSegments('extension', draft, context, unread)
+  const figures = readFigures(draft, context, unread)
   const missing = missingFigures({
+    ...figures,
     featureKind: draft.featureKind,
+    hasSegments: figures.segments.length > 0,
+    hasExtensionSegments: figures.extensionSegments.length > 0,
+    unloaded: toolSlots.filter((slot) => draft.picks[slot] !== null && context.rows[slot] == null),
+  })
+  const parts = partsOf(draft.featureKind, figures)
+  const isWhole = missing.length === 0 && Object.keys(unread).length === 0
+  const { feature, cutter, holder } = parts
+  if (!isWhole || !feature || !cutter || !holder) return { ...parts, request: null, missing, unread }
+  const { settings } = context
+  const request: ReachRequest = {
     feature,
     cutter,
     holder,
-    collet: usesCollet ? collet : null,
-    extension: usesExtension ? extension : null,
-    hasSegments: segments.length > 0,
-    hasExtensionSegments: extensionSegments.length > 0,
-    unloaded: toolSlots.filter((slot) => draft.picks[slot] !== null && context.rows[slot] == null),
-  })
-  const hasCutter = ['cuttingDiameterMm', 'shankDiameterMm', 'overallLengthMm'].every(
-    (name) => cutter[name] != null,
-  )
-  const parts = {
-    feature: feature.depthMm == null ? null : featureOf(draft.featureKind, feature, obstacles),
-    cutter: hasCutter ? recordOf<CutterGeometry>(cutter) : null,
-    holder:
-      holder.gaugeLengthMm == null || segments.length === 0
-        ? null
-        : { ...withoutBore<HolderGeometry>(holder), segments },
-    extension:
-      !usesExtension || extension.projectionMm == null || extensionSegments.length === 0
-        ? null
-        : { ...withoutBore<ExtensionGeometry>(extension), segments: extensionSegments },
-  }
-  const isWhole = missing.length === 0 && Object.keys(unread).length === 0
-  const { feature: asked, cutter: tool, holder: chuck } = parts
-  if (!isWhole || !asked || !tool || !chuck) return { ...parts, request: null, missing, unread }
-  const request: ReachRequest = {
-    feature: asked,
-    cutter: tool,
-    holder: chuck,
     extension: parts.extension,
-    collet: usesCollet ? recordOf<ColletGeometry>(collet) : null,
-    bore: boreOf(usesExtension ? extension : holder),
-    stickOutMm: numberOrNull(check.stickOutMm),
+    collet: figures.collet ? recordOf<ColletGeometry>(figures.collet) : null,
+    bore: boreOf(figures.extension ?? figures.holder),
+    stickOutMm: parts.stickOutMm,
     clearances: {
-      shankMm: numberOrNull(check.clearanceShankMm) ?? context.settings.shankClearanceMm,
-      holderMm: numberOrNull(check.clearanceHolderMm) ?? context.settings.holderClearanceMm,
+      shankMm: parts.clearances.shankMm ?? settings.shankClearanceMm,
+      holderMm: parts.clearances.holderMm ?? settings.holderClearanceMm,
     },
-    sideLoadN: numberOrNull(check.sideLoadN),
-    settings: context.settings,
+    sideLoadN: numberOrNull(figures.check.sideLoadN),
+    settings,
   }
   return { ...parts, request, missing, unread }
+}
+
+interface ReadFigures {
+  feature: Values
+  cutter: Values
+  holder: Values
+  /** null where none is used. */
+  collet: Values | null
+  extension: Values | null
+  check: Values
+  obstacles: Obstacle[]
+  segments: HolderSegment[]
+  extensionSegments: HolderSegment[]
+}
+
+function readFigures(draft: ReachDraft, context: CheckContext, unread: Record<string, string>): ReadFigures {
+  const values = (group: FieldGroup) => groupValues(draft, group, context, unread)
+  return {
+    feature: values('feature'),
+    cutter: cutterValues(values('cutter')),
+    holder: values('holder'),
+    collet: isSlotUsed(draft, 'collet') ? values('collet') : null,
+    extension: isSlotUsed(draft, 'extension') ? values('extension') : null,
+    check: values('check'),
+    obstacles: draft.featureKind === 'wall' ? readObstacles(draft.obstacles, context.reading, unread) : [],
+    segments: readSegments('holder', draft, context, unread),
+    extensionSegments: readSegments('extension', draft, context, unread),
+  }
+}
+
+type CompiledParts = Omit<CompiledCheck, 'request' | 'missing' | 'unread'>
+
+/** What can be drawn of it, each part as soon as it is there. */
+function partsOf(kind: ReachDraft['featureKind'], figures: ReadFigures): CompiledParts {
+  const { feature, cutter, holder, extension, check, obstacles, segments, extensionSegments } = figures
+  const isCutterThere = ['cuttingDiameterMm', 'shankDiameterMm', 'overallLengthMm'].every(
+    (name) => cutter[name] != null,
+  )
+  const isHolderThere = holder.gaugeLengthMm != null && segments.length > 0
+  const isExtensionThere = extension?.projectionMm != null && extensionSegments.length > 0
+  return {
+    feature: feature.depthMm == null ? null : featureOf(kind, feature, obstacles),
+    cutter: isCutterThere ? recordOf<CutterGeometry>(cutter) : null,
+    holder: isHolderThere ? { ...withoutBore<HolderGeometry>(holder), segments } : null,
+    extension:
+      extension && isExtensionThere
+        ? { ...withoutBore<ExtensionGeometry>(extension), segments: extensionSegments }
+        : null,
+    stickOutMm: numberOrNull(check.stickOutMm),
+    clearances: {
+      shankMm: numberOrNull(check.clearanceShankMm),
+      holderMm: numberOrNull(check.clearanceHolderMm),
+    },
+  }
 }
 
 /** The verdict of what was put together, or what the core refuses and where. */
@@ -184,62 +218,4 @@ function boreOf(values: Values): Bore | null {
 
 function numberOrNull(value: FieldValue | undefined): number | null {
   return typeof value === 'number' ? value : null
-}
-
-function readObstacles(
-  drafts: readonly ObstacleDraft[],
-  reading: Reading,
-  unread: Record<string, string>,
-): Obstacle[] {
-  const figure = (text: string, path: string) => readFigure(text, path, reading, unread, true)
-  return drafts.flatMap((draft, index) => {
-    const setbackMm = figure(draft.setback, `feature.obstacles.${index}.setbackMm`)
-    const riseMm = figure(draft.rise, `feature.obstacles.${index}.riseMm`)
-    return setbackMm === null || riseMm === null ? [] : [{ setbackMm, riseMm }]
-  })
-}
-
-function readSegments(
-  owner: 'holder' | 'extension',
-  draft: ReachDraft,
-  { rows, reading }: CheckContext,
-  unread: Record<string, string>,
-): HolderSegment[] {
-  const typed = draft.segments[owner]
-  if (typed === null) return [...(rows[owner]?.segments ?? [])].map((row) => ({ part: 'holder', ...row }))
-  return typed.flatMap((segment, index) =>
-    readSegment(segment, `${owner}.segments.${index}`, reading, unread),
-  )
-}
-
-/** A row with nothing in it yet is no segment; one half filled says what it lacks. */
-function readSegment(
-  segment: SegmentDraft,
-  path: string,
-  reading: Reading,
-  unread: Record<string, string>,
-): HolderSegment[] {
-  if (![segment.length, segment.nose, segment.spindle].some((text) => text.trim() !== '')) return []
-  const lengthMm = readFigure(segment.length, `${path}.lengthMm`, reading, unread)
-  const noseDiameterMm = readFigure(segment.nose, `${path}.noseDiameterMm`, reading, unread)
-  // A cylinder is typed once.
-  const spindleDiameterMm =
-    segment.spindle.trim() === ''
-      ? noseDiameterMm
-      : readFigure(segment.spindle, `${path}.spindleDiameterMm`, reading, unread)
-  if (lengthMm === null || noseDiameterMm === null || spindleDiameterMm === null) return []
-  return [{ part: segment.part, lengthMm, noseDiameterMm, spindleDiameterMm }]
-}
-
-function readFigure(
-  text: string,
-  path: string,
-  reading: Reading,
-  unread: Record<string, string>,
-  allowsZero = false,
-): number | null {
-  const read = readField(allowsZero ? 'lengthOrZero' : 'length', text, reading)
-  if (read.ok && typeof read.value === 'number') return read.value
-  unread[path] = read.ok ? 'Enter a length.' : read.message
-  return null
 }

@@ -10,11 +10,15 @@ export interface FirstTouchTableProps {
   answer: ReachAnswer
   unit: LengthUnit
   highlighted: ToolPart | null
-  onHighlight: (part: ToolPart | null) => void
+  /** The part that stays highlighted. */
+  pinned: ToolPart | null
+  onPoint: (part: ToolPart | null) => void
+  onPin: (part: ToolPart) => void
 }
 
 /** The depth at which every part of the tool first touches; a row shows its part on the drawing. */
-export function FirstTouchTable({ answer, unit, highlighted, onHighlight }: FirstTouchTableProps) {
+export function FirstTouchTable(props: FirstTouchTableProps) {
+  const { answer, unit, highlighted, pinned, onPoint, onPin } = props
   return (
     <section aria-labelledby="reach-touches" className="flex flex-col gap-2 print:gap-0">
       <h2 id="reach-touches" className="text-lg">
@@ -39,17 +43,17 @@ export function FirstTouchTable({ answer, unit, highlighted, onHighlight }: Firs
               <tr
                 key={part}
                 className={`border-hairline border-b ${part === highlighted ? 'bg-accent-wash' : ''}`}
-                onPointerEnter={() => onHighlight(part)}
-                onPointerLeave={() => onHighlight(null)}
+                onPointerEnter={() => onPoint(part)}
+                onPointerLeave={() => onPoint(null)}
               >
                 <th scope="row" className="text-left font-normal">
                   <button
                     type="button"
-                    aria-pressed={part === highlighted}
+                    aria-pressed={part === pinned}
                     className={`min-h-8 w-full text-left first-letter:uppercase pointer-coarse:min-h-11 ${isLimit ? 'font-semibold' : ''}`}
-                    onFocus={() => onHighlight(part)}
-                    onBlur={() => onHighlight(null)}
-                    onClick={() => onHighlight(part)}
+                    onFocus={() => onPoint(part)}
+                    onBlur={() => onPoint(null)}
+                    onClick={() => onPin(part)}
                   >
                     {partNames[part]}
                     {isLimit ? ' · first' : ''}

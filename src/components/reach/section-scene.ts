@@ -6,7 +6,7 @@ import type { OutlinePart, ToolPart } from '@/core/outline/types'
 import { type CheckPart, cutterCheckParts, holderCheckParts } from '@/core/reach/check-parts'
 import { checkedFeature } from '@/core/reach/checked-feature'
 import { type Placement, placement } from '@/core/reach/placement'
-import type { Clearances, Feature } from '@/core/reach/types'
+import type { Clearances, Feature, ReachAnswer, ReachSettings } from '@/core/reach/types'
 import type { CutterGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
 
 /** Everything a section drawing shows, in millimetres, before it is given a place on the sheet. */
@@ -45,6 +45,30 @@ export function sectionScene(given: SceneParts): SectionScene | null {
     if (error instanceof CoreInputError) return null
     throw error
   }
+}
+
+/** The scene of a check: at the stick-out of the answer, or the one given while there is no answer. */
+export function sceneOfCheck(
+  check: Pick<SceneParts, 'feature' | 'cutter' | 'holder' | 'extension'> & CheckGiven,
+  answer: ReachAnswer | null,
+  settings: ReachSettings,
+): SectionScene | null {
+  return sectionScene({
+    feature: check.feature,
+    cutter: check.cutter,
+    holder: check.holder,
+    extension: check.extension,
+    stickOutMm: answer?.stickOut.usedMm ?? check.stickOutMm,
+    clearances: {
+      shankMm: check.clearances.shankMm ?? settings.shankClearanceMm,
+      holderMm: check.clearances.holderMm ?? settings.holderClearanceMm,
+    },
+  })
+}
+
+interface CheckGiven {
+  stickOutMm: number | null
+  clearances: { shankMm: number | null; holderMm: number | null }
 }
 
 function scene(given: SceneParts, feature: Feature, tool: CutterGeometry): SectionScene {

@@ -1,6 +1,7 @@
 import type { CutterForm } from '@/core/tooling'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { formatAngle } from '@/lib/format-angle'
+import { formatLength } from '@/lib/format-length'
 import { sentenceLength } from '@/lib/reach-sentences'
 import type { SectionScene } from './section-scene'
 
@@ -23,7 +24,7 @@ export function sectionSentence(scene: SectionScene, verdict: string | null, uni
   const said = (mm: number) => sentenceLength(mm, unit)
   const { cutter, heights } = scene
   const held = heights.noseMm === null ? '' : `, ${said(heights.noseMm)} out of its chuck`
-  const tool = `Section of a ${formWords[cutter.form]} of ${said(2 * cutter.radiusMm)}${held}`
+  const tool = `Section of a ${formWords[cutter.form]} of ${formatLength(2 * cutter.radiusMm, unit)}${held}`
   return `${tool}, ${featureWords(scene, said)}.${verdict ? ` ${verdict}` : ''}`
 }
 

@@ -2,7 +2,7 @@
 
 import { memo } from 'react'
 import { type CutterForm, cutterForms } from '@/core/tooling'
-import { sentenceLength } from '@/lib/reach-sentences'
+import { formatLength } from '@/lib/format-length'
 import { catalogueValue } from './catalogue-values'
 import { isSlotUsed, type ToolDraft } from './reach-draft'
 import { ReachFieldInput } from './reach-field-input'
@@ -124,7 +124,7 @@ export const ColletSection = memo(function ColletSection(props: ColletSectionPro
     ...(series ? { series } : {}),
     ...(shank ? { 'minimumMm.max': shank, 'maximumMm.min': shank } : {}),
   }
-  const holds = shankMm === null ? null : `hold a shank of ${sentenceLength(shankMm, reading.unit)}`
+  const holds = shankMm === null ? null : `hold a shank of ${formatLength(shankMm, reading.unit)}`
   const fits = series ? `fit ${series}` : null
   const note = [fits, holds].filter((part) => part !== null).join(' and ')
   return (
