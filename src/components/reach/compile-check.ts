@@ -1,6 +1,6 @@
 import { CoreInputError } from '@/core/core-input-error'
 import { reachAnswer } from '@/core/reach/reach-answer'
-import type { Feature, Obstacle, ReachAnswer, ReachRequest, ReachSettings } from '@/core/reach/types'
+import type { Feature, Obstacle, ReachAnswer, ReachRequest } from '@/core/reach/types'
 import type {
   Bore,
   ColletGeometry,
@@ -10,7 +10,8 @@ import type {
   HolderGeometry,
   HolderSegment,
 } from '@/core/tooling'
-import { type CatalogueRows, catalogueValue } from './catalogue-values'
+import { catalogueValue } from './catalogue-values'
+import type { CheckContext, Values } from './check-context'
 import { missingFigures } from './missing-figures'
 import { isSlotUsed, type ReachDraft } from './reach-draft'
 import {
@@ -21,7 +22,7 @@ import {
   reachFields,
   toolSlots,
 } from './reach-fields'
-import { type FieldValue, type Reading, readField } from './read-field'
+import { type FieldValue, readField } from './read-field'
 import { readObstacles, readSegments } from './read-lists'
 
 /** What is wrong, by the request's own names of the places. */
@@ -48,14 +49,6 @@ export type CheckResult =
   | { state: 'waiting' }
   | { state: 'refused'; errors: FieldErrors; reason: string | null }
   | { state: 'answered'; request: ReachRequest; answer: ReachAnswer }
-
-export type Values = Readonly<Record<string, FieldValue>>
-
-export interface CheckContext {
-  rows: CatalogueRows
-  reading: Reading
-  settings: ReachSettings
-}
 
 /** Puts the check together from what is picked and typed; what is typed stands before the catalogue. */
 export function compileCheck(draft: ReachDraft, context: CheckContext): CompiledCheck {

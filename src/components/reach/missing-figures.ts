@@ -1,4 +1,4 @@
-import type { Values } from './compile-check'
+import type { Values } from './check-context'
 import { type ReachField, reachField, type ToolSlot } from './reach-fields'
 
 export interface FiguresGiven {

@@ -1,6 +1,6 @@
 import type { Obstacle } from '@/core/reach/types'
 import type { HolderSegment } from '@/core/tooling'
-import type { CheckContext } from './compile-check'
+import type { CheckContext } from './check-context'
 import type { ObstacleDraft, ReachDraft, SegmentDraft } from './reach-draft'
 import { type Reading, readField } from './read-field'
 

@@ -1,7 +1,7 @@
-import type { Knex } from 'knex'
 import type { Bore, ColletGeometry, CutterGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
 import { AppError } from '@/lib/app-error'
 import type { ReachRequestBody } from '@/schemas/reach'
+import type { Database } from '../../db/connection'
 import { findPieceMeasurements } from '../../db/read-models/piece-measurements'
 import { readItem } from '../catalogue/get-item'
 import { measuredCutter } from './measured-cutter'
@@ -17,7 +17,7 @@ export interface ReachTooling {
 }
 
 /** Reads what is named from the crib, archived or not: a link to a check goes on meaning the same. */
-export async function findReachTooling(db: Knex, body: ReachRequestBody): Promise<ReachTooling> {
+export async function findReachTooling(db: Database, body: ReachRequestBody): Promise<ReachTooling> {
   const [cutter, holder, collet, extension] = await Promise.all([
     findCutter(db, body.cutter),
     findNamed(db, 'holder', body.holder),
@@ -27,7 +27,7 @@ export async function findReachTooling(db: Knex, body: ReachRequestBody): Promis
   return { cutter, holder, collet, extension, bore: (extension ?? holder).bore ?? null }
 }
 
-async function findCutter(db: Knex, cutter: ReachRequestBody['cutter']): Promise<CutterGeometry> {
+async function findCutter(db: Database, cutter: ReachRequestBody['cutter']): Promise<CutterGeometry> {
   if (!('pieceId' in cutter)) return findNamed(db, 'cutter', cutter)
   const piece = await findPieceMeasurements(db, cutter.pieceId)
   if (!piece) throw notFoundAt('cutter.pieceId', 'There is no such piece.')
@@ -36,7 +36,7 @@ async function findCutter(db: Knex, cutter: ReachRequestBody['cutter']): Promise
 }
 
 async function findNamed<Kind extends 'cutter' | 'holder' | 'collet' | 'extension', Inline extends object>(
-  db: Knex,
+  db: Database,
   kind: Kind,
   given: Inline | { id: string },
 ) {
