@@ -6,6 +6,7 @@ import { toast } from 'sonner'
 import { NoDrawing } from '@/components/drawing/no-drawing'
 import { useCan, useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
+import { classNames } from '@/components/ui/class-names'
 import { Notice } from '@/components/ui/notice'
 import { useSaveItem } from '@/hooks/use-save-item'
 import { ApiError } from '@/lib/api-client'
@@ -95,11 +96,11 @@ export function ItemForm<Row extends CatalogueRow>(props: ItemFormProps<Row>) {
         <SegmentsEditor control={form.control} {...definition.form.segments} />
       ) : null}
       {saving.failure ? (
-        <Notice kind="collision" isAnnounced>
+        <Notice kind="collision" isAnnounced className="max-sm:order-3">
           {saving.failure}
         </Notice>
       ) : null}
-      <div className="bg-sheet border-hairline sticky bottom-0 -mx-5 flex gap-2 border-t px-5 py-3">
+      <div className="bg-sheet border-hairline max-sm:order-3 sticky bottom-0 -mx-5 flex gap-2 border-t px-5 py-3">
         <Button type="submit" variant="primary" disabled={isSubmitting}>
           {isSubmitting ? 'Saving …' : base ? 'Save the changes' : `Add the ${definition.one}`}
         </Button>
@@ -204,7 +205,13 @@ function FormDrawing<Row extends CatalogueRow>({
       ? fault.message
       : 'The drawing appears here as soon as the dimensions make a whole.'
   return (
-    <div className="bg-sheet [@media(min-height:50rem)_and_(min-width:40rem)]:sticky top-[4.5rem] z-5 -mt-4 pt-4 pb-1">
+    <div
+      className={classNames(
+        'bg-sheet [@media(min-height:50rem)_and_(min-width:40rem)]:sticky top-[4.5rem] z-5 -mt-4 pt-4 pb-1',
+        // On a phone beside the segments it is made of, which are a long way down.
+        definition.form.segments && 'max-sm:order-1',
+      )}
+    >
       {checked.success ? definition.form.draw(checked.data as Row) : <NoDrawing reason={reason} />}
     </div>
   )

@@ -23,7 +23,7 @@ export function SegmentsEditor({ control, hasPart, hint }: SegmentsEditorProps) 
   const { errors } = useFormState({ control, name: 'segments' })
   const whole = errors.segments?.root?.message
   return (
-    <fieldset className="border-ink border-t-2 pt-3">
+    <fieldset className="border-ink border-t-2 pt-3 max-sm:order-2">
       <legend className="float-left mb-1 w-full text-lg font-semibold">Outline, nose first</legend>
       <p className="text-ink-soft clear-both mb-2 text-sm">{hint}</p>
       {typeof whole === 'string' ? (
