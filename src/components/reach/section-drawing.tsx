@@ -22,6 +22,7 @@ import { sectionSentence } from './section-sentence'
 import { SectionTool } from './section-tool'
 import { TouchMark } from './touch-mark'
 import { limitPoint, touchPoint } from './touch-point'
+import { useIsMounted } from './use-is-mounted'
 
 export interface SectionDrawingProps extends SectionChanges {
   scene: SectionScene
@@ -41,11 +42,16 @@ function sheetHeight(width: number): number {
     : Math.round(Math.min(640, Math.max(460, width * 0.7)))
 }
 
-/** The section: cutter, chuck and part in true proportion, dimensioned, with the first touch and what can be dragged. */
+/**
+ * The section: cutter, chuck and part in true proportion, dimensioned, with the first touch and what can be dragged. It is
+ * drawn in the browser alone, for the width there really is.
+ */
 export function SectionDrawing(props: SectionDrawingProps) {
   const { scene, answer, verdict, unit, view, highlighted } = props
   const [ref, width] = useElementWidth<HTMLDivElement>(firstWidth)
   const [held, setHeld] = useState<SectionFrame | null>(null)
+  const isMounted = useIsMounted()
+  if (!isMounted) return <div ref={ref} className="h-[25rem] sm:h-[40rem]" />
   const layout = sectionLayout(scene, view, { width, height: sheetHeight(width) }, held)
   const { sheet } = layout
   return (

@@ -43,7 +43,7 @@ export function SegmentFields(props: SegmentFieldsProps) {
   const change = (index: number, part: Partial<SegmentDraft>) =>
     replace(typed.map((segment, at) => (at === index ? { ...segment, ...part } : segment)))
   return (
-    <fieldset className="col-span-2 flex flex-col gap-2">
+    <fieldset className="col-span-full flex flex-col gap-2">
       <legend className="text-[0.9375rem] font-semibold">Outline, from the nose face up</legend>
       {typed.map((segment, index) => (
         <div key={segment.key} className="border-hairline grid grid-cols-[1fr_auto] gap-2 border-l-2 pl-2">
@@ -138,7 +138,7 @@ function CatalogueSegments({ owner, rows, reading, onCopy }: SegmentFieldsProps 
   const said = (mm: number) => formatLength(mm, reading.unit, { withUnit: false })
   const segments = rows[owner]?.segments ?? []
   return (
-    <div className="col-span-2 flex flex-col items-start gap-1">
+    <div className="col-span-full flex flex-col items-start gap-1">
       <p className="text-[0.9375rem] font-semibold">Outline, from the nose face up</p>
       <ol className="text-sm">
         {withHeights(segments).map(([segment, fromMm]) => (

@@ -21,7 +21,7 @@ const views = [
 /** How much of the assembly is drawn, and what can be done with the sheet. */
 export function SheetToolbar(props: SheetToolbarProps) {
   return (
-    <div className="border-hairline flex items-center justify-between gap-2 border-b px-3 py-1.5 sm:absolute sm:top-2 sm:right-2 sm:z-20 sm:border-0 sm:p-0 print:hidden">
+    <div className="border-hairline flex items-center justify-between gap-2 border-b px-3 py-1.5 bg-sheet sm:absolute sm:top-2 sm:right-2 sm:z-20 sm:border-0 sm:p-0 print:hidden">
       <ViewSwitch {...props} />
       <SheetActions />
     </div>

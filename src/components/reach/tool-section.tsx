@@ -70,7 +70,7 @@ export function ToolSection(props: ToolSectionProps) {
         summary={summary}
         isOpenAtFirst={isOpen}
         hasFault={hasFaultIn(errors, slot)}
-        className="grid grid-cols-2 gap-x-3 gap-y-3"
+        className="grid grid-cols-[repeat(auto-fill,minmax(10.5rem,1fr))] gap-3"
       >
         {children}
       </FieldsFold>

@@ -63,7 +63,7 @@ export const CutterSection = memo(function CutterSection(props: SlotProps) {
           name={name}
           texts={draft.texts.cutter}
           isRequired={required.includes(name)}
-          {...(name === 'form' ? { className: 'col-span-2' } : {})}
+          {...(name === 'form' ? { className: 'col-span-full' } : {})}
           {...(name === 'form' || name === 'substrate' ? { options: options[name] } : {})}
         />
       ))}
@@ -104,7 +104,6 @@ export const ExtensionSection = memo(function ExtensionSection(props: SlotProps)
       isOpen={hasTexts(draft, 'extension') || draft.segments.extension !== null}
     >
       <ReachFieldInput {...props} group="extension" name="projectionMm" texts={draft.texts.extension} />
-      <span />
       <ClampingFields {...props} owner="extension" isHolding />
       <SegmentFields {...props} owner="extension" segments={draft.segments.extension} />
     </ToolSection>
