@@ -82,10 +82,10 @@ function drawBody(props: SegmentedBodyDrawingProps, width: number, hatchId: stri
         </defs>
         <TurnedBody parts={props.parts} toSheet={toSheet} fill={`url(#${hatchId})`} />
         <BoreCut layout={layout} />
-        <DatumLine layout={layout} />
         <ChainLine from={{ x: noseX - lengthPx - 30, y: axisY }} to={{ x: noseX + 18, y: axisY }} />
         <BodyLengths layout={layout} />
         <BodyDiameters layout={layout} />
+        <DatumLine layout={layout} />
         <ScaleBar x={14} y={height - 14} pxPerMm={pxPerMm} unit={props.unit} />
       </>
     ),
@@ -127,7 +127,16 @@ function DatumLine({ layout }: { layout: BodyLayout }) {
         strokeWidth={lineWidths.thin}
         strokeDasharray="14 3 2 3"
       />
-      <text x={x + 4} y={axisY - radiusPx - 18} fontSize={12} fill="var(--ink-soft)">
+      <text
+        x={x + 4}
+        y={axisY - radiusPx - 18}
+        fontSize={12}
+        fill="var(--ink-soft)"
+        stroke="var(--sheet)"
+        strokeWidth={4}
+        strokeLinejoin="round"
+        paintOrder="stroke"
+      >
         {datum}
       </text>
     </>
