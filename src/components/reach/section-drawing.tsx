@@ -51,7 +51,7 @@ export function SectionDrawing(props: SectionDrawingProps) {
   const [ref, width] = useElementWidth<HTMLDivElement>(firstWidth)
   const [held, setHeld] = useState<SectionFrame | null>(null)
   const isMounted = useIsMounted()
-  if (!isMounted) return <div ref={ref} className="h-[25rem] sm:h-[40rem]" />
+  if (!isMounted) return <div ref={ref} className="h-[25rem] sm:h-[40rem] print:h-[100mm]" />
   const layout = sectionLayout(scene, view, { width, height: sheetHeight(width) }, held)
   const { sheet } = layout
   return (
