@@ -30,11 +30,12 @@ cause_in() {
     return
   fi
   local line
-  line="$(grep -E '^E: |^npm error [A-Z]|^initdb: error|(FATAL|PANIC|ERROR): ' "$1" |
-    grep -v 'npm error A complete log' | head -n 1 || true)"
+  line="$(grep -E '^E: |^npm error .|^initdb: error|(FATAL|PANIC|ERROR): ' "$1" |
+    grep -vE '^npm error (code|syscall|errno|path|dest|file|A complete log) ' | head -n 1 || true)"
   [ -n "$line" ] || line="$(grep -v '^[[:space:]]*$' "$1" | tail -n 1 || true)"
   line="${line#E: }"
   line="${line#npm error }"
+  line="${line#network }"
   printf '%s' "${line:-it gave no reason}" | sed -E 's/[[:space:].]+$//' | cut -c1-300
 }
 
