@@ -1,8 +1,8 @@
+import { once } from 'node:events'
 import { createWriteStream } from 'node:fs'
 import { rm } from 'node:fs/promises'
-import { Readable } from 'node:stream'
-import { pipeline } from 'node:stream/promises'
-import type { ReadableStream } from 'node:stream/web'
+import type { Writable } from 'node:stream'
+import { finished, pipeline } from 'node:stream/promises'
 import { Busboy } from '@fastify/busboy'
 import { AppError } from '@/lib/app-error'
 import { fileLimitText, importLimits } from '@/schemas/import-limits'
@@ -50,7 +50,8 @@ async function receive(request: Request, path: string): Promise<ReceivedUpload> 
     limits: { fileSize: importLimits.fileBytes, files: 1, fields: 20, fieldSize: 500_000 },
   })
   const received: ReceivedUpload = { fields: {}, fileName: '', fileSizeBytes: 0 }
-  let part: Readable | undefined
+  const stop = new AbortController()
+  let sink: Writable | undefined
   let writing: Promise<void> | undefined
   form.on('field', (name, value) => {
     received.fields[name] = value
@@ -60,23 +61,23 @@ async function receive(request: Request, path: string): Promise<ReceivedUpload> 
       file.resume()
       return
     }
-    part = file
     received.fileName = plainName(fileName)
     file.on('data', (piece: Buffer) => {
       received.fileSizeBytes += piece.length
     })
     // As soon as it is known, so that the rest of the body is not read at all.
-    file.on('limit', () => form.destroy(tooLarge()))
-    writing = pipeline(file, createWriteStream(path, { mode: 0o600 }))
-    writing.catch(() => undefined)
+    file.on('limit', () => stop.abort(tooLarge()))
+    sink = createWriteStream(path, { mode: 0o600 })
+    writing = pipeline(file, sink)
+    writing.catch((error: Error) => stop.abort(error))
   })
   try {
-    await pipeline(Readable.fromWeb(request.body as ReadableStream), form)
+    await feed(form, request.body, stop.signal)
   } catch (error) {
+    const { aborted, reason } = stop.signal
     // The writer must let go of the file before it is removed.
-    part?.destroy()
-    await writing?.catch(() => undefined)
-    if (error instanceof AppError) throw error
+    if (sink) await closed(sink)
+    if (aborted) throw reason
     throw new AppError('unreadable-body', 'The upload broke off or is no multipart form.', {
       note: String(error),
     })
@@ -84,6 +85,29 @@ async function receive(request: Request, path: string): Promise<ReceivedUpload> 
   if (!writing) throw noFile()
   await writing
   return received
+}
+
+async function closed(stream: Writable): Promise<void> {
+  stream.destroy()
+  if (!stream.closed) await new Promise((resolve) => stream.once('close', resolve))
+}
+
+/**
+ * Writes the body into the form piece by piece, waiting where the disk is slower. At a fault it stops reading and leaves
+ * the rest to the server, which passes over it: cancelling the body of a request may never come to an end.
+ */
+async function feed(form: Writable, body: ReadableStream<Uint8Array>, signal: AbortSignal): Promise<void> {
+  const ended = finished(form, { signal })
+  ended.catch(() => undefined)
+  const reader = body.getReader()
+  for (;;) {
+    signal.throwIfAborted()
+    const { done, value } = await reader.read()
+    if (done) break
+    if (!form.write(value)) await Promise.race([once(form, 'drain', { signal }), ended])
+  }
+  form.end()
+  await ended
 }
 
 /** The name a person knows the file by: shown, never used as a path. */

@@ -23,7 +23,7 @@ export async function createImport(actor: Actor, upload: Request): Promise<{ id:
   const path = await newImportFilePath()
   const received = await receiveUpload(upload, path)
   try {
-    const request = createImportRequestSchema.parse(formFields(received.fields))
+    const request = parseForm(received.fields)
     const unit = request.unit ?? actor.lengthUnit ?? (await readShopSettings(db())).lengthUnit
     await refuseUnreadable(path, { ...request, unit })
     return await inTransaction(db(), async (trx) => {
@@ -44,9 +44,13 @@ export async function createImport(actor: Actor, upload: Request): Promise<{ id:
 }
 
 /** Of a form everything is text: an empty part was left out, and the mapping is JSON. */
-function formFields(fields: ReceivedUpload['fields']): Record<string, unknown> {
-  const { kind, unit, mapping } = fields
-  return { kind, unit: unit || undefined, mapping: mapping ? jsonOf(mapping) : undefined }
+function parseForm({ kind, unit, mapping }: ReceivedUpload['fields']): CreateImportRequest {
+  const values = { kind, unit: unit || undefined, mapping: mapping ? jsonOf(mapping) : undefined }
+  const parsed = createImportRequestSchema.safeParse(values)
+  if (parsed.success) return parsed.data
+  throw new AppError('wrong-shape', 'Some fields cannot be taken as they are.', {
+    errors: parsed.error.issues.map(({ path, message }) => ({ path: path.map(String).join('.'), message })),
+  })
 }
 
 function jsonOf(text: string): unknown {
