@@ -130,14 +130,14 @@ describe('a message', () => {
         code: 'stick-out-breaks-bound',
         values: { stickOutMm: 60, bound: 'grip', boundMm: 56, overlapMm: 4 },
       },
-      'A stick-out of 60 mm is 4 mm too long: the least grip allows at most 56 mm.',
+      'A stick-out of 60 mm is 4 mm too long: it must be at most 56 mm (the least grip).',
     ],
     [
       {
         code: 'stick-out-breaks-bound',
         values: { stickOutMm: 10, bound: 'bore', boundMm: 16.2, overlapMm: 6.2 },
       },
-      'A stick-out of 10 mm is 6.2 mm too short: the bottom of the bore asks for at least 16.2 mm.',
+      'A stick-out of 10 mm is 6.2 mm too short: it must be at least 16.2 mm (the bottom of the bore).',
     ],
     [
       { code: 'floor-radius-too-small', values: { floorRadiusMm: 0, cornerRadiusMm: 0.5, shortfallMm: 0.5 } },

@@ -157,7 +157,7 @@ const sentences: {
   'bounds-crossed': ({ lowerBound, lowerMm, upperBound, upperMm, overlapMm }, said) =>
     `No stick-out is allowed. It must be at least ${said(lowerMm)} (${lowerBoundNames[lowerBound]}) and at most ${said(upperMm)} (${upperBoundNames[upperBound]}): ${said(overlapMm)} are missing.`,
   'stick-out-breaks-bound': ({ stickOutMm, bound, boundMm, overlapMm }, said) =>
-    `A stick-out of ${said(stickOutMm)} is ${said(overlapMm)} too ${stickOutMm > boundMm ? 'long' : 'short'}: ${boundName(bound)} ${stickOutMm > boundMm ? 'allows at most' : 'asks for at least'} ${said(boundMm)}.`,
+    `A stick-out of ${said(stickOutMm)} is ${said(overlapMm)} too ${stickOutMm > boundMm ? 'long' : 'short'}: it must be at ${stickOutMm > boundMm ? 'most' : 'least'} ${said(boundMm)} (${boundName(bound)}).`,
   'cutter-rubs': ({ part, depthMm }, said) =>
     `The ${partNames[part]} of the cutter itself stops at ${said(depthMm)}: no stick-out helps.`,
   'cutter-strikes-floor': ({ part }) =>

@@ -1,7 +1,7 @@
 'use client'
 
 import { useState } from 'react'
-import type { ToolPart } from '@/core/outline/types'
+import { overlapToleranceMm, type ToolPart } from '@/core/outline/types'
 import type { ReachAnswer } from '@/core/reach/types'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { partNames, sentenceLength } from '@/lib/reach-sentences'
@@ -35,6 +35,8 @@ export interface SectionDrawingProps extends SectionChanges {
 }
 
 const firstWidth = 900
+const roomBelowPx = 44
+const roomAbovePx = 60
 
 function sheetHeight(width: number): number {
   return isNarrow({ width })
@@ -66,7 +68,9 @@ export function SectionDrawing(props: SectionDrawingProps) {
         <g clipPath="url(#reach-section-sheet)">
           <SectionPart scene={scene} layout={layout} />
           <SectionTool scene={scene} layout={layout} highlighted={highlighted} />
-          {answer && answer.verdict !== 'reaches' ? <SectionCollision scene={scene} layout={layout} /> : null}
+          {answer && answer.verdict !== 'reaches' ? (
+            <SectionCollision scene={scene} layout={layout} touching={touchingParts(scene, answer)} />
+          ) : null}
           <PartDimensions scene={scene} layout={layout} unit={unit} reachMm={answer?.reachMm ?? null} />
           <ToolDimensions scene={scene} layout={layout} unit={unit} />
           {answer ? <Touches {...props} answer={answer} layout={layout} /> : null}
@@ -92,7 +96,11 @@ function Touches({
     asked && asked.depthMm !== null && asked.part !== answer.limitedBy
       ? touchPoint(scene, asked.part, asked.depthMm)
       : null
-  const hasRoomBelow = (hMm: number) => (hMm - topFaceMm(scene.at)) * layout.pxPerMm > 44
+  // Above a cross near the top face stands the holder: the words go under it, into the air or the hatching.
+  const isBetterBelow = (hMm: number) => {
+    const abovePx = (hMm - topFaceMm(scene.at)) * layout.pxPerMm
+    return abovePx > roomBelowPx || (abovePx <= 0 && abovePx > -roomAbovePx)
+  }
   return (
     <g>
       {askedPoint && asked && asked.depthMm !== null ? (
@@ -101,7 +109,7 @@ function Touches({
           layout={layout}
           text={`${partNames[asked.part]} ${sentenceLength(asked.depthMm, unit)}`}
           tone="asked"
-          isBelow={hasRoomBelow(askedPoint.hMm)}
+          isBelow={isBetterBelow(askedPoint.hMm)}
         />
       ) : null}
       {limit && answer.limitedBy !== null && answer.reachMm !== null ? (
@@ -109,8 +117,8 @@ function Touches({
           at={limit}
           layout={layout}
           text={limitText(answer, answer.limitedBy, answer.reachMm, unit, layout)}
-          tone={answer.verdict === 'reaches' ? 'next' : 'collision'}
-          isBelow={answer.limitedBy === 'floor' || hasRoomBelow(limit.hMm)}
+          tone={isCollision(answer) ? 'collision' : 'next'}
+          isBelow={answer.limitedBy === 'floor' || isBetterBelow(limit.hMm)}
         />
       ) : null}
     </g>
@@ -127,6 +135,20 @@ function limitText(
   if (limitedBy === 'floor') return 'collision: the far side is in the floor'
   const name = partNames[limitedBy]
   const at = sentenceLength(reachMm, unit)
-  if (answer.verdict !== 'reaches') return `collision: ${name}, ${at}`
+  if (isCollision(answer)) return `collision: ${name}, ${at}`
   return isNarrow(layout.sheet) ? `${name}, ${at}` : `${name} touches next, ${at}`
+}
+
+/** Something is in the way at this depth; an impossible check may have other reasons. */
+function isCollision({ shortfallMm, limitedBy }: ReachAnswer): boolean {
+  return limitedBy === 'floor' || shortfallMm > overlapToleranceMm
+}
+
+/** The parts that touch before the depth asked for is reached. */
+function touchingParts(scene: SectionScene, { firstTouch }: ReachAnswer): ToolPart[] {
+  const { at } = scene
+  const askedMm = topFaceMm(at) - (at.kind === 'wall' ? at.leadMm : 0)
+  return firstTouch
+    .filter(({ depthMm }) => depthMm !== null && depthMm < askedMm - overlapToleranceMm)
+    .map(({ part }) => part)
 }

@@ -1,4 +1,5 @@
 import { memo } from 'react'
+import type { ToolPart } from '@/core/outline/types'
 import { lineWidths } from '../drawing/drafting-style'
 import { HatchPattern } from '../drawing/hatch-pattern'
 import { type MaterialPath, materialPaths, obstaclePaths } from './material-paths'
@@ -56,8 +57,15 @@ function Solid({ solid, hatch }: { solid: MaterialPath; hatch: string }) {
   )
 }
 
-/** Where the tool, with the room it must keep, is inside the part. */
-export const SectionCollision = memo(function SectionCollision({ scene, layout }: SectionPartProps) {
+/**
+ * Where the tool, with the room it must keep, is inside the part. What only rubs is too thin to be seen, so the parts the
+ * answer says touch are drawn with a rim; no other part is, or a narrow gap would look like a touch.
+ */
+export const SectionCollision = memo(function SectionCollision({
+  scene,
+  layout,
+  touching,
+}: SectionPartProps & { touching: readonly ToolPart[] }) {
   const solids = [...materialPaths(scene, layout), ...obstaclePaths(scene, layout)]
   return (
     <g>
@@ -73,10 +81,9 @@ export const SectionCollision = memo(function SectionCollision({ scene, layout }
           fill="var(--collision)"
           fillOpacity={0.5}
           stroke="var(--collision)"
-          strokeWidth={4}
         >
           {envelopePaths(scene, layout).map(({ part, d }) => (
-            <path key={part} d={d} />
+            <path key={part} d={d} strokeWidth={touching.includes(part) ? 4 : 0} />
           ))}
         </g>
       </g>

@@ -14,7 +14,9 @@ export function StartSheet({ missing, isFresh, onExample }: StartSheetProps) {
       <p className="max-w-[46ch] text-lg">
         {isFresh
           ? 'Give the depth of a wall or hole, the cutter and what holds it. The section is drawn here, to scale, with the stick-out it needs and what touches first.'
-          : `The section is drawn once there is a feature and a cutter. Still needed: ${listWords(missing)}.`}
+          : missing.length > 0
+            ? `The section is drawn once there is a feature and a cutter. Still needed: ${listWords(missing)}.`
+            : 'The section is drawn again once the marked field is mended.'}
       </p>
       {isFresh ? (
         <Button variant="primary" onClick={onExample}>

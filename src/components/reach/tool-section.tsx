@@ -14,6 +14,8 @@ export interface ToolSectionProps extends InputsProps {
   loadError: Error | undefined
   filter?: Readonly<Record<string, string>>
   filterNote?: string | null
+  /** What is to be known before anything is picked. */
+  note?: string | null
   /** How the fields are called while they are folded away. */
   summary: string
   isOpen: boolean
@@ -33,6 +35,7 @@ export function ToolSection(props: ToolSectionProps) {
     onChange,
     filter,
     filterNote,
+    note,
     summary,
     isOpen,
     children,
@@ -45,6 +48,7 @@ export function ToolSection(props: ToolSectionProps) {
       <h2 id={`reach-${slot}`} className="text-lg">
         {title}
       </h2>
+      {note ? <p className="text-ink-soft text-sm">{note}</p> : null}
       {pickedId === null ? (
         <ItemPicker
           slot={slot}

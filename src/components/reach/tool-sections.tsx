@@ -125,7 +125,9 @@ export const ColletSection = memo(function ColletSection(props: ColletSectionPro
   }
   const holds = shankMm === null ? null : `hold a shank of ${formatLength(shankMm, reading.unit)}`
   const fits = series ? `fit ${series}` : null
-  const note = [fits, holds].filter((part) => part !== null).join(' and ')
+  const offered = [fits, holds].filter((part) => part !== null).join(' and ')
+  const owner = isSlotUsed(draft, 'extension') ? 'extension' : 'holder'
+  const takesPlainShank = figureOf(props, owner, 'boreKind') === 'fixed'
   return (
     <ToolSection
       {...props}
@@ -133,7 +135,8 @@ export const ColletSection = memo(function ColletSection(props: ColletSectionPro
       title="Collet"
       pickedId={draft.picks.collet}
       filter={filter}
-      filterNote={note ? `Those that ${note}:` : null}
+      filterNote={offered ? `Those that ${offered}:` : null}
+      note={takesPlainShank ? `The ${owner} takes a plain shank: no collet.` : null}
       summary={draft.picks.collet === null ? 'Or type its sizes' : 'Its sizes'}
       isOpen={hasTexts(draft, 'collet')}
     >
