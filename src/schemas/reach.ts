@@ -16,7 +16,7 @@ const optionalSizeSchema = sizeSchema.nullish()
 
 const obstacleSchema = z.strictObject({ setbackMm: sizeSchema, riseMm: sizeSchema })
 
-export const wallFeatureSchema = z.strictObject({
+const wallFeatureSchema = z.strictObject({
   kind: z.literal('wall'),
   depthMm: sizeSchema,
   draftDeg: optionalSizeSchema,
@@ -28,14 +28,14 @@ export const wallFeatureSchema = z.strictObject({
   obstacles: z.array(obstacleSchema).max(100).nullish(),
 })
 
-export const holeFeatureSchema = z.strictObject({
+const holeFeatureSchema = z.strictObject({
   kind: z.literal('hole'),
   depthMm: sizeSchema,
   diameterMm: sizeSchema,
   breakThroughMm: optionalSizeSchema,
 })
 
-export const featureSchema = z.discriminatedUnion('kind', [wallFeatureSchema, holeFeatureSchema])
+const featureSchema = z.discriminatedUnion('kind', [wallFeatureSchema, holeFeatureSchema])
 
 const cutterGeometrySchema = z.strictObject({
   form: z.enum(cutterForms),

@@ -82,6 +82,30 @@ test('the depth is dragged until the transition is in the way', async ({ page })
   await expect(verdict(page)).toContainText('The transition touches first, at 38.16 mm')
 })
 
+test('nose, wall and axis are dragged as well, and the drawing stays under the hand', async ({ page }) => {
+  await page.goto(`/reach?depth=30&stickout=40&${ball}&${chuck}`)
+  const drag = async (name: string, byX: number, byY: number) => {
+    const box = await slider(page, name).boundingBox()
+    if (!box) throw new Error(`There is no handle ${name}.`)
+    const [x, y] = [box.x + box.width / 2, box.y + box.height / 2]
+    await page.mouse.move(x, y)
+    await page.mouse.down()
+    await page.mouse.move(x + byX, y + byY, { steps: 5 })
+    const held = await slider(page, name).boundingBox()
+    expect(Math.abs((held?.x ?? 0) - box.x - byX), `${name} stays under the hand`).toBeLessThan(12)
+    expect(Math.abs((held?.y ?? 0) - box.y - byY), `${name} stays under the hand`).toBeLessThan(12)
+    await page.mouse.up()
+  }
+  await drag('Stick-out', 0, -60)
+  const stickOutMm = Number(await slider(page, 'Stick-out').getAttribute('aria-valuenow'))
+  expect(stickOutMm).toBeGreaterThan(43)
+  await expect(field(page, 'Stick-out')).toHaveValue(String(stickOutMm))
+  await drag('Tilt', -80, 8)
+  expect(Number(await slider(page, 'Tilt').getAttribute('aria-valuenow'))).toBeGreaterThan(3)
+  await drag('Draft', 24, 0)
+  expect(Number(await slider(page, 'Draft').getAttribute('aria-valuenow'))).toBeGreaterThan(3)
+})
+
 test('tilt and draft step by key, and tilt is offered to a ball on an open wall alone', async ({ page }) => {
   await page.goto(`/reach?depth=30&tilt=14.5&stickout=40&${ball}&${chuck}`)
   await slider(page, 'Tilt').press('ArrowRight')

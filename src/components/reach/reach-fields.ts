@@ -1,4 +1,4 @@
-import type { CutterForm } from '@/core/tooling'
+import { type CutterForm, cutterForms, substrates } from '@/core/tooling'
 
 /** The parts of a check, each a column of fields of its own. */
 export const fieldGroups = ['feature', 'cutter', 'holder', 'collet', 'extension', 'check'] as const
@@ -52,6 +52,13 @@ const clampingRows: FieldRow[] = [
   ['minimumGripMm', 'grip', 'Least grip', 'length', 'LSCN'],
   ['gripStartMm', 'start', 'Gripping begins behind the nose', 'lengthOrZero'],
 ]
+
+/** What a field of the kind `choice` may hold. */
+export const fieldChoices: Readonly<Record<string, readonly string[]>> = {
+  form: cutterForms,
+  substrate: substrates,
+  boreKind: ['collet', 'fixed'],
+}
 
 /** Where the core speaks of a bore it names the record; the fields are its members. */
 const borePaths: Readonly<Record<string, string>> = {

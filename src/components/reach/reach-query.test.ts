@@ -41,7 +41,9 @@ describe('the check in the address bar', () => {
   it('leaves out what cannot be read, and takes no nonsense for an id', () => {
     const typed = draftWith({ texts: { ...emptyDraft.texts, feature: { depthMm: 'deep' } } })
     expect(draftQuery(typed, mm)).toBe('')
-    expect(queryDraft('cutter=../1&depth=-3&draft=x&h.segments=nut:1x&feature=slot', mm)).toEqual(emptyDraft)
+    expect(
+      queryDraft('cutter=../1&depth=-3&draft=x&h.segments=nut:1x&feature=slot&c.form=round', mm),
+    ).toEqual(emptyDraft)
   })
 
   it('keeps a figure of the catalogue that was cleared on purpose', () => {

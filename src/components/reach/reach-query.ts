@@ -2,8 +2,15 @@ import { holderSegmentParts } from '@/core/tooling'
 import { decimalText } from '@/core/units/decimal-text'
 import { lengthDecimals } from '@/core/units/length-unit'
 import { emptyDraft, type ObstacleDraft, type ReachDraft, type SegmentDraft } from './reach-draft'
-import { type FieldGroup, fieldGroups, type ReachField, reachFields, toolSlots } from './reach-fields'
-import { fieldText, type Reading, readField } from './read-field'
+import {
+  type FieldGroup,
+  fieldChoices,
+  fieldGroups,
+  type ReachField,
+  reachFields,
+  toolSlots,
+} from './reach-fields'
+import { type FieldValue, fieldText, type Reading, readField } from './read-field'
 
 /** The address bar speaks millimetres, degrees and newtons, so that a link says the same to everyone. */
 const plain: Reading = { unit: 'mm', decimalComma: false }
@@ -94,7 +101,8 @@ export function queryDraft(queryText: string, reading: Reading): ReachDraft {
   for (const field of reachFields) {
     const written = query.get(field.query)
     const read = written === null ? null : readField(field.kind, written, plain)
-    if (read?.ok) texts[field.group][field.name] = fieldText(field.kind, read.value, reading)
+    if (read?.ok && isChoice(field, read.value))
+      texts[field.group][field.name] = fieldText(field.kind, read.value, reading)
   }
   const picks = Object.fromEntries(toolSlots.map((slot) => [slot, idOrNull(query.get(slot))]))
   return {
@@ -109,6 +117,11 @@ export function queryDraft(queryText: string, reading: Reading): ReachDraft {
       ),
     },
   }
+}
+
+/** A choice nobody offers is no answer to anything. */
+function isChoice(field: ReachField, value: FieldValue): boolean {
+  return field.kind !== 'choice' || value === null || (fieldChoices[field.name] ?? []).includes(String(value))
 }
 
 function idOrNull(text: string | null): string | null {

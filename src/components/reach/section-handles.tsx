@@ -30,7 +30,7 @@ const leverPx = 60
 const deepestMm = 1000
 
 /** Depths are stepped by half a millimetre or two hundredths of an inch. */
-export function depthStepMm(unit: LengthUnit): number {
+function depthStepMm(unit: LengthUnit): number {
   return unit === 'mm' ? 0.5 : 0.02 * mmPerInch
 }
 

@@ -2,7 +2,7 @@ import { CoreInputError } from '@/core/core-input-error'
 import { assemblyOutline } from '@/core/outline/assembly-outline'
 import { type CutterDimensions, cutterDimensions } from '@/core/outline/cutter-dimensions'
 import { outlineOfDimensions } from '@/core/outline/cutter-outline'
-import type { OutlinePart, ToolPart } from '@/core/outline/types'
+import type { OutlinePart } from '@/core/outline/types'
 import { type CheckPart, cutterCheckParts, holderCheckParts } from '@/core/reach/check-parts'
 import { checkedFeature } from '@/core/reach/checked-feature'
 import { type Placement, placement } from '@/core/reach/placement'
@@ -106,8 +106,6 @@ function scene(given: SceneParts, feature: Feature, tool: CutterGeometry): Secti
     },
   }
 }
-
-export const holderParts: readonly ToolPart[] = ['extension', 'nut', 'holder', 'spindle']
 
 /** What a part keeps from the part being cut: nothing for the length of cut. */
 export function clearanceOfMm(part: CheckPart, clearances: Clearances): number {

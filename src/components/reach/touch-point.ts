@@ -28,7 +28,7 @@ export function touchPoint(scene: SectionScene, part: ToolPart, depthMm: number)
 }
 
 /** Where the far side of a tilted holder comes lowest. */
-export function lowestPoint(scene: SectionScene): PartPoint | null {
+function lowestPoint(scene: SectionScene): PartPoint | null {
   const points = scene.checked
     .filter(({ part }) => part.clearance === 'holder')
     .flatMap(({ part }) => widenedLines(scene, part.part, -1).flat())
