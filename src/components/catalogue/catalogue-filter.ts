@@ -1,9 +1,10 @@
 import type { SelectOption } from '@/components/ui/select-field'
+import { makerListId } from './maker-list'
 
 /** One way to narrow a list; `name` is the API's. A range of lengths has `name.min` and `name.max`. */
 export type CatalogueFilter =
   | { kind: 'choice'; name: string; label: string; anyLabel: string; options: readonly SelectOption[] }
-  | { kind: 'text'; name: string; label: string }
+  | { kind: 'text'; name: string; label: string; listId?: string }
   | { kind: 'lengthRange'; name: string; label: string }
 
 export function filterParamNames(filters: readonly CatalogueFilter[]): string[] {
@@ -14,7 +15,7 @@ export function filterParamNames(filters: readonly CatalogueFilter[]): string[] 
 
 /** Every kind of item is narrowed by these too. */
 export const itemFilters: readonly CatalogueFilter[] = [
-  { kind: 'text', name: 'maker', label: 'Maker' },
+  { kind: 'text', name: 'maker', label: 'Maker', listId: makerListId },
   {
     kind: 'choice',
     name: 'stockState',

@@ -21,6 +21,7 @@ import { type CatalogueView, isNarrowed } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
+import { MakerList } from './maker-list'
 import { SearchBox } from './search-box'
 import { SortSelect } from './sort-select'
 import { useCatalogueView } from './use-catalogue-view'
@@ -54,6 +55,7 @@ export function CataloguePage<Row extends CatalogueRow>({
   }
   return (
     <div className="flex flex-1 flex-col md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
+      {isWide !== null && !isAdding ? <MakerList kind={definition.kind} /> : null}
       {isWide === null ? <StateSentence sentence={`Loading the ${definition.many} …`} /> : null}
       {isWide === true ? <WideCatalogue {...shared} /> : null}
       {isWide === false ? <NarrowCatalogue {...shared} /> : null}

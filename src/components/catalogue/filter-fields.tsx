@@ -66,7 +66,7 @@ function FilterBox({ filter, values, onSet, className }: FilterBoxProps) {
           ))}
         </select>
       ) : (
-        <TextFilter id={id} name={filter.name} value={value} onSet={onSet} />
+        <TextFilter id={id} name={filter.name} value={value} onSet={onSet} listId={filter.listId} />
       )}
     </div>
   )
@@ -110,17 +110,28 @@ function TextFilter({
   name,
   value,
   onSet,
+  listId,
 }: {
   id: string
   name: string
   value: string
   onSet: FilterBoxProps['onSet']
+  listId?: string
 }) {
   const typed = useTyped(value, (text) => {
     typed.setSent(text.trim())
     onSet(name, text.trim())
   })
-  return <input id={id} type="text" className={`${filterClass} sm:w-36`} maxLength={200} {...typed.props} />
+  return (
+    <input
+      id={id}
+      list={listId}
+      type="text"
+      className={`${filterClass} sm:w-36`}
+      maxLength={200}
+      {...typed.props}
+    />
+  )
 }
 
 function LengthRange({

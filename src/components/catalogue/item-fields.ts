@@ -1,5 +1,6 @@
 import type { FieldValues } from 'react-hook-form'
 import type { ItemField, ItemFieldGroup } from './item-form-definition'
+import { makerListId } from './maker-list'
 
 /** What every item has, whatever its kind. */
 export const identityGroup: ItemFieldGroup = {
@@ -7,7 +8,7 @@ export const identityGroup: ItemFieldGroup = {
   fields: [
     { path: 'code', label: 'Code', kind: 'line', isRequired: true, hint: "The shop's own name for it." },
     { path: 'unitCost', label: 'Unit cost', kind: 'money' },
-    { path: 'maker', label: 'Maker', kind: 'line' },
+    { path: 'maker', label: 'Maker', kind: 'line', listId: makerListId },
     { path: 'partNumber', label: "Maker's part number", kind: 'line' },
     { path: 'description', label: 'Description', kind: 'text' },
   ],

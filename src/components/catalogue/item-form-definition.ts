@@ -13,6 +13,8 @@ export interface ItemField {
   isRequired?: boolean
   options?: readonly SelectOption[]
   hint?: string
+  /** A list on the page of what may be typed. */
+  listId?: string
   /** Only what this form of the item has is asked for, and only that is kept. */
   isShown?: (values: FieldValues) => boolean
 }

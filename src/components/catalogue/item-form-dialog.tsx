@@ -6,6 +6,7 @@ import { Dialog } from '@/components/ui/dialog'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import { ItemForm } from './item-form'
+import { MakerList } from './maker-list'
 
 export interface ItemFormDialogProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
@@ -42,6 +43,7 @@ export function ItemFormDialog<Row extends CatalogueRow>(props: ItemFormDialogPr
         description="Write dimensions as you would: 1/8, 3.175 mm, #7."
         shape="side"
       >
+        <MakerList kind={definition.kind} />
         <ItemForm
           definition={definition}
           row={row}

@@ -56,6 +56,7 @@ export function ItemFormField({ field, control }: ItemFormFieldProps) {
     <TextField
       {...common}
       symbol={field.kind === 'angle' ? [field.symbol, 'deg'].filter(Boolean).join(' · ') : field.symbol}
+      list={field.listId}
       autoComplete="off"
       spellCheck={false}
       inputMode={field.kind === 'count' ? 'numeric' : undefined}

@@ -24,8 +24,9 @@ import {
   useMemo,
   useRef,
 } from 'react'
+import { useMediaQuery } from '@/components/ui/use-media-query'
 import { PartsListHeading } from './parts-list-heading'
-import { partsListTheme } from './parts-list-theme'
+import { partsListTheme, partsListThemeForFingers } from './parts-list-theme'
 
 ModuleRegistry.registerModules([InfiniteRowModelModule, CellStyleModule, ColumnApiModule, TooltipModule])
 
@@ -74,6 +75,7 @@ export function PartsListGrid<Row extends { id: string }>(props: PartsListGridPr
   const initialSort = useRef(sort)
   useHandle(props.handleRef, api)
   const datasource = useDatasource(props)
+  const isForFingers = useMediaQuery('(pointer: coarse)') === true
   const columnDefs = useMemo(() => columns.map((column) => columnDef(column, initialSort.current)), [columns])
 
   useEffect(() => {
@@ -113,7 +115,7 @@ export function PartsListGrid<Row extends { id: string }>(props: PartsListGridPr
   return (
     <section className="h-full" aria-label={label}>
       <AgGridReact<Row>
-        theme={partsListTheme}
+        theme={isForFingers ? partsListThemeForFingers : partsListTheme}
         rowModelType="infinite"
         cacheBlockSize={blockSize}
         maxBlocksInCache={20}

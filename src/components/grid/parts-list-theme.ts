@@ -41,3 +41,5 @@ export const partsListTheme = themeQuartz.withPart(focusedRow).withParams({
   tooltipTextColor: 'var(--sheet)',
   tooltipBorder: false,
 })
+
+export const partsListThemeForFingers = partsListTheme.withParams({ rowHeight: 44 })
