@@ -82,7 +82,7 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
             disabled={isBusy}
             onClick={() => onRecheck({ unit, mapping: mappingOf(found.columns, changed) })}
           >
-            {isBusy ? 'Starting …' : 'Check again by these columns'}
+            {isBusy ? 'Starting …' : 'Check again'}
           </Button>
           <Button
             onClick={() => {
@@ -90,7 +90,7 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
               setUnit(found.unit)
             }}
           >
-            Undo the changes
+            Undo
           </Button>
         </div>
       ) : null}
@@ -200,7 +200,7 @@ function UnitSelect({ kind, column, target, isFixed, onChange }: Omit<ColumnRowP
       value={target.unit}
       onChange={(event) => onChange({ ...target, unit: event.target.value as Target['unit'] })}
     >
-      <option value="">file’s unit</option>
+      <option value="">file’s</option>
       <option value="mm">mm</option>
       <option value="in">in</option>
     </select>

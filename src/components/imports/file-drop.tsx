@@ -46,6 +46,7 @@ export function FileDrop({ file, onChoose, error }: FileDropProps) {
         <input
           id={id}
           type="file"
+          name="file"
           accept=".csv,.txt,.tsv,text/csv,text/plain,text/tab-separated-values"
           className="sr-only"
           aria-describedby={`${id}-limits`}

@@ -14,7 +14,7 @@ import { CancelDialog } from './cancel-dialog'
 import { ColumnsTable } from './columns-table'
 import { CommitBar, RejectsLink } from './commit-bar'
 import { ImportProgress } from './import-progress'
-import { ImportTabs, type ImportView, viewsOf } from './import-tabs'
+import { hasItemKey, ImportTabs, type ImportView, viewsOf } from './import-tabs'
 import { countText, formatWords, sizeText } from './import-words'
 import { OutcomeSentence } from './outcome-sentence'
 import { StagedRows } from './staged-rows'
@@ -113,9 +113,7 @@ function LeftOutLine({ found }: { found: ImportResponse }) {
 
 /** Without a column that names the item no row can be taken: said once, where it can be set. */
 function KeyNotice({ found }: { found: ImportResponse }) {
-  const fields = new Set(found.columns.map((column) => column.field))
-  const hasKey = fields.has('code') || (fields.has('maker') && fields.has('partNumber'))
-  if (found.state !== 'checked' || hasKey || found.columns.length === 0) return null
+  if (found.state !== 'checked' || hasItemKey(found) || found.columns.length === 0) return null
   return (
     <Notice kind="caution">
       No column gives the own code, or maker and part number, so no row says which item it means. Say under

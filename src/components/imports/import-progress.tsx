@@ -17,11 +17,7 @@ export function ImportProgress({ found, isCancelling, onCancel }: ImportProgress
       <p className="text-xl font-semibold" role="status">
         {isReading ? readingSentence(found) : 'Putting it into the catalogue …'}
       </p>
-      <progress
-        aria-label={isReading ? 'Rows read' : 'Committing'}
-        className="accent-accent mt-3 h-3 w-full"
-        {...(done === null ? {} : { value: done, max: 1 })}
-      />
+      <ProgressBar label={isReading ? 'Rows checked' : 'Committing'} done={done} />
       <p className="text-ink-soft mt-2 text-[0.9375rem]">
         {isReading
           ? 'You may leave this page; the check goes on and waits for you.'
@@ -37,4 +33,26 @@ export function ImportProgress({ found, isCancelling, onCancel }: ImportProgress
 function readingSentence({ rows, rowsRead }: ImportResponse): string {
   if (rows === null) return 'Looking at the file …'
   return `Checked ${countText(rowsRead)} of ${countText(rows)} rows`
+}
+
+/** Without a measure of how far it is the bar breathes instead of filling. */
+function ProgressBar({ label, done }: { label: string; done: number | null }) {
+  const percent = done === null ? null : Math.round(done * 100)
+  return (
+    <div
+      role="progressbar"
+      aria-label={label}
+      aria-valuemin={0}
+      aria-valuemax={100}
+      {...(percent === null ? {} : { 'aria-valuenow': percent })}
+      className="bg-well border-hairline mt-3 h-3 w-full overflow-hidden rounded-[3px] border"
+    >
+      <div
+        className={
+          percent === null ? 'bg-accent h-full w-full animate-pulse' : 'bg-accent h-full transition-[width]'
+        }
+        style={percent === null ? undefined : { width: `${percent}%` }}
+      />
+    </div>
+  )
 }

@@ -27,7 +27,14 @@ export function viewsOf(found: ImportResponse): ViewTab[] {
   ]
   const warnings: ViewTab = { view: 'warnings', label: 'Warnings', count: found.warningCount }
   const withRows = outcomes.filter(({ count }) => count > 0)
-  return [...withRows, columns, ...(found.warningCount > 0 ? [warnings] : [])]
+  const rest = found.warningCount > 0 ? [warnings] : []
+  return hasItemKey(found) ? [...withRows, columns, ...rest] : [columns, ...withRows, ...rest]
+}
+
+/** Whether a column says which item a row means; until one does only the columns are worth a look. */
+export function hasItemKey(found: ImportResponse): boolean {
+  const fields = new Set(found.columns.map((column) => column.field))
+  return fields.has('code') || (fields.has('maker') && fields.has('partNumber'))
 }
 
 export interface ImportTabsProps {

@@ -38,16 +38,17 @@ export function UploadForm() {
     setFailure(chosen.size > importLimits.fileBytes ? tooLarge(chosen) : null)
   }
 
-  async function handleSubmit(event: FormEvent) {
+  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
-    if (!file) return setFailure(new Error('Choose a file first.'))
-    if (file.size > importLimits.fileBytes) return setFailure(tooLarge(file))
+    const chosen = file ?? fileOf(event.currentTarget)
+    if (!chosen) return setFailure(new Error('Choose a file first.'))
+    if (chosen.size > importLimits.fileBytes) return setFailure(tooLarge(chosen))
     setIsBusy(true)
     setFailure(null)
     sending.current = new AbortController()
     try {
       const { id } = await callApi<{ id: string }>('POST', '/api/imports', {
-        body: uploadBody(kind, fileUnit, file),
+        body: uploadBody(kind, fileUnit, chosen),
         signal: sending.current.signal,
       })
       router.push(`/imports/${id}`)
@@ -91,6 +92,12 @@ export function UploadForm() {
       </Notice>
     </form>
   )
+}
+
+/** A file that was chosen before this page had come to life is in the form, though nobody was told. */
+function fileOf(form: HTMLFormElement): File | null {
+  const chosen = new FormData(form).get('file')
+  return chosen instanceof File && chosen.name !== '' ? chosen : null
 }
 
 function tooLarge(file: File): Error {

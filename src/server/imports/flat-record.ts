@@ -39,9 +39,12 @@ const ownFields = new Map(
 const enumFields = new Set(['form', 'substrate', 'condition'])
 
 /** The column of the database a field is kept in. */
-export function columnOf(field: string): string {
+function columnOf(field: string): string {
   return field === 'unitCost' ? 'unit_cost_minor' : enumToDb(field)
 }
+
+/** Asked for every cell of a file, so found once. */
+const columns = new Map([...ownFields.values()].flat().map((field) => [field, columnOf(field)]))
 
 /** The field kept in a column of the database. */
 export function fieldOf(column: string): string {
@@ -82,7 +85,7 @@ function giveOwn(given: GivenRecord, field: string, rows: readonly ImportRow[], 
     first ??= { row, value }
   }
   if (!first || typeof first.value === 'object') return
-  given.flat[columnOf(field)] =
+  given.flat[columns.get(field) ?? field] =
     enumFields.has(field) && typeof first.value === 'string' ? enumToDb(first.value) : first.value
 }
 

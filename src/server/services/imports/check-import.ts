@@ -32,7 +32,7 @@ import { ClaimLost, held, whileAlone } from './import-lock'
 import { importSettings } from './import-settings'
 
 /** Items checked and staged at once: enough to make a question to the database worth it, little enough to hold. */
-const batchSize = 1000
+const batchSize = 500
 
 /**
  * Reads a stored file, stages what it holds and says what each row would do. Runs in the worker; may run again after a
