@@ -1,6 +1,6 @@
 'use client'
 
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import { toast } from 'sonner'
 import type { Role } from '@/core/policies/permissions'
 import { callApi } from '@/lib/api-client'
@@ -10,6 +10,7 @@ import { PageHeading } from '../layout/page-heading'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 
 /** One's own account: who one is here, the password, and where else one is signed in. */
 export function AccountPage({ name, email, role }: { name: string; email: string; role: Role }) {
@@ -25,27 +26,20 @@ export function AccountPage({ name, email, role }: { name: string; email: string
 }
 
 function PasswordForm() {
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
 
-  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+  function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     const form = event.currentTarget
     const values = new FormData(form)
-    setIsBusy(true)
-    setFault(null)
-    try {
+    void attempt(async () => {
       await callApi('PUT', '/api/me/password', {
         body: { currentPassword: values.get('currentPassword'), newPassword: values.get('newPassword') },
       })
       form.reset()
       toast.success('Your password is changed, and you are signed out everywhere else.')
-    } catch (error) {
-      setFault(error)
-    } finally {
-      setIsBusy(false)
-    }
+    })
   }
 
   return (

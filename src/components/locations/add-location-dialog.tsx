@@ -1,6 +1,6 @@
 'use client'
 
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import type { TreeLocationKind } from '@/core/stock/kinds'
 import { callApi } from '@/lib/api-client'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
@@ -10,6 +10,7 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 import { kindsWithin } from './location-tree'
 
 export interface AddLocationDialogProps {
@@ -22,24 +23,18 @@ export interface AddLocationDialogProps {
 const kindLabels = { cabinet: 'Cabinet', drawer: 'Drawer', bin: 'Bin' } as const
 
 export function AddLocationDialog({ parent, onClose, onAdded }: AddLocationDialogProps) {
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
   const isCrib = parent === 'crib'
 
-  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+  function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     const values = Object.fromEntries(new FormData(event.currentTarget))
     const body = isCrib ? { ...values, kind: 'crib' } : { ...values, parentId: parent.id }
-    setIsBusy(true)
-    setFault(null)
-    try {
+    void attempt(async () => {
       await callApi('POST', '/api/locations', { body })
       onAdded()
-    } catch (error) {
-      setFault(error)
-      setIsBusy(false)
-    }
+    })
   }
 
   return (

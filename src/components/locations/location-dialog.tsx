@@ -1,7 +1,7 @@
 'use client'
 
 import Link from 'next/link'
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import { useLocationContents } from '@/hooks/use-locations'
 import { callApi } from '@/lib/api-client'
 import { itemPagePath } from '@/lib/catalogue-paths'
@@ -12,6 +12,7 @@ import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 
 export interface LocationDialogProps {
   location: LocationResponse
@@ -81,27 +82,21 @@ function Contents({ location }: { location: LocationResponse }) {
 }
 
 function LocationForm({ location, onChanged }: { location: LocationResponse; onChanged: () => void }) {
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
 
-  async function attempt(act: () => Promise<unknown>) {
-    setIsBusy(true)
-    setFault(null)
-    try {
+  function change(act: () => Promise<unknown>) {
+    void attempt(async () => {
       await act()
       onChanged()
-    } catch (error) {
-      setFault(error)
-      setIsBusy(false)
-    }
+    })
   }
 
   function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     const values = new FormData(event.currentTarget)
     const body = { version: location.version, code: values.get('code'), name: values.get('name') }
-    void attempt(() => callApi('PATCH', `/api/locations/${location.id}`, { body }))
+    change(() => callApi('PATCH', `/api/locations/${location.id}`, { body }))
   }
 
   return (
@@ -122,7 +117,7 @@ function LocationForm({ location, onChanged }: { location: LocationResponse; onC
           <Button
             variant="danger"
             disabled={isBusy}
-            onClick={() => void attempt(() => callApi('DELETE', `/api/locations/${location.id}`))}
+            onClick={() => change(() => callApi('DELETE', `/api/locations/${location.id}`))}
           >
             Archive
           </Button>

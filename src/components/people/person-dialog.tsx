@@ -1,6 +1,6 @@
 'use client'
 
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import { roles } from '@/core/policies/permissions'
 import { useCribs } from '@/hooks/use-cribs'
 import { callApi } from '@/lib/api-client'
@@ -12,6 +12,7 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 
 export interface PersonDialogProps {
   /** Null adds a person. */
@@ -25,20 +26,8 @@ const roleOptions = roles.map((role) => ({ value: role, label: `${roleNames[role
 
 export function PersonDialog({ person, onClose, onSaved, onLink }: PersonDialogProps) {
   const { data: cribs } = useCribs()
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
-
-  async function attempt(act: () => Promise<void>) {
-    setIsBusy(true)
-    setFault(null)
-    try {
-      await act()
-    } catch (error) {
-      setFault(error)
-      setIsBusy(false)
-    }
-  }
 
   function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()

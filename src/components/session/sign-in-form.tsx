@@ -1,38 +1,34 @@
 'use client'
 
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import { callApi } from '@/lib/api-client'
+import { faultSentence } from '@/lib/field-faults'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 
 export function SignInForm({ nextPath }: { nextPath: string }) {
-  const [failure, setFailure] = useState<string | null>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
 
-  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+  function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     const values = new FormData(event.currentTarget)
-    setIsBusy(true)
-    setFailure(null)
-    try {
+    void attempt(async () => {
       await callApi('POST', '/api/session', {
         body: { email: values.get('email'), password: values.get('password') },
       })
       // A full load: the new session's own pages, with nothing kept of the old.
       window.location.assign(nextPath)
-    } catch (error) {
-      setFailure(error instanceof Error ? error.message : 'Signing in failed.')
-      setIsBusy(false)
-    }
+    })
   }
 
   return (
     <form onSubmit={handleSubmit} className="flex flex-col gap-4">
       <h1 className="text-2xl">Sign in</h1>
-      {failure ? (
+      {fault ? (
         <Notice kind="collision" isAnnounced>
-          {failure}
+          {faultSentence(fault)}
         </Notice>
       ) : null}
       <TextField

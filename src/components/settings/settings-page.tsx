@@ -16,6 +16,7 @@ import { LengthField } from '../ui/length-field'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 import { numberSettings, type ReachSettingName } from './number-settings'
 
 type Texts = Record<ReachSettingName, string>
@@ -35,8 +36,7 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
   const { unit, decimalComma } = useShop()
   const router = useRouter()
   const [texts, setTexts] = useState(() => textsOf(settings, unit, decimalComma))
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
 
   const parsed = numberSettings.map(({ name, kind }) => {
@@ -49,13 +49,11 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
   })
   const unreadable = Object.fromEntries(parsed.map(({ name, message }) => [name, message]))
 
-  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+  function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     if (parsed.some(({ value }) => value === null)) return
     const values = new FormData(event.currentTarget)
-    setIsBusy(true)
-    setFault(null)
-    try {
+    void attempt(async () => {
       await callApi('PATCH', '/api/settings', {
         body: {
           version: settings.version,
@@ -68,11 +66,7 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
       })
       toast.success('Saved. Every check from now on uses these.')
       router.refresh()
-    } catch (error) {
-      setFault(error)
-    } finally {
-      setIsBusy(false)
-    }
+    })
   }
 
   return (

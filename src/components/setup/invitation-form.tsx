@@ -6,24 +6,19 @@ import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { Button, ButtonLink } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 
 export function InvitationForm({ token }: { token: string }) {
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const [isDone, setIsDone] = useState(false)
 
-  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+  function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     const values = new FormData(event.currentTarget)
-    setIsBusy(true)
-    setFault(null)
-    try {
+    void attempt(async () => {
       await callApi('POST', '/api/invitations', { body: { token, password: values.get('password') } })
       setIsDone(true)
-    } catch (error) {
-      setFault(error)
-      setIsBusy(false)
-    }
+    })
   }
 
   if (isDone) {

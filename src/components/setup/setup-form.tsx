@@ -1,32 +1,27 @@
 'use client'
 
-import { type FormEvent, useState } from 'react'
+import type { FormEvent } from 'react'
 import { callApi } from '@/lib/api-client'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { useAttempt } from '../ui/use-attempt'
 
 /** The shop's first minute: its name and unit, its crib, and the person who keeps it all. */
 export function SetupForm({ token }: { token: string }) {
-  const [fault, setFault] = useState<unknown>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
 
-  async function handleSubmit(event: FormEvent<HTMLFormElement>) {
+  function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
     const values = Object.fromEntries(new FormData(event.currentTarget))
-    setIsBusy(true)
-    setFault(null)
-    try {
+    void attempt(async () => {
       await callApi('POST', '/api/setup', { body: { ...values, token } })
       await callApi('POST', '/api/session', { body: { email: values.email, password: values.password } })
       window.location.assign('/imports')
-    } catch (error) {
-      setFault(error)
-      setIsBusy(false)
-    }
+    })
   }
 
   return (
