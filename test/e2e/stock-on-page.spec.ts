@@ -1,0 +1,60 @@
+import type { Knex } from 'knex'
+import { type ApiClient, signedInAs } from '../support/api'
+import { createCutter, createShelf, putOnShelf, type Shelf, siteDatabase } from '../support/api-stock'
+import { expect, signIn, test } from '../support/browser'
+
+let db: Knex
+let crib: ApiClient
+let shelf: Shelf
+let itemId: string
+
+test.beforeAll(async () => {
+  db = siteDatabase()
+  crib = await signedInAs('cribManager')
+  shelf = await createShelf(crib)
+})
+test.afterAll(() => db.destroy())
+
+test.beforeEach(async ({ page }) => {
+  itemId = await createCutter(crib)
+  await putOnShelf(db, crib, { itemId, binId: shelf.binId, quantity: 5 })
+  await signIn(page, 'machinist')
+  await page.goto(`/cutters/${itemId}`)
+})
+
+test('issue, return and reversal are posted from the page and show on it at once', async ({ page }) => {
+  const balance = (name: RegExp) => page.getByRole('row', { name })
+  await expect(balance(/^A-1 .* New 5$/)).toBeVisible()
+  await page.getByRole('button', { name: 'Issue' }).click()
+  await page.getByLabel('Pieces').fill('2')
+  await page.getByRole('dialog').getByRole('button', { name: 'Issue' }).click()
+  await expect(balance(/^A-1 .* New 3$/)).toBeVisible()
+  await expect(balance(/Issue 2 A-1 new/)).toBeVisible()
+
+  await page.getByRole('button', { name: 'Return' }).click()
+  await page.getByRole('dialog').getByRole('button', { name: 'Return' }).click()
+  await expect(balance(/^A-1 .* Used 1$/)).toBeVisible()
+
+  await balance(/Return 1/)
+    .getByRole('button', { name: 'Reverse' })
+    .click()
+  await page.getByRole('button', { name: 'Reverse it' }).click()
+  await expect(balance(/Return 1 reversed/)).toBeVisible()
+  await expect(balance(/^A-1 .* Used 1$/)).toHaveCount(0)
+})
+
+test('more than there is gets refused beside the number, and nothing moves', async ({ page }) => {
+  await page.getByRole('button', { name: 'Issue' }).click()
+  await page.getByLabel('Pieces').fill('6')
+  await page.getByRole('dialog').getByRole('button', { name: 'Issue' }).click()
+  await expect(page.getByLabel('Pieces')).toHaveAccessibleDescription(/Not enough there/)
+  expect((await crib.get(`/api/items/${itemId}/stock`)).body.onHand).toBe(5)
+})
+
+test('an item with stock is not archived, and the page says why', async ({ page }) => {
+  await signIn(page, 'cribManager')
+  await page.reload()
+  await page.getByRole('button', { name: 'Archive' }).click()
+  await page.getByRole('button', { name: 'Archive it' }).click()
+  await expect(page.getByRole('alert').filter({ hasText: 'pieces of this item' })).toBeVisible()
+})
