@@ -42,7 +42,7 @@ export function DrawingSheet({ sentence, code, unit, draw, note }: DrawingSheetP
       <figcaption className="border-ink flex flex-wrap justify-end border-t text-sm">
         {note ? <span className="text-ink-soft mr-auto px-3 py-1.5">{note}</span> : null}
         <TitleCell name="Scale" value={scaleName} className="print:hidden" />
-        <TitleCell name="Dimensions in" value={unit} />
+        <TitleCell name="Unit" value={unit} />
         {code ? <TitleCell name="Code" value={code} /> : null}
       </figcaption>
     </figure>
