@@ -9,7 +9,8 @@ const whileBusyMs = 400
 export function useImport(initial: ImportResponse) {
   const { data, error, mutate } = useSWR<ImportResponse, Error>(`/api/imports/${initial.id}`, getJson, {
     fallbackData: initial,
-    refreshInterval: (latest) => (latest && isUnderWay(latest) ? whileBusyMs : 0),
+    // Before the first answer SWR asks with nothing in its hands, and would never ask again.
+    refreshInterval: (latest) => (isUnderWay(latest ?? initial) ? whileBusyMs : 0),
   })
   return { found: data ?? initial, error, refresh: mutate }
 }

@@ -11,7 +11,7 @@ export function useImports(initialRows: ImportListRow[]) {
     getJson,
     {
       fallbackData: { rows: initialRows },
-      refreshInterval: (latest) => (latest?.rows.some(isUnderWay) ? whileBusyMs : 0),
+      refreshInterval: (latest) => ((latest?.rows ?? initialRows).some(isUnderWay) ? whileBusyMs : 0),
     },
   )
   return { rows: data?.rows ?? [], error, isLoading, refresh: mutate }
