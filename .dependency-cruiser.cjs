@@ -89,7 +89,9 @@ module.exports = {
   ],
   options: {
     doNotFollow: { path: 'node_modules' },
-    exclude: { path: '^(test/guards/import-fixture|\\.next|\\.next-test|node_modules/(?!knex|pg|mathjs|nodemailer))' },
+    exclude: {
+      path: '^(test/guards/import-fixture|\\.next|\\.next-test|node_modules/(?!knex|pg|mathjs|nodemailer))',
+    },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: 'tsconfig.json' },
     enhancedResolveOptions: {
