@@ -27,7 +27,7 @@ export interface ItemPageProps<Row extends CatalogueRow> {
 /** One item: its drawing, what it measures, where it is, what happened to it, and what fits it. */
 export function ItemPage<Row extends CatalogueRow>({ definition, first }: ItemPageProps<Row>) {
   const row = useItem(definition.kind, first)
-  const { stock } = useItemStock(row.id)
+  const stocked = useItemStock(row.id)
   const [act, setAct] = useState<ItemAct | null>(null)
   const close = () => setAct(null)
   return (
@@ -46,7 +46,7 @@ export function ItemPage<Row extends CatalogueRow>({ definition, first }: ItemPa
       ) : null}
       {act === 'archive' ? <ArchiveDialog row={row} onClose={close} /> : null}
       {act === 'issue' || act === 'return' ? (
-        <MoveDialog kind={act} item={row} balances={stock?.balances ?? []} onClose={close} />
+        <MoveDialog kind={act} item={row} stock={stocked} onClose={close} />
       ) : null}
     </div>
   )

@@ -10,38 +10,48 @@ import { SelectField, type SelectOption } from '@/components/ui/select-field'
 import { TextField } from '@/components/ui/text-field'
 import { type Condition, conditions } from '@/core/stock/kinds'
 import { parseCount } from '@/core/units/parse-count'
+import type { useItemStock } from '@/hooks/use-item'
 import { useMoveStock } from '@/hooks/use-move-stock'
 import { usePlaces } from '@/hooks/use-places'
 import { ApiError } from '@/lib/api-client'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
 import type { BalanceResponse } from '@/schemas/stock'
+import { SectionState } from './section-state'
 import { conditionNames } from './stock-words'
 
 export interface MoveDialogProps {
   kind: 'issue' | 'return'
   item: { id: string; code: string }
-  balances: readonly BalanceResponse[]
+  stock: ReturnType<typeof useItemStock>
   onClose: () => void
 }
 
 /** Pieces out of a bin into hands or a machine, or back. One opened dialog is one movement, however often it is sent. */
 export function MoveDialog(props: MoveDialogProps) {
-  const { kind, item, onClose } = props
-  const sources = props.balances.filter((balance) => isSource(kind, balance))
+  const { kind, item, stock, onClose } = props
+  const balances = stock.stock?.balances ?? []
+  const sources = balances.filter((balance) => isSource(kind, balance))
   return (
     <Dialog
       isOpen
       onOpenChange={(isOpen) => (isOpen ? undefined : onClose())}
       title={kind === 'issue' ? `Issue ${item.code}` : `Return ${item.code}`}
     >
-      {sources.length === 0 ? (
+      {stock.stock === undefined ? (
+        <SectionState
+          sentence={
+            stock.error ? `The stock could not be loaded. ${stock.error.message}` : 'Loading the stock …'
+          }
+          onRetry={stock.error ? stock.retry : undefined}
+        />
+      ) : sources.length === 0 ? (
         <p>
           {kind === 'issue'
             ? 'No bin has a piece of it: there is nothing to issue.'
             : 'Nobody and no machine has a piece of it: there is nothing to return.'}
         </p>
       ) : (
-        <MoveForm {...props} sources={sources} />
+        <MoveForm kind={kind} item={item} balances={balances} sources={sources} onClose={onClose} />
       )}
     </Dialog>
   )
@@ -53,26 +63,25 @@ function isSource(kind: MoveDialogProps['kind'], balance: BalanceResponse): bool
   return balance.quantity > 0 && (kind === 'issue' ? isBin : isInUse)
 }
 
-function MoveForm({
-  kind,
-  item,
-  balances,
-  sources,
-  onClose,
-}: MoveDialogProps & { sources: BalanceResponse[] }) {
+interface MoveFormProps extends Pick<MoveDialogProps, 'kind' | 'item' | 'onClose'> {
+  balances: readonly BalanceResponse[]
+  sources: readonly BalanceResponse[]
+}
+
+function MoveForm({ kind, item, balances, sources, onClose }: MoveFormProps) {
   const moveStock = useMoveStock()
   const { actor } = useShop()
   const [key] = useState(newIdempotencyKey)
   // One's own hands first: whoever returns has it there.
-  const own = sources.findIndex((source) => source.locationId === actor.locationId)
-  const [sourceIndex, setSourceIndex] = useState(Math.max(own, 0))
+  const own = sources.find((candidate) => candidate.locationId === actor.locationId)
+  const [sourceKey, setSourceKey] = useState<string | null>(null)
   const [quantity, setQuantity] = useState('1')
   const [target, setTarget] = useState<string | null>(null)
   const [returnedAs, setReturnedAs] = useState<Condition | null>(null)
   const [note, setNote] = useState('')
   const [errors, setErrors] = useState<Record<string, string>>({})
   const [isBusy, setIsBusy] = useState(false)
-  const source = sources[sourceIndex] ?? sources[0]
+  const source = sources.find((candidate) => balanceKey(candidate) === sourceKey) ?? own ?? sources[0]
   const targets = useTargets(kind, balances)
   const chosen = target ?? targets.options[0]?.value ?? ''
   const toCondition = kind === 'issue' ? source?.condition : (returnedAs ?? worst(source?.condition))
@@ -110,9 +119,9 @@ function MoveForm({
     <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
       <SelectField
         label="From"
-        value={String(sourceIndex)}
-        onChange={(event) => setSourceIndex(Number(event.target.value))}
-        options={sources.map((balance, index) => ({ value: String(index), label: sourceWords(balance) }))}
+        value={source ? balanceKey(source) : ''}
+        onChange={(event) => setSourceKey(event.target.value)}
+        options={sources.map((balance) => ({ value: balanceKey(balance), label: sourceWords(balance) }))}
         error={errors.fromLocationId ?? errors.fromCondition}
       />
       <TextField
@@ -176,6 +185,11 @@ function MoveForm({
       </div>
     </form>
   )
+}
+
+/** By this the chosen place stays chosen when the stock is read again meanwhile. */
+function balanceKey(balance: BalanceResponse): string {
+  return `${balance.locationId} ${balance.condition}`
 }
 
 /** What was used does not come back new. */
