@@ -1,5 +1,6 @@
 import type { Knex } from 'knex'
-import { checkItems, type StagedRecord } from './check-records'
+import type { StagedRow } from '../db/stores/import-row-store'
+import { checkItems } from './check-records'
 import { checkStock } from './check-stock'
 import type { ImportRow, RowReader } from './row-reader'
 
@@ -8,7 +9,7 @@ export function checkGroups(
   db: Knex,
   groups: readonly (readonly ImportRow[])[],
   reader: RowReader,
-): Promise<StagedRecord[]> {
+): Promise<StagedRow[]> {
   const { kind } = reader.settings
   return kind === 'stock' ? checkStock(db, groups.flat(), reader) : checkItems(db, kind, groups, reader)
 }

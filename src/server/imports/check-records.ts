@@ -14,21 +14,10 @@ import {
   type KeyMatches,
   type MatchedItem,
 } from '../db/read-models/import-match'
+import type { StagedRow } from '../db/stores/import-row-store'
 import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
 import type { FlatRecord } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
-
-/** An item of the file as it is staged. */
-export interface StagedRecord {
-  line: number
-  outcome: RowOutcome
-  itemId: string | null
-  itemVersion: number | null
-  cells: { line: number; cells: string[] }[]
-  fieldValues: object
-  changes: FieldChange[]
-  problems: RowProblem[]
-}
 
 const requestSchemas: Readonly<Record<CatalogueKind, z.ZodType>> = {
   cutter: createCutterRequestSchema,
@@ -54,7 +43,7 @@ export async function checkItems(
   kind: keyof typeof itemKinds,
   groups: readonly (readonly ImportRow[])[],
   reader: RowReader,
-): Promise<StagedRecord[]> {
+): Promise<StagedRow[]> {
   const given = groups.map((rows) => givenRecord(kind, rows, reader))
   const matches = await findImportMatches(
     db,
@@ -109,7 +98,7 @@ class ItemCheck {
     this.problems = [...given.problems]
   }
 
-  staged(matches: KeyMatches): StagedRecord {
+  staged(matches: KeyMatches): StagedRow {
     const item = this.findItem(matches)
     const whole: FlatRecord = { ...(item?.columns as FlatRecord | undefined), ...this.given.flat }
     if (item !== undefined) this.checkWhole(whole, item)

@@ -2,7 +2,8 @@ import type { Knex } from 'knex'
 import { openingStockSchema, type RowProblem } from '@/schemas/import'
 import { findImportMatches, type KeyMatches } from '../db/read-models/import-match'
 import { type BinMatch, findImportPlaces } from '../db/read-models/import-places'
-import { keyOf, matchedItem, type StagedRecord } from './check-records'
+import type { StagedRow } from '../db/stores/import-row-store'
+import { keyOf, matchedItem } from './check-records'
 import { givenRecord } from './flat-record'
 import type { FlatRecord } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
@@ -15,7 +16,7 @@ export async function checkStock(
   db: Knex,
   rows: readonly ImportRow[],
   reader: RowReader,
-): Promise<StagedRecord[]> {
+): Promise<StagedRow[]> {
   const given = rows.map((row) => givenRecord('stock', [row], reader))
   const matches = await findImportMatches(
     db,
@@ -24,7 +25,7 @@ export async function checkStock(
   )
   const places = await findImportPlaces(
     db,
-    given.map(({ flat }) => ({ cribCode: textOf(flat.crib_code), locationCode: textOf(flat.location_code) })),
+    given.map(({ flat }) => ({ cribCode: textOf(flat.crib), locationCode: textOf(flat.location) })),
   )
   return rows.map((row, at) => {
     const { flat, failed } = given[at] as { flat: FlatRecord; failed: Set<string> }
@@ -49,7 +50,7 @@ class StockCheck {
     this.problems = [...row.problems]
   }
 
-  staged(matches: KeyMatches, place: BinMatch): StagedRecord {
+  staged(matches: KeyMatches, place: BinMatch): StagedRow {
     const isReadable = this.row.values.size > 0 || this.problems.length === 0
     const item = isReadable ? this.findItem(matches) : null
     const locationId = isReadable ? this.findBin(place) : null
@@ -101,14 +102,14 @@ class StockCheck {
   }
 
   private findBin(place: BinMatch): string | null {
-    const { crib_code: crib, location_code: bin } = this.flat
+    const { crib, location: bin } = this.flat
     if (place.cribCode === null) {
-      this.refuse('cribCode', crib === undefined ? 'Give the crib.' : `There is no crib ${crib}.`)
-    } else if (bin === undefined) this.refuse('locationCode', 'Give the bin.')
-    else if (!place.location) this.refuse('locationCode', `Crib ${place.cribCode} has no bin ${bin}.`)
+      this.refuse('crib', crib === undefined ? 'Give the crib.' : `There is no crib ${crib}.`)
+    } else if (bin === undefined) this.refuse('location', 'Give the bin.')
+    else if (!place.location) this.refuse('location', `Crib ${place.cribCode} has no bin ${bin}.`)
     else if (place.location.kind !== 'bin')
-      this.refuse('locationCode', `${bin} is a ${place.location.kind}: only bins hold stock.`)
-    else if (place.location.isArchived) this.refuse('locationCode', `Bin ${bin} is archived.`)
+      this.refuse('location', `${bin} is a ${place.location.kind}: only bins hold stock.`)
+    else if (place.location.isArchived) this.refuse('location', `Bin ${bin} is archived.`)
     else return place.location.id
     return null
   }

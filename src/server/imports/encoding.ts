@@ -1,8 +1,7 @@
 import { createReadStream } from 'node:fs'
 import { open } from 'node:fs/promises'
 
-export const textEncodings = ['utf-8', 'utf-16le', 'utf-16be', 'windows-1252'] as const
-export type TextEncoding = (typeof textEncodings)[number]
+export type TextEncoding = 'utf-8' | 'utf-16le' | 'utf-16be' | 'windows-1252'
 
 const headBytes = 64 * 1024
 const pieceBytes = 128 * 1024

@@ -378,8 +378,8 @@ const otherNames: Readonly<Record<string, readonly string[]>> = {
     'lpr',
   ],
 
-  cribCode: ['crib', 'crib code', 'tool crib', 'store', 'warehouse', 'site', 'store room'],
-  locationCode: [
+  crib: ['crib', 'crib code', 'tool crib', 'store', 'warehouse', 'site', 'store room'],
+  location: [
     'location',
     'bin',
     'bin code',

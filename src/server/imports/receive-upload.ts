@@ -69,7 +69,10 @@ async function receive(request: Request, path: string): Promise<ReceivedUpload> 
     file.on('limit', () => stop.abort(tooLarge()))
     sink = createWriteStream(path, { mode: 0o600 })
     writing = pipeline(file, sink)
-    writing.catch((error: Error) => stop.abort(error))
+    // A fault of the disk; one of the form is told by the form.
+    writing.catch((error: Error) => {
+      if ('syscall' in error) stop.abort(error)
+    })
   })
   try {
     await feed(form, request.body, stop.signal)

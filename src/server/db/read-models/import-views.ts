@@ -132,7 +132,7 @@ function textOf(value: unknown): string | null {
 /** What a row is about beside its code: the item's words, or where opening stock goes. */
 function rowWords(values: Record<string, unknown>): string | null {
   if (typeof values.quantity === 'number') {
-    return `${values.quantity} × ${textOf(values.condition) ?? ''} in ${textOf(values.location_code) ?? '?'}`
+    return `${values.quantity} × ${textOf(values.condition) ?? ''} in ${textOf(values.location) ?? '?'}`
   }
   return textOf(values.description) ?? ([values.maker, values.part_number].filter(Boolean).join(' ') || null)
 }

@@ -6,6 +6,7 @@ import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
 import { withRawConnection } from '../raw-connection'
 import type { OutcomeCounts } from './import-store'
 
+/** An item of the file as it is staged: what it would do, or why it cannot. */
 export interface StagedRow {
   line: number
   outcome: RowOutcome
