@@ -1,9 +1,10 @@
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { expect, test } from '../support/browser'
+import { signInAsNewPerson } from '../support/new-person'
 
 test.beforeEach(async ({ page }) => {
-  await signIn(page, 'cribManager')
+  await signInAsNewPerson(page, 'cribManager')
 })
 
 test('the list is read and narrowed with a thumb, and loads no grid', async ({ page }) => {

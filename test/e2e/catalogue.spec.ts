@@ -2,7 +2,8 @@ import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { expect, test } from '../support/browser'
+import { signInAsNewPerson } from '../support/new-person'
 
 const dialog = (page: Page) => page.getByRole('dialog')
 const field = (page: Page, name: string) =>
@@ -17,12 +18,7 @@ async function makeCutter(page: Page, change: Record<string, unknown> = {}) {
 }
 
 test.beforeEach(async ({ page }) => {
-  await signIn(page, 'cribManager')
-  await page.request.patch('/api/me', { data: { lengthUnit: 'mm' } })
-})
-
-test.afterEach(async ({ page }) => {
-  await page.request.patch('/api/me', { data: { lengthUnit: null } })
+  await signInAsNewPerson(page, 'cribManager')
 })
 
 test('a slash searches, one letter wrong is forgiven, Down and Enter open the row', async ({ page }) => {
@@ -134,7 +130,7 @@ test('a holder is built of segments, drawn while they are typed', async ({ page 
 
 test('who may not keep the crib is offered no change, and no cost', async ({ page }) => {
   const cutter = await makeCutter(page, { unitCost: 4321 })
-  await signIn(page, 'machinist')
+  await signInAsNewPerson(page, 'machinist')
   await page.goto(`/cutters/${cutter.id}`)
   await expect(page.getByRole('button', { name: 'Issue' })).toBeVisible()
   await expect(page.getByRole('term').filter({ hasText: 'On hand' })).toBeVisible()
