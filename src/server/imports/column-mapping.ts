@@ -1,5 +1,5 @@
 import { AppError } from '@/lib/app-error'
-import { hasLengthUnit, type ImportKind, importField } from '@/schemas/import-fields'
+import { hasLengthUnit, type ImportKind, importField, importFields } from '@/schemas/import-fields'
 import {
   type ColumnTarget,
   columnTarget,
@@ -155,9 +155,14 @@ export function checkMapping(kind: ImportKind, mapping: ImportMapping, headings:
     if (!keys.has(headingKey(heading))) errors.push({ path, message: `The file has no column “${heading}”.` })
     if (field === null) continue
     const other = givers.get(field)
-    if (!importField(kind, field)) errors.push({ path, message: `There is no field “${field}” for ${kind}.` })
+    if (!importField(kind, field)) errors.push({ path, message: unknownField(kind, field) })
     else if (other !== undefined) errors.push({ path, message: `“${other}” is given to ${field} already.` })
     givers.set(field, heading)
   }
   if (errors.length > 0) throw new AppError('wrong-shape', errors[0]?.message ?? '', { errors })
+}
+
+function unknownField(kind: ImportKind, field: string): string {
+  const known = importFields[kind].map((one) => one.field).join(', ')
+  return `There is no field “${field}” for ${kind}. There are: ${known}.`
 }
