@@ -19,7 +19,7 @@ export function TitleBlock({ date, className = '' }: TitleBlockProps) {
       </Cell>
       <Cell name="Drawn for">{actor.name}</Cell>
       <Cell name="Date">{date}</Cell>
-      <Cell name="Dimensions in">{unit}</Cell>
+      <Cell name="Unit">{unit}</Cell>
       <Cell name="Projection">
         <FirstAngle />
       </Cell>
