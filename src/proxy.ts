@@ -18,6 +18,7 @@ export function proxy(request: NextRequest): NextResponse {
   const headers = new Headers(request.headers)
   headers.set('x-nonce', nonce)
   headers.set('content-security-policy', policy)
+  headers.set('x-asked-page', pathname + search)
   const response = NextResponse.next({ request: { headers } })
   response.headers.set('content-security-policy', policy)
   response.headers.set('x-content-type-options', 'nosniff')

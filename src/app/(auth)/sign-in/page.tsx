@@ -3,9 +3,15 @@ import { SignInForm } from '@/components/session/sign-in-form'
 
 export const metadata: Metadata = { title: 'Sign in' }
 
-/** Only a path of our own is followed after signing in. */
+/** Any origin does: what is asked is whether an address stays within the one it is opened from. */
+const here = 'http://here.invalid'
+
+/** Only a path of our own is followed after signing in, read as browsers read it: they drop tabs and turn backslashes. */
 function safePath(next: string | string[] | undefined): string {
-  return typeof next === 'string' && /^\/(?![/\\])/.test(next) ? next : '/reach'
+  if (typeof next !== 'string' || !next.startsWith('/') || !URL.canParse(next, here)) return '/reach'
+  const { origin, pathname, search, hash } = new URL(next, here)
+  // A path that begins with two slashes would name a host once it stands alone.
+  return origin === here && !pathname.startsWith('//') ? pathname + search + hash : '/reach'
 }
 
 export default async function SignInPage({
