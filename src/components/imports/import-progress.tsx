@@ -1,5 +1,9 @@
+'use client'
+
+import { useEffect, useState } from 'react'
 import type { ImportResponse } from '@/schemas/import'
 import { Button } from '../ui/button'
+import { Notice } from '../ui/notice'
 import { cancelLabel, countText } from './import-words'
 
 export interface ImportProgressProps {
@@ -11,6 +15,7 @@ export interface ImportProgressProps {
 /** What the worker is at, how far it is, and the way out. */
 export function ImportProgress({ found, isCancelling, onCancel }: ImportProgressProps) {
   const isReading = found.state === 'reading'
+  const isWaitingLong = useHasPassed(patienceMs) && isReading && found.rows === null
   const done = isReading && found.rows ? found.rowsRead / found.rows : null
   return (
     <section aria-label="Progress" className="max-w-3xl px-4 py-6 lg:px-6">
@@ -23,11 +28,29 @@ export function ImportProgress({ found, isCancelling, onCancel }: ImportProgress
           ? 'You may leave this page; the check goes on and waits for you.'
           : 'All of it goes in at once, or nothing. Cancelling now leaves the catalogue as it was.'}
       </p>
+      {isWaitingLong ? (
+        <Notice kind="caution" className="mt-3">
+          No worker has taken this file up yet. If this stays so, the worker does not run: whoever looks after
+          Leadline can start it, and the file waits till then.
+        </Notice>
+      ) : null}
       <Button variant="danger" className="mt-4" disabled={isCancelling} onClick={onCancel}>
         {isCancelling ? 'Cancelling …' : cancelLabel}
       </Button>
     </section>
   )
+}
+
+/** A worker that runs takes a file up within a second or two. */
+const patienceMs = 15_000
+
+function useHasPassed(ms: number): boolean {
+  const [hasPassed, setHasPassed] = useState(false)
+  useEffect(() => {
+    const timer = setTimeout(() => setHasPassed(true), ms)
+    return () => clearTimeout(timer)
+  }, [ms])
+  return hasPassed
 }
 
 function readingSentence({ rows, rowsRead }: ImportResponse): string {
