@@ -35,6 +35,10 @@ interface MappedColumn {
 
 const longestShown = 200
 
+const lengthTypes: ReadonlySet<string> = new Set(['length', 'diameter', 'distance'])
+const bareFraction = /^(?:\d+[ -]+)?\d+ ?\/ ?\d+$/
+const bareNumber = /^\d*[.,]?\d+$/
+
 /** Without NUL and without the half of a character that a cut left behind: the database keeps neither. */
 function withoutBroken(text: string): string {
   return text.replace(/\0|\p{Cs}/gu, '')
@@ -111,8 +115,30 @@ export class RowReader {
     return this.mapped.some((column) => column.field.field === field)
   }
 
-  /** Bare quotes are kept, with a word about it. */
+  /** What is taken, with a word about it: bare quotes, and millimetres beside fractions of an inch. */
   warningsOf(record: CsvRecord): RowProblem[] {
+    return [...this.quoteWarnings(record), ...this.mixedUnitWarnings(record)]
+  }
+
+  /** A bare fraction is inches whatever the unit set: a row that has one was hardly measured in millimetres. */
+  private mixedUnitWarnings(record: CsvRecord): RowProblem[] {
+    const rowUnit = this.unitIndex === undefined ? undefined : unitNamed(record.cells[this.unitIndex] ?? '')
+    if ((rowUnit ?? this.settings.unit) !== 'mm') return []
+    const lengths = this.mapped.filter(({ unit, field }) => unit === null && lengthTypes.has(field.type))
+    const cellOf = (column: MappedColumn) => (record.cells[column.index] ?? '').trim()
+    const bare = lengths.find((column) => bareNumber.test(cellOf(column)))
+    if (!bare || !lengths.some((column) => bareFraction.test(cellOf(column)))) return []
+    return [
+      {
+        line: record.line,
+        column: bare.heading,
+        value: shownCell(cellOf(bare)),
+        message: 'This is read in millimetres beside a fraction, which is inches. Is the file in inches?',
+      },
+    ]
+  }
+
+  private quoteWarnings(record: CsvRecord): RowProblem[] {
     return record.faults
       .filter((fault) => fault.kind === 'bareQuote')
       .map((fault) =>
