@@ -3,7 +3,7 @@
 import { useId } from 'react'
 import { ChainLine } from '@/components/drawing/chain-line'
 import { DimensionLine } from '@/components/drawing/dimension-line'
-import { draftingTextWidth, hiddenDashes, lineWidths } from '@/components/drawing/drafting-style'
+import { dimensionRoom, hiddenDashes, lineWidths } from '@/components/drawing/drafting-style'
 import { drawingScale } from '@/components/drawing/drawing-scale'
 import { DrawingSheet, type SheetContent } from '@/components/drawing/drawing-sheet'
 import { HatchPattern } from '@/components/drawing/hatch-pattern'
@@ -55,13 +55,17 @@ function drawCollet(collet: ColletGeometry, unit: LengthUnit, width: number, hat
   const noseX = (width + lengthPx) / 2
   const backX = noseX - lengthPx
   const bodyPx = (collet.maximumMm * sign.bodyToBore * pxPerMm) / 2
-  const axisY = Math.max(bodyPx + 34, draftingTextWidth('max ⌀00.0000') / 2 + 26)
   const [smallPx, largePx] = [collet.minimumMm, collet.maximumMm].map((mm) => (mm * pxPerMm) / 2)
+  const figure = (mm: number) => `⌀${formatLength(mm, unit, { withUnit: false })}`
+  const axisY = Math.max(
+    bodyPx + 34,
+    dimensionRoom(2 * (smallPx ?? 0), `min ${figure(collet.minimumMm)}`) + 8,
+    dimensionRoom(2 * (largePx ?? 0), `max ${figure(collet.maximumMm)}`) + 8,
+  )
   const hasLength = collet.lengthMm != null
   const hasGrip = collet.minimumGripMm != null
   const firstY = axisY + bodyPx + 24
   const height = firstY + (hasLength ? 26 : 0) + (hasGrip ? 26 : 0) + 26
-  const figure = (mm: number) => `⌀${formatLength(mm, unit, { withUnit: false })}`
   const outside = colletSide(noseX, backX, axisY, collet.maximumMm * pxPerMm)
   return {
     height,

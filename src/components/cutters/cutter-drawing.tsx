@@ -4,7 +4,7 @@ import { AngleDimension } from '@/components/drawing/angle-dimension'
 import { attemptedOutline } from '@/components/drawing/attempted-outline'
 import { ChainLine } from '@/components/drawing/chain-line'
 import { DimensionLine } from '@/components/drawing/dimension-line'
-import { dimensionSpacing, draftingTextWidth } from '@/components/drawing/drafting-style'
+import { dimensionRoom, dimensionSpacing } from '@/components/drawing/drafting-style'
 import { drawingScale } from '@/components/drawing/drawing-scale'
 import { DrawingSheet, type SheetContent } from '@/components/drawing/drawing-sheet'
 import { FluteLines } from '@/components/drawing/flute-lines'
@@ -87,7 +87,12 @@ function drawCutter(
   const lengthPx = cutter.overallLengthMm * pxPerMm
   const tipX = left + (width - left - right + lengthPx) / 2
   const radiusPx = (widestMm / 2) * pxPerMm
-  const axisY = Math.max(radiusPx + 50, draftingTextWidth('DC 00.0000') + 34)
+  const figure = (mm: number) => formatLength(mm, unit, { withUnit: false })
+  const axisY = Math.max(
+    radiusPx + 50,
+    dimensionRoom(cutter.shankDiameterMm * pxPerMm, `DMM ⌀${figure(cutter.shankDiameterMm)}`) + 8,
+    dimensionRoom(cutter.cuttingDiameterMm * pxPerMm, `DC ⌀${figure(cutter.cuttingDiameterMm)}`) + 8,
+  )
   const toSheet = sheetFrame({ datumX: tipX, axisY, pxPerMm })
   const layout: CutterLayout = {
     cutter,

@@ -1,6 +1,6 @@
 import { Arrowhead } from './arrowhead'
 import {
-  arrowLength,
+  dimensionFit,
   draftingTextWidth,
   extensionGap,
   extensionOvershoot,
@@ -37,9 +37,8 @@ export function DimensionLine({ from, to, axis, at, text, symbol, overflow = 'en
   const { start, end } = dimension
   const span = end.x - start.x
   const textWidth = draftingTextWidth(symbol ? `${symbol} ${text}` : text)
-  const isTight = span < 2 * arrowLength + 6
-  const doesTextFit = span >= textWidth + 6 && !isTight
-  const tail = isTight ? arrowLength + 7 : 0
+  const { doesTextFit, tailPx: tail } = dimensionFit(span, textWidth)
+  const isTight = tail > 0
   const outside = overflow === 'end' ? end.x + tail + 5 : start.x - tail - 5
   return (
     <g transform={axis === 'vertical' ? 'rotate(-90)' : undefined}>

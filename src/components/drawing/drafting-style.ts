@@ -30,3 +30,16 @@ export const dimensionSpacing = 26
 export function draftingTextWidth(text: string, fontSize: number = draftingFontSize): number {
   return text.length * fontSize * 0.52
 }
+
+/** Whether a dimension's figure stands between its arrows, and how far the line goes beyond each end where these turn. */
+export function dimensionFit(spanPx: number, textWidthPx: number): { doesTextFit: boolean; tailPx: number } {
+  const isTight = spanPx < 2 * arrowLength + 6
+  return { doesTextFit: !isTight && spanPx >= textWidthPx + 6, tailPx: isTight ? arrowLength + 7 : 0 }
+}
+
+/** What a dimension takes up from its middle towards the end where a figure that does not fit is written. */
+export function dimensionRoom(spanPx: number, text: string): number {
+  const textWidthPx = draftingTextWidth(text)
+  const { doesTextFit, tailPx } = dimensionFit(spanPx, textWidthPx)
+  return spanPx / 2 + (doesTextFit ? 0 : tailPx + textWidthPx + 12)
+}
