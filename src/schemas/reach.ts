@@ -3,6 +3,7 @@ import { toolParts } from '@/core/outline/types'
 import { cutterForms, holderSegmentParts, substrates } from '@/core/tooling'
 import { boreSchema } from './bore'
 import { idSchema } from './fields'
+import { plainMessage } from './plain-message'
 
 /**
  * Shapes alone: what a size may be is the core's to say, and its refusal answers 422 with the place. A member nobody
@@ -104,7 +105,7 @@ function named<Geometry extends z.ZodType, Reference extends z.ZodType>(
   return z.looseObject({}).transform((value, context): z.output<Geometry> | z.output<Reference> => {
     const member = Object.keys(references).find((name) => name in value)
     const schema = (member === undefined ? undefined : references[member]) ?? geometry
-    const parsed = schema.safeParse(value)
+    const parsed = schema.safeParse(value, { error: plainMessage })
     if (parsed.success) return parsed.data as z.output<Geometry> | z.output<Reference>
     for (const issue of parsed.error.issues)
       context.issues.push({ ...issue, input: value } as z.core.$ZodRawIssue)

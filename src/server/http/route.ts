@@ -2,6 +2,7 @@ import { createHash, randomUUID } from 'node:crypto'
 import type { z } from 'zod'
 import { can, type Permission } from '@/core/policies/permissions'
 import { AppError } from '@/lib/app-error'
+import { plainMessage } from '@/schemas/plain-message'
 import type { Actor } from '../auth/actor'
 import { findActor } from '../auth/session'
 import { env } from '../env'
@@ -116,7 +117,7 @@ function queryOf(request: Request): Record<string, string> {
 }
 
 function parseInput(schema: z.ZodType, value: unknown, where: 'path' | 'query'): unknown {
-  const parsed = schema.safeParse(value)
+  const parsed = schema.safeParse(value, { error: plainMessage })
   if (parsed.success) return parsed.data
   if (where === 'path') throw new AppError('not-found', 'There is nothing at this address.')
   throw new AppError('wrong-shape', 'The query of this address cannot be read.', {
@@ -140,7 +141,7 @@ function parseBody(schema: z.ZodType, text: string): unknown {
   } catch {
     throw new AppError('unreadable-body', 'The body is not JSON.')
   }
-  const parsed = schema.safeParse(value)
+  const parsed = schema.safeParse(value, { error: plainMessage })
   if (parsed.success) return parsed.data
   throw new AppError(bodyProblemCode(parsed.error), 'Some fields cannot be taken as they are.', {
     errors: fieldProblems(parsed.error),
