@@ -54,6 +54,14 @@ describe('a verdict', () => {
     )
   })
 
+  it('says the depth asked for in full, since rounded up it would be more than was checked', () => {
+    expect(verdictSentence(held, { ...wall, depthMm: 28.575 }, 'mm')).toContain(
+      'Reaches 28.575 mm at 39.5 mm',
+    )
+    const short: ReachAnswer = { ...held, verdict: 'short', limitedBy: 'nut', shortfallMm: 1 }
+    expect(verdictSentence(short, { ...wall, depthMm: 28.575 }, 'mm')).toContain('short of 28.575 mm at')
+  })
+
   it('speaks inches to a person who works in them', () => {
     expect(verdictSentence(held, { ...wall, depthMm: 25.4 }, 'in')).toBe(
       'Reaches 1.000 in at 1.555 in stick-out. The transition touches next, at 1.502 in.',
@@ -152,7 +160,7 @@ describe('a message', () => {
     ],
     [
       { code: 'flute-length-assumed', values: { fluteLengthMm: 12, runOutMm: 0 } },
-      'The fluted length was not given: 12 mm is assumed, the length of cut alone.',
+      'The flutes are assumed to end with the length of cut, at 12 mm.',
     ],
   ])('%# reads as it should', (message, sentence) => {
     expect(messageSentence(message, 'mm')).toBe(sentence)

@@ -108,10 +108,11 @@ const sentences: {
 } = {
   'length-of-cut-assumed': ({ lengthOfCutMm }, said) =>
     `Only the fluted length was given; its ${said(lengthOfCutMm)} are read as the length of cut.`,
+  // Not called missing: where it alone was given it has just been read as the length of cut.
   'flute-length-assumed': ({ fluteLengthMm, runOutMm }, said) =>
     runOutMm > 0
-      ? `The fluted length was not given: ${said(fluteLengthMm)} is assumed, a run-out of ${said(runOutMm)} behind the length of cut.`
-      : `The fluted length was not given: ${said(fluteLengthMm)} is assumed, the length of cut alone.`,
+      ? `The flutes are assumed to run out over ${said(runOutMm)} behind the length of cut and to end at ${said(fluteLengthMm)}.`
+      : `The flutes are assumed to end with the length of cut, at ${said(fluteLengthMm)}.`,
   'transition-angle-assumed': ({ transitionAngleDeg }) =>
     `The transition from neck to shank is assumed at ${formatAngle(transitionAngleDeg)} a side.`,
   'neck-without-length': ({ neckDiameterMm }, _, size) =>
@@ -200,13 +201,14 @@ export function messageSentence(message: ReachMessage, unit: LengthUnit): string
  */
 export function verdictSentence(answer: ReachAnswer, feature: Feature, unit: LengthUnit): string {
   const said: Said = (mm) => sentenceLength(mm, unit)
+  const size: Said = (mm) => formatLength(mm, unit)
   if (answer.verdict === 'impossible') return impossibleSentence(answer, unit)
   const at = `at ${said(answer.stickOut.usedMm)} stick-out`
   if (answer.verdict === 'reaches')
-    return `Reaches ${goalWords(feature, said)} ${at}. ${nextSentence(answer, said)}`
+    return `Reaches ${goalWords(feature, size)} ${at}. ${nextSentence(answer, said)}`
   const longer = answer.messages.find(({ code }) => code === 'longer-stick-out-reaches')
   const help = longer ? ` ${messageSentence(longer, unit)}` : ''
-  return `${shortSentence(answer, feature, at, said)}${help}`
+  return `${shortSentence(answer, feature, at, said, size)}${help}`
 }
 
 function impossibleSentence(answer: ReachAnswer, unit: LengthUnit): string {
@@ -214,10 +216,13 @@ function impossibleSentence(answer: ReachAnswer, unit: LengthUnit): string {
   return reason ? `Impossible. ${messageSentence(reason, unit)}` : 'Impossible.'
 }
 
-/** A wall's through allowance is part of its depth; a hole's break-through is not counted. */
-function goalWords(feature: Feature, said: Said): string {
+/**
+ * What was asked for, in full: 28.575 mm must not read as reaching 28.58. A wall's through allowance is part of its
+ * depth; a hole's break-through is not counted.
+ */
+function goalWords(feature: Feature, size: Said): string {
   const throughMm = feature.kind === 'wall' ? (feature.throughMm ?? 0) : 0
-  return throughMm > 0 ? `${said(feature.depthMm)} and ${said(throughMm)} through` : said(feature.depthMm)
+  return throughMm > 0 ? `${size(feature.depthMm)} and ${size(throughMm)} through` : size(feature.depthMm)
 }
 
 function nextSentence({ limitedBy, reachMm }: ReachAnswer, said: Said): string {
@@ -226,9 +231,9 @@ function nextSentence({ limitedBy, reachMm }: ReachAnswer, said: Said): string {
   return `The ${partNames[limitedBy]} touches next, at ${said(reachMm)}.`
 }
 
-function shortSentence(answer: ReachAnswer, feature: Feature, at: string, said: Said): string {
+function shortSentence(answer: ReachAnswer, feature: Feature, at: string, said: Said, size: Said): string {
   const { limitedBy, reachMm, shortfallMm } = answer
-  const goal = goalWords(feature, said)
+  const goal = goalWords(feature, size)
   if (limitedBy === 'floor' || limitedBy === null || reachMm === null)
     return `Doesn’t reach ${goal} ${at}. The far side of the tilted tool stands in the floor.`
   const first =

@@ -200,3 +200,17 @@ test('it has no fault an accessibility checker finds, holding, colliding or empt
     expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([])
   }
 })
+
+test('the figures of a drawing keep off the wall and the nut', async ({ page }) => {
+  await page.goto(`/reach?depth=30&tilt=15&${ball}&${chuck}`)
+  const tilt = await page.getByRole('main').getByText('tilt 15°', { exact: true }).boundingBox()
+  const wall = await slider(page, 'Draft').boundingBox()
+  if (!tilt || !wall) throw new Error('the tilt, or the wall, is not drawn')
+  expect(tilt.x + tilt.width).toBeLessThan(wall.x + wall.width / 2)
+
+  await page.goto(`/reach?depth=38&draft=1.5&${necked}&${chuck}`)
+  const words = await page.getByText(/^nut touches next/).boundingBox()
+  const nose = await slider(page, 'Stick-out').boundingBox()
+  if (!words || !nose) throw new Error('the first touch, or the nose, is not drawn')
+  expect(words.y).toBeGreaterThan(nose.y + nose.height / 2)
+})

@@ -36,7 +36,9 @@ export function ReachMessages({ messages, unit }: ReachMessagesProps) {
       {assumed.length > 0 ? (
         <ul className="text-ink-soft flex list-disc flex-col gap-1 pl-5 text-[0.9375rem] print:block">
           {assumed.map((text) => (
-            <li key={text}>{text}</li>
+            <li key={text} className="break-inside-avoid">
+              {text}
+            </li>
           ))}
         </ul>
       ) : null}

@@ -118,7 +118,7 @@ function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layou
           radius={tiltRadius}
           fromDeg={-90 - at.tiltDeg}
           toDeg={-90}
-          labelDeg={besideDeg(-90, tiltRadius)}
+          labelDeg={beforeDeg(-90, tiltRadius)}
           symbol="tilt"
           text={formatAngle(at.tiltDeg)}
         />
@@ -134,6 +134,13 @@ const uprightTextDeg = 15
 /** Past the end of an arc, clear of the tool that stands in its middle. */
 function besideDeg(toDeg: number, radius: number): number {
   return toDeg + (labelGap / radius) * (180 / Math.PI)
+}
+
+const endGap = 4
+
+/** Just before the end of an arc, over it: past the end the wall would run through the figure. */
+function beforeDeg(toDeg: number, radius: number): number {
+  return toDeg - (endGap / radius) * (180 / Math.PI)
 }
 
 /** The figures of the tool, along its own axis: stick-out beside the cutter, grip and gauge length outside the chuck. */

@@ -37,6 +37,7 @@ export interface SectionDrawingProps extends SectionChanges {
 const firstWidth = 900
 const roomBelowPx = 44
 const roomAbovePx = 60
+const usualDropPx = 30
 
 function sheetHeight(width: number): number {
   return isNarrow({ width })
@@ -97,9 +98,10 @@ function Touches({
       ? touchPoint(scene, asked.part, asked.depthMm)
       : null
   // Above a cross near the top face stands the holder: the words go under it, into the air or the hatching.
-  const isBetterBelow = (hMm: number) => {
+  const dropPx = (hMm: number) => {
     const abovePx = (hMm - topFaceMm(scene.at)) * layout.pxPerMm
-    return abovePx > roomBelowPx || (abovePx <= 0 && abovePx > -roomAbovePx)
+    if (abovePx <= -roomAbovePx) return null
+    return abovePx > 0 && abovePx <= roomBelowPx ? abovePx + usualDropPx : usualDropPx
   }
   return (
     <g>
@@ -109,7 +111,7 @@ function Touches({
           layout={layout}
           text={`${partNames[asked.part]} ${sentenceLength(asked.depthMm, unit)}`}
           tone="asked"
-          isBelow={isBetterBelow(askedPoint.hMm)}
+          dropPx={dropPx(askedPoint.hMm)}
         />
       ) : null}
       {limit && answer.limitedBy !== null && answer.reachMm !== null ? (
@@ -118,7 +120,7 @@ function Touches({
           layout={layout}
           text={limitText(answer, answer.limitedBy, answer.reachMm, unit, layout)}
           tone={isCollision(answer) ? 'collision' : 'next'}
-          isBelow={answer.limitedBy === 'floor' || isBetterBelow(limit.hMm)}
+          dropPx={answer.limitedBy === 'floor' ? usualDropPx : dropPx(limit.hMm)}
         />
       ) : null}
     </g>

@@ -7,19 +7,19 @@ export interface TouchMarkProps {
   layout: SectionLayout
   text: string
   tone: 'collision' | 'next' | 'asked'
-  /** Whether the words stand below the cross: above it the holder would be in the way. */
-  isBelow: boolean
+  /** How far below the cross the words stand, where the holder would be in their way above it; else null. */
+  dropPx: number | null
 }
 
 const colours = { collision: 'var(--collision)', next: 'var(--ink)', asked: 'var(--accent)' } as const
 const arm = 7
 
 /** A cross where a part of the tool first touches, and a leader with its name and height in words. */
-export function TouchMark({ at, layout, text, tone, isBelow }: TouchMarkProps) {
+export function TouchMark({ at, layout, text, tone, dropPx }: TouchMarkProps) {
   const point = onSheet(layout, at.uMm, at.hMm)
   const isSeen = point.y > 8 && point.y < layout.sheet.height && point.x > 0 && point.x < layout.sheet.width
   if (!isSeen) return null
-  const shoulder = shoulderOf(point, draftingTextWidth(text) + 8, layout.sheet.width, isBelow)
+  const shoulder = shoulderOf(point, draftingTextWidth(text) + 8, layout.sheet.width, dropPx)
   const colour = colours[tone]
   return (
     <g stroke={colour} fill="none" strokeLinecap="round">
@@ -52,8 +52,8 @@ const reachOut = 26
 const rim = 6
 
 /** To the right where the words fit there, else to the left, else as far right as the sheet goes. */
-function shoulderOf(point: Point, width: number, sheetWidth: number, isBelow: boolean) {
-  const y = isBelow ? point.y + reachOut + 4 : Math.max(20, point.y - reachOut)
+function shoulderOf(point: Point, width: number, sheetWidth: number, dropPx: number | null) {
+  const y = dropPx === null ? Math.max(20, point.y - reachOut) : point.y + dropPx
   const [right, left] = [point.x + reachOut, point.x - reachOut]
   if (right + width <= sheetWidth - rim) return { x: right, endX: right + width, y }
   if (left - width >= rim) return { x: left, endX: left - width, y }
