@@ -67,7 +67,7 @@ describe('a ball-end speed as it is typed', () => {
     ['depthOfCutMm', 'F', 'not a length'],
     ['tiltDeg', '120', 'from 0 to 90'],
     ['stepoverMm', '7', 'more than the cutting diameter'],
-    ['scallopHeightMm', '4', 'from 0 to 3'],
+    ['scallopHeightMm', '4', 'more than the radius'],
     ['cornerRadiusMm', '4', 'more than half'],
     ['spindleRpm', '1.5', 'whole number'],
     ['maximumRpm', '0', 'more than 0'],
@@ -77,6 +77,13 @@ describe('a ball-end speed as it is typed', () => {
     expect(Object.keys(reading.faults)).toEqual([field])
     expect(reading.faults[field]).toContain(reason)
     expect(reading.answer).toBeNull()
+  })
+
+  it('names no figure of another unit than the one typed in', () => {
+    const draft = withTyped(draftOf('cuttingDiameterMm=6.35&depthOfCutMm=0.3'), 'scallopHeightMm', '5')
+    const { scallopHeightMm } = readBallSpeedDraft(draft, inInches).faults
+    expect(scallopHeightMm).toContain('more than the radius')
+    expect(scallopHeightMm).not.toMatch(/\d/)
   })
 
   it('holds the whole cut in its address, whoever opens it in whatever unit', () => {

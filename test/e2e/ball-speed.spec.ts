@@ -52,6 +52,10 @@ test('what cannot be is said beside its field, and the drawing keeps the cut bef
   await expect(page.locator(field('stepoverMm'))).toHaveAttribute('aria-invalid', 'true')
   await expect(page.getByText('more than the cutting diameter').first()).toBeVisible()
   await expect(page.getByText('of the cut before')).toBeVisible()
+  await page.goto('/ball-speed?cuttingDiameterMm=6&depthOfCutMm=0.3&tiltDeg=0')
+  await page.locator(field('depthOfCutMm')).fill('#80')
+  await expect(page.getByText('“#80” is not a length').first()).toBeVisible()
+  await expect(page.getByText(/^Read as/)).toHaveCount(0)
 })
 
 test('a person of the other unit sees the same cut in inches and SFM', async ({ page }) => {

@@ -105,6 +105,7 @@ function Length(props: BoundFieldProps) {
       {...useBinding(props)}
       unit={unit}
       decimalComma={decimalComma}
+      drillSizes={false}
       onTextChange={(text) => props.ballSpeed.type(props.field, text)}
     />
   )

@@ -13,6 +13,8 @@ export interface LengthFieldProps extends Omit<TextFieldProps, 'value' | 'onChan
   decimalComma: boolean
   /** Whether 0 is an answer, as it is of a tip or an offset. */
   allowZero?: boolean
+  /** Whether a drill size such as `#7` is a length here; yes unless false. */
+  drillSizes?: boolean
 }
 
 /** A dimension as people write it: `1/8`, `3.175 mm`, `#7`. What it was read as stands below where that isn't plain to see. */
@@ -22,12 +24,14 @@ export function LengthField({
   unit,
   decimalComma,
   allowZero,
+  drillSizes,
   symbol,
   hint,
   error,
   ...rest
 }: LengthFieldProps) {
-  const parsed = value.trim() === '' ? null : parseLength(value, { unit, decimalComma, allowZero })
+  const parsed =
+    value.trim() === '' ? null : parseLength(value, { unit, decimalComma, allowZero, drillSizes })
   const readAs = parsed?.ok && parsed.as !== 'plain' ? `Read as ${formatLength(parsed.mm, unit)}` : undefined
   const fault = parsed && !parsed.ok ? parsed.message : undefined
   return (

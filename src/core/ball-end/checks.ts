@@ -27,6 +27,11 @@ export function requireBetween(value: number, low: number, high: number, path: s
   }
 }
 
+export function requireNotNegative(value: number, path: string, name: string): void {
+  requireFinite(value, path, name)
+  if (value < 0) throw new CoreInputError('out-of-range', path, `${name} can't be below 0.`)
+}
+
 function requireFinite(value: number, path: string, name: string): void {
   if (!Number.isFinite(value)) throw new CoreInputError('not-finite', path, `${name} must be a number.`)
 }

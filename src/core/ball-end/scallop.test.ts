@@ -60,7 +60,11 @@ describe('scallop', () => {
       expect.objectContaining({ code: 'stepover-over-diameter', path: 'stepoverMm' }),
     )
     expect(() => scallopHeightMm({ cuttingDiameterMm: 6 }, -1)).toThrow(
-      expect.objectContaining({ code: 'out-of-range', path: 'stepoverMm' }),
+      expect.objectContaining({
+        code: 'out-of-range',
+        path: 'stepoverMm',
+        message: "The stepover can't be below 0.",
+      }),
     )
     expect(() => stepoverForScallopMm({ cuttingDiameterMm: 6 }, 3.01)).toThrow(
       expect.objectContaining({ code: 'out-of-range', path: 'scallopHeightMm' }),

@@ -1,5 +1,5 @@
 import { CoreInputError } from '../core-input-error'
-import { requireBetween, requireLength } from './checks'
+import { requireLength, requireNotNegative } from './checks'
 import { isBallEnd, requireCorner } from './corner-diameter'
 
 export interface ScallopTip {
@@ -30,7 +30,7 @@ export interface ScallopTip {
  */
 export function scallopHeightMm(tip: ScallopTip, stepoverMm: number): number {
   const { radiusMm, flatMm } = checkedTip(tip)
-  requireBetween(stepoverMm, 0, Number.MAX_VALUE, 'stepoverMm', 'The stepover')
+  requireNotNegative(stepoverMm, 'stepoverMm', 'The stepover')
   if (stepoverMm > tip.cuttingDiameterMm) {
     throw new CoreInputError(
       'stepover-over-diameter',
@@ -59,7 +59,14 @@ export function scallopHeightMm(tip: ScallopTip, stepoverMm: number): number {
  */
 export function stepoverForScallopMm(tip: ScallopTip, heightMm: number): number {
   const { radiusMm, flatMm } = checkedTip(tip)
-  requireBetween(heightMm, 0, radiusMm, 'scallopHeightMm', 'The scallop height')
+  requireNotNegative(heightMm, 'scallopHeightMm', 'The scallop height')
+  if (heightMm > radiusMm) {
+    throw new CoreInputError(
+      'out-of-range',
+      'scallopHeightMm',
+      'The scallop height is more than the radius of the tip.',
+    )
+  }
   return flatMm + 2 * Math.sqrt(heightMm * (2 * radiusMm - heightMm))
 }
 
