@@ -10,7 +10,7 @@ export interface ItemSectionProps {
 /** A part of an item's page under its heavy rule. */
 export function ItemSection({ title, aside, children }: ItemSectionProps) {
   return (
-    <section className="min-w-0 break-inside-avoid">
+    <section aria-label={title} className="min-w-0 break-inside-avoid">
       <div className="border-ink flex flex-wrap items-end justify-between gap-x-4 gap-y-1 border-b-2 pb-1">
         <h2 className="text-lg">{title}</h2>
         {aside}
