@@ -148,6 +148,17 @@ describe('a message', () => {
       'A stick-out of 10 mm is 6.2 mm too short: it must be at least 16.2 mm (the bottom of the bore).',
     ],
     [
+      {
+        code: 'stick-out-breaks-bound',
+        values: { stickOutMm: 39.186, bound: 'neck', boundMm: 39.1875, overlapMm: 0.0015 },
+      },
+      'A stick-out of 39.186 mm is 0.002 mm too short: it must be at least 39.188 mm (the end of the neck: only full shank is clamped).',
+    ],
+    [
+      { code: 'longer-stick-out-reaches', values: { stickOutMm: 30, requiredMm: 39.187 } },
+      'A stick-out of 39.187 mm would reach.',
+    ],
+    [
       { code: 'floor-radius-too-small', values: { floorRadiusMm: 0, cornerRadiusMm: 0.5, shortfallMm: 0.5 } },
       'The floor asks for a square end; this cutter has a corner radius of 0.5 mm.',
     ],

@@ -157,8 +157,9 @@ const sentences: {
     `A bore of ${size(boreDiameterMm)} doesn’t take a shank of ${size(shankDiameterMm)}: they may differ by ${size(toleranceMm)}.`,
   'bounds-crossed': ({ lowerBound, lowerMm, upperBound, upperMm, overlapMm }, said) =>
     `No stick-out is allowed. It must be at least ${said(lowerMm)} (${lowerBoundNames[lowerBound]}) and at most ${said(upperMm)} (${upperBoundNames[upperBound]}): ${said(overlapMm)} are missing.`,
-  'stick-out-breaks-bound': ({ stickOutMm, bound, boundMm, overlapMm }, said) =>
-    `A stick-out of ${said(stickOutMm)} is ${said(overlapMm)} too ${stickOutMm > boundMm ? 'long' : 'short'}: it must be at ${stickOutMm > boundMm ? 'most' : 'least'} ${said(boundMm)} (${boundName(bound)}).`,
+  // Stick-outs to be set or typed are said in full: rounded, the figure itself might break the bound it speaks of.
+  'stick-out-breaks-bound': ({ stickOutMm, bound, boundMm, overlapMm }, said, size) =>
+    `A stick-out of ${size(stickOutMm)} is ${said(overlapMm)} too ${stickOutMm > boundMm ? 'long' : 'short'}: it must be at ${stickOutMm > boundMm ? 'most' : 'least'} ${size(boundMm)} (${boundName(bound)}).`,
   'cutter-rubs': ({ part, depthMm }, said) =>
     `The ${partNames[part]} of the cutter itself stops at ${said(depthMm)}: no stick-out helps.`,
   'cutter-strikes-floor': ({ part }) =>
@@ -169,7 +170,7 @@ const sentences: {
     `The flutes serve to a depth of ${said(usableDepthMm)}, ${said(shortfallMm)} too little.`,
   'needed-stick-out-over-maximum': ({ lowerBound, neededMm, maximumMm, shortfallMm }, said) =>
     `This depth needs ${said(neededMm)} of stick-out (${lowerBoundNames[lowerBound]}), ${said(shortfallMm)} more than the ${said(maximumMm)} allowed.`,
-  'longer-stick-out-reaches': ({ requiredMm }, said) => `A stick-out of ${said(requiredMm)} would reach.`,
+  'longer-stick-out-reaches': ({ requiredMm }, _, size) => `A stick-out of ${size(requiredMm)} would reach.`,
 
   'depth-in-steps': ({ maximumAxialStepMm, steps }, said) =>
     `One axial step is at most ${said(maximumAxialStepMm)}, so this depth goes in ${steps} steps.`,
