@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { emptyDraft, type ReachDraft } from './reach-draft'
 import { draftInUnit, draftQuery, queryDraft } from './reach-query'
-import type { Reading } from './read-field'
+import { type Reading, readField } from './read-field'
 
 const mm: Reading = { unit: 'mm', decimalComma: false }
 const inch: Reading = { unit: 'in', decimalComma: false }
@@ -38,12 +38,28 @@ describe('the check in the address bar', () => {
     expect(draft.obstacles).toMatchObject([{ setback: '5 mm', rise: '0.5' }])
   })
 
-  it('leaves out what cannot be read, and takes no nonsense for an id', () => {
-    const typed = draftWith({ texts: { ...emptyDraft.texts, feature: { depthMm: 'deep' } } })
-    expect(draftQuery(typed, mm)).toBe('')
-    expect(
-      queryDraft('cutter=../1&depth=-3&draft=x&h.segments=nut:1x&feature=slot&c.form=round', mm),
-    ).toEqual(emptyDraft)
+  it('carries along what cannot be read, so that no limit is lost on the way', () => {
+    const typed = draftWith({
+      texts: { ...emptyDraft.texts, feature: { depthMm: '10', floorRadiusMm: '1.250' } },
+      obstacles: [
+        { key: 1, setback: '5', rise: 'high' },
+        { key: 2, setback: '', rise: '' },
+      ],
+    })
+    const query = draftQuery(typed, comma)
+    expect(query).toBe('depth=10&floor=unread:1.250&obstacles=unread')
+    const opened = queryDraft(query, comma)
+    expect(opened.texts.feature.floorRadiusMm).toBe('1.250')
+    expect(readField('length', opened.obstacles[0]?.rise ?? '', comma).ok).toBe(false)
+  })
+
+  it('takes no nonsense for an id, and makes no verdict of nonsense for a figure', () => {
+    const opened = queryDraft('cutter=../1&depth=-3&draft=x&h.segments=nut:1x&feature=slot', mm)
+    expect(opened.picks).toEqual(emptyDraft.picks)
+    expect(opened.featureKind).toBe('wall')
+    expect(opened.texts.feature).toEqual({ depthMm: '-3', draftDeg: 'x' })
+    expect(opened.segments.holder).toHaveLength(1)
+    expect(readField('length', opened.segments.holder?.[0]?.length ?? '', mm).ok).toBe(false)
   })
 
   it('keeps a figure of the catalogue that was cleared on purpose', () => {

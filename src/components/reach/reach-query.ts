@@ -15,14 +15,20 @@ import { type FieldValue, fieldText, type Reading, readField } from './read-fiel
 /** The address bar speaks millimetres, degrees and newtons, so that a link says the same to everyone. */
 const plain: Reading = { unit: 'mm', decimalComma: false }
 
+/** Before a text that was not understood, so that it is not taken for a figure in the address's own unit. */
+const unreadMark = 'unread:'
+/** Stands for a row of a list that was not understood, and for its texts. */
+const unreadRow = 'unread'
+const unreadText = '?'
+
 const segmentPattern = /^(nut|holder):([\d.]+)x([\d.]+)(?:-([\d.]+))?$/
 const obstaclePattern = /^([\d.]+)x([\d.]+)$/
 const longestList = 100
 const segmentQueryNames = { holder: 'h.segments', extension: 'x.segments' } as const
 
 /**
- * The check as a query: ids of what is picked, figures of what is typed. A figure that cannot be read is left out, since
- * it has no meaning to share.
+ * The check as a query: ids of what is picked, figures of what is typed. A figure that cannot be read goes along as it
+ * was typed, marked so: left out, whoever opens the link would get a verdict without a limit that was meant.
  *
  * An obstacle is `setback x rise`, a segment `part:length x nose diameter - spindle diameter`.
  */
@@ -59,8 +65,8 @@ function setFigure(
   keepsEmpty: boolean,
 ): void {
   const read = readField(field.kind, text, reading)
-  if (!read.ok || (read.value === null && !keepsEmpty)) return
-  query.set(field.query, fieldText(field.kind, read.value, plain))
+  if (!read.ok) query.set(field.query, `${unreadMark}${text.trim()}`)
+  else if (read.value !== null || keepsEmpty) query.set(field.query, fieldText(field.kind, read.value, plain))
 }
 
 function setList<Row>(
@@ -78,20 +84,26 @@ function mmText(text: string, reading: Reading): string | null {
   return read.ok && typeof read.value === 'number' ? decimalText(read.value, 0, lengthDecimals) : null
 }
 
+/** A row nobody filled in is left out; one that is half filled in or cannot be read stays a fault. */
+function unreadUnlessBlank(texts: readonly string[]): string | null {
+  return texts.every((text) => text.trim() === '') ? null : unreadRow
+}
+
 function obstacleText({ setback, rise }: ObstacleDraft, reading: Reading): string | null {
   const [setbackMm, riseMm] = [mmText(setback, reading), mmText(rise, reading)]
-  return setbackMm === null || riseMm === null ? null : `${setbackMm}x${riseMm}`
+  if (setbackMm === null || riseMm === null) return unreadUnlessBlank([setback, rise])
+  return `${setbackMm}x${riseMm}`
 }
 
 function segmentText(segment: SegmentDraft, reading: Reading): string | null {
   const [length, nose, spindle] = [segment.length, segment.nose, segment.spindle].map((text) =>
     mmText(text, reading),
   )
-  if (!length || !nose || !spindle) return null
+  if (!length || !nose || !spindle) return unreadUnlessBlank([segment.length, segment.nose, segment.spindle])
   return `${segment.part}:${length}x${nose}${spindle === nose ? '' : `-${spindle}`}`
 }
 
-/** The draft a query stands for, in the reader's unit. What is not understood is left out. */
+/** The draft a query stands for, in the reader's unit. A figure that is not understood stays, as a fault at its field. */
 export function queryDraft(queryText: string, reading: Reading): ReachDraft {
   const query = new URLSearchParams(queryText)
   const texts = Object.fromEntries(fieldGroups.map((group) => [group, {}])) as Record<
@@ -101,7 +113,11 @@ export function queryDraft(queryText: string, reading: Reading): ReachDraft {
   for (const field of reachFields) {
     const written = query.get(field.query)
     const read = written === null ? null : readField(field.kind, written, plain)
-    if (read?.ok && isChoice(field, read.value))
+    if (written !== null && !read?.ok)
+      texts[field.group][field.name] = written.startsWith(unreadMark)
+        ? written.slice(unreadMark.length)
+        : written
+    else if (read?.ok && isChoice(field, read.value))
       texts[field.group][field.name] = fieldText(field.kind, read.value, reading)
   }
   const picks = Object.fromEntries(toolSlots.map((slot) => [slot, idOrNull(query.get(slot))]))
@@ -128,14 +144,8 @@ function idOrNull(text: string | null): string | null {
   return text !== null && /^[1-9]\d{0,17}$/.test(text) ? text : null
 }
 
-function readList<Row>(text: string | null, read: (text: string, key: number) => Row | null): Row[] | null {
-  if (!text) return null
-  const rows = text
-    .split(',')
-    .slice(0, longestList)
-    .map(read)
-    .filter((row) => row !== null)
-  return rows.length > 0 ? rows : null
+function readList<Row>(text: string | null, read: (text: string, key: number) => Row): Row[] | null {
+  return text ? text.split(',').slice(0, longestList).map(read) : null
 }
 
 function typed(mm: string | undefined, reading: Reading): string {
@@ -143,15 +153,17 @@ function typed(mm: string | undefined, reading: Reading): string {
   return read.ok ? fieldText('lengthOrZero', read.value, reading) : ''
 }
 
-function readObstacle(text: string, key: number, reading: Reading): ObstacleDraft | null {
+function readObstacle(text: string, key: number, reading: Reading): ObstacleDraft {
   const match = obstaclePattern.exec(text)
-  return match ? { key, setback: typed(match[1], reading), rise: typed(match[2], reading) } : null
+  if (!match) return { key, setback: unreadText, rise: unreadText }
+  return { key, setback: typed(match[1], reading), rise: typed(match[2], reading) }
 }
 
-function readSegment(text: string, key: number, reading: Reading): SegmentDraft | null {
+function readSegment(text: string, key: number, reading: Reading): SegmentDraft {
   const match = segmentPattern.exec(text)
   const part = holderSegmentParts.find((known) => known === match?.[1])
-  if (!match || !part) return null
+  if (!match || !part)
+    return { key, part: 'holder', length: unreadText, nose: unreadText, spindle: unreadText }
   return {
     key,
     part,
