@@ -78,6 +78,9 @@ describe('sorting', () => {
     const filtered = await list('colour=red')
     expect(filtered.status).toBe(400)
     expect(faultPaths(filtered)).toEqual(['colour'])
+    const ofNoForm = await list('form=ball,round')
+    expect(ofNoForm.status).toBe(400)
+    expect(faultPaths(ofNoForm)).toEqual(['form'])
   })
 })
 

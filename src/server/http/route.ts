@@ -1,5 +1,5 @@
 import { createHash, randomUUID } from 'node:crypto'
-import type { z } from 'zod'
+import { z } from 'zod'
 import { can, type Permission } from '@/core/policies/permissions'
 import { AppError } from '@/lib/app-error'
 import { plainMessage } from '@/schemas/plain-message'
@@ -120,8 +120,10 @@ function parseInput(schema: z.ZodType, value: unknown, where: 'path' | 'query'):
   const parsed = schema.safeParse(value, { error: plainMessage })
   if (parsed.success) return parsed.data
   if (where === 'path') throw new AppError('not-found', 'There is nothing at this address.')
+  // A list in one parameter is named by the parameter: whoever wrote it counts no members.
+  const issues = parsed.error.issues.map((issue) => ({ ...issue, path: issue.path.slice(0, 1) }))
   throw new AppError('wrong-shape', 'The query of this address cannot be read.', {
-    errors: fieldProblems(parsed.error),
+    errors: fieldProblems(new z.ZodError(issues)),
   })
 }
 
