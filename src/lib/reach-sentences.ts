@@ -161,7 +161,7 @@ const sentences: {
   'stick-out-breaks-bound': ({ stickOutMm, bound, boundMm, overlapMm }, said, size) =>
     `A stick-out of ${size(stickOutMm)} is ${said(overlapMm)} too ${stickOutMm > boundMm ? 'long' : 'short'}: it must be at ${stickOutMm > boundMm ? 'most' : 'least'} ${size(boundMm)} (${boundName(bound)}).`,
   'cutter-rubs': ({ part, depthMm }, said) =>
-    `The ${partNames[part]} of the cutter itself stops at ${said(depthMm)}: no stick-out helps.`,
+    `The ${partNames[part]} of the cutter itself, with its clearance, stops at ${said(depthMm)}: no stick-out helps.`,
   'cutter-strikes-floor': ({ part }) =>
     `Tilted like this, the far side of the ${partNames[part]} stands in the floor: less tilt or another cutter.`,
   'holder-strikes-floor': ({ neededStickOutMm }, said) =>
@@ -184,7 +184,7 @@ const sentences: {
  * One message of an answer in words, its lengths in the reader's unit.
  *
  * @example
- * messageSentence({ code: 'cutter-rubs', values: { part: 'shank', depthMm: 12.7, shortfallMm: 3 } }, 'mm') // => 'The shank of the cutter itself stops at 12.7 mm: no stick-out helps.'
+ * messageSentence({ code: 'cutter-rubs', values: { part: 'shank', depthMm: 12.7, shortfallMm: 3 } }, 'mm') // => 'The shank of the cutter itself, with its clearance, stops at 12.7 mm: no stick-out helps.'
  */
 export function messageSentence(message: ReachMessage, unit: LengthUnit): string {
   const write = sentences[message.code] as (values: ReachMessage['values'], said: Said, size: Said) => string

@@ -67,7 +67,7 @@ export interface ReachMessageValues {
     overlapMm: number
   }
 
-  /** Part of the cutter itself stops at this depth (a shank rubs): no stick-out helps. */
+  /** Part of the cutter itself, with its clearance, stops at this depth (a shank rubs): no stick-out helps. */
   'cutter-rubs': { part: ToolPart; depthMm: number; shortfallMm: number }
   /** The far side of the tilted cutter itself stands in the floor: less tilt or another cutter. */
   'cutter-strikes-floor': { part: ToolPart }
