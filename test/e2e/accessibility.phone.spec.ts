@@ -1,0 +1,4 @@
+import { phoneStates } from '../support/accessible-states'
+import { testEveryState } from '../support/walk-states'
+
+testEveryState(phoneStates)

@@ -1,0 +1,171 @@
+import type { Page } from '@playwright/test'
+import { expect } from '@playwright/test'
+import type { Role } from '@/core/policies/permissions'
+import type { NeckedToolRows } from './shop-rows'
+
+/** A state of a page: where it is, who sees it, and what is done until it stands. */
+export interface PageState {
+  name: string
+  role: Role | null
+  path: string
+  /** Answers once what is to be looked at is there. */
+  reach: (page: Page) => Promise<unknown>
+}
+
+const unreachable = 'Leadline cannot be reached'
+
+export const neckedCheck =
+  'c.form=square&c.DC=3.175&c.APMX=6.35&c.LCF=6.35&c.DN=3&c.LU=38.1&c.DMM=3.175&c.OAL=76.2' +
+  '&h.A=100&h.depth=75&h.grip=10&h.segments=nut:18x28'
+
+const shows = (text: string | RegExp) => (page: Page) => expect(page.getByText(text).first()).toBeVisible()
+const heading = (name: string | RegExp) => (page: Page) =>
+  expect(page.getByRole('heading', { name }).first()).toBeVisible()
+const verdict = (text: string) => (page: Page) => expect(page.getByTestId('verdict')).toContainText(text)
+
+/** Presses a button, then waits for the dialog it opens. */
+const opens = (name: string | RegExp) => async (page: Page) => {
+  await page.getByRole('button', { name }).first().click()
+  await expect(page.getByRole('dialog')).toBeVisible()
+}
+
+const listRow = (page: Page) =>
+  expect(page.locator('[row-id], main li a').filter({ visible: true }).first()).toBeVisible()
+
+/** Opens a dialog and sends what cannot be taken, so that the faults stand beside their fields. */
+const refused = (open: string | RegExp, send: string) => async (page: Page) => {
+  await opens(open)(page)
+  await page.getByRole('dialog').getByRole('button', { name: send }).click()
+  await expect(page.getByRole('dialog').locator('[aria-invalid="true"]').first()).toBeVisible()
+}
+
+const withoutServer = (pattern: RegExp) => async (page: Page) => {
+  await page.route(pattern, (route) => route.abort())
+  await page.reload()
+  await expect(page.getByText(unreachable).first()).toBeVisible()
+}
+
+/** Every page, with the dialogs it opens and the faults it shows. */
+export function pageStates(rows: NeckedToolRows, importId: string): PageState[] {
+  const cutter = `/cutters/${rows.cutterId}`
+  const state = (role: Role | null, path: string, name: string, reach: PageState['reach']) => ({
+    role,
+    path,
+    name,
+    reach,
+  })
+  return [
+    state(null, '/sign-in', 'sign in', heading('Sign in')),
+    state(null, '/sign-in', 'sign in refused', async (page) => {
+      await page.getByLabel('E-mail address').fill('nobody@leadline.example')
+      await page.getByLabel('Password').fill('not a password')
+      await page.getByRole('button', { name: 'Sign in' }).click()
+      await expect(page.getByRole('alert').filter({ hasText: /\w/ })).toBeVisible()
+    }),
+    state(null, '/invitation/made-up', 'a dead invitation', heading('This address no longer opens')),
+    state(null, '/setup/made-up', 'a dead setup', heading(/./)),
+
+    state('machinist', '/reach', 'reach, nothing given', verdict('Does it reach?')),
+    state('machinist', `/reach?depth=25&${neckedCheck}`, 'reach holds', verdict('Reaches 25 mm')),
+    state(
+      'machinist',
+      `/reach?depth=45&draft=2&obstacles=5x9&${neckedCheck}`,
+      'reach collides',
+      verdict('.'),
+    ),
+    state(
+      'machinist',
+      `/reach?depth=25&${neckedCheck}`,
+      'reach, a field that cannot be read',
+      async (page) => {
+        await page.getByRole('textbox', { name: /^Depth/ }).fill('25 cubits')
+        await verdict('One field needs another look')(page)
+      },
+    ),
+    state('machinist', '/reach', 'reach, picking from the crib', async (page) => {
+      const cutters = page.getByRole('region', { name: 'Cutter', exact: true })
+      await cutters.getByRole('combobox', { name: 'Pick from the crib' }).fill(rows.cutterCode)
+      await expect(cutters.getByRole('listbox').getByRole('option')).toHaveCount(1)
+    }),
+    state('machinist', `/reach?cutter=${rows.cutterId}&depth=10`, 'reach, a cutter picked', async (page) => {
+      await expect(page.getByRole('link', { name: rows.cutterCode })).toBeVisible()
+    }),
+    state(
+      'machinist',
+      '/ball-speed?cuttingDiameterMm=6&depthOfCutMm=0.3&tiltDeg=0&spindleRpm=20000&stepoverMm=0.3',
+      'ball-end speed',
+      shows('The dead tip is in the cut and rubs'),
+    ),
+    state('machinist', '/not-allowed', 'not allowed', (page) =>
+      expect(page.getByRole('main')).toContainText(/\w/),
+    ),
+    state('machinist', '/no-such-page', 'no such page', shows('There is nothing at this address')),
+    state('machinist', '/account', 'account', heading('Password')),
+    state('machinist', cutter, 'a cutter, issuing', opens('Issue')),
+    state('machinist', cutter, 'a cutter, returning', opens('Return')),
+
+    state('cribManager', '/cutters', 'cutters', listRow),
+    state('cribManager', '/cutters?q=zzzzzzzzzz', 'cutters, nothing found', shows('No cutter matches')),
+    state('cribManager', '/cutters', 'cutters, failed', withoutServer(/\/api\/cutters\?/)),
+    state('cribManager', '/cutters', 'cutters, adding', refused('Add a cutter', 'Add the cutter')),
+    state('cribManager', '/holders', 'holders', listRow),
+    state('cribManager', '/holders', 'holders, adding', refused('Add a holder', 'Add the holder')),
+    state('cribManager', '/collets', 'collets', listRow),
+    state('cribManager', '/extensions', 'extensions', listRow),
+    state('cribManager', cutter, 'a cutter', shows('Adjustment 5')),
+    state('cribManager', cutter, 'a cutter, edited', opens('Edit')),
+    state('cribManager', cutter, 'a cutter, not archived', async (page) => {
+      await opens('Archive')(page)
+      await page.getByRole('button', { name: 'Archive it' }).click()
+      await expect(page.getByRole('dialog').getByRole('alert')).toBeVisible()
+    }),
+    state('cribManager', cutter, 'a cutter, reversing', opens('Reverse')),
+    state('cribManager', cutter, 'a cutter, its parts failed', withoutServer(/\/api\/items\//)),
+    state('cribManager', '/locations', 'locations', shows('All that lies in it')),
+    state('cribManager', '/locations', 'locations, a bin', opens('Bin A-1')),
+    state('cribManager', '/locations', 'locations, adding', refused('Add a crib', 'Add')),
+    state('cribManager', '/locations', 'locations, failed', withoutServer(/\/api\/locations/)),
+    state('cribManager', '/imports', 'imports', heading('Imports')),
+    state('cribManager', '/imports/new', 'a new import', heading('Example files')),
+    state('cribManager', '/imports/new', 'a new import without a file', async (page) => {
+      await page.getByRole('button', { name: 'Upload and check' }).click()
+      await shows('Choose a file first.')(page)
+    }),
+    state('cribManager', `/imports/${importId}`, 'an import, rejects', shows('is not a length')),
+    state(
+      'cribManager',
+      `/imports/${importId}?show=columns`,
+      'an import, columns',
+      shows('known by its heading'),
+    ),
+    state('cribManager', `/imports/${importId}`, 'an import, cancelling', opens('Cancel the import')),
+
+    state('admin', '/people', 'people', heading('People')),
+    state('admin', '/people', 'people, adding', refused('Add a person', 'Add and make the invitation')),
+    state('admin', '/settings', 'settings', heading('Shop settings')),
+    state('admin', '/settings', 'settings refused', async (page) => {
+      await page.getByLabel('Hole tolerance').fill('a bit')
+      await expect(page.getByLabel('Hole tolerance')).toHaveAttribute('aria-invalid', 'true')
+    }),
+  ]
+}
+
+/** What only a desk has. */
+export const deskStates: PageState[] = [
+  {
+    name: 'cutters, choosing columns',
+    role: 'cribManager',
+    path: '/cutters',
+    reach: async (page) => {
+      await listRow(page)
+      await page.getByRole('button', { name: 'Columns' }).click()
+      await expect(page.getByRole('list', { name: 'Shown', exact: true })).toBeVisible()
+    },
+  },
+]
+
+/** What only a phone has. */
+export const phoneStates: PageState[] = [
+  { name: 'the menu', role: 'admin', path: '/account', reach: opens('Menu') },
+  { name: 'sorting and filtering', role: 'machinist', path: '/cutters', reach: opens(/^Filters/) },
+]
