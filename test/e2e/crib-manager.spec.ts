@@ -88,19 +88,19 @@ test('a messy list goes in: a heading said once, one row rejected with its reaso
 }) => {
   test.slow()
   const mark = uniqueCode('IMP')
-  const heading = uniqueCode('No')
+  const heading = uniqueCode('Size')
   const { content, toBuffer } = exampleFile('cutters-inch.csv', mark)
-  // The shop's own heading for the code, and an overall length nobody can read.
+  // The shop's own heading for the diameter, and an overall length nobody can read.
   const list = content
-    .replace('Tool #', heading)
+    .replace('Dia (in)', heading)
     .replace('Price ($)', 'Price')
     .replace(';3/8;2 1/2;', ';3/8;long;')
 
   async function checkColumns(): Promise<void> {
     await upload(page, 'Cutters', 'tools.csv', toBuffer(list))
-    await expect(page.getByText('No column gives the own code')).toBeVisible(byWorker)
+    await expect(page.getByText('Nothing can be taken: 22 rejected.')).toBeVisible(byWorker)
     await page.getByRole('tab', { name: /^Columns/ }).click()
-    await page.getByLabel(heading, { exact: true }).selectOption({ label: 'Own code' })
+    await page.getByLabel(heading, { exact: true }).selectOption('cuttingDiameterMm')
     await page.getByRole('button', { name: 'Check again' }).click()
     await expect(page.getByText('This file would add 21; 1 is rejected.')).toBeVisible(byWorker)
   }
