@@ -1,10 +1,9 @@
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { expect, test } from '../support/browser'
-import { signInAsNewPerson } from '../support/new-person'
+import { expect, signIn, test } from '../support/browser'
 
 test.beforeEach(async ({ page }) => {
-  await signInAsNewPerson(page, 'cribManager')
+  await signIn(page, 'cribManager')
 })
 
 test('the list is read and narrowed with a thumb, and loads no grid', async ({ page }) => {

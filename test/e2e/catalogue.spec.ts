@@ -2,8 +2,7 @@ import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { expect, test } from '../support/browser'
-import { signInAsNewPerson } from '../support/new-person'
+import { expect, signIn, test } from '../support/browser'
 
 const dialog = (page: Page) => page.getByRole('dialog')
 const field = (page: Page, name: string) =>
@@ -18,7 +17,7 @@ async function makeCutter(page: Page, change: Record<string, unknown> = {}) {
 }
 
 test.beforeEach(async ({ page }) => {
-  await signInAsNewPerson(page, 'cribManager')
+  await signIn(page, 'cribManager')
 })
 
 test('a slash searches, one letter wrong is forgiven, Down and Enter open the row', async ({ page }) => {
@@ -130,7 +129,7 @@ test('a holder is built of segments, drawn while they are typed', async ({ page 
 
 test('who may not keep the crib is offered no change, and no cost', async ({ page }) => {
   const cutter = await makeCutter(page, { unitCost: 4321 })
-  await signInAsNewPerson(page, 'machinist')
+  await signIn(page, 'machinist')
   await page.goto(`/cutters/${cutter.id}`)
   await expect(page.getByRole('button', { name: 'Issue' })).toBeVisible()
   await expect(page.getByRole('term').filter({ hasText: 'On hand' })).toBeVisible()

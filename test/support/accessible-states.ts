@@ -45,8 +45,17 @@ const withoutServer = (pattern: RegExp) => async (page: Page) => {
   await expect(page.getByText(unreachable).first()).toBeVisible()
 }
 
+/** What the pages are shown of. */
+export interface StateRows {
+  rows: NeckedToolRows
+  importId: string
+  extensionId: string
+  /** The path of a one-time address that still opens. */
+  invitation: string
+}
+
 /** Every page, with the dialogs it opens and the faults it shows. */
-export function pageStates(rows: NeckedToolRows, importId: string): PageState[] {
+export function pageStates({ rows, importId, extensionId, invitation }: StateRows): PageState[] {
   const cutter = `/cutters/${rows.cutterId}`
   const state = (role: Role | null, path: string, name: string, reach: PageState['reach']) => ({
     role,
@@ -61,6 +70,11 @@ export function pageStates(rows: NeckedToolRows, importId: string): PageState[] 
       await page.getByLabel('Password').fill('not a password')
       await page.getByRole('button', { name: 'Sign in' }).click()
       await expect(page.getByRole('alert').filter({ hasText: /\w/ })).toBeVisible()
+    }),
+    state(null, invitation, 'an invitation, refused', async (page) => {
+      await page.getByLabel('Password').fill('short')
+      await page.getByRole('button', { name: 'Set password' }).click()
+      await expect(page.getByLabel('Password')).toHaveAttribute('aria-invalid', 'true')
     }),
     state(null, '/invitation/made-up', 'a dead invitation', heading('This address no longer opens')),
     state(null, '/setup/made-up', 'a dead setup', heading(/./)),
@@ -121,6 +135,17 @@ export function pageStates(rows: NeckedToolRows, importId: string): PageState[] 
     }),
     state('cribManager', cutter, 'a cutter, reversing', opens('Reverse')),
     state('cribManager', cutter, 'a cutter, its parts failed', withoutServer(/\/api\/items\//)),
+    state('cribManager', cutter, 'a cutter, a stale edit', async (page) => {
+      await opens('Edit')(page)
+      await page.getByRole('dialog').getByLabel('Maker', { exact: true }).fill('Mine')
+      const { version } = await (await page.request.get(`/api${cutter}`)).json()
+      await page.request.patch(`/api${cutter}`, { data: { version, maker: `Theirs ${version}` } })
+      await page.getByRole('dialog').getByRole('button', { name: 'Save the changes' }).click()
+      await shows('Nothing of yours was saved')(page)
+    }),
+    state('cribManager', `/holders/${rows.holderId}`, 'a holder', shows('What fits it')),
+    state('cribManager', `/collets/${rows.colletId}`, 'a collet', shows('What fits it')),
+    state('cribManager', `/extensions/${extensionId}`, 'an extension', shows('What fits it')),
     state('cribManager', '/locations', 'locations', shows('All that lies in it')),
     state('cribManager', '/locations', 'locations, a bin', opens('Bin A-1')),
     state('cribManager', '/locations', 'locations, adding', refused('Add a crib', 'Add')),
@@ -142,6 +167,11 @@ export function pageStates(rows: NeckedToolRows, importId: string): PageState[] 
 
     state('admin', '/people', 'people', heading('People')),
     state('admin', '/people', 'people, adding', refused('Add a person', 'Add and make the invitation')),
+    state('admin', '/people', 'people, a one-time address', async (page) => {
+      await page.getByRole('row').filter({ hasText: 'no password yet' }).last().getByRole('button').click()
+      await page.getByRole('button', { name: 'Make a new invitation' }).click()
+      await expect(page.getByLabel('One-time address to set a password')).toBeVisible()
+    }),
     state('admin', '/settings', 'settings', heading('Shop settings')),
     state('admin', '/settings', 'settings refused', async (page) => {
       await page.getByLabel('Hole tolerance').fill('a bit')

@@ -7,7 +7,9 @@ export interface NeckedToolRows {
   cutterCode: string
   /** Stands in the cutter's description and nowhere else. */
   word: string
+  holderId: string
   holderCode: string
+  colletId: string
   colletCode: string
   shelf: Shelf
 }
@@ -60,7 +62,8 @@ export async function createNeckedTool(db: Knex, crib: ApiClient): Promise<Necke
     if (status !== 201) throw new Error(`A row of the test was refused: ${JSON.stringify(body)}`)
   const shelf = await createShelf(crib)
   await putOnShelf(db, crib, { itemId: cutterId, binId: shelf.binId, quantity: 5 })
-  return { cutterId, cutterCode, word, holderCode, colletCode, shelf }
+  const [holderId, colletId] = [holder.body.id, collet.body.id]
+  return { cutterId, cutterCode, word, holderId, holderCode, colletId, colletCode, shelf }
 }
 
 /** A crib of the test's own, its bins A-1 and A-2, and the code it is called by. */

@@ -10,7 +10,7 @@ import { createNeckedTool } from './shop-rows'
 
 /** One test for each role: every page that role works with, in every state, light and dark. */
 export function testEveryState(extra: readonly PageState[]): void {
-  let states: PageState[]
+  let every: PageState[]
   let db: Knex
   test.describe.configure({ timeout: 180_000 })
   test.beforeAll(async () => {
@@ -19,7 +19,14 @@ export function testEveryState(extra: readonly PageState[]): void {
     const rows = await createNeckedTool(db, crib)
     const list = `Tool #,Type,Dia,LOC,OAL,Shank Dia,Shelf\n${uniqueCode('A')},Square,1/2,1,3,1/2,top\n${uniqueCode('B')},Square,1/2,1,long,1/2,top\n`
     const { id } = await checkedImport(crib, { kind: 'cutters', unit: 'in' }, list)
-    states = [...pageStates(rows, id), ...extra]
+    const { rows: extensions } = (await crib.get('/api/extensions?limit=1')).body
+    const shown = {
+      rows,
+      importId: id,
+      extensionId: extensions[0]?.id ?? '',
+      invitation: await openInvitation(),
+    }
+    every = [...pageStates(shown), ...extra]
   })
   test.afterAll(() => db.destroy())
 
@@ -27,7 +34,7 @@ export function testEveryState(extra: readonly PageState[]): void {
   for (const role of roles) {
     test(`no rule of accessibility is broken on any page of ${role ?? 'nobody'}`, async ({ page }) => {
       if (role) await signIn(page, role)
-      for (const state of states.filter((each) => each.role === role)) {
+      for (const state of every.filter((each) => each.role === role)) {
         await page.goto(state.path)
         await state.reach(page)
         await expectAccessible(page, state.name)
@@ -35,4 +42,12 @@ export function testEveryState(extra: readonly PageState[]): void {
       }
     })
   }
+}
+
+/** The path at which someone who was just added sets a password. */
+async function openInvitation(): Promise<string> {
+  const name = uniqueCode('Invited')
+  const email = `${name.toLowerCase()}@leadline.example`
+  const added = await (await signedInAs('admin')).post('/api/users', { name, email, role: 'machinist' })
+  return new URL(String(added.body.link)).pathname
 }
