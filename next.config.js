@@ -14,6 +14,10 @@ const nextConfig = {
   poweredByHeader: false,
   // Knex looks its dialects up at run time and pino starts its transports as threads: neither survives bundling.
   serverExternalPackages: ['knex', 'pino', 'pg-boss'],
+  // Whatever is answered is what it says it is: pages, redirects, files and all.
+  headers: async () => [
+    { source: '/:path*', headers: [{ key: 'x-content-type-options', value: 'nosniff' }] },
+  ],
   allowedDevOrigins: ['127.0.0.1'],
   turbopack: { root: projectFolder },
   outputFileTracingRoot: projectFolder,

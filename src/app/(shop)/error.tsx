@@ -12,6 +12,7 @@ export default function ShopError({
 }) {
   return (
     <StateSentence
+      isHeading
       sentence={`This page failed to load${error.digest ? ` (mark ${error.digest} in the log)` : ''}. Nothing was changed.`}
     >
       <Button onClick={reset}>Try again</Button>

@@ -2,6 +2,7 @@
 
 import { ArrowDown, ArrowUp, Columns3 } from 'lucide-react'
 import { Popover } from 'radix-ui'
+import { useEffect, useRef } from 'react'
 import { buttonClass } from '@/components/ui/button'
 
 export interface ChoosableColumn {
@@ -24,6 +25,13 @@ export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChoos
   const shownColumns = shown.flatMap((id) => byId.get(id) ?? [])
   const hiddenColumns = columns.filter((column) => !shown.includes(column.id))
 
+  const { toggledId, listsRef } = useFollowedToggle()
+
+  function handleToggle(id: string, next: string[]) {
+    toggledId.current = id
+    onChange(next)
+  }
+
   function handleMove(id: string, by: 1 | -1) {
     const next = [...shown]
     const from = next.indexOf(id)
@@ -41,6 +49,7 @@ export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChoos
       </Popover.Trigger>
       <Popover.Portal>
         <Popover.Content
+          ref={listsRef}
           align="end"
           sideOffset={6}
           className="bg-sheet border-ink z-40 flex max-h-(--radix-popover-content-available-height) w-92 flex-col overflow-y-auto border py-2 shadow-xl"
@@ -52,7 +61,12 @@ export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChoos
                   column={column}
                   isShown
                   isFixed={index === 0}
-                  onToggle={() => onChange(shown.filter((id) => id !== column.id))}
+                  onToggle={() =>
+                    handleToggle(
+                      column.id,
+                      shown.filter((id) => id !== column.id),
+                    )
+                  }
                 />
                 <MoveButton
                   label={`Move ${column.name} to the left`}
@@ -75,7 +89,7 @@ export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChoos
                 <ColumnCheck
                   column={column}
                   isShown={false}
-                  onToggle={() => onChange([...shown, column.id])}
+                  onToggle={() => handleToggle(column.id, [...shown, column.id])}
                 />
               </li>
             ))}
@@ -96,6 +110,19 @@ export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChoos
   )
 }
 
+/** The column that was just ticked stands in the other list now, and the keyboard follows it there. */
+function useFollowedToggle() {
+  const toggledId = useRef<string | null>(null)
+  const listsRef = useRef<HTMLDivElement>(null)
+  useEffect(() => {
+    if (toggledId.current === null) return
+    const input = listsRef.current?.querySelector<HTMLInputElement>(`input[name="${toggledId.current}"]`)
+    toggledId.current = null
+    input?.focus()
+  })
+  return { toggledId, listsRef }
+}
+
 function ColumnCheck({
   column,
   isShown,
@@ -111,6 +138,7 @@ function ColumnCheck({
     <label className="flex min-h-8 min-w-0 flex-1 items-center gap-2.5 text-[0.9375rem] pointer-coarse:min-h-11">
       <input
         type="checkbox"
+        name={column.id}
         className="accent-accent size-4"
         checked={isShown}
         disabled={isFixed}

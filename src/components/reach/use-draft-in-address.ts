@@ -39,13 +39,24 @@ export function useDraftInAddress(query: string, reading: Reading): [ReachDraft,
   }, [query, reading])
 
   useEffect(() => {
-    const timer = setTimeout(() => {
+    function write() {
       const next = draftQuery(draft, reading)
       if (isSameQuery(next, written.current)) return
       written.current = next
       window.history.replaceState(null, '', next === '' ? '/reach' : `/reach?${next}`)
-    }, restMs)
-    return () => clearTimeout(timer)
+    }
+    const timer = setTimeout(write, restMs)
+    // Written while a page is already being left, it would call the reader back: it is written before that instead.
+    function handleClick(event: MouseEvent) {
+      if (!(event.target instanceof Element) || !event.target.closest('a[href]')) return
+      clearTimeout(timer)
+      write()
+    }
+    document.addEventListener('click', handleClick, { capture: true })
+    return () => {
+      clearTimeout(timer)
+      document.removeEventListener('click', handleClick, { capture: true })
+    }
   }, [draft, reading])
 
   return [draft, change]

@@ -6,7 +6,7 @@ export const metadata: Metadata = { title: 'Not allowed' }
 
 export default function NotAllowedPage() {
   return (
-    <StateSentence sentence="Your role does not include that page. An admin can change your role.">
+    <StateSentence isHeading sentence="Your role does not include that page. An admin can change your role.">
       <ButtonLink href="/reach">Check a reach instead</ButtonLink>
     </StateSentence>
   )
