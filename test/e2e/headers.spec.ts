@@ -74,3 +74,10 @@ test('an answer of the API is not kept and not guessed at', async ({ page }) => 
     expect(headers['cache-control'], path).toContain('no-store')
   }
 })
+
+test('redirects, files and answers of the API are what they say they are', async ({ request }) => {
+  for (const path of ['/reach', '/examples/collets.csv', '/api/no-such-call', '/api/session']) {
+    const answer = await request.get(path, { maxRedirects: 0 })
+    expect(answer.headers()['x-content-type-options'], path).toBe('nosniff')
+  }
+})

@@ -63,3 +63,16 @@ test('an address nobody can read says so and offers the whole list', async ({ pa
   await expect(page).toHaveURL('/cutters')
   await expect(page.locator('[row-id]').first()).toBeVisible()
 })
+
+test('a column ticked by key keeps the keyboard, though it moves to the other list', async ({ page }) => {
+  await signIn(page, 'machinist')
+  await page.goto('/cutters')
+  await page.getByRole('button', { name: 'Columns' }).press('Enter')
+  const maker = page.getByRole('list', { name: 'Shown', exact: true }).getByLabel('Maker', { exact: true })
+  await maker.focus()
+  await page.keyboard.press('Space')
+  const hidden = page.getByRole('list', { name: 'Not shown' }).getByLabel('Maker', { exact: true })
+  await expect(hidden).toBeFocused()
+  await page.keyboard.press('Space')
+  await expect(maker).toBeFocused()
+})
