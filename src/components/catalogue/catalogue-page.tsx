@@ -1,12 +1,12 @@
 'use client'
 
-import { ListFilter, Plus, Upload } from 'lucide-react'
+import { Download, ListFilter, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
 import { useRouter } from 'next/navigation'
 import { type ReactNode, useMemo, useRef, useState } from 'react'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useCan } from '@/components/layout/shop-context'
-import { Button, ButtonLink } from '@/components/ui/button'
+import { Button, ButtonLink, buttonClass } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
@@ -17,7 +17,7 @@ import { filterParamNames } from './catalogue-filter'
 import type { CatalogueGridProps } from './catalogue-grid'
 import { CatalogueList } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
-import { type CatalogueView, isNarrowed } from './catalogue-view'
+import { type CatalogueView, exportPath, isNarrowed } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
@@ -103,7 +103,11 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           onSearch={(q) => onViewChange({ q })}
           onLeaveDown={() => grid.current?.focusFirstRow()}
         />
-        <CatalogueActions definition={definition} onAdd={props.onAdd}>
+        <CatalogueActions
+          definition={definition}
+          exportHref={exportPath(definition.kind, view, shownIds)}
+          onAdd={props.onAdd}
+        >
           <ColumnChooser
             columns={columns}
             shown={shownIds}
@@ -137,7 +141,11 @@ function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Ro
       <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
         <div className="flex items-center justify-between">
           <h1 className="text-2xl">{definition.title}</h1>
-          <CatalogueActions definition={definition} onAdd={props.onAdd} />
+          <CatalogueActions
+            definition={definition}
+            exportHref={exportPath(definition.kind, view, shownColumnIds(columns, view.columns))}
+            onAdd={props.onAdd}
+          />
         </div>
         <div className="flex items-center gap-2">
           <SearchBox
@@ -175,10 +183,12 @@ function shownColumnIds(
 
 function CatalogueActions<Row extends CatalogueRow>({
   definition,
+  exportHref,
   onAdd,
   children,
 }: {
   definition: CatalogueDefinition<Row>
+  exportHref: string
   onAdd: () => void
   children?: ReactNode
 }) {
@@ -186,6 +196,15 @@ function CatalogueActions<Row extends CatalogueRow>({
   return (
     <div className="flex items-center gap-2">
       {children}
+      <a
+        href={exportHref}
+        download
+        className={buttonClass({ size: 'compact' })}
+        title="The rows found, as they are sorted, with the columns shown, as a CSV file"
+      >
+        <Download aria-hidden="true" className="size-4.5" />
+        Export
+      </a>
       {mayKeep ? (
         <>
           <ButtonLink href="/imports" size="compact" prefetch={false} className="hidden! md:inline-flex!">

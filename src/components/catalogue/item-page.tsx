@@ -1,6 +1,6 @@
 'use client'
 
-import { useState } from 'react'
+import { type ReactNode, useState } from 'react'
 import { toast } from 'sonner'
 import { useCan } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
@@ -22,10 +22,12 @@ export interface ItemPageProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
   /** As the server had it when it made the page. */
   first: Row
+  /** What only this kind of item has to say, below its geometry and stock. */
+  extra?: (row: Row) => ReactNode
 }
 
 /** One item: its drawing, what it measures, where it is, what happened to it, and what fits it. */
-export function ItemPage<Row extends CatalogueRow>({ definition, first }: ItemPageProps<Row>) {
+export function ItemPage<Row extends CatalogueRow>({ definition, first, extra }: ItemPageProps<Row>) {
   const row = useItem(definition.kind, first)
   const stocked = useItemStock(row.id)
   const [act, setAct] = useState<ItemAct | null>(null)
@@ -39,6 +41,7 @@ export function ItemPage<Row extends CatalogueRow>({ definition, first }: ItemPa
         <GeometryTable definition={definition} row={row} />
         <ItemStockSection row={row} />
       </div>
+      {extra?.(row)}
       <ItemFitsSection itemId={row.id} kind={row.kind} />
       <ItemMovementsSection itemId={row.id} />
       {act === 'edit' ? (

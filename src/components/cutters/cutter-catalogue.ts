@@ -9,10 +9,10 @@ import {
   textColumn,
 } from '@/components/catalogue/columns'
 import { cutterForms } from '@/core/tooling'
+import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { formatLength } from '@/lib/format-length'
 import type { CutterResponse } from '@/schemas/cutter'
 import { cutterForm } from './cutter-form'
-import { cutterFormNames, substrateNames } from './cutter-words'
 
 export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
   kind: 'cutter',

@@ -3,12 +3,14 @@ import type { CatalogueKind } from '@/core/stock/kinds'
 import type { PageQuery } from '@/schemas/paging'
 import { enumToDb } from '../enum-case'
 import { type GeometryTable, geometryTables } from '../geometry-tables'
-import { type KeyPage, readKeyPage, type SortKey } from '../key-page'
+import { type KeyPage, readAllKeys, readKeyPage, type SortKey } from '../key-page'
 import { whereMatchesSearch } from '../search-predicate'
 import { isLowSql } from './stock-summaries'
 
 /** A list as it is asked for: paging, and filters by the name of their field. */
 export type CatalogueQuery = PageQuery & Record<string, unknown>
+/** The same without the paging. */
+export type CatalogueSelection = Pick<PageQuery, 'q' | 'sort'> & Record<string, unknown>
 
 /** Two lengths that differ by less are the same to a filter. */
 const filterToleranceMm = 1e-6
@@ -22,6 +24,25 @@ const itemTextColumns: Record<string, string> = {
 
 /** The ids of one block of the catalogue's items of a kind. */
 export function readCatalogueKeys(db: Knex, kind: CatalogueKind, query: CatalogueQuery): Promise<KeyPage> {
+  const { matching, sort } = matchingItems(db, kind, query)
+  return readKeyPage(db, matching, { sql: 'items.id' }, sort, query)
+}
+
+/** The ids of all items of a kind that a list would show, in its order. */
+export function readAllCatalogueKeys(
+  db: Knex,
+  kind: CatalogueKind,
+  query: CatalogueSelection,
+): Promise<string[]> {
+  const { matching, sort } = matchingItems(db, kind, query)
+  return readAllKeys(db, matching, { sql: 'items.id' }, sort)
+}
+
+function matchingItems(
+  db: Knex,
+  kind: CatalogueKind,
+  query: CatalogueSelection,
+): { matching: Knex.QueryBuilder; sort: SortKey[] } {
   const table = geometryTables[kind]
   const sort = (query.sort?.length ? query.sort : [{ field: 'code', isDescending: false }]).map(
     (term): SortKey => ({ ...sortColumn(table, term.field), isDescending: term.isDescending }),
@@ -32,7 +53,7 @@ export function readCatalogueKeys(db: Knex, kind: CatalogueKind, query: Catalogu
   if (query.q) whereMatchesSearch(matching, query.q)
   whereFields(matching, table, query)
   whereStockState(matching, query)
-  return readKeyPage(db, matching, { sql: 'items.id' }, sort, query)
+  return { matching, sort }
 }
 
 function sortColumn(table: GeometryTable, field: string): Omit<SortKey, 'isDescending'> {
@@ -55,7 +76,7 @@ function joinWhatIsAsked(
   db: Knex,
   matching: Knex.QueryBuilder,
   table: GeometryTable,
-  query: CatalogueQuery,
+  query: CatalogueSelection,
   sort: readonly SortKey[],
 ): void {
   const sorted = sort.map((key) => key.sql).join()
@@ -82,7 +103,7 @@ function whereArchived(matching: Knex.QueryBuilder, archived: unknown): void {
   if (archived === 'only') matching.whereNotNull('items.archived_at')
 }
 
-function whereFields(matching: Knex.QueryBuilder, table: GeometryTable, query: CatalogueQuery): void {
+function whereFields(matching: Knex.QueryBuilder, table: GeometryTable, query: CatalogueSelection): void {
   for (const [field, column] of Object.entries(itemTextColumns)) {
     const text = query[field]
     if (typeof text === 'string' && text) {
@@ -113,7 +134,7 @@ function whereField(
 }
 
 /** Any of the states asked for; an item that is out may be low as well. */
-function whereStockState(matching: Knex.QueryBuilder, query: CatalogueQuery): void {
+function whereStockState(matching: Knex.QueryBuilder, query: CatalogueSelection): void {
   const states = query.stockState
   if (!Array.isArray(states)) return
   const cribId = (query.cribId as string | undefined) ?? null
