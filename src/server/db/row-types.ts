@@ -304,6 +304,19 @@ export interface SignInAttemptsRow {
   attempted_at: Date
 }
 
+export interface StartingSpeedsRow {
+  id: string
+  iso_group: string
+  material: string
+  substrate: string
+  low_m_per_min: number
+  high_m_per_min: number
+  source_note: string
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
 export interface StockLevelsRow {
   item_id: string
   crib_id: string
@@ -376,6 +389,7 @@ export interface Tables {
   sessions: SessionsRow
   shop_settings: ShopSettingsRow
   sign_in_attempts: SignInAttemptsRow
+  starting_speeds: StartingSpeedsRow
   stock_levels: StockLevelsRow
   suppliers: SuppliersRow
   user_tokens: UserTokensRow
