@@ -91,7 +91,7 @@ function SpeedTable({
   const { unit } = useShop()
   if (rows.length === 0) return <p>The shop’s table has no speed for what this cutter is made of.</p>
   return (
-    <div className="overflow-x-auto">
+    <div className="relative overflow-x-auto">
       <table className="w-full">
         <caption className="sr-only">Spindle speed at the cutting diameter, by material</caption>
         <thead>
