@@ -1,6 +1,6 @@
 'use client'
 
-import { Download, ListFilter, Plus, Upload } from 'lucide-react'
+import { Download, ListFilter, Pencil, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
 import { useRouter } from 'next/navigation'
 import { type ReactNode, useMemo, useRef, useState } from 'react'
@@ -19,12 +19,14 @@ import { CatalogueList } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
 import { type CatalogueView, exportPath, isNarrowed } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
+import { EditBar } from './edit-bar'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
 import { MakerList } from './maker-list'
 import { SearchBox } from './search-box'
 import { SortSelect } from './sort-select'
 import { useCatalogueView } from './use-catalogue-view'
+import { useGridEditing } from './use-grid-editing'
 
 /** The grid's code comes only where a grid is shown: not on a phone, not on any other page. */
 const CatalogueGrid = dynamic(() => import('./catalogue-grid'), {
@@ -88,6 +90,8 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
   const [total, setTotal] = useState<number | null>(null)
   const grid = useRef<PartsListHandle>(null)
   const shownIds = useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns])
+  const [isEditing, setIsEditing] = useState(false)
+  const editing = useGridEditing(definition, grid, isEditing)
   return (
     <>
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
@@ -114,6 +118,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
             isUsual={view.columns === null}
             onChange={(ids) => onViewChange({ columns: ids })}
           />
+          <EditToggle isEditing={isEditing} onChange={setIsEditing} />
         </CatalogueActions>
       </div>
       <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
@@ -129,8 +134,31 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           </Button>
         ) : null}
       </div>
-      <CatalogueGrid {...props} shownIds={shownIds} onTotal={setTotal} handleRef={grid} />
+      {isEditing ? <EditBar definition={definition} editing={editing} grid={grid} /> : null}
+      <CatalogueGrid
+        {...props}
+        shownIds={shownIds}
+        onTotal={setTotal}
+        handleRef={grid}
+        editing={isEditing ? editing : undefined}
+      />
     </>
+  )
+}
+
+/** Only while this is on does a list change under the hand; otherwise a click opens a row. */
+function EditToggle({ isEditing, onChange }: { isEditing: boolean; onChange: (isEditing: boolean) => void }) {
+  if (!useCan('keepCrib')) return null
+  return (
+    <Button
+      size="compact"
+      aria-pressed={isEditing}
+      variant={isEditing ? 'primary' : 'secondary'}
+      onClick={() => onChange(!isEditing)}
+    >
+      <Pencil aria-hidden="true" className="size-4.5" />
+      {isEditing ? 'Done editing' : 'Edit in list'}
+    </Button>
   )
 }
 
