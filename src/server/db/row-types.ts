@@ -1,5 +1,19 @@
 // Written by `npm run db:types` from the migrated database; a test compares the two.
 
+export interface AlertsRow {
+  id: string
+  item_id: string
+  crib_id: string
+  opened_at: Date
+  opened_event: string
+  opened_on_hand: number
+  opened_position: number
+  opened_reorder_point: number
+  closed_at: Date | null
+  closed_event: string | null
+  closed_position: number | null
+}
+
 export interface AuditEntriesRow {
   id: string
   actor_id: string | null
@@ -18,6 +32,14 @@ export interface BalancesRow {
   condition: string
   is_outside: boolean
   quantity: number
+}
+
+export interface CaughtMailsRow {
+  id: string
+  message_id: string | null
+  recipients: string[]
+  source: Buffer
+  caught_at: Date
 }
 
 export interface ColletsRow {
@@ -224,6 +246,21 @@ export interface MovementsRow {
   reverses_id: string | null
 }
 
+export interface OutboxRow {
+  id: string
+  kind: string
+  event_id: string
+  crib_id: string
+  user_id: string
+  recipient: string
+  message_id: string
+  attempts: number
+  next_attempt_at: Date
+  sent_at: Date | null
+  last_error: string | null
+  created_at: Date
+}
+
 export interface PiecesRow {
   id: string
   item_id: string
@@ -366,8 +403,10 @@ export interface UsersRow {
 }
 
 export interface Tables {
+  alerts: AlertsRow
   audit_entries: AuditEntriesRow
   balances: BalancesRow
+  caught_mails: CaughtMailsRow
   collets: ColletsRow
   crib_members: CribMembersRow
   cribs: CribsRow
@@ -383,6 +422,7 @@ export interface Tables {
   items: ItemsRow
   locations: LocationsRow
   movements: MovementsRow
+  outbox: OutboxRow
   pieces: PiecesRow
   reorder_points: ReorderPointsRow
   search_words: SearchWordsRow
