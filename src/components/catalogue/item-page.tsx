@@ -16,6 +16,7 @@ import { ItemFormDialog } from './item-form-dialog'
 import { type ItemAct, ItemHeading } from './item-heading'
 import { ItemMovementsSection } from './item-movements-section'
 import { ItemStockSection } from './item-stock-section'
+import { MergesNotice } from './merges-notice'
 import { MoveDialog } from './move-dialog'
 
 export interface ItemPageProps<Row extends CatalogueRow> {
@@ -36,6 +37,7 @@ export function ItemPage<Row extends CatalogueRow>({ definition, first, extra }:
     <div className="flex w-full max-w-[100rem] flex-col gap-6 px-4 pt-4 pb-10 lg:px-6">
       <ItemHeading definition={definition} row={row} onAct={setAct} />
       {row.archivedAt ? <ArchivedNotice row={row} /> : null}
+      <MergesNotice itemId={row.id} />
       {definition.form.draw(row)}
       <div className="grid items-start gap-x-10 gap-y-6 lg:grid-cols-2">
         <GeometryTable definition={definition} row={row} />

@@ -2,7 +2,8 @@
 
 import { usePathname, useRouter, useSearchParams } from 'next/navigation'
 import { PageHeading } from '../layout/page-heading'
-import { useShop } from '../layout/shop-context'
+import { useCan, useShop } from '../layout/shop-context'
+import { ButtonLink } from '../ui/button'
 import { classNames } from '../ui/class-names'
 import { type FitsQuestion, fitsQuestions, questionOf } from './fits-question'
 import { HoldingResults } from './holding-results'
@@ -15,6 +16,7 @@ export function FitsPage() {
   const pathname = usePathname()
   const router = useRouter()
   const { unit } = useShop()
+  const mayKeep = useCan('keepCrib')
   const question = questionOf(params)
   const asked = new URLSearchParams(
     question.fields.flatMap(({ name }) => {
@@ -31,7 +33,13 @@ export function FitsPage() {
 
   return (
     <>
-      <PageHeading title="What fits" note="Everything in the catalogue that could, with what is in stock." />
+      <PageHeading title="What fits" note="Everything in the catalogue that could, with what is in stock.">
+        {mayKeep ? (
+          <ButtonLink href="/duplicates" size="compact" variant="quiet">
+            Items that measure the same
+          </ButtonLink>
+        ) : null}
+      </PageHeading>
       <div className="flex flex-col gap-5 px-4 pb-10 lg:px-6">
         <QuestionChoice chosen={question} onChoose={(id) => ask(new URLSearchParams({ from: id }))} />
         <QuestionForm

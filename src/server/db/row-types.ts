@@ -197,6 +197,13 @@ export interface ImportsRow {
   warning_count: number
 }
 
+export interface ItemMergesRow {
+  item_id: string
+  kept_item_id: string
+  merged_by: string
+  merged_at: Date
+}
+
 export interface ItemsRow {
   id: string
   kind: string
@@ -419,6 +426,7 @@ export interface Tables {
   import_mappings: ImportMappingsRow
   import_rows: ImportRowsRow
   imports: ImportsRow
+  item_merges: ItemMergesRow
   items: ItemsRow
   locations: LocationsRow
   movements: MovementsRow
