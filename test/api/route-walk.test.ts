@@ -97,8 +97,6 @@ const walk: Record<string, Allowed> = {
   'GET /api/alerts': signedIn,
   'GET /api/suppliers': signedIn,
   'POST /api/suppliers': keepers,
-  'GET /api/mails': admins,
-  'GET /api/mails/[id]': admins,
 
   'GET /api/duplicates': keepers,
   'POST /api/duplicates/merge': keepers,
