@@ -149,3 +149,23 @@ test('list, page and form pass the accessibility rules', async ({ page }) => {
   await expect(field(page, 'Code')).toBeVisible()
   expect((await new AxeBuilder({ page }).analyze()).violations.map((violation) => violation.id)).toEqual([])
 })
+
+test('each filter says how many rows its choices leave, and the address keeps what is chosen', async ({
+  page,
+}) => {
+  const mark = uniqueCode('COUNT')
+  for (const form of ['square', 'square', 'ball']) await makeCutter(page, { maker: mark, form })
+  await page.goto(`/cutters?maker=${mark}`)
+  const form = page.getByLabel('Form')
+  await expect(form.getByRole('option', { name: 'Square end mill (2)' })).toBeAttached()
+  await expect(form.getByRole('option', { name: 'Drill (0)' })).toBeAttached()
+  await form.selectOption({ label: 'Ball end mill (1)' })
+  await expect(page.getByText('1 found')).toBeVisible()
+  await expect(page.getByLabel('Stock').getByRole('option', { name: 'Out (1)' })).toBeAttached()
+  await page.getByRole('button', { name: 'More filters' }).click()
+  await page.getByRole('textbox', { name: 'Length of cut from' }).fill('13')
+  await expect(page).toHaveURL(/form=ball.*lengthOfCutMm\.min=13/)
+  await page.reload()
+  await expect(page.getByText('0 found')).toBeVisible()
+  await expect(page.getByRole('textbox', { name: 'Length of cut from' })).toHaveValue('13')
+})

@@ -10,6 +10,7 @@ import { Button, ButtonLink, buttonClass } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
+import { useCatalogueCounts } from '@/hooks/use-catalogue-counts'
 import { itemPagePath } from '@/lib/catalogue-paths'
 import type { CatalogueColumn } from './catalogue-column'
 import type { CatalogueDefinition } from './catalogue-definition'
@@ -17,7 +18,7 @@ import { filterParamNames } from './catalogue-filter'
 import type { CatalogueGridProps } from './catalogue-grid'
 import { CatalogueList } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
-import { type CatalogueView, exportPath, isNarrowed } from './catalogue-view'
+import { type CatalogueView, exportPath, isNarrowed, queryParams } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
 import { EditBar } from './edit-bar'
 import { FilterFields } from './filter-fields'
@@ -88,6 +89,7 @@ interface CatalogueShapeProps<Row extends CatalogueRow> {
 function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, view, onViewChange, onClear } = props
   const [total, setTotal] = useState<number | null>(null)
+  const counts = useFilterCounts(definition, view, total !== null)
   const grid = useRef<PartsListHandle>(null)
   const shownIds = useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns])
   const [isEditing, setIsEditing] = useState(false)
@@ -126,6 +128,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           shape="row"
           filters={definition.filters}
           values={view.filters}
+          counts={counts}
           onChange={(filters) => onViewChange({ filters })}
         />
         {isNarrowed(view) ? (
@@ -146,6 +149,14 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
   )
 }
 
+function useFilterCounts<Row extends CatalogueRow>(
+  definition: CatalogueDefinition<Row>,
+  view: CatalogueView,
+  isWanted: boolean,
+) {
+  return useCatalogueCounts(definition.kind, queryParams({ ...view, sort: '' }).toString(), isWanted)
+}
+
 /** Only while this is on does a list change under the hand; otherwise a click opens a row. */
 function EditToggle({ isEditing, onChange }: { isEditing: boolean; onChange: (isEditing: boolean) => void }) {
   if (!useCan('keepCrib')) return null
@@ -164,6 +175,7 @@ function EditToggle({ isEditing, onChange }: { isEditing: boolean; onChange: (is
 
 function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, view, onViewChange } = props
+  const counts = useFilterCounts(definition, view, true)
   return (
     <>
       <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
@@ -190,6 +202,7 @@ function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Ro
               shape="column"
               filters={definition.filters}
               values={view.filters}
+              counts={counts}
               onChange={(filters) => onViewChange({ filters })}
             />
           </FilterDrawer>

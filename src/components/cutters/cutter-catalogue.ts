@@ -52,6 +52,10 @@ export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
       options: cutterForms.map((form) => ({ value: form, label: cutterFormNames[form] })),
     },
     { kind: 'lengthRange', name: 'cuttingDiameterMm', label: 'Cutting diameter' },
+    { kind: 'lengthRange', name: 'lengthOfCutMm', label: 'Length of cut', isMore: true },
+    { kind: 'lengthRange', name: 'reachLengthMm', label: 'Reach', isMore: true },
+    { kind: 'lengthRange', name: 'shankDiameterMm', label: 'Shank', isMore: true },
+    { kind: 'lengthRange', name: 'cornerRadiusMm', label: 'Corner radius', isMore: true },
     ...itemFilters,
   ],
   facts: (row, unit) => {
