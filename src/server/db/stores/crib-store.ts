@@ -14,8 +14,11 @@ export async function createCrib(trx: Knex, crib: NewCrib): Promise<string> {
   return row.id
 }
 
-export async function findCrib(db: Knex, cribId: string): Promise<{ id: string; code: string } | null> {
-  return (await db('cribs').where('id', cribId).first('id', 'code')) ?? null
+export async function findCrib(
+  db: Knex,
+  cribId: string,
+): Promise<{ id: string; code: string; name: string } | null> {
+  return (await db('cribs').where('id', cribId).first('id', 'code', 'name')) ?? null
 }
 
 /** The root of a crib among the locations. */
