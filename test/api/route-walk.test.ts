@@ -69,6 +69,10 @@ const walk: Record<string, Allowed> = {
   'GET /api/extensions/counts': signedIn,
   'POST /api/extensions/bulk': keepers,
   'GET /api/makers': signedIn,
+  'GET /api/saved-views': signedIn,
+  'POST /api/saved-views': signedIn,
+  'PATCH /api/saved-views/[id]': signedIn,
+  'DELETE /api/saved-views/[id]': signedIn,
 
   'GET /api/cribs': signedIn,
   'GET /api/locations': signedIn,
@@ -98,6 +102,8 @@ const walk: Record<string, Allowed> = {
   'GET /api/suppliers': signedIn,
   'POST /api/suppliers': keepers,
 
+  'GET /api/first-day': keepers,
+  'POST /api/locations/pattern': keepers,
   'GET /api/duplicates': keepers,
   'POST /api/duplicates/merge': keepers,
   'GET /api/items/[id]/merges': signedIn,

@@ -24,6 +24,7 @@ import { EditBar } from './edit-bar'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
 import { MakerList } from './maker-list'
+import { SavedViews } from './saved-views-dialog'
 import { SearchBox } from './search-box'
 import { SortSelect } from './sort-select'
 import { useCatalogueView } from './use-catalogue-view'
@@ -120,6 +121,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
             isUsual={view.columns === null}
             onChange={(ids) => onViewChange({ columns: ids })}
           />
+          <SavedViews {...{ definition, columns, view, onViewChange }} />
           <EditToggle isEditing={isEditing} onChange={setIsEditing} />
         </CatalogueActions>
       </div>
@@ -197,6 +199,7 @@ function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Ro
             count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
             onClear={() => onViewChange({ filters: {}, sort: '' })}
           >
+            <SavedViews {...{ definition, columns, view, onViewChange }} />
             <SortSelect columns={columns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
             <FilterFields
               shape="column"

@@ -302,6 +302,18 @@ export interface ReorderPointsRow {
   updated_at: Date
 }
 
+export interface SavedViewsRow {
+  id: string
+  owner_id: string
+  kind: string
+  name: string
+  is_shared: boolean
+  query: string
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
 export interface SearchWordsRow {
   word: string
   one_shorter: string[]
@@ -433,6 +445,7 @@ export interface Tables {
   outbox: OutboxRow
   pieces: PiecesRow
   reorder_points: ReorderPointsRow
+  saved_views: SavedViewsRow
   search_words: SearchWordsRow
   sessions: SessionsRow
   shop_settings: ShopSettingsRow
