@@ -12,6 +12,7 @@ import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
 import { useCatalogueCounts } from '@/hooks/use-catalogue-counts'
 import { itemPagePath } from '@/lib/catalogue-paths'
+import { importKindOf } from '@/schemas/import-fields'
 import type { CatalogueColumn } from './catalogue-column'
 import type { CatalogueDefinition } from './catalogue-definition'
 import { filterParamNames } from './catalogue-filter'
@@ -24,6 +25,7 @@ import { EditBar } from './edit-bar'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
 import { MakerList } from './maker-list'
+import { PasteRows } from './paste-rows'
 import { SavedViews } from './saved-views-dialog'
 import { SearchBox } from './search-box'
 import { SortSelect } from './sort-select'
@@ -92,6 +94,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
   const [total, setTotal] = useState<number | null>(null)
   const counts = useFilterCounts(definition, view, total !== null)
   const grid = useRef<PartsListHandle>(null)
+  const mayKeep = useCan('keepCrib')
   const shownIds = useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns])
   const [isEditing, setIsEditing] = useState(false)
   const editing = useGridEditing(definition, grid, isEditing)
@@ -122,7 +125,12 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
             onChange={(ids) => onViewChange({ columns: ids })}
           />
           <SavedViews {...{ definition, columns, view, onViewChange }} />
-          <EditToggle isEditing={isEditing} onChange={setIsEditing} />
+          {mayKeep ? (
+            <>
+              <PasteRows kind={importKindOf[definition.kind]} many={definition.many} />
+              <EditToggle isEditing={isEditing} onChange={setIsEditing} />
+            </>
+          ) : null}
         </CatalogueActions>
       </div>
       <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
@@ -161,7 +169,6 @@ function useFilterCounts<Row extends CatalogueRow>(
 
 /** Only while this is on does a list change under the hand; otherwise a click opens a row. */
 function EditToggle({ isEditing, onChange }: { isEditing: boolean; onChange: (isEditing: boolean) => void }) {
-  if (!useCan('keepCrib')) return null
   return (
     <Button
       size="compact"
@@ -238,7 +245,7 @@ function CatalogueActions<Row extends CatalogueRow>({
 }) {
   const mayKeep = useCan('keepCrib')
   return (
-    <div className="flex items-center gap-2">
+    <div className="flex flex-wrap items-center gap-2">
       {children}
       <a
         href={exportHref}

@@ -4,7 +4,7 @@ import { type LengthUnit, lengthDecimals, mmPerInch } from '@/core/units/length-
 import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { currencyDecimals } from '@/lib/format-money'
 import type { CatalogueTypes } from '@/schemas/catalogue'
-import { hasLengthUnit, type ImportKind, importField } from '@/schemas/import-fields'
+import { hasLengthUnit, importField, importKindOf } from '@/schemas/import-fields'
 import { csvLine, guardedText, utf8Mark } from './csv-line'
 
 /** How figures are written: as the import of this shop reads them. */
@@ -15,13 +15,6 @@ export interface FileManner {
 }
 
 type Row = CatalogueTypes[CatalogueKind]['row']
-
-const importKindOf: Record<CatalogueKind, ImportKind> = {
-  cutter: 'cutters',
-  holder: 'holders',
-  collet: 'collets',
-  extension: 'extensions',
-}
 
 /** What no import takes: it is told by the books or by another column. */
 const otherHeadings: Readonly<Record<string, string>> = {
