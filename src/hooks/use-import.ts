@@ -1,6 +1,7 @@
 import useSWR from 'swr'
 import { callApi, getJson } from '@/lib/api-client'
 import type { ImportResponse, RecheckImportRequest, RejectChoice } from '@/schemas/import'
+import type { ImportKind } from '@/schemas/import-fields'
 import { isUnderWay } from './use-imports'
 
 const whileBusyMs = 400
@@ -13,6 +14,24 @@ export function useImport(initial: ImportResponse) {
     refreshInterval: (latest) => (isUnderWay(latest ?? initial) ? whileBusyMs : 0),
   })
   return { found: data ?? initial, error, refresh: mutate }
+}
+
+/** Uploads a file to be checked; its import's id. */
+export async function createImport(
+  kind: ImportKind,
+  unit: string,
+  file: File,
+  signal?: AbortSignal,
+): Promise<string> {
+  const body = new FormData()
+  body.set('kind', kind)
+  if (kind !== 'stock') body.set('unit', unit)
+  body.set('file', file)
+  const { id } = await callApi<{ id: string }>('POST', '/api/imports', {
+    body,
+    ...(signal ? { signal } : {}),
+  })
+  return id
 }
 
 export async function commitImport(id: string, rejects: RejectChoice): Promise<void> {

@@ -5,7 +5,6 @@ import useSWRInfinite from 'swr/infinite'
 import type { CatalogueKind } from '@/core/stock/kinds'
 import { getJson } from '@/lib/api-client'
 import { itemApiPath } from '@/lib/catalogue-paths'
-import type { FitsItem } from '@/schemas/fits'
 import type { MovementResponse } from '@/schemas/movement'
 import type { ItemStockResponse } from '@/schemas/stock'
 
@@ -54,19 +53,4 @@ export function useItemMovements(itemId: string) {
     loadMore: () => setSize(size + 1),
     refresh: () => mutate(),
   }
-}
-
-interface FitsPage {
-  rows: FitsItem[]
-  total?: number
-}
-
-/** What of one kind fits an item, the first few or as many as an answer holds. */
-export function useItemFits(itemId: string, kind: CatalogueKind, limit: number) {
-  const { data, error, isLoading, mutate } = useSWR<FitsPage, Error>(
-    `/api/items/${itemId}/fits?kind=${kind}&limit=${limit}`,
-    getJson,
-    { keepPreviousData: true },
-  )
-  return { rows: data?.rows ?? [], total: data?.total, error, isLoading, retry: () => mutate() }
 }

@@ -18,6 +18,36 @@ export function formatSpeed(mPerMin: number, unit: LengthUnit): string {
 }
 
 /**
+ * A cutting speed as it stands in a field, without its unit: what `parseSpeed` reads back in the same unit.
+ *
+ * @example
+ * speedInputText(152.4, 'in', { decimalComma: false }) // => '500'
+ * speedInputText(7.5, 'mm', { decimalComma: true }) // => '7,5'
+ */
+export function speedInputText(
+  mPerMin: number,
+  unit: LengthUnit,
+  { decimalComma }: { decimalComma: boolean },
+): string {
+  const text = decimalText(unit === 'mm' ? mPerMin : mPerMin / metresPerFoot, 0, 1)
+  return decimalComma ? text.replace('.', ',') : text
+}
+
+/**
+ * The two ends of a range of cutting speed with the unit once.
+ *
+ * @example
+ * formatSpeedRange({ lowMPerMin: 60, highMPerMin: 110 }, 'mm') // => '60 to 110 m/min'
+ */
+export function formatSpeedRange(
+  { lowMPerMin, highMPerMin }: { lowMPerMin: number; highMPerMin: number },
+  unit: LengthUnit,
+): string {
+  const [low] = formatSpeed(lowMPerMin, unit).split(' ')
+  return `${low} to ${formatSpeed(highMPerMin, unit)}`
+}
+
+/**
  * A spindle speed in whole revolutions, thousands apart by a no-break space, which is no decimal sign anywhere.
  *
  * @example

@@ -1,7 +1,17 @@
+import type { CatalogueKind } from '@/core/stock/kinds'
+
 /** What a file may bring, kind by kind: the fields a column can be given to, in the order they are offered. */
 
 export const importKinds = ['cutters', 'holders', 'collets', 'extensions', 'stock'] as const
 export type ImportKind = (typeof importKinds)[number]
+
+/** What brings items of each kind. */
+export const importKindOf: Readonly<Record<CatalogueKind, ImportKind>> = {
+  cutter: 'cutters',
+  holder: 'holders',
+  collet: 'collets',
+  extension: 'extensions',
+}
 
 export type ImportFieldType =
   | 'text'

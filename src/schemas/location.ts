@@ -46,6 +46,17 @@ export const createLocationRequestSchema = z.discriminatedUnion('kind', [
 ])
 export type CreateLocationRequest = z.output<typeof createLocationRequestSchema>
 
+/** A wall of bins from its first code to its last: `A1` to `F12`. */
+export const createLocationPatternRequestSchema = z.strictObject({
+  parentId: idSchema,
+  first: lineSchema('Give the first code.', 100),
+  last: lineSchema('Give the last code.', 100),
+})
+export type CreateLocationPatternRequest = z.output<typeof createLocationPatternRequestSchema>
+
+export const locationPatternResponseSchema = z.object({ added: z.number(), codes: z.array(z.string()) })
+export type LocationPatternResponse = z.infer<typeof locationPatternResponseSchema>
+
 /** A location keeps its kind and its crib; within it, it may move. */
 export const updateLocationRequestSchema = z.object({
   version: versionSchema,

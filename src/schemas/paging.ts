@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { conditions } from '@/core/stock/kinds'
 import { idSchema } from './fields'
 
 /** What every list is asked for, whatever it lists. */
@@ -127,6 +128,10 @@ export const itemListQueryFields = {
   stockState: setFilter(stockStates),
   /** Stock is counted in this crib alone. */
   cribId: idSchema.optional(),
+  /** Pieces in such a condition lie in a bin. */
+  condition: setFilter(conditions),
+  /** Pieces lie in a bin of this place: a crib, a cabinet, a drawer or the bin itself. */
+  locationId: idSchema.optional(),
   ...numberFilters(['unitCost']),
 }
 

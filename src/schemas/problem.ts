@@ -14,6 +14,7 @@ export const problemStatus = {
   'idempotency-key-reused': 409,
   'not-enough-stock': 409,
   'code-taken': 409,
+  'name-taken': 409,
   'email-taken': 409,
   'still-in-use': 409,
   'already-reversed': 409,

@@ -22,8 +22,20 @@ describe('the settings', () => {
     ['PORT', '70000'],
     ['PUBLIC_URL', 'leadline.example'],
     ['LOG_LEVEL', 'loud'],
+    ['SMTP_URL', 'https://mail.leadline.example'],
+    ['MAIL_FROM', 'nobody'],
+    ['MAIL_FROM', 'a@leadline.example\r\nBcc: b@leadline.example'],
   ])('name %s where it is wrong', (name, value) => {
     expect(() => parseEnv({ ...good, [name]: value })).toThrow(new RegExp(`^Settings: ${name} is wrong`))
+  })
+
+  it('want to know whom mail comes from once there is a mail server', () => {
+    const server = { ...good, SMTP_URL: 'smtp://mail.leadline.example:587' }
+    expect(() => parseEnv(server)).toThrow('Settings: MAIL_FROM is not set.')
+    expect(parseEnv({ ...server, MAIL_FROM: 'Crib <crib@leadline.example>' }).mailFrom).toBe(
+      'Crib <crib@leadline.example>',
+    )
+    expect(parseEnv({ ...good, SMTP_URL: '' }).SMTP_URL).toBeUndefined()
   })
 
   it('name every one that is missing, in one sentence', () => {

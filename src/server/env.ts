@@ -6,6 +6,9 @@ const port = z.coerce.number().int().min(1).max(65_535)
 
 const databaseUrlSchema = z.url({ protocol: /^postgres(ql)?$/ })
 
+/** A variable set to nothing is not set. */
+const unsetWhenEmpty = (value: unknown) => (value === '' ? undefined : value)
+
 const envSchema = z
   .object({
     NODE_ENV: z.enum(['development', 'production', 'test']).default('development'),
@@ -17,10 +20,25 @@ const envSchema = z
     SESSION_SECRET: z.string().min(32),
     /** Folder for uploaded files that wait for the worker. */
     DATA_DIR: z.string().min(1),
+    /** The shop's mail server; without one, mail is kept in the database and read on a page. */
+    SMTP_URL: z.preprocess(unsetWhenEmpty, z.url({ protocol: /^smtps?$/ }).optional()),
+    /** Whom mail comes from: an address, or `Name <address>`. */
+    MAIL_FROM: z.preprocess(
+      unsetWhenEmpty,
+      z
+        .string()
+        .regex(/^(?:[^<>\p{Cc}]*<[^\s<>@]+@[^\s<>@]+>|[^\s<>@]+@[^\s<>@]+)$/u, 'no mail address')
+        .optional(),
+    ),
     LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),
+  })
+  .refine((values) => values.SMTP_URL === undefined || values.MAIL_FROM !== undefined, {
+    path: ['MAIL_FROM'],
+    message: 'a mail server needs it',
   })
   .transform((values) => ({
     ...values,
+    mailFrom: values.MAIL_FROM ?? 'Leadline <leadline@localhost>',
     publicUrl: values.PUBLIC_URL ?? `http://${values.HOST}:${values.PORT}`,
     /** Off on plain loopback alone: anywhere else a session travels over TLS or not at all. */
     isCookieSecure: values.PUBLIC_URL?.startsWith('https:') || !loopbackHosts.includes(values.HOST),

@@ -3,9 +3,12 @@ import { handleJobs } from './jobs/handlers'
 import { startBoss } from './jobs/queue'
 import { log } from './log'
 import { resumeImports, tidyImports } from './services/imports/resume-imports'
+import { openMailWay } from './services/mail/open-mail-way'
+import { sendDueMail } from './services/mail/send-due-mail'
 
 const resumeEveryMs = 5_000
 const tidyEveryMs = 3600_000
+const mailEveryMs = 1000
 
 /** Runs `work` now and again, one run at a time; a failure is logged and the next run tries again. */
 function repeat(name: string, everyMs: number, work: () => Promise<void>): void {
@@ -24,6 +27,8 @@ const boss = await startBoss({ supervise: true })
 await handleJobs(boss)
 repeat('resuming imports', resumeEveryMs, resumeImports)
 repeat('tidying imports', tidyEveryMs, tidyImports)
+const mailWay = await openMailWay()
+repeat('sending mail', mailEveryMs, () => sendDueMail(mailWay))
 log.info('worker ready')
 
 /** What is under way is broken off: its transaction is undone, and the next worker takes it up again. */

@@ -70,6 +70,19 @@ describe('the check of the ledger', () => {
     expect(faults.some((fault) => fault.endsWith('level 3 on hand, movements 2'))).toBe(true)
   })
 
+  test('it finds an alert that is missing, and one for what is not low', async () => {
+    const point = { item_id: books.itemId, crib_id: books.cribId, reorder_point: 3, order_up_to: 9 }
+    const missing = await faultsAfter((trx) => trx('reorder_points').insert(point))
+    expect(missing).toHaveLength(1)
+    expect(missing[0]).toContain('position 3, reorder point 3, but no alert is open')
+    await database.db('reorder_points').insert(point)
+    const idle = await faultsAfter((trx) =>
+      trx('reorder_points').where('item_id', books.itemId).update({ reorder_point: 2 }),
+    )
+    expect(idle).toHaveLength(1)
+    expect(idle[0]).toContain('position 3, reorder point 2, but an alert is open')
+  })
+
   test('it finds a level that is off', async () => {
     const faults = await faultsAfter((trx) =>
       trx('stock_levels').where('item_id', books.itemId).update({ on_hand: 9 }),

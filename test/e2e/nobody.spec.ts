@@ -15,6 +15,10 @@ const pages = [
   '/people',
   '/settings',
   '/account',
+  '/starting-speeds',
+  '/fits?shankDiameterMm=6',
+  '/duplicates?kind=holder',
+  '/first-day',
 ]
 
 async function fillIn(page: Page, password?: string): Promise<void> {

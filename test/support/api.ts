@@ -45,6 +45,8 @@ export interface ApiClient {
   user: { id: string; locationId: string }
   send(method: string, path: string, options?: SendOptions): Promise<Answer>
   get(path: string): Promise<Answer>
+  /** For what is no JSON: a download. */
+  getText(path: string): Promise<{ status: number; text: string; headers: Headers }>
   post(path: string, body: unknown, idempotencyKey?: string): Promise<Answer>
   patch(path: string, body: unknown): Promise<Answer>
   remove(path: string): Promise<Answer>
@@ -125,6 +127,12 @@ function clientWith(cookie: string, user: ApiClient['user']): ApiClient {
     user,
     send,
     get: (path) => send('GET', path),
+    getText: async (path) => {
+      const response = await fetch(`${baseUrl()}${path}`, { headers: { cookie } })
+      // The mark of UTF-8 at the beginning belongs to the file, which `text()` would drop.
+      const text = new TextDecoder('utf-8', { ignoreBOM: true }).decode(await response.arrayBuffer())
+      return { status: response.status, text, headers: response.headers }
+    },
     post: (path, body, idempotencyKey) =>
       send('POST', path, { body, ...(idempotencyKey ? { idempotencyKey } : {}) }),
     patch: (path, body) => send('PATCH', path, { body }),

@@ -9,6 +9,7 @@ import { formatSpeed, speedUnitNames } from '@/lib/format-speed'
 import { useShop } from '../layout/shop-context'
 import { LengthField } from '../ui/length-field'
 import { TextField } from '../ui/text-field'
+import { MaterialSpeeds } from './material-speeds'
 import { RangeField } from './range-field'
 
 /** What is cut, how the tool leans, how fast it turns, and how far apart its passes lie. */
@@ -57,6 +58,7 @@ export function BallSpeedForm({ ballSpeed }: { ballSpeed: BallSpeed }) {
           hint="The least of spindle, holder and cutter"
           className="col-span-2"
         />
+        <MaterialSpeeds ballSpeed={ballSpeed} />
       </Group>
       <Group title="The surface" note="Type either; the other is worked out.">
         <Length ballSpeed={ballSpeed} field="stepoverMm" label="Stepover" symbol="ae" />

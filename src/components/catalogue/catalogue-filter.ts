@@ -1,11 +1,25 @@
 import type { SelectOption } from '@/components/ui/select-field'
-import { makerListId } from './maker-list'
+import { conditions } from '@/core/stock/kinds'
+import { conditionNames } from './stock-words'
 
-/** One way to narrow a list; `name` is the API's. A range of lengths has `name.min` and `name.max`. */
-export type CatalogueFilter =
-  | { kind: 'choice'; name: string; label: string; anyLabel: string; options: readonly SelectOption[] }
-  | { kind: 'text'; name: string; label: string; listId?: string }
-  | { kind: 'lengthRange'; name: string; label: string }
+interface FilterName {
+  /** The API's. */
+  name: string
+  label: string
+  /** Out of sight until it is asked for or in use. */
+  isMore?: boolean
+}
+
+/** One way to narrow a list. A range of lengths has `name.min` and `name.max`. */
+export type CatalogueFilter = FilterName &
+  (
+    | { kind: 'choice'; anyLabel: string; options: readonly SelectOption[] }
+    /** The choices are what the counts have. */
+    | { kind: 'counted'; anyLabel: string }
+    /** What the counts have is offered while typing. */
+    | { kind: 'text' }
+    | { kind: 'lengthRange' }
+  )
 
 export function filterParamNames(filters: readonly CatalogueFilter[]): string[] {
   return filters.flatMap(({ kind, name }) =>
@@ -15,7 +29,7 @@ export function filterParamNames(filters: readonly CatalogueFilter[]): string[] 
 
 /** Every kind of item is narrowed by these too. */
 export const itemFilters: readonly CatalogueFilter[] = [
-  { kind: 'text', name: 'maker', label: 'Maker', listId: makerListId },
+  { kind: 'text', name: 'maker', label: 'Maker' },
   {
     kind: 'choice',
     name: 'stockState',
@@ -27,9 +41,19 @@ export const itemFilters: readonly CatalogueFilter[] = [
       { value: 'out', label: 'Out' },
     ],
   },
+  { kind: 'counted', name: 'locationId', label: 'Location', anyLabel: 'Anywhere' },
+  {
+    kind: 'choice',
+    name: 'condition',
+    label: 'Condition',
+    anyLabel: 'Any',
+    isMore: true,
+    options: conditions.map((condition) => ({ value: condition, label: conditionNames[condition] })),
+  },
   {
     kind: 'choice',
     name: 'archived',
+    isMore: true,
     label: 'Archived',
     anyLabel: 'Left out',
     options: [

@@ -3,7 +3,8 @@
 import Link from 'next/link'
 import { useRouter } from 'next/navigation'
 import { type RefObject, useCallback, useMemo, useState } from 'react'
-import { type PartsListColumn, PartsListGrid, type PartsListHandle } from '@/components/grid/parts-list-grid'
+import type { PartsListColumn } from '@/components/grid/parts-list-column'
+import { PartsListGrid, type PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useShop } from '@/components/layout/shop-context'
 import { blockSize, type CatalogueBlock, catalogueBlockUrl } from '@/hooks/use-catalogue-rows'
 import { getJson } from '@/lib/api-client'
@@ -14,6 +15,7 @@ import type { CatalogueRow } from './catalogue-row'
 import { CatalogueState } from './catalogue-state'
 import { type CatalogueView, queryParams } from './catalogue-view'
 import { StockWord } from './stock-word'
+import type { GridEditing } from './use-grid-editing'
 
 export interface CatalogueGridProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
@@ -26,15 +28,17 @@ export interface CatalogueGridProps<Row extends CatalogueRow> {
   onReset: () => void
   onAdd: () => void
   handleRef: RefObject<PartsListHandle | null>
+  /** Present while the list is being edited. */
+  editing: GridEditing<Row> | undefined
 }
 
 type LoadState = { state: 'loading' | 'ready' | 'empty' } | { state: 'failed'; failure: Error }
 
 export default function CatalogueGrid<Row extends CatalogueRow>(props: CatalogueGridProps<Row>) {
-  const { definition, columns, shownIds, view, handleRef, onViewChange, onTotal } = props
+  const { definition, columns, shownIds, view, handleRef, editing, onViewChange, onTotal } = props
   const router = useRouter()
   const [load, setLoad] = useState<LoadState>({ state: 'loading' })
-  const gridColumns = useGridColumns(columns, shownIds)
+  const gridColumns = useGridColumns(columns, shownIds, editing?.cellEdit)
   const narrowing = queryParams({ ...view, sort: '' }).toString()
 
   const loadBlock = useCallback(
@@ -73,6 +77,7 @@ export default function CatalogueGrid<Row extends CatalogueRow>(props: Catalogue
         onLoad={handleLoad}
         onFailure={handleFailure}
         handleRef={handleRef}
+        editing={editing && { onEdit: editing.handleEdit, onSelect: editing.handleSelect }}
       />
       {load.state === 'ready' ? null : (
         <div className="bg-sheet absolute inset-0 top-[46px] z-10">
@@ -96,6 +101,7 @@ const unitTexts: Partial<Record<CatalogueColumn<unknown>['kind'], string>> = { a
 function useGridColumns<Row extends CatalogueRow>(
   columns: readonly CatalogueColumn<Row>[],
   shownIds: readonly string[],
+  cellEdit: GridEditing<Row>['cellEdit'] | undefined,
 ): PartsListColumn<Row>[] {
   const { unit, currency } = useShop()
   return useMemo(() => {
@@ -114,8 +120,9 @@ function useGridColumns<Row extends CatalogueRow>(
       isPinned: column.kind === 'code',
       text: (row: Row) => column.text(row, { unit, currency }),
       Cell: column.kind === 'code' ? CodeCell : column.kind === 'onHand' ? OnHandCell : undefined,
+      edit: cellEdit?.(column.id),
     }))
-  }, [columns, shownIds, unit, currency])
+  }, [columns, shownIds, unit, currency, cellEdit])
 }
 
 function CodeCell({ row }: { row: CatalogueRow }) {

@@ -1,30 +1,36 @@
 'use client'
 
-import { ListFilter, Plus, Upload } from 'lucide-react'
+import { Download, ListFilter, Pencil, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
 import { useRouter } from 'next/navigation'
 import { type ReactNode, useMemo, useRef, useState } from 'react'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useCan } from '@/components/layout/shop-context'
-import { Button, ButtonLink } from '@/components/ui/button'
+import { Button, ButtonLink, buttonClass } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
+import { useCatalogueCounts } from '@/hooks/use-catalogue-counts'
 import { itemPagePath } from '@/lib/catalogue-paths'
+import { importKindOf } from '@/schemas/import-fields'
 import type { CatalogueColumn } from './catalogue-column'
 import type { CatalogueDefinition } from './catalogue-definition'
 import { filterParamNames } from './catalogue-filter'
 import type { CatalogueGridProps } from './catalogue-grid'
 import { CatalogueList } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
-import { type CatalogueView, isNarrowed } from './catalogue-view'
+import { type CatalogueView, exportPath, isNarrowed, queryParams } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
+import { EditBar } from './edit-bar'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
 import { MakerList } from './maker-list'
+import { PasteRows } from './paste-rows'
+import { SavedViews } from './saved-views-dialog'
 import { SearchBox } from './search-box'
 import { SortSelect } from './sort-select'
 import { useCatalogueView } from './use-catalogue-view'
+import { useGridEditing } from './use-grid-editing'
 
 /** The grid's code comes only where a grid is shown: not on a phone, not on any other page. */
 const CatalogueGrid = dynamic(() => import('./catalogue-grid'), {
@@ -86,8 +92,12 @@ interface CatalogueShapeProps<Row extends CatalogueRow> {
 function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, view, onViewChange, onClear } = props
   const [total, setTotal] = useState<number | null>(null)
+  const counts = useFilterCounts(definition, view, total !== null)
   const grid = useRef<PartsListHandle>(null)
+  const mayKeep = useCan('keepCrib')
   const shownIds = useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns])
+  const [isEditing, setIsEditing] = useState(false)
+  const editing = useGridEditing(definition, grid, isEditing)
   return (
     <>
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
@@ -103,13 +113,24 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           onSearch={(q) => onViewChange({ q })}
           onLeaveDown={() => grid.current?.focusFirstRow()}
         />
-        <CatalogueActions definition={definition} onAdd={props.onAdd}>
+        <CatalogueActions
+          definition={definition}
+          exportHref={exportPath(definition.kind, view, shownIds)}
+          onAdd={props.onAdd}
+        >
           <ColumnChooser
             columns={columns}
             shown={shownIds}
             isUsual={view.columns === null}
             onChange={(ids) => onViewChange({ columns: ids })}
           />
+          <SavedViews {...{ definition, columns, view, onViewChange }} />
+          {mayKeep ? (
+            <>
+              <PasteRows kind={importKindOf[definition.kind]} many={definition.many} />
+              <EditToggle isEditing={isEditing} onChange={setIsEditing} />
+            </>
+          ) : null}
         </CatalogueActions>
       </div>
       <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
@@ -117,6 +138,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           shape="row"
           filters={definition.filters}
           values={view.filters}
+          counts={counts}
           onChange={(filters) => onViewChange({ filters })}
         />
         {isNarrowed(view) ? (
@@ -125,19 +147,54 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           </Button>
         ) : null}
       </div>
-      <CatalogueGrid {...props} shownIds={shownIds} onTotal={setTotal} handleRef={grid} />
+      {isEditing ? <EditBar definition={definition} editing={editing} grid={grid} /> : null}
+      <CatalogueGrid
+        {...props}
+        shownIds={shownIds}
+        onTotal={setTotal}
+        handleRef={grid}
+        editing={isEditing ? editing : undefined}
+      />
     </>
+  )
+}
+
+function useFilterCounts<Row extends CatalogueRow>(
+  definition: CatalogueDefinition<Row>,
+  view: CatalogueView,
+  isWanted: boolean,
+) {
+  return useCatalogueCounts(definition.kind, queryParams({ ...view, sort: '' }).toString(), isWanted)
+}
+
+/** Only while this is on does a list change under the hand; otherwise a click opens a row. */
+function EditToggle({ isEditing, onChange }: { isEditing: boolean; onChange: (isEditing: boolean) => void }) {
+  return (
+    <Button
+      size="compact"
+      aria-pressed={isEditing}
+      variant={isEditing ? 'primary' : 'secondary'}
+      onClick={() => onChange(!isEditing)}
+    >
+      <Pencil aria-hidden="true" className="size-4.5" />
+      {isEditing ? 'Done editing' : 'Edit in list'}
+    </Button>
   )
 }
 
 function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, view, onViewChange } = props
+  const counts = useFilterCounts(definition, view, true)
   return (
     <>
       <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
         <div className="flex items-center justify-between">
           <h1 className="text-2xl">{definition.title}</h1>
-          <CatalogueActions definition={definition} onAdd={props.onAdd} />
+          <CatalogueActions
+            definition={definition}
+            exportHref={exportPath(definition.kind, view, shownColumnIds(columns, view.columns))}
+            onAdd={props.onAdd}
+          />
         </div>
         <div className="flex items-center gap-2">
           <SearchBox
@@ -149,11 +206,13 @@ function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Ro
             count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
             onClear={() => onViewChange({ filters: {}, sort: '' })}
           >
+            <SavedViews {...{ definition, columns, view, onViewChange }} />
             <SortSelect columns={columns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
             <FilterFields
               shape="column"
               filters={definition.filters}
               values={view.filters}
+              counts={counts}
               onChange={(filters) => onViewChange({ filters })}
             />
           </FilterDrawer>
@@ -175,17 +234,28 @@ function shownColumnIds(
 
 function CatalogueActions<Row extends CatalogueRow>({
   definition,
+  exportHref,
   onAdd,
   children,
 }: {
   definition: CatalogueDefinition<Row>
+  exportHref: string
   onAdd: () => void
   children?: ReactNode
 }) {
   const mayKeep = useCan('keepCrib')
   return (
-    <div className="flex items-center gap-2">
+    <div className="flex flex-wrap items-center gap-2">
       {children}
+      <a
+        href={exportHref}
+        download
+        className={buttonClass({ size: 'compact' })}
+        title="The rows found, as they are sorted, with the columns shown, as a CSV file"
+      >
+        <Download aria-hidden="true" className="size-4.5" />
+        Export
+      </a>
       {mayKeep ? (
         <>
           <ButtonLink href="/imports" size="compact" prefetch={false} className="hidden! md:inline-flex!">

@@ -52,6 +52,9 @@ export function CatalogueState<Row extends CatalogueRow>(props: CatalogueStatePr
         Import a file
       </ButtonLink>
       <Button onClick={onAdd}>Add a {definition.one}</Button>
+      <ButtonLink href="/first-day" variant="quiet">
+        A shop’s first day, step by step
+      </ButtonLink>
     </StateSentence>
   )
 }

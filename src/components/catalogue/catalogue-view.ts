@@ -1,3 +1,6 @@
+import type { CatalogueKind } from '@/core/stock/kinds'
+import { catalogueApiPath } from '@/lib/catalogue-paths'
+
 /** What of a catalogue is looked at, and how. All of it stands in the address bar. */
 export interface CatalogueView {
   q: string
@@ -42,4 +45,9 @@ export function queryParams(view: Omit<CatalogueView, 'columns'>): URLSearchPara
 
 export function isNarrowed(view: CatalogueView): boolean {
   return view.q !== '' || Object.keys(view.filters).length > 0
+}
+
+/** Where the same rows are to be had as a file, with these columns. */
+export function exportPath(kind: CatalogueKind, view: CatalogueView, columns: readonly string[]): string {
+  return `${catalogueApiPath(kind)}/export?${viewParams({ ...view, columns })}`
 }

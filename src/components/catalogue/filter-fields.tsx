@@ -2,22 +2,30 @@
 
 import { useEffect, useId, useRef, useState } from 'react'
 import { useShop } from '@/components/layout/shop-context'
+import { Button } from '@/components/ui/button'
 import { controlClass } from '@/components/ui/field'
+import type { SelectOption } from '@/components/ui/select-field'
 import { parseLength } from '@/core/units/parse-length'
 import { lengthInputText } from '@/lib/format-length'
+import type { CatalogueCounts } from '@/schemas/catalogue-counts'
 import type { CatalogueFilter } from './catalogue-filter'
 import { useDelayed } from './use-delayed'
+
+type Choices = CatalogueCounts[string]
 
 export interface FilterFieldsProps {
   filters: readonly CatalogueFilter[]
   values: Readonly<Record<string, string>>
   onChange: (values: Record<string, string>) => void
+  /** How many rows each choice would leave. */
+  counts: CatalogueCounts
   /** In one line over the list, or one under the other in a drawer. */
   shape: 'row' | 'column'
 }
 
 /** The ways to narrow a list; each change takes hold as soon as it can be read. */
-export function FilterFields({ filters, values, onChange, shape }: FilterFieldsProps) {
+export function FilterFields({ filters, values, counts, onChange, shape }: FilterFieldsProps) {
+  const [isMoreShown, setIsMoreShown] = useState(false)
   const latest = useRef(values)
   useEffect(() => {
     latest.current = values
@@ -30,19 +38,48 @@ export function FilterFields({ filters, values, onChange, shape }: FilterFieldsP
     onChange(next)
   }
   const boxClass = shape === 'row' ? 'w-auto min-w-0' : 'w-full'
-  return filters.map((filter) => (
-    <FilterBox key={filter.name} filter={filter} values={values} onSet={handleSet} className={boxClass} />
-  ))
+  const isInUse = ({ name }: CatalogueFilter) =>
+    [name, `${name}.min`, `${name}.max`].some((param) => values[param] !== undefined)
+  const shown = filters.filter(
+    (filter) => shape === 'column' || isMoreShown || !filter.isMore || isInUse(filter),
+  )
+  const hasMore = shape === 'row' && filters.some((filter) => filter.isMore && !isInUse(filter))
+  return (
+    <>
+      {shown.map((filter) => (
+        <FilterBox
+          key={filter.name}
+          filter={filter}
+          values={values}
+          counts={counts[filter.name]}
+          onSet={handleSet}
+          className={boxClass}
+        />
+      ))}
+      {hasMore ? (
+        <Button
+          variant="quiet"
+          size="compact"
+          className="self-end"
+          aria-expanded={isMoreShown}
+          onClick={() => setIsMoreShown(!isMoreShown)}
+        >
+          {isMoreShown ? 'Fewer filters' : 'More filters'}
+        </Button>
+      ) : null}
+    </>
+  )
 }
 
 interface FilterBoxProps {
   filter: CatalogueFilter
   values: Readonly<Record<string, string>>
+  counts: Choices | undefined
   onSet: (name: string, value: string) => void
   className: string
 }
 
-function FilterBox({ filter, values, onSet, className }: FilterBoxProps) {
+function FilterBox({ filter, values, counts, onSet, className }: FilterBoxProps) {
   const id = useId()
   if (filter.kind === 'lengthRange') return <LengthRange {...{ values, onSet, className }} filter={filter} />
   const value = values[filter.name] ?? ''
@@ -51,7 +88,9 @@ function FilterBox({ filter, values, onSet, className }: FilterBoxProps) {
       <label htmlFor={id} className="text-ink-soft">
         {filter.label}
       </label>
-      {filter.kind === 'choice' ? (
+      {filter.kind === 'text' ? (
+        <TextFilter id={id} name={filter.name} value={value} onSet={onSet} offered={counts} />
+      ) : (
         <select
           id={id}
           className={`${filterClass} pr-7`}
@@ -59,17 +98,35 @@ function FilterBox({ filter, values, onSet, className }: FilterBoxProps) {
           onChange={(event) => onSet(filter.name, event.target.value)}
         >
           <option value="">{filter.anyLabel}</option>
-          {filter.options.map((option) => (
+          {choicesOf(filter, counts, value).map((option) => (
             <option key={option.value} value={option.value}>
               {option.label}
             </option>
           ))}
         </select>
-      ) : (
-        <TextFilter id={id} name={filter.name} value={value} onSet={onSet} listId={filter.listId} />
       )}
     </div>
   )
+}
+
+/** The choices with how many rows each would leave, where that is known. */
+function choicesOf(
+  filter: Extract<CatalogueFilter, { kind: 'choice' | 'counted' }>,
+  counts: Choices | undefined,
+  chosen: string,
+): SelectOption[] {
+  if (filter.kind === 'choice') {
+    return filter.options.map(({ value, label }) => {
+      const count = counts?.find((choice) => choice.value === value)?.count ?? 0
+      return { value, label: counts ? `${label} (${count.toLocaleString('en')})` : label }
+    })
+  }
+  const options = (counts ?? []).map(({ value, label, count }) => ({
+    value,
+    label: `${label ?? value} (${count.toLocaleString('en')})`,
+  }))
+  const isListed = chosen === '' || options.some((option) => option.value === chosen)
+  return isListed ? options : [{ value: chosen, label: 'The place in the address' }, ...options]
 }
 
 const filterClass = controlClass.replace('min-h-10', 'min-h-9')
@@ -110,27 +167,40 @@ function TextFilter({
   name,
   value,
   onSet,
-  listId,
+  offered,
 }: {
   id: string
   name: string
   value: string
   onSet: FilterBoxProps['onSet']
-  listId?: string
+  offered: Choices | undefined
 }) {
   const typed = useTyped(value, (text) => {
     typed.setSent(text.trim())
     onSet(name, text.trim())
   })
   return (
-    <input
-      id={id}
-      list={listId}
-      type="text"
-      className={`${filterClass} sm:w-36`}
-      maxLength={200}
-      {...typed.props}
-    />
+    <>
+      <input
+        id={id}
+        list={offered ? `${id}-offered` : undefined}
+        type="text"
+        className={`${filterClass} sm:w-36`}
+        maxLength={200}
+        {...typed.props}
+      />
+      {offered ? (
+        <datalist id={`${id}-offered`}>
+          {offered.map((choice) => (
+            <option
+              key={choice.value}
+              value={choice.value}
+              label={`${choice.value} (${choice.count.toLocaleString('en')})`}
+            />
+          ))}
+        </datalist>
+      ) : null}
+    </>
   )
 }
 
@@ -139,7 +209,9 @@ function LengthRange({
   values,
   onSet,
   className,
-}: Omit<FilterBoxProps, 'filter'> & { filter: Extract<CatalogueFilter, { kind: 'lengthRange' }> }) {
+}: Omit<FilterBoxProps, 'filter' | 'counts'> & {
+  filter: Extract<CatalogueFilter, { kind: 'lengthRange' }>
+}) {
   const { unit } = useShop()
   return (
     <fieldset className={`flex flex-col text-sm ${className}`}>

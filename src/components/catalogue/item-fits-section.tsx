@@ -6,7 +6,7 @@ import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
 import type { LengthUnit } from '@/core/units/length-unit'
-import { useItemFits } from '@/hooks/use-item'
+import { itemFitsUrl, useFits } from '@/hooks/use-fits'
 import { itemPagePath } from '@/lib/catalogue-paths'
 import { formatLength } from '@/lib/format-length'
 import type { FitsItem } from '@/schemas/fits'
@@ -32,16 +32,17 @@ export function ItemFitsSection({ itemId, kind }: { itemId: string; kind: Catalo
         {catalogueKinds
           .filter((candidate) => candidate !== kind || kind === 'extension')
           .map((candidate) => (
-            <FitsList key={candidate} itemId={itemId} kind={candidate} />
+            <FitsList key={candidate} url={itemFitsUrl(itemId)} kind={candidate} />
           ))}
       </div>
     </ItemSection>
   )
 }
 
-function FitsList({ itemId, kind }: { itemId: string; kind: CatalogueKind }) {
+/** What of one kind fits what `url` asks about, with how it fits and what is on hand. */
+export function FitsList({ url, kind }: { url: string; kind: CatalogueKind }) {
   const [isAll, setIsAll] = useState(false)
-  const fits = useItemFits(itemId, kind, isAll ? asManyAsAnswered : firstFew)
+  const fits = useFits(url, kind, isAll ? asManyAsAnswered : firstFew)
   const title = kindTitles[kind]
   if (fits.error)
     return (

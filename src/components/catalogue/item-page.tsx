@@ -1,6 +1,6 @@
 'use client'
 
-import { useState } from 'react'
+import { type ReactNode, useState } from 'react'
 import { toast } from 'sonner'
 import { useCan } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
@@ -16,16 +16,19 @@ import { ItemFormDialog } from './item-form-dialog'
 import { type ItemAct, ItemHeading } from './item-heading'
 import { ItemMovementsSection } from './item-movements-section'
 import { ItemStockSection } from './item-stock-section'
+import { MergesNotice } from './merges-notice'
 import { MoveDialog } from './move-dialog'
 
 export interface ItemPageProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
   /** As the server had it when it made the page. */
   first: Row
+  /** What only this kind of item has to say, below its geometry and stock. */
+  extra?: (row: Row) => ReactNode
 }
 
 /** One item: its drawing, what it measures, where it is, what happened to it, and what fits it. */
-export function ItemPage<Row extends CatalogueRow>({ definition, first }: ItemPageProps<Row>) {
+export function ItemPage<Row extends CatalogueRow>({ definition, first, extra }: ItemPageProps<Row>) {
   const row = useItem(definition.kind, first)
   const stocked = useItemStock(row.id)
   const [act, setAct] = useState<ItemAct | null>(null)
@@ -34,11 +37,13 @@ export function ItemPage<Row extends CatalogueRow>({ definition, first }: ItemPa
     <div className="flex w-full max-w-[100rem] flex-col gap-6 px-4 pt-4 pb-10 lg:px-6">
       <ItemHeading definition={definition} row={row} onAct={setAct} />
       {row.archivedAt ? <ArchivedNotice row={row} /> : null}
+      <MergesNotice itemId={row.id} />
       {definition.form.draw(row)}
       <div className="grid items-start gap-x-10 gap-y-6 lg:grid-cols-2">
         <GeometryTable definition={definition} row={row} />
         <ItemStockSection row={row} />
       </div>
+      {extra?.(row)}
       <ItemFitsSection itemId={row.id} kind={row.kind} />
       <ItemMovementsSection itemId={row.id} />
       {act === 'edit' ? (

@@ -62,7 +62,8 @@ export function typedRow(definition: AnyFormDefinition, row: object, manner: Man
   return values
 }
 
-function typedText(field: ItemField, value: unknown, manner: Manner): string {
+/** One value as the person would have typed it. */
+export function typedText(field: ItemField, value: unknown, manner: Manner): string {
   if (value === null || value === undefined) return ''
   if (typeof value !== 'number') return String(value)
   if (field.kind === 'length') return lengthInputText(value, manner.unit, manner)
@@ -92,6 +93,19 @@ export function readTyped(definition: AnyFormDefinition, values: FieldValues, ma
   }
   if (definition.segments) readSegments(read, values.segments ?? [], definition.segments.hasPart, manner)
   return read
+}
+
+/** What was typed for one field alone; null clears it, and the server says where that can't be. */
+export function readTypedField(
+  field: ItemField,
+  text: string,
+  manner: Manner,
+): { ok: true; value: unknown } | { ok: false; message: string } {
+  const read: ReadValues = { body: {}, problems: [] }
+  readInto(read, field, field.path, text, manner)
+  const [problem] = read.problems
+  if (problem) return { ok: false, message: problem.message }
+  return { ok: true, value: get(read.body, field.path) ?? null }
 }
 
 function readSegments(read: ReadValues, segments: TypedSegment[], hasPart: boolean, manner: Manner): void {

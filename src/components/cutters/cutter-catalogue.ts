@@ -9,10 +9,10 @@ import {
   textColumn,
 } from '@/components/catalogue/columns'
 import { cutterForms } from '@/core/tooling'
+import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { formatLength } from '@/lib/format-length'
 import type { CutterResponse } from '@/schemas/cutter'
 import { cutterForm } from './cutter-form'
-import { cutterFormNames, substrateNames } from './cutter-words'
 
 export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
   kind: 'cutter',
@@ -52,6 +52,10 @@ export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
       options: cutterForms.map((form) => ({ value: form, label: cutterFormNames[form] })),
     },
     { kind: 'lengthRange', name: 'cuttingDiameterMm', label: 'Cutting diameter' },
+    { kind: 'lengthRange', name: 'lengthOfCutMm', label: 'Length of cut', isMore: true },
+    { kind: 'lengthRange', name: 'reachLengthMm', label: 'Reach', isMore: true },
+    { kind: 'lengthRange', name: 'shankDiameterMm', label: 'Shank', isMore: true },
+    { kind: 'lengthRange', name: 'cornerRadiusMm', label: 'Corner radius', isMore: true },
     ...itemFilters,
   ],
   facts: (row, unit) => {

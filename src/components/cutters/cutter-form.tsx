@@ -2,9 +2,9 @@ import type { FieldValues } from 'react-hook-form'
 import { identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
 import { type CutterForm, cutterForms, substrates } from '@/core/tooling'
+import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { type CutterResponse, createCutterRequestSchema } from '@/schemas/cutter'
 import { CutterDrawing } from './cutter-drawing'
-import { cutterFormNames, substrateNames } from './cutter-words'
 
 function hasForm(...forms: CutterForm[]) {
   return (values: FieldValues) => forms.includes(values.form)

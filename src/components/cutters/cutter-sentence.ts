@@ -1,8 +1,8 @@
 import type { CutterGeometry } from '@/core/tooling'
 import type { LengthUnit } from '@/core/units/length-unit'
+import { cutterFormNames } from '@/lib/cutter-words'
 import { formatAngle } from '@/lib/format-angle'
 import { formatLength } from '@/lib/format-length'
-import { cutterFormNames } from './cutter-words'
 
 /** The drawing of a cutter in words, for those who hear it. */
 export function cutterSentence(cutter: CutterGeometry, unit: LengthUnit): string {

@@ -1,9 +1,9 @@
 'use client'
 
 import {
+  type CellEditRequestEvent,
   type CellKeyDownEvent,
   CellStyleModule,
-  type ColDef,
   ColumnApiModule,
   type ColumnMovedEvent,
   type GridApi,
@@ -11,38 +11,46 @@ import {
   type IGetRowsParams,
   InfiniteRowModelModule,
   ModuleRegistry,
+  RenderApiModule,
+  RowApiModule,
   type RowClickedEvent,
+  RowSelectionModule,
+  type RowSelectionOptions,
+  SelectEditorModule,
+  type SelectionColumnDef,
+  TextEditorModule,
   TooltipModule,
 } from 'ag-grid-community'
-import { AgGridReact, type CustomCellRendererProps } from 'ag-grid-react'
-import {
-  type ComponentType,
-  type RefObject,
-  useCallback,
-  useEffect,
-  useImperativeHandle,
-  useMemo,
-  useRef,
-} from 'react'
+import { AgGridReact } from 'ag-grid-react'
+import { type RefObject, useCallback, useEffect, useImperativeHandle, useMemo, useRef } from 'react'
 import { useMediaQuery } from '@/components/ui/use-media-query'
-import { PartsListHeading } from './parts-list-heading'
+import { columnDef, type PartsListColumn, sortState } from './parts-list-column'
 import { partsListTheme, partsListThemeForFingers } from './parts-list-theme'
 
-ModuleRegistry.registerModules([InfiniteRowModelModule, CellStyleModule, ColumnApiModule, TooltipModule])
+ModuleRegistry.registerModules([
+  InfiniteRowModelModule,
+  CellStyleModule,
+  ColumnApiModule,
+  TooltipModule,
+  RowApiModule,
+  RenderApiModule,
+  RowSelectionModule,
+  TextEditorModule,
+  SelectEditorModule,
+])
 
-export interface PartsListColumn<Row> {
-  id: string
-  heading: string
-  name: string
-  unitText: string
-  width: number
-  isFigure: boolean
-  isSortable: boolean
-  isShown: boolean
-  isPinned?: boolean
-  text: (row: Row) => string
-  /** Where plain text is not enough. */
-  Cell?: ComponentType<{ row: Row }>
+const checkboxes: RowSelectionOptions = {
+  mode: 'multiRow',
+  headerCheckbox: false,
+  enableClickSelection: false,
+}
+
+const checkboxColumn: SelectionColumnDef = {
+  headerName: 'Select',
+  width: 72,
+  pinned: 'left',
+  lockPosition: 'left',
+  suppressHeaderMenuButton: true,
 }
 
 export interface PartsListHandle {
@@ -51,6 +59,18 @@ export interface PartsListHandle {
   /** Reads all again: the last try failed. */
   reload: () => void
   focusFirstRow: () => void
+  /** Shows rows as they have become, where they are loaded. */
+  showRows: (rows: readonly { id: string }[]) => void
+  /** Draws a row's cells again: what is known of them beside the row has changed. */
+  redrawRow: (id: string) => void
+  editCell: (id: string, columnId: string) => void
+  clearSelection: () => void
+}
+
+export interface PartsListEditing<Row> {
+  /** Something was typed into a cell; the list shows it only once it is in the row. */
+  onEdit: (row: Row, columnId: string, text: string) => void
+  onSelect: (rows: Row[]) => void
 }
 
 export interface PartsListGridProps<Row extends { id: string }> {
@@ -66,11 +86,14 @@ export interface PartsListGridProps<Row extends { id: string }> {
   onLoad: (total: number) => void
   onFailure: (error: unknown) => void
   handleRef: RefObject<PartsListHandle | null>
+  /** Present while cells are edited and rows selected: a click and Enter then open no row. */
+  editing?: PartsListEditing<Row> | undefined
 }
 
 /** A list of any length, read a block at a time as it is scrolled. Enter and a click open the row. */
 export function PartsListGrid<Row extends { id: string }>(props: PartsListGridProps<Row>) {
-  const { columns, sort, blockSize, label, onSortChange, onOrderChange, onOpen } = props
+  const { columns, sort, blockSize, label, onSortChange, onOrderChange, onOpen, editing } = props
+  const isEditing = editing !== undefined
   const api = useRef<GridApi<Row> | null>(null)
   const initialSort = useRef(sort)
   useHandle(props.handleRef, api)
@@ -99,17 +122,17 @@ export function PartsListGrid<Row extends { id: string }>(props: PartsListGridPr
   const handleKey = useCallback(
     (event: CellKeyDownEvent<Row> | { event?: Event | null; data?: Row }) => {
       const key = event.event
-      if (key instanceof KeyboardEvent && key.key === 'Enter' && event.data) onOpen(event.data)
+      if (key instanceof KeyboardEvent && key.key === 'Enter' && event.data && !isEditing) onOpen(event.data)
     },
-    [onOpen],
+    [onOpen, isEditing],
   )
   const handleClick = useCallback(
     (event: RowClickedEvent<Row>) => {
       const target = event.event?.target
-      if (!event.data || (target instanceof Element && target.closest('a'))) return
+      if (!event.data || isEditing || (target instanceof Element && target.closest('a'))) return
       onOpen(event.data)
     },
-    [onOpen],
+    [onOpen, isEditing],
   )
 
   return (
@@ -134,6 +157,14 @@ export function PartsListGrid<Row extends { id: string }>(props: PartsListGridPr
         onColumnMoved={handleColumnMoved}
         onCellKeyDown={handleKey}
         onRowClicked={handleClick}
+        readOnlyEdit
+        rowSelection={isEditing ? checkboxes : undefined}
+        selectionColumnDef={checkboxColumn}
+        stopEditingWhenCellsLoseFocus
+        onCellEditRequest={(event: CellEditRequestEvent<Row>) => {
+          if (event.data) editing?.onEdit(event.data, event.column.getColId(), String(event.newValue ?? ''))
+        }}
+        onSelectionChanged={(event) => editing?.onSelect(event.api.getSelectedRows())}
         suppressNoRowsOverlay
       />
     </section>
@@ -181,47 +212,21 @@ function useHandle<Row>(
       const first = api.current?.getAllDisplayedColumns()[0]
       if (first) api.current?.setFocusedCell(0, first)
     },
-  }))
-}
-
-function columnDef<Row>(column: PartsListColumn<Row>, initialSort: string): ColDef<Row> {
-  const sorted = sortState(initialSort).find((state) => state.colId === column.id)
-  const { Cell } = column
-  return {
-    colId: column.id,
-    headerName: column.heading,
-    headerTooltip: column.name,
-    type: column.isFigure ? 'rightAligned' : undefined,
-    headerComponentParams: {
-      innerHeaderComponent: PartsListHeading,
-      innerHeaderComponentParams: { unitText: column.unitText, fullName: column.name },
+    showRows: (rows) => {
+      for (const row of rows) api.current?.getRowNode(row.id)?.setData(row as Row)
     },
-    initialWidth: column.width,
-    minWidth: 56,
-    hide: !column.isShown,
-    pinned: column.isPinned ? 'left' : undefined,
-    lockPinned: true,
-    lockPosition: column.isPinned ? 'left' : undefined,
-    sortable: column.isSortable,
-    initialSort: sorted?.sort ?? null,
-    initialSortIndex: sorted?.sortIndex,
-    suppressHeaderMenuButton: true,
-    valueGetter: ({ data }) => (data ? column.text(data) : ''),
-    cellRenderer: Cell
-      ? ({ data }: CustomCellRendererProps<Row>) => (data ? <Cell row={data} /> : '…')
-      : undefined,
-  }
-}
-
-function sortState(sort: string) {
-  return sort
-    .split(',')
-    .filter(Boolean)
-    .map((term, sortIndex) => ({
-      colId: term.replace(/^-/, ''),
-      sort: term.startsWith('-') ? ('desc' as const) : ('asc' as const),
-      sortIndex,
-    }))
+    redrawRow: (id) => {
+      const node = api.current?.getRowNode(id)
+      if (node) api.current?.refreshCells({ rowNodes: [node], force: true })
+    },
+    editCell: (id, columnId) => {
+      const rowIndex = api.current?.getRowNode(id)?.rowIndex
+      if (rowIndex == null) return
+      api.current?.setFocusedCell(rowIndex, columnId)
+      api.current?.startEditingCell({ rowIndex, colKey: columnId })
+    },
+    clearSelection: () => api.current?.deselectAll(),
+  }))
 }
 
 function sortOf<Row>(grid: GridApi<Row>): string {

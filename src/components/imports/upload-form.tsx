@@ -1,8 +1,8 @@
 'use client'
 
-import { useRouter } from 'next/navigation'
+import { useRouter, useSearchParams } from 'next/navigation'
 import { type FormEvent, useRef, useState } from 'react'
-import { callApi } from '@/lib/api-client'
+import { createImport } from '@/hooks/use-import'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { type ImportKind, importKindLabels, importKinds } from '@/schemas/import-fields'
 import { fileLimitText, importLimits } from '@/schemas/import-limits'
@@ -12,6 +12,7 @@ import { classNames } from '../ui/class-names'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { FileDrop } from './file-drop'
+import { StockNeeds } from './stock-needs'
 
 const kindHints: Readonly<Record<ImportKind, string>> = {
   cutters: 'End mills, drills, taps, reamers: one row each.',
@@ -25,7 +26,7 @@ const kindHints: Readonly<Record<ImportKind, string>> = {
 export function UploadForm() {
   const { unit } = useShop()
   const router = useRouter()
-  const [kind, setKind] = useState<ImportKind>('cutters')
+  const [kind, setKind] = useState<ImportKind>(kindOfAddress(useSearchParams()))
   const [fileUnit, setFileUnit] = useState<string>(unit)
   const [file, setFile] = useState<File | null>(null)
   const [failure, setFailure] = useState<unknown>(null)
@@ -47,10 +48,7 @@ export function UploadForm() {
     setFailure(null)
     sending.current = new AbortController()
     try {
-      const { id } = await callApi<{ id: string }>('POST', '/api/imports', {
-        body: uploadBody(kind, fileUnit, chosen),
-        signal: sending.current.signal,
-      })
+      const id = await createImport(kind, fileUnit, chosen, sending.current.signal)
       router.push(`/imports/${id}`)
     } catch (error) {
       if (!sending.current.signal.aborted) setFailure(error)
@@ -61,6 +59,7 @@ export function UploadForm() {
   return (
     <form onSubmit={handleSubmit} noValidate className="flex max-w-3xl flex-col gap-5">
       <KindChoice kind={kind} onChoose={setKind} error={faults.kind} />
+      {kind === 'stock' ? <StockNeeds /> : null}
       <FileDrop
         file={file}
         onChoose={handleChoose}
@@ -94,6 +93,11 @@ export function UploadForm() {
   )
 }
 
+/** A link may say what the file will hold: `?kind=stock`. */
+function kindOfAddress(params: URLSearchParams): ImportKind {
+  return importKinds.find((kind) => kind === params.get('kind')) ?? 'cutters'
+}
+
 /** A file that was chosen before this page had come to life is in the form, though nobody was told. */
 function fileOf(form: HTMLFormElement): File | null {
   const chosen = new FormData(form).get('file')
@@ -102,14 +106,6 @@ function fileOf(form: HTMLFormElement): File | null {
 
 function tooLarge(file: File): Error {
   return new Error(`${file.name} is larger than ${fileLimitText}. Split it and upload the parts.`)
-}
-
-function uploadBody(kind: ImportKind, unit: string, file: File): FormData {
-  const body = new FormData()
-  body.set('kind', kind)
-  if (kind !== 'stock') body.set('unit', unit)
-  body.set('file', file)
-  return body
 }
 
 function KindChoice({

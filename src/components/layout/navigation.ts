@@ -13,6 +13,7 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
     links: [
       { href: '/reach', label: 'Reach', permission: 'see' },
       { href: '/ball-speed', label: 'Ball-end speed', permission: 'see' },
+      { href: '/starting-speeds', label: 'Starting speeds', permission: 'see' },
     ],
   },
   {
@@ -22,6 +23,7 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
       { href: '/holders', label: 'Holders', permission: 'see' },
       { href: '/collets', label: 'Collets', permission: 'see' },
       { href: '/extensions', label: 'Extensions', permission: 'see' },
+      { href: '/fits', label: 'What fits', permission: 'see' },
     ],
   },
   {

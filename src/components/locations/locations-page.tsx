@@ -12,25 +12,33 @@ import { AddLocationDialog } from './add-location-dialog'
 import { CabinetElevation, PlaceButton } from './cabinet-elevation'
 import { LocationDialog } from './location-dialog'
 import { type LocationNode, locationTree } from './location-tree'
+import { PatternDialog } from './pattern-dialog'
 
 /** The shop's places as one would see them standing before the cabinets. */
 export function LocationsPage() {
   const { data, error, refresh } = useLocations()
   const [opened, setOpened] = useState<LocationResponse | null>(null)
   const [parent, setParent] = useState<LocationResponse | 'crib' | null>(null)
+  const [isPattern, setIsPattern] = useState(false)
   const mayKeep = useCan('keepCrib')
   const tree = data ? locationTree(data) : null
 
   function handleChanged() {
     setOpened(null)
     setParent(null)
+    setIsPattern(false)
     void refresh()
   }
 
   return (
     <>
       <PageHeading title="Locations" note="Every cabinet as it stands: its drawers, and the bins in each.">
-        {mayKeep ? <Button onClick={() => setParent('crib')}>Add a crib</Button> : null}
+        {mayKeep ? (
+          <>
+            <Button onClick={() => setIsPattern(true)}>Bins by a pattern</Button>
+            <Button onClick={() => setParent('crib')}>Add a crib</Button>
+          </>
+        ) : null}
       </PageHeading>
       {error ? (
         <StateSentence sentence={faultSentence(error)}>
@@ -48,6 +56,7 @@ export function LocationsPage() {
       {opened ? (
         <LocationDialog location={opened} onClose={() => setOpened(null)} onChanged={handleChanged} />
       ) : null}
+      {isPattern ? <PatternDialog onClose={() => setIsPattern(false)} onAdded={handleChanged} /> : null}
       {parent ? (
         <AddLocationDialog parent={parent} onClose={() => setParent(null)} onAdded={handleChanged} />
       ) : null}

@@ -98,7 +98,14 @@ export function ItemPicker<Slot extends ToolSlot>(props: ItemPickerProps<Slot>) 
               />
             ))}
           </div>
-          <PickerState isLoading={isLoading} error={error} isEmpty={rows.length === 0} search={search} />
+          <PickerState
+            isLoading={isLoading}
+            error={error}
+            isEmpty={rows.length === 0}
+            search={search}
+            slot={slot}
+            isNarrowed={Object.keys(filter ?? {}).length > 0}
+          />
         </div>
       ) : null}
     </div>
@@ -150,15 +157,19 @@ function PickerState(props: {
   error: Error | undefined
   isEmpty: boolean
   search: string
+  slot: ToolSlot
+  isNarrowed: boolean
 }) {
-  const { isLoading, error, isEmpty, search } = props
+  const { isLoading, error, isEmpty, search, slot, isNarrowed } = props
   const sentence = error
     ? error.message
     : isLoading && isEmpty
       ? 'Looking in the crib…'
       : isEmpty
         ? search === ''
-          ? 'Nothing in the crib fits here.'
+          ? isNarrowed
+            ? 'Nothing in the crib fits here.'
+            : `There are no ${slot}s in the catalogue yet: they come in from a file, under Imports. The figures can be typed by hand too.`
           : `Nothing found for “${search}”.`
         : null
   return sentence ? (

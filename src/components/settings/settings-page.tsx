@@ -11,7 +11,7 @@ import { lengthInputText } from '@/lib/format-length'
 import type { ShopSettingsResponse } from '@/schemas/shop-settings'
 import { PageHeading } from '../layout/page-heading'
 import { useShop } from '../layout/shop-context'
-import { Button } from '../ui/button'
+import { Button, ButtonLink } from '../ui/button'
 import { LengthField } from '../ui/length-field'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
@@ -74,7 +74,11 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
       <PageHeading
         title="Shop settings"
         note="They hold for everyone; each person's own unit stands above them."
-      />
+      >
+        <ButtonLink href="/first-day" size="compact" variant="quiet">
+          The shop’s first day
+        </ButtonLink>
+      </PageHeading>
       <div className="flex flex-col gap-6 px-4 lg:px-6">
         {fault ? (
           <Notice kind="collision" isAnnounced>

@@ -20,7 +20,7 @@ export function SetupForm({ token }: { token: string }) {
     void attempt(async () => {
       await callApi('POST', '/api/setup', { body: { ...values, token } })
       await callApi('POST', '/api/session', { body: { email: values.email, password: values.password } })
-      window.location.assign('/imports')
+      window.location.assign('/first-day')
     })
   }
 

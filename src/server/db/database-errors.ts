@@ -10,6 +10,7 @@ export const ledgerErrorCodes = {
   stockBelowZero: 'LL014',
   pieceNotThere: 'LL015',
   stillInUse: 'LL016',
+  reorderPointMoved: 'LL017',
 } as const
 
 interface DatabaseError {

@@ -41,10 +41,7 @@ export async function readKeyPage(
 ): Promise<KeyPage> {
   const idKey: SortKey = { sql: id.sql, isNumber: true, isDescending: id.isDescending ?? false }
   const signature = sortSignature(sort)
-  const keys = matching.clone().select(db.raw(`${id.sql}::text as id`))
-  for (const [index, key] of sort.entries()) keys.select(db.raw(`${key.sql} as key_${index}`))
-  for (const key of sort) keys.orderByRaw(`${key.sql} ${key.isDescending ? 'desc' : 'asc'} nulls last`)
-  keys.orderByRaw(`${id.sql} ${idKey.isDescending ? 'desc' : 'asc'}`).limit(page.limit + 1)
+  const keys = sortedKeys(db, matching, idKey, sort).limit(page.limit + 1)
   if (page.cursor) {
     const cursor = decodeCursor(page.cursor, signature, sort)
     whereAfter(keys, [...sort, idKey], [...cursor.keys, cursor.id])
@@ -66,6 +63,30 @@ export async function readKeyPage(
       : null,
     ...(isFirst ? { total: await countRows(db, matching) } : {}),
   }
+}
+
+/** The ids of a whole list as one moment has it, for what goes through all of it. */
+export async function readAllKeys(
+  db: Knex,
+  matching: Knex.QueryBuilder,
+  id: { sql: string },
+  sort: readonly SortKey[],
+): Promise<string[]> {
+  const idKey: SortKey = { sql: id.sql, isNumber: true, isDescending: false }
+  const rows: { id: string }[] = await sortedKeys(db, matching, idKey, sort)
+  return rows.map((row) => row.id)
+}
+
+function sortedKeys(
+  db: Knex,
+  matching: Knex.QueryBuilder,
+  id: SortKey,
+  sort: readonly SortKey[],
+): Knex.QueryBuilder {
+  const keys = matching.clone().select(db.raw(`${id.sql}::text as id`))
+  for (const [index, key] of sort.entries()) keys.select(db.raw(`${key.sql} as key_${index}`))
+  for (const key of sort) keys.orderByRaw(`${key.sql} ${key.isDescending ? 'desc' : 'asc'} nulls last`)
+  return keys.orderByRaw(`${id.sql} ${id.isDescending ? 'desc' : 'asc'}`)
 }
 
 /** Enough to tell one sorting from another without telling what it is. */

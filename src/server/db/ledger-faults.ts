@@ -7,7 +7,7 @@ export interface LedgerCheck {
 }
 
 /**
- * Adds every movement up again and says where balances, levels or pieces differ from what follows from them. It reads
+ * Adds every movement up again and says where balances, levels, pieces or alerts differ from what follows from them. It reads
  * one snapshot, so it may run beside a working shop, and it shares nothing with the triggers it checks.
  */
 export async function ledgerFaults(db: Knex): Promise<LedgerCheck> {
@@ -104,6 +104,28 @@ const reversalsMirror = `
       reversed.from_location_id, reversed.from_condition)
   order by reversal.id`
 
+/** Position with on hand added up again; an alert is open where, and only where, it is at or below the reorder point. */
+const alertsAreWhatIsLow = `
+  with summed as (${summed}), on_hand as (
+    select item_id, crib_id, sum(quantity) as quantity
+    from summed join locations on locations.id = location_id
+    where locations.kind = 'bin' and condition <> 'worn' group by item_id, crib_id
+  ), kept as (
+    select point.item_id, point.crib_id, point.reorder_point,
+      coalesce(on_hand.quantity, 0) - coalesce(level.reserved, 0) + coalesce(level.coming, 0) as position
+    from reorder_points as point
+    join items on items.id = point.item_id and items.archived_at is null
+    left join on_hand using (item_id, crib_id)
+    left join stock_levels as level using (item_id, crib_id)
+  ), open_alerts as (select item_id, crib_id from alerts where closed_at is null)
+  select format('%s in crib %s: position %s, reorder point %s, %s', items.code, cribs.code,
+    coalesce(kept.position::text, 'not kept'), coalesce(kept.reorder_point::text, 'none'),
+    case when open_alerts.item_id is null then 'but no alert is open' else 'but an alert is open' end) as fault
+  from kept full join open_alerts using (item_id, crib_id)
+  join items on items.id = item_id join cribs on cribs.id = crib_id
+  where coalesce(kept.position <= kept.reorder_point, false) <> (open_alerts.item_id is not null)
+  order by items.code, cribs.code`
+
 const questions = [
   balancesAreSums,
   itemsSumToZero,
@@ -113,4 +135,5 @@ const questions = [
   piecesAreWhereLastMoved,
   piecesAreTheBalance,
   reversalsMirror,
+  alertsAreWhatIsLow,
 ]

@@ -10,6 +10,7 @@ interface ColumnRow {
 /** As node-postgres hands them over: bigint as text, since ids are opaque and amounts are turned in a row's mapper. */
 const typescriptTypes: Record<string, string> = {
   bool: 'boolean',
+  bytea: 'Buffer',
   float8: 'number',
   int4: 'number',
   int8: 'string',

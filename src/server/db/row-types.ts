@@ -1,5 +1,19 @@
 // Written by `npm run db:types` from the migrated database; a test compares the two.
 
+export interface AlertsRow {
+  id: string
+  item_id: string
+  crib_id: string
+  opened_at: Date
+  opened_event: string
+  opened_on_hand: number
+  opened_position: number
+  opened_reorder_point: number
+  closed_at: Date | null
+  closed_event: string | null
+  closed_position: number | null
+}
+
 export interface AuditEntriesRow {
   id: string
   actor_id: string | null
@@ -18,6 +32,14 @@ export interface BalancesRow {
   condition: string
   is_outside: boolean
   quantity: number
+}
+
+export interface CaughtMailsRow {
+  id: string
+  message_id: string | null
+  recipients: string[]
+  source: Buffer
+  caught_at: Date
 }
 
 export interface ColletsRow {
@@ -175,6 +197,13 @@ export interface ImportsRow {
   warning_count: number
 }
 
+export interface ItemMergesRow {
+  item_id: string
+  kept_item_id: string
+  merged_by: string
+  merged_at: Date
+}
+
 export interface ItemsRow {
   id: string
   kind: string
@@ -224,6 +253,21 @@ export interface MovementsRow {
   reverses_id: string | null
 }
 
+export interface OutboxRow {
+  id: string
+  kind: string
+  event_id: string
+  crib_id: string
+  user_id: string
+  recipient: string
+  message_id: string
+  attempts: number
+  next_attempt_at: Date
+  sent_at: Date | null
+  last_error: string | null
+  created_at: Date
+}
+
 export interface PiecesRow {
   id: string
   item_id: string
@@ -253,6 +297,18 @@ export interface ReorderPointsRow {
   supplier_id: string | null
   supplier_part_number: string | null
   lead_time_days: number | null
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
+export interface SavedViewsRow {
+  id: string
+  owner_id: string
+  kind: string
+  name: string
+  is_shared: boolean
+  query: string
   version: number
   created_at: Date
   updated_at: Date
@@ -304,6 +360,19 @@ export interface SignInAttemptsRow {
   attempted_at: Date
 }
 
+export interface StartingSpeedsRow {
+  id: string
+  iso_group: string
+  material: string
+  substrate: string
+  low_m_per_min: number
+  high_m_per_min: number
+  source_note: string
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
 export interface StockLevelsRow {
   item_id: string
   crib_id: string
@@ -353,8 +422,10 @@ export interface UsersRow {
 }
 
 export interface Tables {
+  alerts: AlertsRow
   audit_entries: AuditEntriesRow
   balances: BalancesRow
+  caught_mails: CaughtMailsRow
   collets: ColletsRow
   crib_members: CribMembersRow
   cribs: CribsRow
@@ -367,15 +438,19 @@ export interface Tables {
   import_mappings: ImportMappingsRow
   import_rows: ImportRowsRow
   imports: ImportsRow
+  item_merges: ItemMergesRow
   items: ItemsRow
   locations: LocationsRow
   movements: MovementsRow
+  outbox: OutboxRow
   pieces: PiecesRow
   reorder_points: ReorderPointsRow
+  saved_views: SavedViewsRow
   search_words: SearchWordsRow
   sessions: SessionsRow
   shop_settings: ShopSettingsRow
   sign_in_attempts: SignInAttemptsRow
+  starting_speeds: StartingSpeedsRow
   stock_levels: StockLevelsRow
   suppliers: SuppliersRow
   user_tokens: UserTokensRow

@@ -5,6 +5,7 @@ import { parseLength } from '@/core/units/parse-length'
 import { parseMoney } from '@/core/units/parse-money'
 import { quoted } from '@/core/units/parsed'
 import type { ImportFieldType } from '@/schemas/import-fields'
+import { withoutFormulaGuard } from './csv-line'
 import { conditionNamed, formNamed, partNamed, substrateNamed } from './trade-words'
 
 export interface CellContext {
@@ -32,7 +33,7 @@ const nothingWords = /^(?:[-–—.]+|n\/?a|none|null|nil|tbd|\?)$/i
 export function cellValue(type: ImportFieldType, cell: string, context: CellContext): CellValue {
   const text = cell.trim()
   if (text === '') return blank
-  if (type === 'text') return { kind: 'value', value: text.replace(/^'(?=\s*[=+\-@])/, '') }
+  if (type === 'text') return { kind: 'value', value: withoutFormulaGuard(text) }
   return nothingWords.test(text) ? blank : readers[type](text, context)
 }
 

@@ -1,7 +1,7 @@
-import Papa from 'papaparse'
 import type { RowProblem } from '@/schemas/import'
 import { type ImportKind, importField } from '@/schemas/import-fields'
 import type { ImportColumn } from '@/schemas/import-mapping'
+import { csvLine, isFormulaLike, utf8Mark } from './csv-line'
 
 const textTypes = new Set(['text', 'form', 'substrate', 'part', 'condition', 'unit'])
 const plainNumber = /^\s*[-+]?[\d.,]+\s*$/
@@ -12,7 +12,7 @@ const plainNumber = /^\s*[-+]?[\d.,]+\s*$/
  */
 export function safeCell(cell: string, isNumberColumn: boolean): string {
   if (isNumberColumn && plainNumber.test(cell)) return cell
-  return /^\s*[=+\-@＝＋－＠]|^[\t\r\n]/.test(cell) ? `'${cell}` : cell
+  return isFormulaLike(cell) ? `'${cell}` : cell
 }
 
 /** Writes rejected rows as they stood in the file, the reason in a last column. */
@@ -31,8 +31,7 @@ export class RejectFile {
   }
 
   headings(): string {
-    // The mark tells spreadsheets that this is UTF-8.
-    return `\ufeff${this.line([...this.columns.map(({ heading }) => safeCell(heading, false)), 'Reason'])}`
+    return `${utf8Mark}${this.line([...this.columns.map(({ heading }) => safeCell(heading, false)), 'Reason'])}`
   }
 
   /** An item of several rows comes out whole, so that it can be corrected and brought again. */
@@ -52,7 +51,7 @@ export class RejectFile {
   }
 
   private line(cells: string[]): string {
-    return `${Papa.unparse([cells], { delimiter: this.delimiter, newline: '\r\n' })}\r\n`
+    return csvLine(cells, this.delimiter)
   }
 }
 

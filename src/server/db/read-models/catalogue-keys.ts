@@ -3,12 +3,15 @@ import type { CatalogueKind } from '@/core/stock/kinds'
 import type { PageQuery } from '@/schemas/paging'
 import { enumToDb } from '../enum-case'
 import { type GeometryTable, geometryTables } from '../geometry-tables'
-import { type KeyPage, readKeyPage, type SortKey } from '../key-page'
+import { type KeyPage, readAllKeys, readKeyPage, type SortKey } from '../key-page'
 import { whereMatchesSearch } from '../search-predicate'
+import { findKeptOfCode } from '../stores/merge-store'
 import { isLowSql } from './stock-summaries'
 
 /** A list as it is asked for: paging, and filters by the name of their field. */
 export type CatalogueQuery = PageQuery & Record<string, unknown>
+/** The same without the paging. */
+export type CatalogueSelection = Pick<PageQuery, 'q' | 'sort'> & Record<string, unknown>
 
 /** Two lengths that differ by less are the same to a filter. */
 const filterToleranceMm = 1e-6
@@ -21,7 +24,46 @@ const itemTextColumns: Record<string, string> = {
 }
 
 /** The ids of one block of the catalogue's items of a kind. */
-export function readCatalogueKeys(db: Knex, kind: CatalogueKind, query: CatalogueQuery): Promise<KeyPage> {
+export async function readCatalogueKeys(
+  db: Knex,
+  kind: CatalogueKind,
+  query: CatalogueQuery,
+): Promise<KeyPage> {
+  const { matching, sort } = matchingItems(db, kind, query, await readKeptIds(db, kind, query))
+  return readKeyPage(db, matching, { sql: 'items.id' }, sort, query)
+}
+
+/** The ids of all items of a kind that a list would show, in its order. */
+export async function readAllCatalogueKeys(
+  db: Knex,
+  kind: CatalogueKind,
+  query: CatalogueSelection,
+): Promise<string[]> {
+  const { matching, sort } = matchingItems(db, kind, query, await readKeptIds(db, kind, query))
+  return readAllKeys(db, matching, { sql: 'items.id' }, sort)
+}
+
+/** The items (of the table `items`) that a list shows, to be counted; in a member, since a bare builder would be awaited. */
+export async function matchingCatalogue(
+  db: Knex,
+  kind: CatalogueKind,
+  query: Omit<CatalogueSelection, 'sort'>,
+): Promise<{ matching: Knex.QueryBuilder }> {
+  const { matching } = matchingItems(db, kind, query, await readKeptIds(db, kind, query))
+  return { matching }
+}
+
+/** Who searches by the code of an item that was merged means the one that took it in. */
+async function readKeptIds(db: Knex, kind: CatalogueKind, query: CatalogueSelection): Promise<string[]> {
+  return query.q ? findKeptOfCode(db, kind, query.q) : []
+}
+
+function matchingItems(
+  db: Knex,
+  kind: CatalogueKind,
+  query: CatalogueSelection,
+  keptIds: readonly string[],
+): { matching: Knex.QueryBuilder; sort: SortKey[] } {
   const table = geometryTables[kind]
   const sort = (query.sort?.length ? query.sort : [{ field: 'code', isDescending: false }]).map(
     (term): SortKey => ({ ...sortColumn(table, term.field), isDescending: term.isDescending }),
@@ -29,10 +71,21 @@ export function readCatalogueKeys(db: Knex, kind: CatalogueKind, query: Catalogu
   const matching = db('items').where('items.kind', kind)
   joinWhatIsAsked(db, matching, table, query, sort)
   whereArchived(matching, query.archived)
-  if (query.q) whereMatchesSearch(matching, query.q)
+  if (query.q) whereSearched(matching, query.q, keptIds)
   whereFields(matching, table, query)
   whereStockState(matching, query)
-  return readKeyPage(db, matching, { sql: 'items.id' }, sort, query)
+  wherePieces(matching, query)
+  return { matching, sort }
+}
+
+/** The ids stand in the query only where there are any, so that the usual search keeps its index. */
+function whereSearched(matching: Knex.QueryBuilder, text: string, keptIds: readonly string[]): void {
+  if (keptIds.length === 0) whereMatchesSearch(matching, text)
+  else {
+    matching.where((any) => {
+      any.where((found) => whereMatchesSearch(found, text)).orWhereIn('items.id', [...keptIds])
+    })
+  }
 }
 
 function sortColumn(table: GeometryTable, field: string): Omit<SortKey, 'isDescending'> {
@@ -55,7 +108,7 @@ function joinWhatIsAsked(
   db: Knex,
   matching: Knex.QueryBuilder,
   table: GeometryTable,
-  query: CatalogueQuery,
+  query: CatalogueSelection,
   sort: readonly SortKey[],
 ): void {
   const sorted = sort.map((key) => key.sql).join()
@@ -82,7 +135,7 @@ function whereArchived(matching: Knex.QueryBuilder, archived: unknown): void {
   if (archived === 'only') matching.whereNotNull('items.archived_at')
 }
 
-function whereFields(matching: Knex.QueryBuilder, table: GeometryTable, query: CatalogueQuery): void {
+function whereFields(matching: Knex.QueryBuilder, table: GeometryTable, query: CatalogueSelection): void {
   for (const [field, column] of Object.entries(itemTextColumns)) {
     const text = query[field]
     if (typeof text === 'string' && text) {
@@ -113,7 +166,7 @@ function whereField(
 }
 
 /** Any of the states asked for; an item that is out may be low as well. */
-function whereStockState(matching: Knex.QueryBuilder, query: CatalogueQuery): void {
+function whereStockState(matching: Knex.QueryBuilder, query: CatalogueSelection): void {
   const states = query.stockState
   if (!Array.isArray(states)) return
   const cribId = (query.cribId as string | undefined) ?? null
@@ -123,3 +176,36 @@ function whereStockState(matching: Knex.QueryBuilder, query: CatalogueQuery): vo
     if (states.includes('low')) any.orWhereRaw(isLowSql('items.id'), [cribId, cribId])
   })
 }
+
+/** Has pieces of these conditions in a bin of this place, where either is asked for. */
+function wherePieces(matching: Knex.QueryBuilder, query: CatalogueSelection): void {
+  const { sql, bindings } = piecesSql(query)
+  if (sql === '') return
+  matching.whereRaw(
+    `exists (select from balances as piece where piece.item_id = items.id and piece.quantity > 0 ${sql})`,
+    bindings,
+  )
+}
+
+/** What is asked of a balance called `piece`: its condition, and a place with all that stands in it. */
+export function piecesSql({ condition, locationId }: Record<string, unknown>): {
+  sql: string
+  bindings: readonly (string | string[])[]
+} {
+  const conditions = Array.isArray(condition) ? [condition.map(String)] : []
+  const places = typeof locationId === 'string' ? [locationId] : []
+  if (conditions.length + places.length === 0) return { sql: '', bindings: [] }
+  return {
+    sql: `and piece.location_id in (select id from locations where kind = 'bin')
+      ${conditions.length > 0 ? 'and piece.condition = any(?)' : ''}
+      ${places.length > 0 ? `and piece.location_id in (${locationTreeSql})` : ''}`,
+    bindings: [...conditions, ...places],
+  }
+}
+
+const locationTreeSql = `
+  with recursive below as (
+    select id from locations where id = ?
+    union all
+    select inner_place.id from locations as inner_place join below on inner_place.parent_id = below.id)
+  select id from below`

@@ -3,11 +3,13 @@ import type { StockSummary } from '@/schemas/item'
 
 /**
  * Whether an item is low in any crib, or in the one asked for (bind it twice; null for any): its position, available
- * and coming, at or below the reorder point. An item that never came to a crib has a position of nothing there.
+ * and coming, at or below the reorder point. An item that never came to a crib has a position of nothing there; an
+ * archived one is never low.
  */
 export function isLowSql(itemId: string): string {
   return `exists (
     select from reorder_points as point
+    join items as kept on kept.id = point.item_id and kept.archived_at is null
     left join stock_levels as here on here.item_id = point.item_id and here.crib_id = point.crib_id
     where point.item_id = ${itemId} and (?::bigint is null or point.crib_id = ?)
       and coalesce(here.on_hand - here.reserved + here.coming, 0) <= point.reorder_point)`

@@ -14,6 +14,13 @@ export async function createCrib(trx: Knex, crib: NewCrib): Promise<string> {
   return row.id
 }
 
+export async function findCrib(
+  db: Knex,
+  cribId: string,
+): Promise<{ id: string; code: string; name: string } | null> {
+  return (await db('cribs').where('id', cribId).first('id', 'code', 'name')) ?? null
+}
+
 /** The root of a crib among the locations. */
 export async function getCribLocationId(db: Knex, cribId: string): Promise<string> {
   const row = await db('locations').where({ crib_id: cribId, kind: 'crib' }).first('id')

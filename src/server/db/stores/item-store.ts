@@ -29,6 +29,16 @@ export async function lockItem(trx: Knex, kind: CatalogueKind, id: string): Prom
   return row !== undefined
 }
 
+/** Holds many items as `lockItem` holds one, always in the same order, so that two such calls never wait for each other. */
+export async function lockItems(trx: Knex, kind: CatalogueKind, ids: readonly string[]): Promise<void> {
+  await trx('items')
+    .where('kind', kind)
+    .whereRaw('id = any(?::bigint[])', [[...ids]])
+    .orderBy('id')
+    .forNoKeyUpdate()
+    .select('id')
+}
+
 export async function archiveItem(trx: Knex, id: string): Promise<void> {
   await trx('items').where('id', id).whereNull('archived_at').update({ archived_at: trx.fn.now() })
 }

@@ -42,16 +42,33 @@ export interface NewLocation {
 }
 
 export async function createLocation(trx: Knex, location: NewLocation): Promise<string> {
-  const [row] = await trx('locations')
-    .insert({
-      kind: enumToDb(location.kind),
-      code: location.code,
-      name: location.name,
-      crib_id: location.cribId,
-      parent_id: location.parentId,
-    })
-    .returning('id')
+  const [row] = await trx('locations').insert(toColumns(location)).returning('id')
   return row.id
+}
+
+/** Many at once, in one statement. */
+export async function createLocations(trx: Knex, locations: readonly NewLocation[]): Promise<void> {
+  await trx('locations').insert(locations.map(toColumns))
+}
+
+/** Which of these codes a crib has already, in capitals or not, archived or in use. */
+export async function listTakenCodes(db: Knex, cribId: string, codes: readonly string[]): Promise<string[]> {
+  const rows = await db('locations')
+    .where('crib_id', cribId)
+    .whereRaw('lower(code) = any(?)', [codes.map((code) => code.toLowerCase())])
+    .orderBy('id')
+    .select('code')
+  return rows.map((row) => row.code)
+}
+
+function toColumns(location: NewLocation) {
+  return {
+    kind: enumToDb(location.kind),
+    code: location.code,
+    name: location.name,
+    crib_id: location.cribId,
+    parent_id: location.parentId,
+  }
 }
 
 /** What is absent is left alone. */

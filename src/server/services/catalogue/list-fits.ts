@@ -1,7 +1,7 @@
 import type { z } from 'zod'
 import { colletHolds } from '@/core/holding/holds'
 import { AppError } from '@/lib/app-error'
-import type { FitsItem, fitsListQuerySchema } from '@/schemas/fits'
+import type { FitsItem, FitsQuery, fitsListQuerySchema } from '@/schemas/fits'
 import { db } from '../../db/connection'
 import { type Fitting, readFitsKeys } from '../../db/read-models/fits-keys'
 import { type FitsRow, readFitsRows } from '../../db/read-models/fits-rows'
@@ -29,6 +29,25 @@ export async function listFits(
   return { rows: rows.map((row) => ({ ...row, placeInRange: placeInRange(asked, row) })), ...page }
 }
 
+/** One block of what fits a shank, a fixed bore or a series of collets that is in nobody's catalogue yet. */
+export async function listFitsOf(query: FitsQuery): Promise<FitsList> {
+  const { ids, ...page } = await readFitsKeys(db(), askedFitting(query), query)
+  const rows = await readFitsRows(db(), ids)
+  const shankDiameterMm = query.shankDiameterMm ?? null
+  return {
+    rows: rows.map((row) => ({ ...row, placeInRange: placeInRange({ ...noItem, shankDiameterMm }, row) })),
+    ...page,
+  }
+}
+
+const noItem = { kind: null, shankDiameterMm: null, minimumMm: null, maximumMm: null, series: null }
+
+function askedFitting({ shankDiameterMm, boreDiameterMm, series }: FitsQuery): Fitting {
+  if (shankDiameterMm !== undefined) return { shankMm: shankDiameterMm }
+  if (boreDiameterMm !== undefined) return { bore: { kind: 'fixed', diameterMm: boreDiameterMm } }
+  return { bore: { kind: 'collet', series: series ?? '' } }
+}
+
 /** Null for what has no geometry. */
 function fittingOf(item: FitsRow): Fitting | null {
   if (item.shankDiameterMm !== null) return { shankMm: item.shankDiameterMm }
@@ -39,7 +58,11 @@ function fittingOf(item: FitsRow): Fitting | null {
   return item.series === null ? null : { bore: { kind: 'collet', series: item.series } }
 }
 
-function placeInRange(one: FitsRow, other: FitsRow): number | null {
+type Ranged = Pick<FitsRow, 'shankDiameterMm' | 'minimumMm' | 'maximumMm' | 'series'> & {
+  kind: FitsRow['kind'] | null
+}
+
+function placeInRange(one: Ranged, other: Ranged): number | null {
   const shankMm = one.shankDiameterMm ?? other.shankDiameterMm
   const collet = [one, other].find((item) => item.kind === 'collet')
   if (shankMm === null || collet?.minimumMm == null || collet.maximumMm === null) return null

@@ -1,20 +1,17 @@
-import { isDeepStrictEqual } from 'node:util'
 import type { CatalogueKind } from '@/core/stock/kinds'
 import { AppError } from '@/lib/app-error'
-import { type CatalogueTypes, geometryProblemsOf } from '@/schemas/catalogue'
+import type { CatalogueTypes } from '@/schemas/catalogue'
 import type { Actor } from '../../auth/actor'
 import { type Database, db } from '../../db/connection'
 import { findLastChangerName } from '../../db/read-models/last-change'
 import { createAuditEntry } from '../../db/stores/audit-store'
-import { updateGeometry } from '../../db/stores/geometry-store'
-import { lockItem, restoreItem, updateItem as writeItem } from '../../db/stores/item-store'
+import { lockItem } from '../../db/stores/item-store'
 import { inTransaction } from '../../db/transaction'
 import { explainingRefusals } from './explain-refusal'
 import { readItem } from './get-item'
+import { changedFields, impossibleFields, writeChange } from './item-change'
 import { kindWords } from './kind-words'
 import { auditedItem, visibleItem } from './visible-item'
-
-type Fields = Record<string, unknown>
 
 /**
  * Changes an item: absent leaves alone, null clears. The rules of geometry are asked of the row as it will be. A change
@@ -32,8 +29,12 @@ export async function updateItem<Kind extends CatalogueKind>(
       const before = await readItem(trx, kind, id)
       await refuseStale(trx, actor, kind, before, request.version)
       const change = changedFields(before, request)
-      refuseImpossible(kind, { ...before, ...change })
-      const after = await applyChange(trx, kind, id, change)
+      const errors = impossibleFields(kind, { ...before, ...change })
+      if (errors.length > 0) {
+        throw new AppError('impossible', 'Some fields cannot be taken as they are.', { errors })
+      }
+      await writeChange(trx, kind, id, change)
+      const after = await readItem(trx, kind, id)
       if (after.version !== before.version) {
         await createAuditEntry(trx, {
           actorId: actor.id,
@@ -64,34 +65,4 @@ async function refuseStale<Kind extends CatalogueKind>(
       changedBy: await findLastChangerName(trx, before.id),
     },
   })
-}
-
-/** Of what was sent, what differs from the row: sending a value again is no change. */
-function changedFields(before: Fields, request: Fields): Fields {
-  const { version: _, archivedAt, ...fields } = request
-  const changed = Object.entries(fields).filter(
-    ([field, value]) => value !== undefined && !isDeepStrictEqual(value, before[field]),
-  )
-  const isRestored = archivedAt === null && before.archivedAt !== null
-  return { ...Object.fromEntries(changed), ...(isRestored ? { archivedAt } : {}) }
-}
-
-function refuseImpossible<Kind extends CatalogueKind>(kind: Kind, row: Fields): void {
-  const problems = geometryProblemsOf[kind](row as CatalogueTypes[Kind]['create'])
-  if (problems.length === 0) return
-  throw new AppError('impossible', 'Some fields cannot be taken as they are.', {
-    errors: problems.map(({ path, message }) => ({ path: path.join('.'), message })),
-  })
-}
-
-async function applyChange<Kind extends CatalogueKind>(
-  trx: Database,
-  kind: Kind,
-  id: string,
-  change: Fields,
-): Promise<CatalogueTypes[Kind]['row']> {
-  if (change.archivedAt === null) await restoreItem(trx, id)
-  await writeItem(trx, id, change)
-  await updateGeometry(trx, kind, id, change)
-  return readItem(trx, kind, id)
 }

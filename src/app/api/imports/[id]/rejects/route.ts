@@ -1,4 +1,5 @@
 import { idParamsSchema } from '@/schemas/fields'
+import { csvResponse } from '@/server/http/csv-response'
 import { route } from '@/server/http/route'
 import { downloadRejects } from '@/server/services/imports/download-rejects'
 
@@ -7,15 +8,5 @@ export const GET = route({
   access: 'keepCrib',
   params: idParamsSchema,
   answer: null,
-  handle: async ({ params }) => {
-    const { fileName, body } = await downloadRejects(params.id)
-    return new Response(body, {
-      headers: {
-        'content-type': 'text/csv; charset=utf-8',
-        'content-disposition': `attachment; filename="${fileName}"`,
-        'cache-control': 'no-store',
-        'x-content-type-options': 'nosniff',
-      },
-    })
-  },
+  handle: async ({ params }) => csvResponse(await downloadRejects(params.id)),
 })

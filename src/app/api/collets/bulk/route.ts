@@ -1,0 +1,11 @@
+import { bulkRequestSchemas, bulkResponseSchemas } from '@/schemas/catalogue-bulk'
+import { route } from '@/server/http/route'
+import { updateItems } from '@/server/services/catalogue/update-items'
+
+/** Changes many rows at once: all of them or none. */
+export const POST = route({
+  access: 'keepCrib',
+  body: bulkRequestSchemas.collet,
+  answer: bulkResponseSchemas.collet,
+  handle: ({ actor, body }) => updateItems(actor, 'collet', body.changes),
+})

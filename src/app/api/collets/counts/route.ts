@@ -1,0 +1,11 @@
+import { catalogueCountsResponseSchema, countsQuerySchemas } from '@/schemas/catalogue-counts'
+import { route } from '@/server/http/route'
+import { countItems } from '@/server/services/catalogue/count-items'
+
+/** How many rows each choice of each filter would leave, with the other filters as they are. */
+export const GET = route({
+  access: 'see',
+  query: countsQuerySchemas.collet,
+  answer: catalogueCountsResponseSchema,
+  handle: ({ actor, query }) => countItems(actor, 'collet', query),
+})

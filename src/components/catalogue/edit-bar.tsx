@@ -1,0 +1,89 @@
+'use client'
+
+import { ListChecks, Undo2 } from 'lucide-react'
+import { type RefObject, useState } from 'react'
+import type { PartsListHandle } from '@/components/grid/parts-list-grid'
+import { Button } from '@/components/ui/button'
+import { Notice } from '@/components/ui/notice'
+import { BulkChangeDialog } from './bulk-change-dialog'
+import type { CatalogueDefinition } from './catalogue-definition'
+import type { CatalogueRow } from './catalogue-row'
+import type { EditRefusal } from './edit-refusal'
+import type { GridEditing } from './use-grid-editing'
+
+export interface EditBarProps<Row extends CatalogueRow> {
+  definition: CatalogueDefinition<Row>
+  editing: GridEditing<Row>
+  grid: RefObject<PartsListHandle | null>
+}
+
+/** Over a list that is being edited: how, what can be taken back, what was not taken, and the rows selected. */
+export function EditBar<Row extends CatalogueRow>({ definition, editing, grid }: EditBarProps<Row>) {
+  const [isChanging, setIsChanging] = useState(false)
+  const { steps, selected, refusals } = editing
+  const last = steps.at(-1)
+  return (
+    <div className="flex flex-col gap-2 px-4 pb-2 lg:px-6">
+      <div className="flex flex-wrap items-center gap-x-3 gap-y-2">
+        <p className="text-ink-soft mr-auto text-sm">
+          Editing: a double click, F2 or typing changes a cell; Enter keeps it, Esc leaves it. Space selects a
+          row. {editing.isBusy ? <span role="status">Saving …</span> : null}
+        </p>
+        <Button size="compact" disabled={!last || editing.isBusy} onClick={editing.undo}>
+          <Undo2 aria-hidden="true" className="size-4.5" />
+          Undo{last ? `: ${last.name}` : ''}
+        </Button>
+        <Button size="compact" disabled={selected.length === 0} onClick={() => setIsChanging(true)}>
+          <ListChecks aria-hidden="true" className="size-4.5" />
+          {selected.length === 0 ? 'Change the rows selected' : `Change ${selected.length} selected`}
+        </Button>
+      </div>
+      {refusals.map((refusal) => (
+        <RefusalNotice key={`${refusal.row.id} ${refusal.columnId}`} {...{ refusal, editing, grid }} />
+      ))}
+      <BulkChangeDialog
+        definition={definition}
+        editing={editing}
+        isOpen={isChanging}
+        onClose={() => setIsChanging(false)}
+      />
+    </div>
+  )
+}
+
+function RefusalNotice<Row extends CatalogueRow>({
+  refusal,
+  editing,
+  grid,
+}: {
+  refusal: EditRefusal<Row>
+  editing: GridEditing<Row>
+  grid: RefObject<PartsListHandle | null>
+}) {
+  const { row, columnId, text, message, isStale } = refusal
+  const label = editing.fields.find(({ path }) => path === columnId)?.label ?? columnId
+  return (
+    <Notice kind="collision" isAnnounced>
+      <p>
+        <strong>
+          {row.code}, {label}
+        </strong>{' '}
+        was not changed to “{text}”. {message}
+      </p>
+      <div className="mt-1 flex flex-wrap gap-2">
+        {isStale ? (
+          <Button size="compact" onClick={() => editing.handleEdit(row, columnId, text)}>
+            Put mine over it
+          </Button>
+        ) : (
+          <Button size="compact" onClick={() => grid.current?.editCell(row.id, columnId)}>
+            Correct it
+          </Button>
+        )}
+        <Button size="compact" variant="quiet" onClick={() => editing.takeBack(refusal)}>
+          Leave it as it was
+        </Button>
+      </div>
+    </Notice>
+  )
+}

@@ -1,0 +1,34 @@
+import { describe, expect, it } from 'vitest'
+import { isBlock, pastedBlock, pastedFile } from './pasted-block'
+
+describe('a pasted block', () => {
+  it('is counted as a spreadsheet copies it: tabs between cells, CRLF behind rows', () => {
+    const text = 'Tool #\tDia\r\nEM-1\t6\r\nEM-2\t8\r\n'
+    expect(pastedBlock(text, true)).toEqual({ rows: 2, columns: 2, fault: null })
+    expect(pastedBlock(text, false)).toEqual({ rows: 3, columns: 2, fault: null })
+  })
+
+  it('of 5,000 columns is refused in a plain sentence that says how many there may be', () => {
+    const text = `${Array.from({ length: 5000 }, (_, index) => `c${index}`).join('\t')}\n1\t2\n`
+    expect(pastedBlock(text, true).fault).toBe(
+      'This block has 5,000 columns; at most 200 can be taken. Copy only the columns of the list.',
+    )
+  })
+
+  it('is refused where it is empty, or a line of headings alone', () => {
+    expect(pastedBlock('  \n', true).fault).toMatch(/nothing here/)
+    expect(pastedBlock('Code\tDia\n', true).fault).toMatch(/only a line of headings/)
+    expect(pastedBlock('EM-1\t6\n', false).fault).toBeNull()
+  })
+
+  it('without headings gets numbered ones, so that its first row is no heading', async () => {
+    expect(await pastedFile('EM-1\t6\n', false).text()).toBe('Column 1\tColumn 2\nEM-1\t6\n')
+    expect(await pastedFile('Code\tDia\nEM-1\t6\n', true).text()).toBe('Code\tDia\nEM-1\t6\n')
+  })
+
+  it('is told from a word', () => {
+    expect(isBlock('EM-1\t6')).toBe(true)
+    expect(isBlock('EM-1')).toBe(false)
+    expect(isBlock('two words\n')).toBe(false)
+  })
+})

@@ -1,0 +1,80 @@
+'use client'
+
+import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { useState } from 'react'
+import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
+import { useDuplicates } from '@/hooks/use-duplicates'
+import { PageHeading } from '../layout/page-heading'
+import { Button } from '../ui/button'
+import { SelectField } from '../ui/select-field'
+import { StateSentence } from '../ui/state-sentence'
+import { DuplicateGroup } from './duplicate-group'
+import { MergeDialog, type MergePair } from './merge-dialog'
+
+const kindNames: Readonly<Record<CatalogueKind, string>> = {
+  cutter: 'Cutters',
+  holder: 'Holders',
+  collet: 'Collets',
+  extension: 'Extensions',
+}
+
+/** Items that measure the same under different codes, to be made one. */
+export function DuplicatesPage() {
+  const params = useSearchParams()
+  const pathname = usePathname()
+  const router = useRouter()
+  const kind = catalogueKinds.find((candidate) => candidate === params.get('kind')) ?? 'cutter'
+  const { data, error, refresh } = useDuplicates(kind)
+  const [pair, setPair] = useState<MergePair | null>(null)
+  const many = kindNames[kind].toLowerCase()
+  return (
+    <>
+      <PageHeading
+        title="Duplicates"
+        note="The same in every dimension, under different codes. Whether they are the same to the shop, maker and coating included, only a person can say."
+      />
+      <div className="flex flex-col gap-5 px-4 pb-10 lg:px-6">
+        <SelectField
+          label="Kind"
+          className="max-w-64"
+          value={kind}
+          onChange={(event) => router.replace(`${pathname}?kind=${event.target.value}`)}
+          options={catalogueKinds.map((value) => ({ value, label: kindNames[value] }))}
+        />
+        {error ? (
+          <StateSentence sentence={`The ${many} could not be compared. ${error.message}`}>
+            <Button onClick={() => void refresh()}>Try again</Button>
+          </StateSentence>
+        ) : null}
+        {!data && !error ? <StateSentence sentence={`Comparing the ${many} …`} /> : null}
+        {data && data.groups.length === 0 ? (
+          <StateSentence sentence={`No two ${many} in use measure the same.`} />
+        ) : null}
+        {data && data.groups.length > 0 ? (
+          <p role="status">
+            {data.total} {data.total === 1 ? 'group' : 'groups'} of {many} measure the same.
+            {data.total > data.groups.length ? ` The first ${data.groups.length} are shown.` : ''}
+          </p>
+        ) : null}
+        {data?.groups.map((group) => (
+          <DuplicateGroup
+            key={group.map(({ id }) => id).join()}
+            kind={kind}
+            items={group}
+            onMerge={setPair}
+          />
+        ))}
+      </div>
+      {pair ? (
+        <MergeDialog
+          pair={pair}
+          onClose={() => setPair(null)}
+          onMerged={() => {
+            setPair(null)
+            void refresh()
+          }}
+        />
+      ) : null}
+    </>
+  )
+}

@@ -1,0 +1,93 @@
+'use client'
+
+import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { PageHeading } from '../layout/page-heading'
+import { useCan, useShop } from '../layout/shop-context'
+import { ButtonLink } from '../ui/button'
+import { classNames } from '../ui/class-names'
+import { type FitsQuestion, fitsQuestions, questionOf } from './fits-question'
+import { HoldingResults } from './holding-results'
+import { PocketResults } from './pocket-results'
+import { QuestionForm } from './question-form'
+
+/** From a feature to its cutters, from a shank to what holds it, from a chuck or bore to what goes in. */
+export function FitsPage() {
+  const params = useSearchParams()
+  const pathname = usePathname()
+  const router = useRouter()
+  const { unit } = useShop()
+  const mayKeep = useCan('keepCrib')
+  const question = questionOf(params)
+  const asked = new URLSearchParams(
+    question.fields.flatMap(({ name }) => {
+      const value = params.get(name)
+      return value ? [[name, value]] : []
+    }),
+  )
+  if (question.id === 'pocket' && params.get('inStock') === 'yes') asked.set('inStock', 'yes')
+  const isAsked = question.fields.every(({ name, isOptional }) => isOptional || asked.has(name))
+
+  function ask(query: URLSearchParams) {
+    router.replace(`${pathname}?${query}`, { scroll: false })
+  }
+
+  return (
+    <>
+      <PageHeading title="What fits" note="Everything in the catalogue that could, with what is in stock.">
+        {mayKeep ? (
+          <ButtonLink href="/duplicates" size="compact" variant="quiet">
+            Items that measure the same
+          </ButtonLink>
+        ) : null}
+      </PageHeading>
+      <div className="flex flex-col gap-5 px-4 pb-10 lg:px-6">
+        <QuestionChoice chosen={question} onChoose={(id) => ask(new URLSearchParams({ from: id }))} />
+        <QuestionForm
+          key={`${question.id} ${unit} ${asked}`}
+          question={question}
+          asked={asked}
+          onAsk={(query) => ask(query)}
+        />
+        {isAsked && question.id === 'pocket' ? <PocketResults query={asked.toString()} /> : null}
+        {isAsked && question.id !== 'pocket' ? (
+          <HoldingResults question={question} query={asked.toString()} />
+        ) : null}
+      </div>
+    </>
+  )
+}
+
+function QuestionChoice({
+  chosen,
+  onChoose,
+}: {
+  chosen: FitsQuestion
+  onChoose: (id: FitsQuestion['id']) => void
+}) {
+  return (
+    <fieldset className="flex flex-wrap gap-2">
+      <legend className="mb-1 text-[0.9375rem] font-semibold">What you have</legend>
+      {fitsQuestions.map(({ id, label }) => (
+        <label
+          key={id}
+          className={classNames(
+            'has-focus-visible:outline-accent flex min-h-11 cursor-pointer items-center gap-2 rounded-[3px] border px-3 has-focus-visible:outline-3 has-focus-visible:outline-offset-2',
+            id === chosen.id
+              ? 'border-accent bg-accent-wash font-semibold'
+              : 'border-ink-soft/60 bg-sheet hover:bg-accent-wash',
+          )}
+        >
+          <input
+            type="radio"
+            name="from"
+            value={id}
+            checked={id === chosen.id}
+            onChange={() => onChoose(id)}
+            className="accent-accent size-4"
+          />
+          {label}
+        </label>
+      ))}
+    </fieldset>
+  )
+}

@@ -1,0 +1,23 @@
+import type { Knex } from 'knex'
+import type { FirstDay } from '@/schemas/first-day'
+
+export type FirstDayCounts = Omit<FirstDay, 'isDone'> & { areSettingsSeen: boolean }
+
+/** How much there is of each thing a shop begins with. */
+export async function readFirstDayCounts(db: Knex): Promise<FirstDayCounts> {
+  const ofKind = (kind: string) =>
+    `(select count(*)::int from items where kind = '${kind}' and archived_at is null)`
+  const { rows } = await db.raw<{ rows: FirstDayCounts[] }>(
+    `select (select count(*)::int from cribs) as cribs,
+      (select count(*)::int from locations where kind = 'bin' and archived_at is null) as bins,
+      ${ofKind('cutter')} as cutters, ${ofKind('holder')} as holders,
+      ${ofKind('collet')} as collets, ${ofKind('extension')} as extensions,
+      (select coalesce(sum(balances.quantity), 0)::int from balances
+        join locations on locations.id = balances.location_id and locations.kind = 'bin') as "piecesInBins",
+      (select count(*)::int from users where is_active) as people,
+      exists(select from audit_entries where action = 'settings-changed') as "areSettingsSeen"`,
+  )
+  const [counts] = rows
+  if (!counts) throw new Error('The counts of the first day gave no row.')
+  return counts
+}

@@ -1,0 +1,51 @@
+import type { Page } from '@playwright/test'
+import { uniqueCode } from '../support/api'
+import { expect, test } from '../support/browser'
+import { signInAsNewPerson } from '../support/new-person'
+
+/** What the browser does at Ctrl+V with a block of a spreadsheet on the clipboard. */
+function paste(page: Page, text: string): Promise<void> {
+  return page.evaluate((pasted) => {
+    const clipboardData = new DataTransfer()
+    clipboardData.setData('text/plain', pasted)
+    document.body.dispatchEvent(new ClipboardEvent('paste', { clipboardData, bubbles: true }))
+  }, text)
+}
+
+test.beforeEach(async ({ page }) => {
+  await signInAsNewPerson(page, 'cribManager')
+  await page.goto('/cutters')
+  await expect(page.locator('.ag-grid-scrolling-container .ag-row').first()).toBeVisible()
+})
+
+test('a block pasted over the list goes through the checks of an import', async ({ page }) => {
+  const code = uniqueCode('PST')
+  await paste(page, `Tool #\tType\tDia\tLOC\tOAL\tShank Dia\r\n${code}\tSquare\t6\t12\t57\t6\r\n`)
+  const dialog = page.getByRole('dialog')
+  await expect(dialog.getByText('1 row, 6 columns.')).toBeVisible()
+  await dialog.getByRole('button', { name: 'Check these rows' }).click()
+  await expect(page).toHaveURL(/\/imports\/\d+/)
+  await expect(page.getByText('pasted-rows.tsv').first()).toBeVisible()
+  await expect(page.getByRole('button', { name: /^Commit/ })).toBeEnabled()
+  const list = await (await page.request.get(`/api/cutters?code=${code}`)).json()
+  expect(list.total).toBe(0)
+})
+
+test('a block of 5,000 columns is refused in a sentence, and stays to be mended', async ({ page }) => {
+  const wide = Array.from({ length: 5000 }, (_, index) => `c${index}`).join('\t')
+  await page.getByRole('button', { name: 'Paste rows' }).click()
+  const dialog = page.getByRole('dialog')
+  const rows = dialog.getByRole('textbox', { name: 'Rows' })
+  await rows.fill(`${wide}\n1\t2`)
+  await dialog.getByRole('button', { name: 'Check these rows' }).click()
+  await expect(rows).toHaveAccessibleDescription(/5,000 columns; at most 200/)
+  await expect(rows).toHaveValue(/^c0\tc1/)
+  const sent = await page.request.post('/api/imports', {
+    multipart: {
+      kind: 'cutters',
+      file: { name: 'wide.tsv', mimeType: 'text/plain', buffer: Buffer.from(`${wide}\n1\t2\n`) },
+    },
+  })
+  expect(sent.status()).toBe(422)
+  expect((await sent.json()).detail).toBe('This file has more than 200 columns.')
+})
