@@ -2,8 +2,7 @@ import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { expect, test } from '../support/browser'
-import { signInAsNewPerson } from '../support/new-person'
+import { expect, signIn, test } from '../support/browser'
 
 const rows = (page: Page) => page.locator('.ag-grid-scrolling-container .ag-row')
 const cells = (page: Page, column: string) => rows(page).locator(`[col-id="${column}"]`)
@@ -33,7 +32,7 @@ async function type(page: Page, column: string, row: number, text: string) {
 }
 
 test.beforeEach(async ({ page }) => {
-  await signInAsNewPerson(page, 'cribManager')
+  await signIn(page, 'cribManager')
 })
 
 test('a cell takes a size as people write it, and Ctrl+Z and the button take edits back', async ({

@@ -1,7 +1,6 @@
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
-import { expect, test } from '../support/browser'
-import { signInAsNewPerson } from '../support/new-person'
+import { expect, signIn, test } from '../support/browser'
 
 /** What the browser does at Ctrl+V with a block of a spreadsheet on the clipboard. */
 function paste(page: Page, text: string): Promise<void> {
@@ -13,7 +12,7 @@ function paste(page: Page, text: string): Promise<void> {
 }
 
 test.beforeEach(async ({ page }) => {
-  await signInAsNewPerson(page, 'cribManager')
+  await signIn(page, 'cribManager')
   await page.goto('/cutters')
   await expect(page.locator('.ag-grid-scrolling-container .ag-row').first()).toBeVisible()
 })
