@@ -1,6 +1,6 @@
 'use client'
 
-import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { usePathname, useSearchParams } from 'next/navigation'
 import { PageHeading } from '../layout/page-heading'
 import { useCan, useShop } from '../layout/shop-context'
 import { ButtonLink } from '../ui/button'
@@ -14,7 +14,6 @@ import { QuestionForm } from './question-form'
 export function FitsPage() {
   const params = useSearchParams()
   const pathname = usePathname()
-  const router = useRouter()
   const { unit } = useShop()
   const mayKeep = useCan('keepCrib')
   const question = questionOf(params)
@@ -28,7 +27,8 @@ export function FitsPage() {
   const isAsked = question.fields.every(({ name, isOptional }) => isOptional || asked.has(name))
 
   function ask(query: URLSearchParams) {
-    router.replace(`${pathname}?${query}`, { scroll: false })
+    // Nothing of the page comes from the server, so the address changes at once.
+    window.history.replaceState(null, '', `${pathname}?${query}`)
   }
 
   return (
