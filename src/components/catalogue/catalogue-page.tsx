@@ -26,6 +26,7 @@ import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
 import { MakerList } from './maker-list'
 import { PasteRows } from './paste-rows'
+import { PrintList } from './print-list'
 import { SavedViews } from './saved-views-dialog'
 import { SearchBox } from './search-box'
 import { SortSelect } from './sort-select'
@@ -60,7 +61,7 @@ export function CataloguePage<Row extends CatalogueRow>({
     onAdd: () => setIsAdding(true),
   }
   return (
-    <div className="flex flex-1 flex-col md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
+    <div className="flex flex-1 flex-col print:block print:h-auto! md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
       {isWide !== null && !isAdding ? <MakerList kind={definition.kind} /> : null}
       {isWide === null ? <StateSentence sentence={`Loading the ${definition.many} …`} /> : null}
       {isWide === true ? <WideCatalogue {...shared} /> : null}
@@ -100,7 +101,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
   const editing = useGridEditing(definition, grid, isEditing)
   return (
     <>
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6 print:hidden">
         <h1 className="text-2xl">{definition.title}</h1>
         <p className="text-ink-soft mr-auto" role="status">
           {total === null
@@ -125,6 +126,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
             onChange={(ids) => onViewChange({ columns: ids })}
           />
           <SavedViews {...{ definition, columns, view, onViewChange }} />
+          <PrintList {...{ definition, columns, shownIds, view }} />
           {mayKeep ? (
             <>
               <PasteRows kind={importKindOf[definition.kind]} many={definition.many} />
@@ -133,7 +135,7 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           ) : null}
         </CatalogueActions>
       </div>
-      <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
+      <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6 print:hidden">
         <FilterFields
           shape="row"
           filters={definition.filters}

@@ -32,6 +32,7 @@ describe('the view in the address', () => {
 /** A value that a filter may send. */
 function someValue(filter: CatalogueFilter): string {
   if (filter.kind === 'choice') return filter.options[0]?.value ?? ''
+  if (filter.kind === 'counted') return '17'
   return filter.kind === 'lengthRange' ? '3.175' : 'text'
 }
 

@@ -23,7 +23,7 @@ export function EditBar<Row extends CatalogueRow>({ definition, editing, grid }:
   const { steps, selected, refusals } = editing
   const last = steps.at(-1)
   return (
-    <div className="flex flex-col gap-2 px-4 pb-2 lg:px-6">
+    <div className="flex flex-col gap-2 px-4 pb-2 lg:px-6 print:hidden">
       <div className="flex flex-wrap items-center gap-x-3 gap-y-2">
         <p className="text-ink-soft mr-auto text-sm">
           Editing: a double click, F2 or typing changes a cell; Enter keeps it, Esc leaves it. Space selects a

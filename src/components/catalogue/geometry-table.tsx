@@ -3,6 +3,7 @@
 import { useShop } from '@/components/layout/shop-context'
 import type { HolderSegmentPart, OutlineSegment } from '@/core/tooling'
 import { formatLength } from '@/lib/format-length'
+import { symbolTitle } from '@/lib/symbol-names'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import { itemFacts } from './item-facts'
@@ -31,7 +32,12 @@ export function GeometryTable<Row extends CatalogueRow>({
         <tbody>
           {facts.map((fact) => (
             <tr key={fact.path} className="border-hairline border-b">
-              <td className={`${cellClass} text-ink-soft w-14 text-sm`}>{fact.symbol}</td>
+              <td
+                className={`${cellClass} text-ink-soft w-14 text-sm`}
+                title={fact.symbol ? symbolTitle(fact.symbol) : undefined}
+              >
+                {fact.symbol}
+              </td>
               <th scope="row" className={`${cellClass} text-left font-normal`}>
                 {fact.label}
               </th>

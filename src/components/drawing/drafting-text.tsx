@@ -1,3 +1,4 @@
+import { symbolTitle } from '@/lib/symbol-names'
 import { draftingFontSize } from './drafting-style'
 
 export interface DraftingTextProps {
@@ -12,6 +13,7 @@ export interface DraftingTextProps {
 
 /** Words on the sheet, with a rim of the sheet's own colour so that a line crossing them never hides a figure. */
 export function DraftingText({ x, y, text, symbol, anchor = 'middle', isStrong }: DraftingTextProps) {
+  const title = symbol ? symbolTitle(symbol) : undefined
   return (
     <text
       x={x}
@@ -25,6 +27,7 @@ export function DraftingText({ x, y, text, symbol, anchor = 'middle', isStrong }
       strokeLinejoin="round"
       paintOrder="stroke"
     >
+      {title ? <title>{title}</title> : null}
       {symbol ? (
         <tspan fill="var(--ink-soft)" fontWeight={400}>
           {`${symbol} `}

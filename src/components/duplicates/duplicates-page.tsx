@@ -1,6 +1,6 @@
 'use client'
 
-import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { usePathname, useSearchParams } from 'next/navigation'
 import { useState } from 'react'
 import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
 import { useDuplicates } from '@/hooks/use-duplicates'
@@ -22,7 +22,6 @@ const kindNames: Readonly<Record<CatalogueKind, string>> = {
 export function DuplicatesPage() {
   const params = useSearchParams()
   const pathname = usePathname()
-  const router = useRouter()
   const kind = catalogueKinds.find((candidate) => candidate === params.get('kind')) ?? 'cutter'
   const { data, error, refresh } = useDuplicates(kind)
   const [pair, setPair] = useState<MergePair | null>(null)
@@ -38,7 +37,9 @@ export function DuplicatesPage() {
           label="Kind"
           className="max-w-64"
           value={kind}
-          onChange={(event) => router.replace(`${pathname}?kind=${event.target.value}`)}
+          onChange={(event) =>
+            window.history.replaceState(null, '', `${pathname}?kind=${event.target.value}`)
+          }
           options={catalogueKinds.map((value) => ({ value, label: kindNames[value] }))}
         />
         {error ? (

@@ -1,6 +1,7 @@
 'use client'
 
-import { usePathname, useRouter, useSearchParams } from 'next/navigation'
+import { usePathname, useSearchParams } from 'next/navigation'
+import { useState } from 'react'
 import { PageHeading } from '../layout/page-heading'
 import { useCan, useShop } from '../layout/shop-context'
 import { ButtonLink } from '../ui/button'
@@ -14,10 +15,10 @@ import { QuestionForm } from './question-form'
 export function FitsPage() {
   const params = useSearchParams()
   const pathname = usePathname()
-  const router = useRouter()
   const { unit } = useShop()
   const mayKeep = useCan('keepCrib')
-  const question = questionOf(params)
+  // Kept here too: the address follows a moment later, and a choice must not jump back until then.
+  const [question, setQuestion] = useState(() => questionOf(params))
   const asked = new URLSearchParams(
     question.fields.flatMap(({ name }) => {
       const value = params.get(name)
@@ -28,7 +29,13 @@ export function FitsPage() {
   const isAsked = question.fields.every(({ name, isOptional }) => isOptional || asked.has(name))
 
   function ask(query: URLSearchParams) {
-    router.replace(`${pathname}?${query}`, { scroll: false })
+    // Nothing of the page comes from the server, so the address changes at once.
+    window.history.replaceState(null, '', `${pathname}?${query}`)
+  }
+
+  function handleChoose(chosen: FitsQuestion) {
+    setQuestion(chosen)
+    ask(new URLSearchParams({ from: chosen.id }))
   }
 
   return (
@@ -41,7 +48,7 @@ export function FitsPage() {
         ) : null}
       </PageHeading>
       <div className="flex flex-col gap-5 px-4 pb-10 lg:px-6">
-        <QuestionChoice chosen={question} onChoose={(id) => ask(new URLSearchParams({ from: id }))} />
+        <QuestionChoice chosen={question} onChoose={handleChoose} />
         <QuestionForm
           key={`${question.id} ${unit} ${asked}`}
           question={question}
@@ -62,17 +69,17 @@ function QuestionChoice({
   onChoose,
 }: {
   chosen: FitsQuestion
-  onChoose: (id: FitsQuestion['id']) => void
+  onChoose: (question: FitsQuestion) => void
 }) {
   return (
     <fieldset className="flex flex-wrap gap-2">
       <legend className="mb-1 text-[0.9375rem] font-semibold">What you have</legend>
-      {fitsQuestions.map(({ id, label }) => (
+      {fitsQuestions.map((question) => (
         <label
-          key={id}
+          key={question.id}
           className={classNames(
             'has-focus-visible:outline-accent flex min-h-11 cursor-pointer items-center gap-2 rounded-[3px] border px-3 has-focus-visible:outline-3 has-focus-visible:outline-offset-2',
-            id === chosen.id
+            question.id === chosen.id
               ? 'border-accent bg-accent-wash font-semibold'
               : 'border-ink-soft/60 bg-sheet hover:bg-accent-wash',
           )}
@@ -80,12 +87,12 @@ function QuestionChoice({
           <input
             type="radio"
             name="from"
-            value={id}
-            checked={id === chosen.id}
-            onChange={() => onChoose(id)}
+            value={question.id}
+            checked={question.id === chosen.id}
+            onChange={() => onChoose(question)}
             className="accent-accent size-4"
           />
-          {label}
+          {question.label}
         </label>
       ))}
     </fieldset>

@@ -10,8 +10,16 @@ export interface PartsListHeadingProps extends CustomInnerHeaderProps {
 export function PartsListHeading({ displayName, unitText, fullName }: PartsListHeadingProps) {
   return (
     <span className="leading-tight">
-      <span aria-hidden={displayName !== fullName}>{displayName}</span>
-      {displayName === fullName ? null : <span className="sr-only">{fullName}</span>}
+      {displayName === fullName ? (
+        <span>{displayName}</span>
+      ) : (
+        <>
+          <span aria-hidden="true" className="parts-list-symbol">
+            {displayName}
+          </span>
+          <span className="parts-list-name sr-only">{fullName}</span>
+        </>
+      )}
       {unitText ? <span className="text-ink-soft block text-xs font-normal">{unitText}</span> : null}
     </span>
   )

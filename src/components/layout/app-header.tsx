@@ -7,6 +7,7 @@ import { useState } from 'react'
 import { can } from '@/core/policies/permissions'
 import { classNames } from '../ui/class-names'
 import { Dialog } from '../ui/dialog'
+import { LowStockCount, LowStockFigure } from './low-stock-count'
 import { navigationGroups } from './navigation'
 import { useShop } from './shop-context'
 import { SignOutButton } from './sign-out-button'
@@ -30,7 +31,7 @@ export function AppHeader() {
   const groups = useGroups()
   return (
     <header className="bg-sheet border-ink sticky top-0 z-30 border-b print:hidden">
-      <div className="flex h-14 items-center gap-4 px-4 lg:h-12">
+      <div className="flex h-14 items-center gap-4 px-4 min-[84rem]:h-12">
         <Link
           href="/reach"
           aria-label="Leadline, to the reach check"
@@ -38,7 +39,7 @@ export function AppHeader() {
         >
           <Wordmark />
         </Link>
-        <nav aria-label="Main" className="hidden h-full min-w-0 flex-1 lg:flex">
+        <nav aria-label="Main" className="hidden h-full min-w-0 flex-1 min-[84rem]:flex">
           {groups.map((group) => (
             <ul
               key={group.label}
@@ -51,13 +52,14 @@ export function AppHeader() {
                     href={link.href}
                     aria-current={isCurrent(pathname, link.href) ? 'page' : undefined}
                     className={classNames(
-                      'hover:bg-accent-wash flex h-full items-center border-b-[3px] px-2.5 pt-[3px] text-[0.9375rem]',
+                      'hover:bg-accent-wash flex h-full items-center border-b-[3px] px-1.5 2xl:px-2.5 pt-[3px] text-[0.9375rem] whitespace-nowrap',
                       isCurrent(pathname, link.href)
                         ? 'border-accent text-ink font-semibold'
                         : 'text-ink border-transparent',
                     )}
                   >
                     {link.label}
+                    {link.href === '/alerts' ? <LowStockFigure /> : null}
                   </Link>
                 </li>
               ))}
@@ -65,8 +67,9 @@ export function AppHeader() {
           ))}
         </nav>
         <div className="ml-auto flex items-center gap-2">
+          <LowStockCount />
           <UnitSwitch />
-          <span className="hidden items-center gap-1 lg:flex">
+          <span className="hidden items-center gap-1 min-[84rem]:flex">
             <AccountLink />
             <SignOutButton className="px-2!" label={<LogOut aria-hidden="true" className="size-5" />} />
           </span>
@@ -93,7 +96,7 @@ function PhoneMenu({ groups, pathname }: { groups: ReturnType<typeof useGroups>;
   const [isOpen, setIsOpen] = useState(false)
   const { actor, shopName } = useShop()
   return (
-    <span className="lg:hidden">
+    <span className="min-[84rem]:hidden">
       <button
         type="button"
         className="hover:bg-accent-wash -mr-2 grid size-11 place-items-center rounded-[3px]"

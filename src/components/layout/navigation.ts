@@ -13,7 +13,7 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
     links: [
       { href: '/reach', label: 'Reach', permission: 'see' },
       { href: '/ball-speed', label: 'Ball-end speed', permission: 'see' },
-      { href: '/starting-speeds', label: 'Starting speeds', permission: 'see' },
+      { href: '/starting-speeds', label: 'Speeds', permission: 'see' },
     ],
   },
   {
@@ -23,13 +23,14 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
       { href: '/holders', label: 'Holders', permission: 'see' },
       { href: '/collets', label: 'Collets', permission: 'see' },
       { href: '/extensions', label: 'Extensions', permission: 'see' },
-      { href: '/fits', label: 'What fits', permission: 'see' },
+      { href: '/fits', label: 'Fits', permission: 'see' },
     ],
   },
   {
     label: 'Crib',
     links: [
       { href: '/locations', label: 'Locations', permission: 'see' },
+      { href: '/alerts', label: 'Low stock', permission: 'see' },
       { href: '/imports', label: 'Imports', permission: 'keepCrib' },
     ],
   },

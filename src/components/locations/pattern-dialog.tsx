@@ -73,7 +73,7 @@ export function PatternDialog({ onClose, onAdded }: PatternDialogProps) {
         />
         <div className="grid grid-cols-2 gap-4">
           <TextField
-            label="From"
+            label="First code"
             value={texts.first}
             onChange={set('first')}
             error={faults.first}
@@ -83,7 +83,7 @@ export function PatternDialog({ onClose, onAdded }: PatternDialogProps) {
             isRequired
           />
           <TextField
-            label="To"
+            label="Last code"
             value={texts.last}
             onChange={set('last')}
             error={faults.last}
@@ -149,7 +149,8 @@ function PatternPreview({ codes, taken }: { codes: string[]; taken: string[] }) 
       </p>
       {taken.length > 0 ? (
         <p className="text-collision font-semibold">
-          {taken.length} of them are there already, marked below: change the pattern.
+          {taken.length === 1 ? 'One of them is' : `${taken.length} of them are`} there already, marked below:
+          change the pattern.
         </p>
       ) : null}
       <ul className="border-hairline mt-1 flex max-h-48 flex-wrap gap-x-3 overflow-y-auto border p-2 text-sm">

@@ -75,6 +75,9 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
         title="Shop settings"
         note="They hold for everyone; each person's own unit stands above them."
       >
+        <ButtonLink href="/mail" size="compact" variant="quiet">
+          Mail
+        </ButtonLink>
         <ButtonLink href="/first-day" size="compact" variant="quiet">
           The shop’s first day
         </ButtonLink>

@@ -127,7 +127,7 @@ export function SpeedEditRow({ row, onDone, onCancel }: SpeedEditRowProps) {
             }))}
           />
           <TextField
-            label="From"
+            label="Low end"
             symbol={speedUnitNames[unit]}
             name="low"
             defaultValue={first.low}
@@ -137,7 +137,7 @@ export function SpeedEditRow({ row, onDone, onCancel }: SpeedEditRowProps) {
             isRequired
           />
           <TextField
-            label="To"
+            label="High end"
             symbol={speedUnitNames[unit]}
             name="high"
             defaultValue={first.high}

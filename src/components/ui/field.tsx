@@ -1,4 +1,5 @@
 import { type ReactNode, useId } from 'react'
+import { symbolTitle } from '@/lib/symbol-names'
 import { classNames } from './class-names'
 
 export interface FieldProps {
@@ -47,7 +48,11 @@ export function Field({
             </span>
           ) : null}
         </span>
-        {symbol ? <span className="text-ink-soft text-xs font-normal tracking-wide">{symbol}</span> : null}
+        {symbol ? (
+          <span className="text-ink-soft text-xs font-normal tracking-wide" title={symbolTitle(symbol)}>
+            {symbol}
+          </span>
+        ) : null}
       </label>
       {children({ id, 'aria-describedby': describedBy, 'aria-invalid': error ? true : undefined })}
       {hint ? (

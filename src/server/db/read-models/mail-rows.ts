@@ -1,0 +1,51 @@
+import type { Knex } from 'knex'
+
+export interface MailRow {
+  id: string
+  recipient: string
+  cribName: string
+  createdAt: string
+  sentAt: string | null
+  attempts: number
+  nextAttemptAt: string
+  lastError: string | null
+  /** Where the catcher has it, and so can show what it said. */
+  caughtId: string | null
+}
+
+const mostShown = 300
+
+/** The outbox, what waits first and then the newest. */
+export async function readMails(db: Knex): Promise<MailRow[]> {
+  const rows = await db('outbox')
+    .join('cribs', 'cribs.id', 'outbox.crib_id')
+    .select('outbox.*', {
+      crib_name: 'cribs.name',
+      caught_id: db.raw(
+        '(select max(caught.id) from caught_mails as caught where caught.message_id = outbox.message_id)',
+      ),
+    })
+    .orderByRaw('outbox.sent_at is not null, outbox.id desc')
+    .limit(mostShown)
+  return rows.map((row) => ({
+    id: row.id,
+    recipient: row.recipient,
+    cribName: row.crib_name,
+    createdAt: row.created_at.toISOString(),
+    sentAt: row.sent_at?.toISOString() ?? null,
+    attempts: row.attempts,
+    nextAttemptAt: row.next_attempt_at.toISOString(),
+    lastError: row.last_error,
+    caughtId: row.caught_id,
+  }))
+}
+
+export async function findCaughtMail(
+  db: Knex,
+  id: string,
+): Promise<{ recipients: string[]; source: Buffer; caughtAt: string } | null> {
+  const row = await db('caught_mails').where('id', id).first()
+  return row
+    ? { recipients: row.recipients, source: row.source, caughtAt: row.caught_at.toISOString() }
+    : null
+}

@@ -1,0 +1,9 @@
+import { db } from '../../db/connection'
+import type { MailRow } from '../../db/read-models/mail-rows'
+import { readMails } from '../../db/read-models/mail-rows'
+import { env } from '../../env'
+
+/** The mail of the shop, and whether it goes anywhere. */
+export async function listMails(): Promise<{ rows: MailRow[]; hasServer: boolean }> {
+  return { rows: await readMails(db()), hasServer: env().SMTP_URL !== undefined }
+}
