@@ -34,10 +34,10 @@ function toRow([iso_group, material, substrate, low_m_per_min, high_m_per_min, s
   return { iso_group, material, substrate, low_m_per_min, high_m_per_min, source_note }
 }
 
-const observatory = 'MMT Observatory shop table (an upper limit, it says)'
-const manual = 'Grizzly G0619 manual, page 24'
-const college = 'table of Fox Valley Technical College at etantdonnes.com'
-const maker = (groups: string) => `Iscar solid end mills 2022, page 92, ${groups}; coated solid carbide`
+const observatory = "an observatory workshop's table (an upper limit, it says)"
+const manual = "a milling machine's manual"
+const college = "a technical college's table"
+const maker = (groups: string) => `A maker’s catalogue of coated solid carbide, 2022, ${groups}`
 
 /** As test/reference/speeds/starting-speeds.md has them. */
 const published: Published[] = [
@@ -55,7 +55,7 @@ const published: Published[] = [
     'carbide',
     200,
     300,
-    `Iscar solid end mills 2022, page 92: 210 to 300 below 0.25 % C, else 200 to 250; coated solid carbide.`,
+    `A maker’s catalogue of coated solid carbide, 2022: 210 to 300 below 0.25 % C, else 200 to 250.`,
   ],
   ['P', 'Medium carbon steel, 190 to 280 HB', 'hss', 12, 21, `40 to 70 SFM: ${college}.`],
   ['P', 'Medium carbon steel, 190 to 280 HB', 'carbide', 140, 250, `${maker('carbon steels')}.`],

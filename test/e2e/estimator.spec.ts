@@ -48,11 +48,14 @@ test('what an estimator may not do is refused whatever the page offers', async (
   await expect(page.getByRole('navigation', { name: 'Main' }).getByRole('link')).toHaveText([
     'Reach',
     'Ball-end speed',
+    'Speeds',
     'Cutters',
     'Holders',
     'Collets',
     'Extensions',
+    'Fits',
     'Locations',
+    'Low stock',
   ])
 })
 

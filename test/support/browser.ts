@@ -20,12 +20,19 @@ export const test = base.extend<{ elsewhere: Page }>({
   },
 })
 
+/** A refused answer, which tests provoke, and the recorder's script, which a frame that may run nothing refuses. */
+function isOfTheTools(text: string): boolean {
+  return (
+    text.startsWith('Failed to load resource') ||
+    text.startsWith("Blocked script execution in 'about:srcdoc'")
+  )
+}
+
 function complaintsOf(page: Page): string[] {
   const complaints: string[] = []
   page.on('pageerror', (error) => complaints.push(String(error)))
   page.on('console', (message) => {
-    const isRefusal = message.text().startsWith('Failed to load resource')
-    if (message.type() === 'error' && !isRefusal) complaints.push(message.text())
+    if (message.type() === 'error' && !isOfTheTools(message.text())) complaints.push(message.text())
   })
   return complaints
 }
