@@ -88,7 +88,7 @@ export async function createImportSite(): Promise<ImportSite> {
     },
     storedFiles: () => {
       const folder = join(dataFolder, 'imports')
-      return existsSync(folder) ? readdirSync(folder) : []
+      return existsSync(folder) ? readdirSync(folder).sort() : []
     },
     close: async () => {
       await closeDb()

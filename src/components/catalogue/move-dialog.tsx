@@ -15,6 +15,7 @@ import { useMoveStock } from '@/hooks/use-move-stock'
 import { usePlaces } from '@/hooks/use-places'
 import { ApiError } from '@/lib/api-client'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
+import type { LocationResponse } from '@/schemas/location'
 import type { BalanceResponse } from '@/schemas/stock'
 import { SectionState } from './section-state'
 import { conditionNames } from './stock-words'
@@ -217,21 +218,37 @@ function useTargets(kind: MoveDialogProps['kind'], balances: readonly BalanceRes
     ]
     return { options, isNarrowable: false, search, setSearch }
   }
-  // Where it lies already comes first, the fullest before the others.
-  const homes = balances
-    .filter((balance) => balance.locationKind === 'bin')
-    .toSorted((one, other) => other.quantity - one.quantity)
-    .map((balance) => balance.locationId)
-  const rank = (id: string) => (homes.includes(id) ? homes.indexOf(id) : homes.length)
-  const options = bins.places
-    .toSorted((one, other) => rank(one.id) - rank(other.id))
-    .map((place) => ({ value: place.id, label: `${place.cribCode} ${place.code}` }))
+  const options = returnTargets(balances, bins.places, search)
   return {
     options,
     isNarrowable: search !== '' || (bins.total ?? options.length) > fewBins,
     search,
     setSearch,
   }
+}
+
+/**
+ * Where a piece may come back to: the bins it lies in already, the fullest first, then the rest. They come from the stock,
+ * since a shop has more bins than one block of the list. Where it lies in none, or a code was typed, nobody's bin is taken
+ * for granted.
+ */
+export function returnTargets(
+  balances: readonly BalanceResponse[],
+  places: readonly Pick<LocationResponse, 'id' | 'code' | 'cribCode'>[],
+  search: string,
+): SelectOption[] {
+  const rest = places.map((place) => ({ value: place.id, label: `${place.cribCode} ${place.code}` }))
+  if (search !== '') return rest
+  const homes = new Map(
+    balances
+      .filter((balance) => balance.locationKind === 'bin')
+      .toSorted((one, other) => other.quantity - one.quantity)
+      .map((balance) => [balance.locationId, `${balance.cribCode} ${balance.locationCode}`]),
+  )
+  const first = [...homes].map(([value, label]) => ({ value, label }))
+  const others = rest.filter((option) => !homes.has(option.value))
+  if (first.length === 0 && others.length > 1) return [{ value: '', label: 'Choose a bin' }, ...others]
+  return [...first, ...others]
 }
 
 const formFields = ['fromLocationId', 'fromCondition', 'toLocationId', 'toCondition', 'quantity', 'note']
