@@ -68,7 +68,7 @@ describe.each(['straight', 'drafted', 'tilted', 'obstacles', 'circled'] as const
       }),
       options,
     )
-    expect(sharp / asked).toBeGreaterThan(0.7)
+    expect(sharp / asked).toBeGreaterThan(0.8)
   })
 
   it('it needs the stick-out that points of the tool need', () => {
