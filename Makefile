@@ -4,7 +4,7 @@
 MAKEFLAGS += -q
 RUN := +@exec env -u MAKEFLAGS -u MFLAGS -u MAKELEVEL bash db/run.sh
 
-.PHONY: start test check-ledger
+.PHONY: start test bench check-ledger
 
 # Installs what is missing, then runs Leadline on http://127.0.0.1:3000 until Ctrl-C.
 # Settings: PORT, HOST, PUBLIC_URL, DEMO=no, DATABASE_URL, DATABASE_PORT, DATA_DIR.
@@ -14,6 +14,11 @@ start:
 # Types, lint, import rules, unit, database, API and browser tests; the last line is "N passed, N failed".
 test:
 	$(RUN) test
+
+# Measures what Leadline promises of its speed and prints each figure beside its limit; a report, not a test.
+# ONLY=drawing,list runs some of test/bench alone.
+bench:
+	$(RUN) bench
 
 # Proves the stock ledger of the database that `make start` uses.
 check-ledger:

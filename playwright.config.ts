@@ -1,4 +1,5 @@
 import { defineConfig } from '@playwright/test'
+import { chromium } from './test/support/chromium'
 
 const baseURL = process.env.BASE_URL
 if (!baseURL) throw new Error('BASE_URL names no server to test: run the browser tests through make test.')
@@ -12,19 +13,7 @@ export default defineConfig({
   use: {
     baseURL,
     trace: 'retain-on-failure',
-    // Debian's own browser, asked to call nobody and to need neither a sandbox (root) nor a graphics card.
-    launchOptions: {
-      executablePath: '/usr/bin/chromium',
-      args: [
-        '--no-sandbox',
-        '--disable-gpu',
-        '--disable-quic',
-        '--no-first-run',
-        '--disable-background-networking',
-        '--disable-component-update',
-        '--disable-sync',
-      ],
-    },
+    launchOptions: chromium,
   },
   projects: [
     { name: 'desk', testIgnore: '**/*.phone.spec.ts', use: { viewport: { width: 1440, height: 900 } } },

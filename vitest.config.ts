@@ -18,6 +18,7 @@ export default defineConfig({
             'src/**/*.test.tsx',
             'test/reference/**/*.test.ts',
             'test/guards/**/*.test.ts',
+            'test/bench/**/*.test.ts',
           ],
           testTimeout: 60_000,
         },

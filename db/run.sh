@@ -1,5 +1,5 @@
 #!/usr/bin/env bash
-# run.sh start | test | check-ledger: makes the machine ready, then hands over to the TypeScript that runs the goal.
+# run.sh start | test | bench | check-ledger: makes the machine ready, then hands over to the TypeScript that runs the goal.
 goal="$1"
 export LEADLINE_GOAL="make $goal"
 source "$(dirname "${BASH_SOURCE[0]}")/common.sh"
@@ -7,8 +7,9 @@ source "$(dirname "${BASH_SOURCE[0]}")/common.sh"
 # A goal that never came to its tests still closes with the count that whoever reads the output looks for.
 if [ "$goal" = test ]; then
   trap 'echo "0 passed, 1 failed"; exit 1' EXIT
-  unset DATABASE_URL
 fi
+# Tests and benches make and drop databases: never on a server that is somebody's.
+case "$goal" in test | bench) unset DATABASE_URL ;; esac
 
 source db/preflight.sh
 
@@ -20,13 +21,14 @@ fi
 
 packages=()
 [ -n "${DATABASE_URL:-}" ] || packages+=(postgresql)
-[ "$goal" != test ] || packages+=(chromium)
+case "$goal" in test | bench) packages+=(chromium) ;; esac
 [ "${#packages[@]}" = 0 ] || bash db/packages.sh "${packages[@]}" 8>&-
 flock "$DATA_DIR/setup.lock" bash db/node-modules.sh 8>&-
 
 case "$goal" in
   start) program=src/server/launch.ts ;;
   test) program=test/run.ts ;;
+  bench) program=test/bench/run.ts ;;
   check-ledger) program=src/server/launch/check-ledger.ts ;;
 esac
 exec node --conditions=react-server --import tsx "$program"

@@ -24,8 +24,15 @@ export function runScript(
   })
 }
 
-export function startWebServer({ environment, logFolder }: Run, host: string, port: number): ServerProcess {
-  const argv = [process.execPath, 'node_modules/next/dist/bin/next', 'start', '-H', host, '-p', String(port)]
+/** Serves the build of this checkout, or of another folder that was built like it. */
+export function startWebServer(
+  { environment, logFolder }: Run,
+  host: string,
+  port: number,
+  builtFolder = process.cwd(),
+): ServerProcess {
+  const argv = [process.execPath, 'node_modules/next/dist/bin/next', 'start', builtFolder]
+  argv.push('-H', host, '-p', String(port))
   return startServer('Web server', argv, environment, join(logFolder, 'web.log'))
 }
 

@@ -21,7 +21,7 @@ export async function buildIfChanged(build: Build): Promise<void> {
   rmSync(stamp, { force: true })
   await runStep({
     name: 'Build',
-    argv: ['npm', 'run', '--silent', 'build'],
+    argv: ['npm', 'run', '--silent', 'build', '--', build.projectFolder],
     environment: build.environment,
     logPath: build.logPath,
     signal: build.signal,

@@ -7,6 +7,8 @@ import { StepFailure } from './step-failure'
 /** A program that runs until it is told to stop: the web server, the worker. */
 export interface ServerProcess {
   name: string
+  /** Undefined where it could not be started. */
+  pid: number | undefined
   /** Rejects with a StepFailure when the program ends without having been told to; never resolves. */
   failed: Promise<never>
   stop: () => Promise<void>
@@ -25,7 +27,7 @@ export function startServer(
   const failed = failureOf(child, name, logPath)
   // Whoever awaits `failed` sees the rejection; until somebody does it must not end this process.
   failed.catch(() => undefined)
-  return { name, failed, stop: () => endChild(child) }
+  return { name, pid: child.pid, failed, stop: () => endChild(child) }
 }
 
 async function failureOf(child: ChildProcess, name: string, logPath: string): Promise<never> {
