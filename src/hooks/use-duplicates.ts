@@ -8,6 +8,7 @@ import type {
   ItemMerges,
   MergeItemsRequest,
   MergeItemsResponse,
+  MergePreview,
 } from '@/schemas/duplicate'
 
 /** The groups of items of a kind that measure the same. */
@@ -20,6 +21,17 @@ export function useDuplicates(kind: CatalogueKind) {
 export function useItemMerges(itemId: string) {
   const { data } = useSWR<ItemMerges, Error>(`/api/items/${itemId}/merges`, getJson)
   return data
+}
+
+/** What a merge would do as things stand; asked anew each time it is looked at. */
+export function useMergePreview({ keptItemId, mergedItemId }: MergeItemsRequest) {
+  const query = new URLSearchParams({ keptItemId, mergedItemId })
+  const { data, error, isValidating, mutate } = useSWR<MergePreview, Error>(
+    `/api/duplicates/merge?${query}`,
+    getJson,
+    { revalidateOnFocus: false },
+  )
+  return { preview: isValidating ? undefined : data, error, refresh: () => mutate() }
 }
 
 /** Makes one item of two; the key makes a repeat harmless. */

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { catalogueKinds, conditions } from '@/core/stock/kinds'
+import { catalogueKinds, conditions, shopLocationKinds } from '@/core/stock/kinds'
 import { idSchema } from './fields'
 
 export const duplicatesQuerySchema = z.strictObject({ kind: z.enum(catalogueKinds, 'Say which kind.') })
@@ -22,6 +22,7 @@ export const duplicatesResponseSchema = z.object({
 })
 export type DuplicatesResponse = z.infer<typeof duplicatesResponseSchema>
 
+/** Which item stays and which goes into it: asked about, then done. */
 export const mergeItemsRequestSchema = z
   .strictObject({ keptItemId: idSchema, mergedItemId: idSchema })
   .superRefine(({ keptItemId, mergedItemId }, context) => {
@@ -40,6 +41,43 @@ export const mergeItemsResponseSchema = z.object({
   moved: z.array(z.object({ locationId: z.string(), condition: z.enum(conditions), quantity: z.number() })),
 })
 export type MergeItemsResponse = z.infer<typeof mergeItemsResponseSchema>
+
+/** What a merge would do, or why it cannot be made, as things stand now. */
+export const mergePreviewResponseSchema = z.object({
+  /** A sentence where it would be refused. */
+  refusal: z.string().nullable(),
+  held: z.array(
+    z.object({
+      locationId: z.string(),
+      locationKind: z.enum(shopLocationKinds),
+      locationCode: z.string(),
+      locationName: z.string(),
+      cribCode: z.string().nullable(),
+      condition: z.enum(conditions),
+      quantity: z.number(),
+      tags: z.array(z.string()),
+    }),
+  ),
+  /** Tags of pieces that never came in or that a count missed: they become pieces of the kept item too. */
+  tagsNowhere: z.array(z.string()),
+  /** By crib where either item has a reorder point or an open alert. */
+  cribs: z.array(
+    z.object({
+      cribCode: z.string(),
+      kept: z.object({ reorderPoint: z.number(), orderUpTo: z.number() }).nullable(),
+      merged: z.object({ reorderPoint: z.number(), orderUpTo: z.number() }).nullable(),
+      /** Whether an alert of the item that goes is open, which the merge closes. */
+      closesAlert: z.boolean(),
+      /** The kept item's position once it has the pieces. */
+      positionAfter: z.number(),
+      isLowBefore: z.boolean(),
+      isLowAfter: z.boolean(),
+    }),
+  ),
+  /** Codes of items merged into the one that goes: whoever searches for them finds the kept one. */
+  earlierCodes: z.array(z.string()),
+})
+export type MergePreview = z.infer<typeof mergePreviewResponseSchema>
 
 const mergedWithSchema = z.object({ id: z.string(), kind: z.enum(catalogueKinds), code: z.string() })
 

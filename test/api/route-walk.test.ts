@@ -105,6 +105,7 @@ const walk: Record<string, Allowed> = {
   'GET /api/first-day': keepers,
   'POST /api/locations/pattern': keepers,
   'GET /api/duplicates': keepers,
+  'GET /api/duplicates/merge': keepers,
   'POST /api/duplicates/merge': keepers,
   'GET /api/items/[id]/merges': signedIn,
   'GET /api/fits': signedIn,

@@ -158,7 +158,11 @@ describe('an item tracked piece by piece', () => {
       is_tracked_by_piece: true,
     })
     const strange = await createPiece(`STRANGE-${books.itemId}`, other)
-    await expectRefusal(post(database.db, books, { ...arrival(), pieceId: strange }), '23503')
+    await expectRefusal(
+      post(database.db, books, { ...arrival(), pieceId: strange }),
+      'LL012',
+      'movements_piece_of_item',
+    )
   })
 
   test('it stays so once it has moved', async () => {

@@ -69,6 +69,8 @@ test('two of one geometry are made one, and the old code finds the one that is k
     .getByRole('row', { name: new RegExp(oldCode) })
     .getByRole('button', { name: `Merge into ${keptCode}` })
     .click()
+  await expect(page.getByRole('row', { name: / A-1 New 2$/ })).toBeVisible()
+  await expect(page.getByText('Neither has a reorder point.')).toBeVisible()
   await expectAccessible(page, 'a merge about to be made')
   await page.getByRole('button', { name: 'Merge them' }).click()
   await expect(page.getByText(`${oldCode} is merged into ${keptCode}; 2 pieces went over.`)).toBeVisible()

@@ -27,6 +27,8 @@ export interface Posting {
   fromCondition?: string
   toCondition?: string
   reversesId?: string
+  /** Half of the merge of this item. */
+  mergedItemId?: string
 }
 
 let serial = 0
@@ -112,6 +114,7 @@ export async function post(db: Knex, books: Books, ...postings: Posting[]): Prom
     to_location_id: posting.to,
     to_condition: posting.toCondition ?? posting.fromCondition ?? 'new',
     reverses_id: posting.reversesId ?? null,
+    merged_item_id: posting.mergedItemId ?? null,
     actor_id: books.userId,
   }))
   const answer = await db('movements').insert(rows).returning('id')

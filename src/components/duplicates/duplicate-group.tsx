@@ -63,7 +63,10 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
               >
                 {item.code}
               </Link>
-              <span className="text-ink-soft block text-sm">{item.description}</span>
+              <span className="text-ink-soft block text-sm">
+                {item.description}
+                {item.isTrackedByPiece ? ' · tracked piece by piece' : ''}
+              </span>
             </td>
             <td className="max-sm:order-last max-sm:col-span-2 max-sm:col-start-2 max-sm:text-sm">
               {[item.maker, item.partNumber].filter(Boolean).join(' ') || 'No maker'}
@@ -72,8 +75,6 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
             <td className="text-right max-sm:order-last max-sm:col-span-3">
               {item.id === kept.id ? (
                 <span className="text-ink-soft text-sm">is kept</span>
-              ) : item.isTrackedByPiece || kept.isTrackedByPiece ? (
-                <span className="text-ink-soft text-sm">tracked piece by piece: stays</span>
               ) : (
                 <Button size="compact" onClick={() => onMerge({ kept, merged: item })}>
                   Merge into {kept.code}

@@ -2,7 +2,7 @@
 
 import { useState } from 'react'
 import { toast } from 'sonner'
-import { mergeItems } from '@/hooks/use-duplicates'
+import { mergeItems, useMergePreview } from '@/hooks/use-duplicates'
 import { faultSentence } from '@/lib/field-faults'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
 import type { DuplicateItem } from '@/schemas/duplicate'
@@ -10,6 +10,7 @@ import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { useAttempt } from '../ui/use-attempt'
+import { MergePreview } from './merge-preview'
 
 export interface MergePair {
   kept: DuplicateItem
@@ -26,43 +27,51 @@ export interface MergeDialogProps {
 export function MergeDialog({ pair: { kept, merged }, onClose, onMerged }: MergeDialogProps) {
   const [idempotencyKey] = useState(newIdempotencyKey)
   const { fault, isBusy, attempt } = useAttempt()
+  const request = { keptItemId: kept.id, mergedItemId: merged.id }
+  const { preview, error, refresh } = useMergePreview(request)
+  const codes = { kept: kept.code, merged: merged.code }
 
   function handleMerge() {
     void attempt(async () => {
-      const request = { keptItemId: kept.id, mergedItemId: merged.id }
       const { moved } = await mergeItems(request, idempotencyKey)
       const pieces = moved.reduce((sum, { quantity }) => sum + quantity, 0)
-      toast.success(`${merged.code} is merged into ${kept.code}; ${pieces} pieces went over.`)
+      toast.success(
+        `${merged.code} is merged into ${kept.code}; ${pieces} ${pieces === 1 ? 'piece' : 'pieces'} went over.`,
+      )
       onMerged()
     })
   }
 
   return (
     <Dialog isOpen onOpenChange={onClose} title={`Merge ${merged.code} into ${kept.code}?`}>
-      <div className="flex flex-col gap-3">
-        <ul className="flex list-disc flex-col gap-1 pl-5">
-          <li>
-            Every piece of {merged.code} in a bin counts as {kept.code} from now on, in the same bin and
-            condition.
-          </li>
-          <li>{merged.code} is archived; its movements stay under its code.</li>
-          <li>
-            Whoever searches for {merged.code} finds {kept.code}.
-          </li>
-        </ul>
-        <p>
-          {kept.code} keeps its own maker, number, description and cost. Its reorder points stay; where a crib
-          has none, that of {merged.code} is taken over.
-        </p>
+      <div className="flex flex-col gap-4">
+        {error ? (
+          <Notice kind="collision" isAnnounced>
+            <p>What it would do could not be read. {faultSentence(error)}</p>
+            <Button size="compact" className="mt-2" onClick={() => void refresh()}>
+              Try again
+            </Button>
+          </Notice>
+        ) : null}
+        {!preview && !error ? <p role="status">Looking at what it would do …</p> : null}
+        {preview?.refusal ? (
+          <Notice kind="caution" isAnnounced>
+            <p className="font-semibold">It cannot be made.</p>
+            <p>{preview.refusal}</p>
+          </Notice>
+        ) : null}
+        {preview && !preview.refusal ? <MergePreview preview={preview} codes={codes} /> : null}
         {fault ? (
           <Notice kind="collision" isAnnounced>
             {faultSentence(fault)}
           </Notice>
         ) : null}
         <div className="flex flex-wrap gap-2">
-          <Button variant="danger" disabled={isBusy} onClick={handleMerge}>
-            {isBusy ? 'Merging …' : 'Merge them'}
-          </Button>
+          {preview && !preview.refusal ? (
+            <Button variant="danger" disabled={isBusy} onClick={handleMerge}>
+              {isBusy ? 'Merging …' : 'Merge them'}
+            </Button>
+          ) : null}
           <Button variant="quiet" onClick={onClose}>
             Leave both
           </Button>

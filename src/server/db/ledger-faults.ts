@@ -95,6 +95,33 @@ const piecesAreTheBalance = `
     and coalesce(balances.quantity, 0) <> coalesce(counted.quantity, 0)
   order by items.code, locations.code, condition`
 
+/** A merge changes a piece's item by movements; one that a count missed goes over without, since it is nowhere. */
+const piecesAreOfWhatLastMoved = `
+  select format('piece %s: a piece of %s, last moved as %s', pieces.tag, items.code, moved.code) as fault
+  from pieces
+  join items on items.id = pieces.item_id
+  join lateral (select item_id from movements where piece_id = pieces.id order by id desc limit 1) as last on true
+  join items as moved on moved.id = last.item_id
+  left join locations on locations.id = pieces.location_id
+  where last.item_id <> pieces.item_id
+    and locations.kind is distinct from 'count_adjustment'
+  order by pieces.tag`
+
+/** What left the one item's books by a merge entered the other's, place by place and piece by piece. */
+const mergesArePaired = `
+  select format('the merge of %s: %s more in than out at %s, %s', items.code, sum(quantity), locations.code, condition)
+    as fault
+  from (
+    select merged_item_id, piece_id, to_location_id as location_id, to_condition as condition, quantity
+    from movements where merged_item_id <> item_id
+    union all
+    select merged_item_id, piece_id, from_location_id, from_condition, -quantity
+    from movements where merged_item_id = item_id
+  ) as an_end
+  join items on items.id = merged_item_id join locations on locations.id = location_id
+  group by items.code, locations.code, condition, piece_id having sum(quantity) <> 0
+  order by items.code, locations.code, condition`
+
 const reversalsMirror = `
   select format('movement %s is no mirror of %s, which it reverses', reversal.id, reversed.id) as fault
   from movements as reversal join movements as reversed on reversed.id = reversal.reverses_id
@@ -134,6 +161,8 @@ const questions = [
   levelsAreSums,
   piecesAreWhereLastMoved,
   piecesAreTheBalance,
+  piecesAreOfWhatLastMoved,
+  mergesArePaired,
   reversalsMirror,
   alertsAreWhatIsLow,
 ]

@@ -251,6 +251,7 @@ export interface MovementsRow {
   occurred_at: Date
   recorded_at: Date
   reverses_id: string | null
+  merged_item_id: string | null
 }
 
 export interface OutboxRow {

@@ -10,6 +10,8 @@ import type { MovementsRow } from '../row-types'
 export interface MovementRow extends Omit<MovementResponse, 'canReverse'> {
   /** It was recorded on the day it is now at the crib it touches, or at the home crib of who posted it. */
   isOfToday: boolean
+  /** Half of a merge, which is not reversed by itself. */
+  isOfMerge: boolean
 }
 
 /** One block of the ids of an item's movements, newest first. */
@@ -91,6 +93,7 @@ function fromRow(row: JoinedRow): MovementRow {
     reversesId: row.reverses_id,
     reversedById: row.reversed_by_id,
     isOfToday: row.is_of_today,
+    isOfMerge: row.merged_item_id !== null,
   }
 }
 

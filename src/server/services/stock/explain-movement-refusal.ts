@@ -26,6 +26,13 @@ export async function explainingMovementRefusals<Answer>(work: () => Promise<Ans
         })
       case ledgerErrorCodes.archived:
         throw new AppError('movement-not-possible', 'The item, or where it should go, is archived.')
+      case ledgerErrorCodes.pieceRule:
+        throw new AppError('movement-not-possible', 'This piece belongs to another item since a merge.')
+      case ledgerErrorCodes.halfMerge:
+        throw new AppError(
+          'movement-not-possible',
+          'This is half of a merge, and is not reversed by itself: its pieces are of the other item now.',
+        )
       default:
         throw error
     }
