@@ -1,7 +1,7 @@
 import useSWR from 'swr'
 import { callApi, getJson } from '@/lib/api-client'
 import type { ImportResponse, RecheckImportRequest, RejectChoice } from '@/schemas/import'
-import type { ImportKind } from '@/schemas/import-fields'
+import { hasLengths, type ImportKind } from '@/schemas/import-fields'
 import { isUnderWay } from './use-imports'
 
 const whileBusyMs = 400
@@ -25,7 +25,7 @@ export async function createImport(
 ): Promise<string> {
   const body = new FormData()
   body.set('kind', kind)
-  if (kind !== 'stock') body.set('unit', unit)
+  if (hasLengths(kind)) body.set('unit', unit)
   body.set('file', file)
   const { id } = await callApi<{ id: string }>('POST', '/api/imports', {
     body,

@@ -2,7 +2,7 @@ import type { CatalogueKind } from '@/core/stock/kinds'
 
 /** What a file may bring, kind by kind: the fields a column can be given to, in the order they are offered. */
 
-export const importKinds = ['cutters', 'holders', 'collets', 'extensions', 'stock'] as const
+export const importKinds = ['cutters', 'holders', 'collets', 'extensions', 'stock', 'reorderPoints'] as const
 export type ImportKind = (typeof importKinds)[number]
 
 /** What brings items of each kind. */
@@ -23,6 +23,7 @@ export type ImportFieldType =
   | 'angle'
   | 'count'
   | 'quantity'
+  | 'days'
   | 'money'
   | 'form'
   | 'substrate'
@@ -148,6 +149,19 @@ export const importFields: Readonly<Record<ImportKind, readonly ImportField[]>> 
     { field: 'quantity', label: 'Quantity', type: 'quantity' },
     { field: 'condition', label: 'Condition', type: 'condition' },
   ],
+  reorderPoints: [
+    code,
+    maker,
+    partNumber,
+    { field: 'crib', label: 'Crib', type: 'text' },
+    { field: 'reorderPoint', label: 'Reorder point', type: 'quantity' },
+    { field: 'orderUpTo', label: 'Order up to', type: 'quantity' },
+    { field: 'packSize', label: 'Pack', type: 'quantity' },
+    { field: 'minimumOrder', label: 'Smallest order', type: 'quantity' },
+    { field: 'supplier', label: 'Supplier', type: 'text' },
+    { field: 'supplierPartNumber', label: 'Supplier’s number', type: 'text' },
+    { field: 'leadTimeDays', label: 'Lead time, days', type: 'days' },
+  ],
 }
 
 const byName = new Map(
@@ -164,10 +178,16 @@ export function hasLengthUnit(type: ImportFieldType): boolean {
   return type === 'length' || type === 'diameter' || type === 'distance' || type === 'range'
 }
 
+/** Whether a file of this kind holds lengths, which a bare number has to be told the unit of. */
+export function hasLengths(kind: ImportKind): boolean {
+  return importFields[kind].some(({ type }) => hasLengthUnit(type))
+}
+
 export const importKindLabels: Readonly<Record<ImportKind, string>> = {
   cutters: 'Cutters',
   holders: 'Holders',
   collets: 'Collets',
   extensions: 'Extensions',
   stock: 'Opening stock',
+  reorderPoints: 'Reorder points',
 }

@@ -11,6 +11,7 @@ const examples: [file: string, kind: ImportKind, unit: 'mm' | 'in', items: numbe
   ['holders-one-row.csv', 'holders', 'in', 5],
   ['collets.csv', 'collets', 'mm', 17],
   ['extensions.csv', 'extensions', 'mm', 3],
+  ['reorder-points.csv', 'reorderPoints', 'mm', 6],
   ['opening-stock.csv', 'stock', 'mm', 14],
 ]
 

@@ -2,7 +2,13 @@
 
 import { useId, useState } from 'react'
 import type { ImportResponse, RecheckImportRequest } from '@/schemas/import'
-import { hasLengthUnit, type ImportKind, importField, importFields } from '@/schemas/import-fields'
+import {
+  hasLengths,
+  hasLengthUnit,
+  type ImportKind,
+  importField,
+  importFields,
+} from '@/schemas/import-fields'
 import type { ImportColumn } from '@/schemas/import-mapping'
 import { Button } from '../ui/button'
 import { controlClass } from '../ui/field'
@@ -49,7 +55,7 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
             ? 'What you set here is kept by the shop when the import is committed, and known the next time.'
             : 'How the columns of this file were read.'}
         </p>
-        {found.kind === 'stock' || !onRecheck ? null : <FileUnit unit={unit} onChange={setUnit} />}
+        {!hasLengths(found.kind) || !onRecheck ? null : <FileUnit unit={unit} onChange={setUnit} />}
       </div>
       <table className="border-ink w-full border-t text-left text-[0.9375rem]">
         <thead className="border-ink border-b max-md:hidden">

@@ -8,6 +8,7 @@ const examples = [
   ['collets.csv', 'Collets with their range in one column'],
   ['extensions.csv', 'Extensions'],
   ['opening-stock.csv', 'Opening stock of the inch cutters in crib MAIN'],
+  ['reorder-points.csv', 'Reorder points of the inch cutters in crib MAIN'],
 ] as const
 
 /** Files to try the import with, and to copy headings from. */

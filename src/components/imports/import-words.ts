@@ -1,5 +1,5 @@
 import type { ImportListRow, ImportState } from '@/schemas/import'
-import type { ImportKind } from '@/schemas/import-fields'
+import { hasLengths, type ImportKind } from '@/schemas/import-fields'
 
 export const stateWords: Readonly<Record<ImportState, string>> = {
   reading: 'Being read',
@@ -10,12 +10,14 @@ export const stateWords: Readonly<Record<ImportState, string>> = {
   cancelled: 'Cancelled',
 }
 
-export const kindWords: Readonly<Record<ImportKind, { many: string; page: string }>> = {
-  cutters: { many: 'cutters', page: '/cutters' },
-  holders: { many: 'holders', page: '/holders' },
-  collets: { many: 'collets', page: '/collets' },
-  extensions: { many: 'extensions', page: '/extensions' },
-  stock: { many: 'bins of opening stock', page: '/locations' },
+/** `see` leads to where what was brought is looked at. */
+export const kindWords: Readonly<Record<ImportKind, { page: string; see: string }>> = {
+  cutters: { page: '/cutters', see: 'See the cutters' },
+  holders: { page: '/holders', see: 'See the holders' },
+  collets: { page: '/collets', see: 'See the collets' },
+  extensions: { page: '/extensions', see: 'See the extensions' },
+  stock: { page: '/locations', see: 'See the locations' },
+  reorderPoints: { page: '/reorder-points', see: 'See the reorder points' },
 }
 
 /** On every button that ends an import before its commit. */
@@ -38,7 +40,7 @@ export function formatWords(found: Pick<ImportListRow, 'encoding' | 'delimiter' 
   const words = [
     encodingNames[found.encoding ?? ''],
     delimiterNames[found.delimiter ?? ''],
-    found.kind === 'stock' ? undefined : `bare numbers in ${found.unit === 'in' ? 'inches' : 'millimetres'}`,
+    hasLengths(found.kind) ? `bare numbers in ${found.unit === 'in' ? 'inches' : 'millimetres'}` : undefined,
   ]
   return words.filter(Boolean).join(', ')
 }

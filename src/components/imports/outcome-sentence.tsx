@@ -33,7 +33,7 @@ export function OutcomeSentence({ found }: { found: ImportResponse }) {
         <p className="text-lg font-semibold">Committed: {outcomeWords(found)}.</p>
         <p className="mt-2 flex flex-wrap gap-2">
           <ButtonLink href={words.page} size="compact">
-            {found.kind === 'stock' ? 'See the locations' : `See the ${words.many}`}
+            {words.see}
           </ButtonLink>
           {found.kind === 'stock' ? null : (
             <ButtonLink href="/imports/new" size="compact" variant="quiet">

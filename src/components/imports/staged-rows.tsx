@@ -5,6 +5,7 @@ import { useImportRows } from '@/hooks/use-import-rows'
 import { itemPagePath } from '@/lib/catalogue-paths'
 import { faultSentence } from '@/lib/field-faults'
 import type { ImportResponse, ImportRowResponse, RowOutcome } from '@/schemas/import'
+import type { ImportKind } from '@/schemas/import-fields'
 import { useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { StateSentence } from '../ui/state-sentence'
@@ -102,6 +103,10 @@ const itemKindOf = {
   extensions: 'extension',
 } as const
 
+function isItemKind(kind: ImportKind): kind is keyof typeof itemKindOf {
+  return Object.hasOwn(itemKindOf, kind)
+}
+
 function TakenTable({ rows, look }: { rows: ImportRowResponse[]; look: ValueLook }) {
   return (
     <table className="w-full text-left text-[0.9375rem]">
@@ -120,7 +125,7 @@ function TakenTable({ rows, look }: { rows: ImportRowResponse[]; look: ValueLook
               {row.line}
             </td>
             <td className="font-semibold md:w-52">
-              {row.itemId && look.kind !== 'stock' ? (
+              {row.itemId && isItemKind(look.kind) ? (
                 <Link
                   className="text-accent hover:underline"
                   href={itemPagePath(itemKindOf[look.kind], row.itemId)}

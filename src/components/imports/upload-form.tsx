@@ -4,7 +4,7 @@ import { useRouter, useSearchParams } from 'next/navigation'
 import { type FormEvent, useRef, useState } from 'react'
 import { createImport } from '@/hooks/use-import'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
-import { type ImportKind, importKindLabels, importKinds } from '@/schemas/import-fields'
+import { hasLengths, type ImportKind, importKindLabels, importKinds } from '@/schemas/import-fields'
 import { fileLimitText, importLimits } from '@/schemas/import-limits'
 import { useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
@@ -20,6 +20,7 @@ const kindHints: Readonly<Record<ImportKind, string>> = {
   collets: 'Series and the shanks each takes.',
   extensions: 'Projection, bore and outline.',
   stock: 'What lies in the bins today, once, for items without movements.',
+  reorderPoints: 'When each item is low in each crib, how far to order up, and from whom.',
 }
 
 /** What the file holds, its unit and the file itself; the rest is asked when it has been read. */
@@ -65,7 +66,7 @@ export function UploadForm() {
         onChoose={handleChoose}
         error={failure ? (faults.file ?? faultSentence(failure)) : null}
       />
-      {kind === 'stock' ? null : (
+      {hasLengths(kind) ? (
         <SelectField
           label="Bare numbers are in"
           hint="A unit in a heading (“Dia (in)”), in a column of its own or in a cell goes before this one."
@@ -78,7 +79,7 @@ export function UploadForm() {
           ]}
           className="max-w-md"
         />
-      )}
+      ) : null}
       <div className="flex flex-wrap items-center gap-3">
         <Button type="submit" variant="primary" disabled={isBusy}>
           {isBusy ? 'Uploading …' : 'Upload and check'}

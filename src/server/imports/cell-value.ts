@@ -59,6 +59,7 @@ const readers: Readonly<Record<Exclude<ImportFieldType, 'text'>, Reader>> = {
   },
   count: (text) => readCount(text.replace(/^z\s*=?\s*(?=\d)|(?<=\d)\s*(?:fl|flutes?|z|teeth|rpm)\.?$/gi, '')),
   quantity: (text) => readCount(text.replace(/(?<=\d)\s*(?:pcs?|pieces?|ea|each)\.?$/i, '')),
+  days: (text) => readCount(text.replace(/(?<=\d)\s*(?:d|days?)\.?$/i, '')),
   money: (text, context) => {
     const read = parseMoney(text, { decimals: context.currencyDecimals, decimalComma: context.decimalComma })
     return read.ok ? { kind: 'value', value: read.minor } : problem(read.message)

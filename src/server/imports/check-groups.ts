@@ -1,6 +1,7 @@
 import type { Knex } from 'knex'
 import type { StagedRow } from '../db/stores/import-row-store'
 import { checkItems } from './check-records'
+import { checkReorderPoints } from './check-reorder-points'
 import { checkStock } from './check-stock'
 import type { ImportRow, RowReader } from './row-reader'
 
@@ -11,5 +12,7 @@ export function checkGroups(
   reader: RowReader,
 ): Promise<StagedRow[]> {
   const { kind } = reader.settings
-  return kind === 'stock' ? checkStock(db, groups.flat(), reader) : checkItems(db, kind, groups, reader)
+  if (kind === 'stock') return checkStock(db, groups.flat(), reader)
+  if (kind === 'reorderPoints') return checkReorderPoints(db, groups.flat(), reader)
+  return checkItems(db, kind, groups, reader)
 }

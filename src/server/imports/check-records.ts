@@ -16,7 +16,7 @@ import {
 } from '../db/read-models/import-match'
 import type { StagedRow } from '../db/stores/import-row-store'
 import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
-import type { FlatRecord } from './flat-values'
+import { type FlatRecord, textOf } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
 
 const requestSchemas: Readonly<Record<CatalogueKind, z.ZodType>> = {
@@ -57,8 +57,7 @@ export async function checkItems(
 }
 
 export function keyOf(flat: FlatRecord): ItemKey {
-  const text = (value: unknown) => (typeof value === 'string' ? value : null)
-  return { code: text(flat.code), maker: text(flat.maker), partNumber: text(flat.part_number) }
+  return { code: textOf(flat.code), maker: textOf(flat.maker), partNumber: textOf(flat.part_number) }
 }
 
 /** The item a row means, or why that cannot be said. */

@@ -5,7 +5,7 @@ import { type BinMatch, findImportPlaces } from '../db/read-models/import-places
 import type { StagedRow } from '../db/stores/import-row-store'
 import { keyOf, matchedItem } from './check-records'
 import { givenRecord } from './flat-record'
-import type { FlatRecord } from './flat-values'
+import { type FlatRecord, textOf } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
 
 /**
@@ -32,10 +32,6 @@ export async function checkStock(
     const check = new StockCheck(row, reader, flat, failed)
     return check.staged(matches[at] as KeyMatches, places[at] as BinMatch)
   })
-}
-
-function textOf(value: unknown): string | null {
-  return typeof value === 'string' ? value : null
 }
 
 class StockCheck {

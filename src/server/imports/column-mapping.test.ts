@@ -71,6 +71,25 @@ describe('headings by name', () => {
     ).toEqual(['code', 'noseDiameterMm', 'noseLengthMm', 'bodyDiameterMm', 'bodyLengthMm', null])
   })
 
+  it('it knows the columns of reorder points by the names that shops give them', () => {
+    const headings = [
+      'Item #',
+      'Crib',
+      'Min',
+      'Max Qty',
+      'Pack size',
+      'MOQ',
+      'Vendor',
+      'Vendor P/N',
+      'Lead Time (days)',
+    ]
+    expect(fieldsOf('reorderPoints', headings)).toEqual([
+      ...['code', 'crib', 'reorderPoint', 'orderUpTo', 'packSize', 'minimumOrder'],
+      ...['supplier', 'supplierPartNumber', 'leadTimeDays'],
+    ])
+    expect(fieldsOf('reorderPoints', ['Lead time (weeks)', 'Lead time weeks'])).toEqual([null, null])
+  })
+
   it('it leaves a price in another currency out and says so', () => {
     const [column] = mapColumns(['Price (EUR)'], { ...none, kind: 'cutters' })
     expect([column?.field, column?.note]).toEqual([null, 'This is in EUR; the shop keeps USD.'])

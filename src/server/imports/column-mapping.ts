@@ -106,6 +106,9 @@ function guess(heading: string, { kind, currency }: MappingSources): ImportColum
   if (type === 'money' && name.currency && name.currency !== currency) {
     return { ...column, note: `This is in ${name.currency}; the shop keeps ${currency}.` }
   }
+  if (type === 'days' && name.inBrackets && !/^d(?:ays?)?$/i.test(name.inBrackets)) {
+    return { ...column, note: `This is in ${name.inBrackets}; lead times are kept in days.` }
+  }
   const unit = type && hasLengthUnit(type) ? name.unit : null
   return { ...column, field, unit, origin: 'known' }
 }

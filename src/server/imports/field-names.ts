@@ -105,6 +105,20 @@ const otherNames: Readonly<Record<string, string>> = {
     'quantity, qty, on hand, count, stock, pieces, qty on hand, quantity on hand, pcs, ' +
     'balance, opening stock',
   condition: 'condition, state, status, new used',
+  reorderPoint:
+    'reorder point, rop, reorder, reorder level, reorder at, minimum, minimum stock, minimum quantity, ' +
+    'minimum on hand, minimum level, trigger, low at',
+  orderUpTo:
+    'order up to, order up to level, up to, maximum, maximum stock, maximum quantity, maximum on hand, ' +
+    'maximum level, target, target stock, target level, fill to',
+  packSize:
+    'pack, pack size, package, package quantity, pack quantity, per pack, box, box quantity, multiple, order multiple',
+  minimumOrder: 'minimum order, smallest order, moq, minimum order quantity',
+  supplier: 'supplier, supplier name, vendor, vendor name, buy from, bought from',
+  supplierPartNumber:
+    'supplier number, supplier part number, supplier pn, supplier item number, supplier sku, vendor number, ' +
+    'vendor part number, vendor pn, vendor item number',
+  leadTimeDays: 'lead time, lead time days, lead days, delivery time, delivery days, delivery',
 }
 
 /** Where one name serves two fields of a kind, the field that has it. */

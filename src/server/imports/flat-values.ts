@@ -2,6 +2,11 @@
 export type FlatRecord = Record<string, FlatValue>
 export type FlatValue = string | number | boolean | null | FlatSegment[]
 
+/** The text of a value, null where it is none. */
+export function textOf(value: unknown): string | null {
+  return typeof value === 'string' ? value : null
+}
+
 /** A piece of the outline as it is staged; an extension's has no part. */
 export interface FlatSegment {
   part?: 'nut' | 'holder'

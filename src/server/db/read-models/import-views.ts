@@ -12,6 +12,7 @@ import type { ImportKind } from '@/schemas/import-fields'
 import { listedProblems } from '@/schemas/import-limits'
 import type { ImportColumn } from '@/schemas/import-mapping'
 import type { PageQuery } from '@/schemas/paging'
+import { enumFromDb } from '../enum-case'
 import { type KeyPage, readKeyPage } from '../key-page'
 import type { ImportsRow } from '../row-types'
 
@@ -62,7 +63,7 @@ function listRow(row: JoinedRow): ImportListRow {
   const isRead = row.state !== 'reading'
   return {
     id: row.id,
-    kind: row.kind as ImportKind,
+    kind: enumFromDb(row.kind) as ImportKind,
     state: row.state as ImportState,
     fileName: row.file_name,
     fileSizeBytes: Number(row.file_size_bytes),
@@ -129,10 +130,13 @@ function textOf(value: unknown): string | null {
   return typeof value === 'string' ? value : null
 }
 
-/** What a row is about beside its code: the item's words, or where opening stock goes. */
+/** What a row is about beside its code: the item's words, where opening stock goes, or when it is low in which crib. */
 function rowWords(values: Record<string, unknown>): string | null {
   if (typeof values.quantity === 'number') {
     return `${values.quantity} × ${textOf(values.condition) ?? ''} in ${textOf(values.location) ?? '?'}`
+  }
+  if (typeof values.reorder_point === 'number') {
+    return `${textOf(values.crib) ?? '?'}: low at ${values.reorder_point}, order up to ${values.order_up_to}`
   }
   return textOf(values.description) ?? ([values.maker, values.part_number].filter(Boolean).join(' ') || null)
 }

@@ -59,6 +59,33 @@ export async function listStaleStockLines(trx: Knex, importId: string): Promise<
   return lines(rows)
 }
 
+/** While it is held only this transaction changes reorder points; others read them, and stock moves on. */
+export async function lockReorderPoints(trx: Knex): Promise<void> {
+  await trx.raw('lock table reorder_points in exclusive mode')
+}
+
+/** Lines of reorder points whose point was set or changed since, or whose item, crib or supplier means another by now. */
+export async function listStaleReorderPointLines(trx: Knex, importId: string): Promise<number[]> {
+  const { rows } = await trx.raw(
+    `select row.line from import_rows as row
+        join items on items.id = row.item_id
+        join cribs on cribs.id = (row.field_values ->> 'crib_id')::bigint
+        left join items as of_code on lower(of_code.code) = lower(row.field_values ->> 'code')
+        left join reorder_points as point on point.item_id = row.item_id and point.crib_id = cribs.id
+        left join suppliers on suppliers.id = (row.field_values ->> 'supplier_id')::bigint
+      where row.import_id = ? and row.outcome <> 'rejected' and (
+        items.archived_at is not null
+        or of_code.id is distinct from row.item_id
+        or cribs.code is distinct from row.field_values ->> 'crib'
+        or point.version is distinct from row.item_version
+        or suppliers.archived_at is not null
+        or suppliers.name is distinct from row.field_values ->> 'supplier')
+      order by row.line`,
+    [importId],
+  )
+  return lines(rows)
+}
+
 function lines(rows: { line: number }[]): number[] {
   return rows.map((row) => row.line)
 }
@@ -174,5 +201,34 @@ export async function applyOpeningStock(
       where row.import_id = :importId and row.outcome = 'added' and outside.kind = 'count_adjustment'
       order by row.item_id, row.line`,
     { importId, ...posting },
+  )
+}
+
+const reorderPointColumns = [
+  'reorder_point',
+  'order_up_to',
+  'pack_size',
+  'minimum_order',
+  'supplier_id',
+  'supplier_part_number',
+  'lead_time_days',
+] as const
+
+/** Sets and changes reorder points; alerts and mails follow once a statement, and are one event of this transaction. */
+export async function applyReorderPoints(trx: Knex, importId: string): Promise<void> {
+  await trx.raw(
+    `insert into reorder_points (item_id, crib_id, ${reorderPointColumns.join(', ')})
+      select row.item_id, given.crib_id, ${list('given', reorderPointColumns)}
+      from ${stagedAs('reorder_points')} where row.import_id = ? and row.outcome = 'added'
+      order by row.item_id, given.crib_id`,
+    [importId],
+  )
+  await trx.raw(
+    `update reorder_points as kept
+      set ${reorderPointColumns.map((column) => `${column} = given.${column}`).join(', ')}
+      from ${stagedAs('reorder_points')}
+      where row.import_id = ? and row.outcome = 'changed'
+        and kept.item_id = row.item_id and kept.crib_id = given.crib_id`,
+    [importId],
   )
 }

@@ -3,6 +3,7 @@ import { pipeline } from 'node:stream/promises'
 import type { Knex } from 'knex'
 import * as copyStreams from 'pg-copy-streams'
 import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
+import type { ImportKind } from '@/schemas/import-fields'
 import { withRawConnection } from '../raw-connection'
 import type { OutcomeCounts } from './import-store'
 
@@ -16,6 +17,8 @@ export interface StagedRow {
   fieldValues: object
   changes: FieldChange[]
   problems: RowProblem[]
+  /** What is taken, with a word about it. */
+  warnings?: RowProblem[]
 }
 
 const copyStatement = `copy import_rows
@@ -93,10 +96,10 @@ interface DuplicateKey {
 export async function rejectDuplicates(
   trx: Knex,
   importId: string,
-  kind: 'items' | 'stock',
+  kind: ImportKind,
   headings: { code: string; partNumber: string },
 ): Promise<void> {
-  for (const key of kind === 'stock' ? stockKeys(headings) : itemKeys(headings)) {
+  for (const key of duplicateKeys(kind, headings)) {
     await trx.raw(
       `with staged as (
           select line, ${key.equal} as key from import_rows where import_id = :importId and ${key.where}
@@ -115,6 +118,11 @@ export async function rejectDuplicates(
       { importId, column: key.column, valueField: key.valueField, says: key.says },
     )
   }
+}
+
+function duplicateKeys(kind: ImportKind, headings: { code: string; partNumber: string }): DuplicateKey[] {
+  if (kind === 'stock') return stockKeys(headings)
+  return kind === 'reorderPoints' ? reorderPointKeys(headings) : itemKeys(headings)
 }
 
 const codeKey = `lower(field_values ->> 'code')`
@@ -155,6 +163,18 @@ function stockKeys({ code }: { code: string }): DuplicateKey[] {
       column: code,
       valueField: 'code',
       says: ' gives the same item, bin and condition.',
+    },
+  ]
+}
+
+function reorderPointKeys({ code }: { code: string }): DuplicateKey[] {
+  return [
+    {
+      equal: `(item_id, field_values ->> 'crib_id')`,
+      where: `item_id is not null and field_values ->> 'crib_id' is not null`,
+      column: code,
+      valueField: 'code',
+      says: ' gives the same item and crib.',
     },
   ]
 }

@@ -3,6 +3,7 @@ import type { LengthUnit } from '@/core/units/length-unit'
 import type { ImportState, RejectChoice, RowOutcome, RowProblem } from '@/schemas/import'
 import type { ImportKind } from '@/schemas/import-fields'
 import type { ImportColumn, ImportMapping } from '@/schemas/import-mapping'
+import { enumFromDb, enumToDb } from '../enum-case'
 import type { ImportsRow } from '../row-types'
 
 /** An import as the services and the worker work with it. */
@@ -33,7 +34,7 @@ export interface NewImport {
 export async function createImport(trx: Knex, given: NewImport): Promise<string> {
   const [row] = await trx('imports')
     .insert({
-      kind: given.kind,
+      kind: enumToDb(given.kind),
       unit: given.unit,
       mapping: JSON.stringify(given.mapping),
       file_name: given.fileName,
@@ -229,7 +230,7 @@ export async function listImportFiles(db: Knex): Promise<string[]> {
 function fromRow(row: ImportsRow): ImportRecord {
   return {
     id: row.id,
-    kind: row.kind as ImportKind,
+    kind: enumFromDb(row.kind) as ImportKind,
     state: row.state as ImportState,
     unit: row.unit as LengthUnit,
     mapping: (row.mapping ?? {}) as ImportMapping,

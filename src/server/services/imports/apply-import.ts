@@ -2,15 +2,7 @@ import { columnTarget } from '@/schemas/import-mapping'
 import { type Database, db } from '../../db/connection'
 import { databaseErrorCode } from '../../db/database-errors'
 import { createAuditEntry } from '../../db/stores/audit-store'
-import {
-  applyItems,
-  applyOpeningStock,
-  listStaleLines,
-  listStaleStockLines,
-  lockCatalogue,
-  lockStagedItems,
-  readStagedCells,
-} from '../../db/stores/import-apply-store'
+import { readStagedCells } from '../../db/stores/import-apply-store'
 import { keepMappings } from '../../db/stores/import-mapping-store'
 import {
   countOutcomes,
@@ -31,7 +23,6 @@ import {
 } from '../../db/stores/import-store'
 import { inTransaction } from '../../db/transaction'
 import { checkGroups } from '../../imports/check-groups'
-import { itemKinds } from '../../imports/check-records'
 import { headingKey } from '../../imports/column-mapping'
 import { RowReader } from '../../imports/row-reader'
 import { log } from '../../log'
@@ -39,6 +30,7 @@ import { headingOf } from './check-import'
 import { removeImportFile } from './import-files'
 import { ClaimLost, held, whileAlone } from './import-lock'
 import { importSettings } from './import-settings'
+import { importSteps } from './import-steps'
 
 /**
  * Puts a checked import into the catalogue or the books: checked again under a lock, then all in one transaction, or
@@ -63,8 +55,7 @@ export async function applyImport(importId: string): Promise<void> {
 }
 
 async function apply(trx: Database, found: ImportRecord, claim: ImportClaim): Promise<void> {
-  if (found.kind === 'stock') await lockStagedItems(trx, found.id)
-  else await lockCatalogue(trx)
+  await importSteps[found.kind].lock(trx, found.id)
   const isStale = await checkAgain(trx, found)
   const counts = await countOutcomes(trx, found.id)
   if (counts.rejected > 0 && found.rejects !== 'skip') {
@@ -74,12 +65,7 @@ async function apply(trx: Database, found: ImportRecord, claim: ImportClaim): Pr
     await held(markChecked(trx, claim, counts, { message }))
     return
   }
-  if (found.kind === 'stock') {
-    await applyOpeningStock(trx, found.id, {
-      actorId: found.createdBy,
-      note: `Opening stock, import ${found.id}`,
-    })
-  } else await applyItems(trx, found.id, itemKinds[found.kind])
+  await importSteps[found.kind].apply(trx, found)
   await writeDown(trx, found, counts)
   // Before the rows go: a cancel that comes now waits here for the end, and finds the import committed.
   await held(markCommitted(trx, claim, counts))
@@ -88,8 +74,7 @@ async function apply(trx: Database, found: ImportRecord, claim: ImportClaim): Pr
 
 /** Holds rows whose verdict may have changed against the catalogue once more; true where there were any. */
 async function checkAgain(trx: Database, found: ImportRecord): Promise<boolean> {
-  const stale =
-    found.kind === 'stock' ? await listStaleStockLines(trx, found.id) : await listStaleLines(trx, found.id)
+  const stale = await importSteps[found.kind].listStale(trx, found.id)
   if (stale.length === 0) return false
   const { reading } = await importSettings(found)
   const reader = new RowReader(found.columns, reading)
@@ -98,7 +83,7 @@ async function checkAgain(trx: Database, found: ImportRecord): Promise<boolean> 
     const groups = staged.map((rows) => rows.map((row) => reader.read({ ...row, faults: [] })))
     await replaceImportRows(trx, found.id, await checkGroups(trx, groups, reader))
   }
-  await rejectDuplicates(trx, found.id, found.kind === 'stock' ? 'stock' : 'items', {
+  await rejectDuplicates(trx, found.id, found.kind, {
     code: headingOf(found, found.columns, 'code'),
     partNumber: headingOf(found, found.columns, 'partNumber'),
   })

@@ -135,6 +135,7 @@ class ImportCheck {
     const groups = this.pending
     this.pending = []
     const staged = await checkGroups(db(), groups, reader)
+    for (const row of staged) this.warn(row.warnings ?? [])
     await db().transaction(async (trx) => {
       await held(noteRowsRead(trx, this.claim, this.rowsRead))
       await copyImportRows(trx, this.found.id, staged)
@@ -145,7 +146,7 @@ class ImportCheck {
     const { id, kind } = this.found
     await db().transaction(async (trx) => {
       await held(noteRowsRead(trx, this.claim, this.rowsRead))
-      await rejectDuplicates(trx, id, kind === 'stock' ? 'stock' : 'items', {
+      await rejectDuplicates(trx, id, kind, {
         code: headingOf(this.found, columns, 'code'),
         partNumber: headingOf(this.found, columns, 'partNumber'),
       })
