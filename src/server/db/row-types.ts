@@ -110,6 +110,23 @@ export interface ExtensionsRow {
   grip_start_mm: number | null
 }
 
+export interface FoundChangeRowsRow {
+  found_change_id: string
+  item_id: string
+  before: unknown
+  version: number
+}
+
+export interface FoundChangesRow {
+  id: string
+  actor_id: string
+  kind: string
+  field: string
+  value: unknown
+  changed_at: Date
+  undone_at: Date | null
+}
+
 export interface HolderSegmentsRow {
   item_id: string
   part: string
@@ -433,6 +450,8 @@ export interface Tables {
   cutters: CuttersRow
   extension_segments: ExtensionSegmentsRow
   extensions: ExtensionsRow
+  found_change_rows: FoundChangeRowsRow
+  found_changes: FoundChangesRow
   holder_segments: HolderSegmentsRow
   holders: HoldersRow
   idempotency_keys: IdempotencyKeysRow

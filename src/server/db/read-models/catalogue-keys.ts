@@ -6,6 +6,7 @@ import { type GeometryTable, geometryTables } from '../geometry-tables'
 import { type KeyPage, readAllKeys, readKeyPage, type SortKey } from '../key-page'
 import { whereMatchesSearch } from '../search-predicate'
 import { findKeptOfCode } from '../stores/merge-store'
+import { pocketFilterColumns } from './pocket-figures'
 import { isLowSql } from './stock-summaries'
 
 /** A list as it is asked for: paging, and filters by the name of their field. */
@@ -51,6 +52,16 @@ export async function matchingCatalogue(
 ): Promise<{ matching: Knex.QueryBuilder }> {
   const { matching } = matchingItems(db, kind, query, await readKeptIds(db, kind, query))
   return { matching }
+}
+
+/** The ids and versions of all items a list would show, by id: what it found, and how it was. */
+export async function readFoundVersions(
+  db: Knex,
+  kind: CatalogueKind,
+  query: Omit<CatalogueSelection, 'sort'>,
+): Promise<{ id: string; version: number }[]> {
+  const { matching } = await matchingCatalogue(db, kind, query)
+  return matching.select('items.id', 'items.version').orderBy('items.id')
 }
 
 /** Who searches by the code of an item that was merged means the one that took it in. */
@@ -100,6 +111,8 @@ function sortColumn(table: GeometryTable, field: string): Omit<SortKey, 'isDesce
 }
 
 function geometryColumn(table: GeometryTable, field: string): string {
+  const worked = pocketFilterColumns[field]
+  if (worked) return worked
   return `${table.name}.${field === 'series' && table.hasBore ? 'bore_series' : enumToDb(field)}`
 }
 
@@ -126,7 +139,11 @@ function joinWhatIsAsked(
 }
 
 function geometryFilters(table: GeometryTable): string[] {
-  const fields = table.hasBore ? [...table.fields, 'series', 'boreKind', 'boreDiameterMm'] : table.fields
+  const fields = [
+    ...table.fields,
+    ...(table.hasBore ? ['series', 'boreKind', 'boreDiameterMm'] : []),
+    ...(table.name === 'cutters' ? Object.keys(pocketFilterColumns) : []),
+  ]
   return fields.flatMap((field) => [field, `${field}.min`, `${field}.max`])
 }
 

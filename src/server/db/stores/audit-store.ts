@@ -12,13 +12,21 @@ export interface AuditEntry {
 }
 
 /** Writes down who changed what, in the transaction of the change itself. */
-export async function createAuditEntry(trx: Knex, entry: AuditEntry): Promise<void> {
-  await trx('audit_entries').insert({
-    actor_id: entry.actorId,
-    action: entry.action,
-    entity: entry.entity,
-    entity_id: entry.entityId,
-    before: entry.before === undefined ? null : JSON.stringify(entry.before),
-    after: entry.after === undefined ? null : JSON.stringify(entry.after),
-  })
+export function createAuditEntry(trx: Knex, entry: AuditEntry): Promise<void> {
+  return createAuditEntries(trx, [entry])
+}
+
+/** Many at once, for what changes many. */
+export async function createAuditEntries(trx: Knex, entries: readonly AuditEntry[]): Promise<void> {
+  if (entries.length === 0) return
+  await trx('audit_entries').insert(
+    entries.map((entry) => ({
+      actor_id: entry.actorId,
+      action: entry.action,
+      entity: entry.entity,
+      entity_id: entry.entityId,
+      before: entry.before === undefined ? null : JSON.stringify(entry.before),
+      after: entry.after === undefined ? null : JSON.stringify(entry.after),
+    })),
+  )
 }
