@@ -104,6 +104,9 @@ const cutterNumberFields = [
   'maximumRpm',
 ] as const
 
+/** Worked out for forms that work a straight wall; the list is filtered by them as What fits is. */
+const pocketFigures = ['usableDepthMm', 'endRadiusMm'] as const
+
 export const cutterSortFields = [...itemSortFields, 'form', 'substrate', ...cutterNumberFields] as const
 
 export const cutterListQuerySchema = listQuerySchema(
@@ -111,7 +114,7 @@ export const cutterListQuerySchema = listQuerySchema(
     ...itemListQueryFields,
     form: setFilter(cutterForms),
     substrate: setFilter(substrates),
-    ...numberFilters(cutterNumberFields),
+    ...numberFilters([...cutterNumberFields, ...pocketFigures]),
   },
   cutterSortFields,
 )

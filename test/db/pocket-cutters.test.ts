@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { usableDepth } from '@/core/catalogue/usable-depth'
 import type { FittingCuttersQuery } from '@/schemas/fits'
+import { readCatalogueKeys } from '@/server/db/read-models/catalogue-keys'
 import { readCatalogueRows } from '@/server/db/read-models/catalogue-rows'
 import { readPocketCutterKeys } from '@/server/db/read-models/pocket-cutters'
 import { createCutter } from '../support/catalogue'
@@ -86,6 +87,24 @@ describe('the cutters for a pocket', () => {
 
   test('only those in stock, where so asked', async () => {
     expect(await found({ inStock: 'yes' })).toEqual([])
+  })
+
+  test('the cutters list filtered by the same figures shows the same cutters, none more and none less', async () => {
+    for (const insideCornerRadiusMm of [2, 3, 100])
+      for (const depthMm of [8, 20, 25, 25.001])
+        for (const floorRadiusMm of [undefined, 0, 0.5, 3]) {
+          const query = { insideCornerRadiusMm, depthMm, inStock: 'no' as const, limit: 100 }
+          const asked = floorRadiusMm === undefined ? query : { ...query, floorRadiusMm }
+          const { ids } = await readPocketCutterKeys(database.db, asked, clearanceMm)
+          const listed = await readCatalogueKeys(database.db, 'cutter', {
+            limit: 100,
+            archived: 'no',
+            'cuttingDiameterMm.max': 2 * insideCornerRadiusMm,
+            'usableDepthMm.min': depthMm,
+            'endRadiusMm.max': floorRadiusMm,
+          })
+          expect([...listed.ids].sort(), JSON.stringify(asked)).toEqual([...ids].sort())
+        }
   })
 
   test('the database and the core agree on every cutter and depth', async () => {

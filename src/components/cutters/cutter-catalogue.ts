@@ -54,6 +54,8 @@ export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
     { kind: 'lengthRange', name: 'cuttingDiameterMm', label: 'Cutting diameter' },
     { kind: 'lengthRange', name: 'lengthOfCutMm', label: 'Length of cut', isMore: true },
     { kind: 'lengthRange', name: 'reachLengthMm', label: 'Reach', isMore: true },
+    { kind: 'lengthRange', name: 'usableDepthMm', label: 'Depth of a straight wall', isMore: true },
+    { kind: 'lengthRange', name: 'endRadiusMm', label: 'Radius at the floor', isMore: true },
     { kind: 'lengthRange', name: 'shankDiameterMm', label: 'Shank', isMore: true },
     { kind: 'lengthRange', name: 'cornerRadiusMm', label: 'Corner radius', isMore: true },
     ...itemFilters,

@@ -41,8 +41,13 @@ export function PocketResults({ query }: { query: string }) {
           href={`/cutters?${listQuery(asked)}`}
           className="text-accent inline-flex items-center font-semibold hover:underline pointer-coarse:min-h-11"
         >
-          All cutters that go into the corner, in the cutters list
+          The same cutters in the cutters list
         </Link>
+        <span className="text-ink-soft block max-w-[75ch] text-sm">
+          It shows what is found here by the same measure, to be sorted, narrowed and edited: no thicker than
+          the corner, deep enough before the cutter itself rubs
+          {asked.has('floorRadiusMm') ? ', no rounder than the floor' : ''}.
+        </span>
       </p>
       <Notice kind="caution">
         This looks at the cutter alone, on a straight upright wall: length of cut, or a neck that keeps the
@@ -57,8 +62,11 @@ export function PocketResults({ query }: { query: string }) {
 function listQuery(asked: URLSearchParams): string {
   const query = new URLSearchParams({
     'cuttingDiameterMm.max': decimalText(2 * Number(asked.get('insideCornerRadiusMm')), 0, 9),
+    'usableDepthMm.min': asked.get('depthMm') ?? '',
     sort: '-cuttingDiameterMm',
   })
+  const floorRadiusMm = asked.get('floorRadiusMm')
+  if (floorRadiusMm !== null) query.set('endRadiusMm.max', floorRadiusMm)
   if (asked.get('inStock') === 'yes') query.set('stockState', 'inStock')
   return query.toString()
 }

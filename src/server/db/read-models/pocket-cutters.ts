@@ -3,17 +3,7 @@ import { pocketForms, usableDepthRoundingMm } from '@/core/catalogue/usable-dept
 import type { FittingCuttersQuery } from '@/schemas/fits'
 import { enumToDb } from '../enum-case'
 import { type KeyPage, readKeyPage } from '../key-page'
-
-const length = 'coalesce(cutters.length_of_cut_mm, cutters.flute_length_mm)'
-
-/** As `usableDepth` of the core has it; a test holds the two together. */
-const usableDepthSql = `case when cutters.reach_length_mm > ${length} and coalesce(cutters.neck_taper_half_angle_deg, 0) = 0
-    and cutters.neck_diameter_mm + 2 * ?::double precision <= cutters.cutting_diameter_mm + ${usableDepthRoundingMm}
-    and coalesce(cutters.flute_length_mm, ${length}) <= ${length} + ${usableDepthRoundingMm}
-  then cutters.reach_length_mm else ${length} end`
-
-const cornerRadiusSql = `case cutters.form when 'ball' then cutters.cutting_diameter_mm / 2
-  else coalesce(cutters.corner_radius_mm, 0) end`
+import { endRadiusSql, usableDepthSql, workingLengthSql } from './pocket-figures'
 
 /**
  * One block of the ids of the cutters that could work a pocket: no thicker than its corners, deep enough before they rub,
@@ -31,12 +21,12 @@ export function readPocketCutterKeys(
     .whereRaw(`cutters.cutting_diameter_mm <= ?::double precision + ${usableDepthRoundingMm}`, [
       2 * query.insideCornerRadiusMm,
     ])
-    .whereRaw(`${usableDepthSql} >= ?::double precision - ${usableDepthRoundingMm}`, [
+    .whereRaw(`${usableDepthSql('?::double precision')} >= ?::double precision - ${usableDepthRoundingMm}`, [
       shankClearanceMm,
       query.depthMm,
     ])
   if (query.floorRadiusMm !== undefined) {
-    matching.whereRaw(`${cornerRadiusSql} <= ?::double precision + ${usableDepthRoundingMm}`, [
+    matching.whereRaw(`${endRadiusSql} <= ?::double precision + ${usableDepthRoundingMm}`, [
       query.floorRadiusMm,
     ])
   }
@@ -48,7 +38,7 @@ export function readPocketCutterKeys(
   if (query.q) matching.whereRaw('strpos(items.search_text, lower(?)) > 0', [query.q])
   const sort = [
     { sql: 'cutters.cutting_diameter_mm', isNumber: true, isDescending: true },
-    { sql: `coalesce(cutters.reach_length_mm, ${length})`, isNumber: true, isDescending: false },
+    { sql: workingLengthSql, isNumber: true, isDescending: false },
     { sql: 'cutters.overall_length_mm', isNumber: true, isDescending: false },
   ]
   return readKeyPage(db, matching, { sql: 'items.id' }, sort, query)
