@@ -5,6 +5,8 @@ export interface CribChoice {
   id: string
   code: string
   name: string
+  /** Active members, who get its mail. */
+  members: number
 }
 
 /** The shop's cribs. */

@@ -1,6 +1,6 @@
 import useSWR from 'swr'
 import { getJson } from '@/lib/api-client'
-import type { SupplierResponse } from '@/schemas/reordering'
+import type { SupplierResponse } from '@/schemas/supplier'
 
 /** Whom the shop buys from, by name. */
 export function useSuppliers() {

@@ -73,6 +73,8 @@ export const cribResponseSchema = z.object({
   timeZone: z.string(),
   /** The crib's own root among the locations. */
   locationId: z.string(),
+  /** Active ones; a crib without any writes to crib managers and admins. */
+  members: z.number(),
 })
 export type CribResponse = z.infer<typeof cribResponseSchema>
 

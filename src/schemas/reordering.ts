@@ -1,7 +1,9 @@
 import { z } from 'zod'
 import { catalogueKinds } from '@/core/stock/kinds'
-import { idSchema, lineSchema, optionalLineSchema, versionSchema } from './fields'
+import { bulkLimit } from './catalogue-bulk'
+import { idSchema, optionalLineSchema, versionSchema } from './fields'
 import { listQuerySchema, listResponseSchema, setFilter } from './paging'
+import { leadTimeDaysSchema } from './supplier'
 
 const mostPieces = 1_000_000
 const tooMany = 'More than a million pieces: check the number.'
@@ -14,31 +16,48 @@ function piecesSchema(least: number, missing: string) {
     .max(mostPieces, tooMany)
 }
 
-const leadTimeDaysSchema = z
-  .number('Give the days as a number.')
-  .multipleOf(1, 'Only whole days.')
-  .min(0, 'Less than 0.')
-  .max(3650, 'More than ten years: check the number.')
-
 export const reorderPointParamsSchema = z.object({ itemId: idSchema, cribId: idSchema })
+
+const reorderPointFields = {
+  reorderPoint: piecesSchema(0, 'Give the reorder point.'),
+  orderUpTo: piecesSchema(0, 'Give the order-up-to level.'),
+  packSize: piecesSchema(1, 'Give the pack as a number.').optional(),
+  minimumOrder: piecesSchema(1, 'Give the smallest order as a number.').optional(),
+  supplierId: idSchema.nullable().optional(),
+  supplierPartNumber: optionalLineSchema(200).optional(),
+  leadTimeDays: leadTimeDaysSchema.nullable().optional(),
+  version: versionSchema.optional(),
+}
+
+const isWithinOrderUpTo = ({ reorderPoint, orderUpTo }: { reorderPoint: number; orderUpTo: number }) =>
+  reorderPoint <= orderUpTo
+const aboveOrderUpTo = {
+  path: ['reorderPoint'],
+  message: 'The reorder point is above the order-up-to level.',
+}
 
 /** What is absent stays as it was. With a version, only that version is changed. */
 export const putReorderPointRequestSchema = z
-  .object({
-    reorderPoint: piecesSchema(0, 'Give the reorder point.'),
-    orderUpTo: piecesSchema(0, 'Give the order-up-to level.'),
-    packSize: piecesSchema(1, 'Give the pack as a number.').optional(),
-    minimumOrder: piecesSchema(1, 'Give the smallest order as a number.').optional(),
-    supplierId: idSchema.nullable().optional(),
-    supplierPartNumber: optionalLineSchema(200).optional(),
-    leadTimeDays: leadTimeDaysSchema.nullable().optional(),
-    version: versionSchema.optional(),
-  })
-  .refine(({ reorderPoint, orderUpTo }) => reorderPoint <= orderUpTo, {
-    path: ['reorderPoint'],
-    message: 'The reorder point is above the order-up-to level.',
-  })
+  .object(reorderPointFields)
+  .refine(isWithinOrderUpTo, aboveOrderUpTo)
 export type PutReorderPointRequest = z.output<typeof putReorderPointRequestSchema>
+
+/** Many at once, each as its own PUT would be: all of them or none. */
+export const putReorderPointsRequestSchema = z.object({
+  rows: z
+    .array(
+      z
+        .object({ itemId: idSchema, cribId: idSchema, ...reorderPointFields })
+        .refine(isWithinOrderUpTo, aboveOrderUpTo),
+    )
+    .min(1, 'Name the rows to set.')
+    .max(bulkLimit, `At most ${bulkLimit} rows at once.`)
+    .refine(
+      (rows) => new Set(rows.map(({ itemId, cribId }) => `${itemId}-${cribId}`)).size === rows.length,
+      'A row stands here twice.',
+    ),
+})
+export type PutReorderPointsRequest = z.output<typeof putReorderPointsRequestSchema>
 
 export const reorderPointResponseSchema = z.object({
   itemId: z.string(),
@@ -52,6 +71,8 @@ export const reorderPointResponseSchema = z.object({
   supplierName: z.string().nullable(),
   supplierPartNumber: z.string().nullable(),
   leadTimeDays: z.number().nullable(),
+  /** What may be wrong with it, in a sentence; it is kept all the same. */
+  caution: z.string().nullable(),
 })
 export type ReorderPointResponse = z.infer<typeof reorderPointResponseSchema>
 
@@ -67,10 +88,45 @@ export const reorderPointRowSchema = reorderPointResponseSchema.extend({
 })
 export type ReorderPointRow = z.infer<typeof reorderPointRowSchema>
 
-export const reorderPointListQuerySchema = listQuerySchema(
-  { cribId: idSchema.optional(), itemId: idSchema.optional(), supplierId: idSchema.optional() },
-  [],
-)
+/** The rows as they are now, in the order they were sent. */
+export const putReorderPointsResponseSchema = z.object({ rows: z.array(reorderPointResponseSchema) })
+
+/** `low` at or below the reorder point, `above` it, `out` with nothing on hand. */
+export const reorderStockStates = ['low', 'above', 'out'] as const
+
+/** As a filter, no supplier at all. */
+export const noSupplier = 'none'
+
+const reorderPointFilters = {
+  cribId: idSchema.optional(),
+  itemId: idSchema.optional(),
+  supplierId: z.union([z.literal(noSupplier), idSchema]).optional(),
+  stockState: setFilter(reorderStockStates),
+}
+
+export const reorderPointSortFields = [
+  'itemCode',
+  'description',
+  'cribCode',
+  'onHand',
+  'position',
+  'reorderPoint',
+  'orderUpTo',
+  'packSize',
+  'minimumOrder',
+  'supplierId',
+  'supplierPartNumber',
+  'leadTimeDays',
+] as const
+
+export const reorderPointListQuerySchema = listQuerySchema(reorderPointFilters, reorderPointSortFields)
+export type ReorderPointListQuery = z.output<typeof reorderPointListQuerySchema>
+
+const paging = { limit: true, offset: true, cursor: true } as const
+export const reorderPointExportQuerySchema = reorderPointListQuerySchema.omit(paging)
+export const reorderPointCountsQuerySchema = reorderPointListQuerySchema.omit({ ...paging, sort: true })
+export type ReorderPointSelection = Omit<ReorderPointListQuery, keyof typeof paging>
+
 export const reorderPointListResponseSchema = listResponseSchema(reorderPointRowSchema)
 
 export const alertStates = ['open', 'closed'] as const
@@ -104,23 +160,3 @@ export const alertResponseSchema = z.object({
 })
 export type AlertResponse = z.infer<typeof alertResponseSchema>
 export const alertListResponseSchema = listResponseSchema(alertResponseSchema)
-
-export const createSupplierRequestSchema = z.object({
-  name: lineSchema('Give the supplier a name.', 200),
-  email: z
-    .union([z.literal(''), z.email('This is no e-mail address.').max(254, 'At most 254 characters.')])
-    .transform((text) => (text === '' ? null : text))
-    .nullable()
-    .default(null),
-  leadTimeDays: leadTimeDaysSchema.nullable().default(null),
-})
-export type CreateSupplierRequest = z.output<typeof createSupplierRequestSchema>
-
-export const supplierResponseSchema = z.object({
-  id: z.string(),
-  name: z.string(),
-  email: z.string().nullable(),
-  leadTimeDays: z.number().nullable(),
-})
-export type SupplierResponse = z.infer<typeof supplierResponseSchema>
-export const supplierListResponseSchema = z.object({ rows: z.array(supplierResponseSchema) })

@@ -127,14 +127,3 @@ describe('an alert', () => {
     expect((await crib.remove(address())).status).toBe(404)
   })
 })
-
-describe('a supplier', () => {
-  it('is refused with a taken name and with an address that is none', async () => {
-    const name = uniqueCode('Supplier')
-    await crib.post('/api/suppliers', { name, email: 'desk@supplier.example' })
-    const twice = await crib.post('/api/suppliers', { name: name.toUpperCase() })
-    expect([twice.status, faultPaths(twice)]).toEqual([409, ['name']])
-    const wrong = await crib.post('/api/suppliers', { name: uniqueCode('S'), email: 'not an address' })
-    expect(faultPaths(wrong)).toEqual(['email'])
-  })
-})

@@ -106,11 +106,18 @@ const walk: Record<string, Allowed> = {
   'GET /api/imports/[id]/rejects': keepers,
 
   'GET /api/reorder-points': signedIn,
+  'PUT /api/reorder-points': keepers,
+  'GET /api/reorder-points/counts': signedIn,
+  'GET /api/reorder-points/export': signedIn,
   'PUT /api/reorder-points/[itemId]/[cribId]': keepers,
   'DELETE /api/reorder-points/[itemId]/[cribId]': keepers,
   'GET /api/alerts': signedIn,
   'GET /api/suppliers': signedIn,
   'POST /api/suppliers': keepers,
+  'PATCH /api/suppliers/[id]': keepers,
+  'GET /api/cribs/[id]/members': keepers,
+  'PUT /api/cribs/[id]/members/[userId]': keepers,
+  'DELETE /api/cribs/[id]/members/[userId]': keepers,
 
   'GET /api/first-day': keepers,
   'POST /api/locations/pattern': keepers,

@@ -2,7 +2,8 @@
 
 import { type FormEvent, useState } from 'react'
 import type { ReorderPointChange } from '@/hooks/use-reorder-points'
-import type { ReorderPointRow, SupplierResponse } from '@/schemas/reordering'
+import type { ReorderPointRow } from '@/schemas/reordering'
+import type { SupplierResponse } from '@/schemas/supplier'
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'

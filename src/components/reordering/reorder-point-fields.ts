@@ -1,6 +1,7 @@
 import { parseCount } from '@/core/units/parse-count'
 import type { ReorderPointChange } from '@/hooks/use-reorder-points'
-import type { ReorderPointRow, SupplierResponse } from '@/schemas/reordering'
+import type { ReorderPointRow } from '@/schemas/reordering'
+import type { SupplierResponse } from '@/schemas/supplier'
 
 export type ReorderPointField = keyof ReorderPointChange
 

@@ -1,15 +1,17 @@
 import {
   createSupplierRequestSchema,
+  supplierListQuerySchema,
   supplierListResponseSchema,
   supplierResponseSchema,
-} from '@/schemas/reordering'
+} from '@/schemas/supplier'
 import { route } from '@/server/http/route'
 import { createSupplier, listSuppliers } from '@/server/services/reordering/suppliers'
 
 export const GET = route({
   access: 'see',
+  query: supplierListQuerySchema,
   answer: supplierListResponseSchema,
-  handle: () => listSuppliers(),
+  handle: ({ query }) => listSuppliers(query),
 })
 
 export const POST = route({

@@ -87,12 +87,18 @@ export async function readCribs(db: Knex): Promise<CribResponse[]> {
       join.on('locations.crib_id', 'cribs.id').andOnVal('locations.kind', 'crib')
     })
     .orderByRaw('lower(cribs.code)')
-    .select('cribs.id', 'cribs.code', 'cribs.name', 'cribs.time_zone', { location_id: 'locations.id' })
+    .select('cribs.id', 'cribs.code', 'cribs.name', 'cribs.time_zone', {
+      location_id: 'locations.id',
+      members: db.raw(`(select count(*)::int from crib_members
+        join users on users.id = crib_members.user_id and users.is_active
+        where crib_members.crib_id = cribs.id)`),
+    })
   return rows.map((row) => ({
     id: row.id,
     code: row.code,
     name: row.name,
     timeZone: row.time_zone,
     locationId: row.location_id,
+    members: row.members,
   }))
 }

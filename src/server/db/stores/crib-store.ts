@@ -21,6 +21,12 @@ export async function findCrib(
   return (await db('cribs').where('id', cribId).first('id', 'code', 'name')) ?? null
 }
 
+/** Of these, those that there are. */
+export async function findKnownCribs(db: Knex, ids: readonly string[]): Promise<Set<string>> {
+  const rows: { id: string }[] = await db('cribs').whereIn('id', ids).select('id')
+  return new Set(rows.map(({ id }) => id))
+}
+
 /** The root of a crib among the locations. */
 export async function getCribLocationId(db: Knex, cribId: string): Promise<string> {
   const row = await db('locations').where({ crib_id: cribId, kind: 'crib' }).first('id')

@@ -59,11 +59,6 @@ export async function listStaleStockLines(trx: Knex, importId: string): Promise<
   return lines(rows)
 }
 
-/** While it is held only this transaction changes reorder points; others read them, and stock moves on. */
-export async function lockReorderPoints(trx: Knex): Promise<void> {
-  await trx.raw('lock table reorder_points in exclusive mode')
-}
-
 /** Lines of reorder points whose point was set or changed since, or whose item, crib or supplier means another by now. */
 export async function listStaleReorderPointLines(trx: Knex, importId: string): Promise<number[]> {
   const { rows } = await trx.raw(

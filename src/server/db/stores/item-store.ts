@@ -54,6 +54,12 @@ export interface ItemInBrief {
   isArchived: boolean
 }
 
+/** Of these, of any kind, those that are not archived. */
+export async function findItemsInUse(db: Knex, ids: readonly string[]): Promise<Set<string>> {
+  const rows: { id: string }[] = await db('items').whereIn('id', ids).whereNull('archived_at').select('id')
+  return new Set(rows.map(({ id }) => id))
+}
+
 /** An item of any kind, with geometry or without. */
 export async function findItem(db: Knex, id: string): Promise<ItemInBrief | null> {
   const row = await db('items').where('id', id).first('id', 'code', 'is_tracked_by_piece', 'archived_at')

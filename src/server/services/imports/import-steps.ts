@@ -8,10 +8,10 @@ import {
   listStaleReorderPointLines,
   listStaleStockLines,
   lockCatalogue,
-  lockReorderPoints,
   lockStagedItems,
 } from '../../db/stores/import-apply-store'
 import type { ImportRecord } from '../../db/stores/import-store'
+import { lockReorderPoints } from '../../db/stores/reorder-point-store'
 import { itemKinds } from '../../imports/check-records'
 
 /** What a commit does that differs from kind to kind. */

@@ -10,7 +10,7 @@ import {
   type ItemInCrib,
   putReorderPoint as writeReorderPoint,
 } from '../../db/stores/reorder-point-store'
-import { findSupplier } from '../../db/stores/supplier-store'
+import { findUsableSuppliers } from '../../db/stores/supplier-store'
 import { inTransaction } from '../../db/transaction'
 
 /** Sets when an item is low in a crib. Alerts and their mails follow in the same transaction, by the database itself. */
@@ -50,7 +50,7 @@ async function refuseUnknown(
   const item = await findItem(trx, itemId)
   if (!item || item.isArchived) throw new AppError('not-found', 'There is no such item in use.')
   if (!(await findCrib(trx, cribId))) throw new AppError('not-found', 'There is no such crib.')
-  if (supplierId && !(await findSupplier(trx, supplierId))) {
+  if (supplierId && !(await findUsableSuppliers(trx, [supplierId])).has(supplierId)) {
     const message = 'There is no such supplier.'
     throw new AppError('impossible', message, { errors: [{ path: 'supplierId', message }] })
   }
