@@ -1,11 +1,14 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import type { SpeedLimits } from '@/core/speeds/speed-limit'
 import {
   ballSpeedAddress,
   ballSpeedFields,
   draftFromAddress,
+  picksFromAddress,
   readBallSpeedDraft,
   type TypingSettings,
+  withCutter,
   withTyped,
   workedOutText,
 } from './ball-speed-draft'
@@ -108,11 +111,43 @@ describe('a ball-end speed as it is typed', () => {
         fc.boolean(),
         (given, unit, decimalComma) => {
           const settings = { unit, decimalComma }
-          const draft = draftOf(ballSpeedAddress(given), settings)
+          const address = ballSpeedAddress(given, { cutter: '12', holder: null })
+          expect(picksFromAddress(new URLSearchParams(address))).toEqual({ cutter: '12', holder: null })
+          const draft = draftOf(address, settings)
           expect(readBallSpeedDraft(draft, settings).values).toEqual(given)
         },
       ),
     )
+  })
+
+  it('is capped by the least of the spindle typed and the holder and cutter picked, and names it', () => {
+    const draft = draftOf('cuttingDiameterMm=6&depthOfCutMm=0.3&spindleRpm=30000&maximumRpm=24000')
+    const capped = (picked: SpeedLimits) => {
+      const { answer, limit, values } = readBallSpeedDraft(draft, inMm, picked)
+      expect(values.maximumRpm).toBe(24_000)
+      return [answer?.spindleRpm, limit?.part]
+    }
+    expect(capped({})).toEqual([24_000, 'spindle'])
+    expect(capped({ holder: 18_000, cutter: 20_000 })).toEqual([18_000, 'holder'])
+    expect(capped({ holder: null, cutter: 20_000 })).toEqual([20_000, 'cutter'])
+    expect(capped({ holder: 30_000 })).toEqual([24_000, 'spindle'])
+  })
+
+  it('takes the end of a cutter picked: a ball’s radius stays blank', () => {
+    const draft = draftOf('cuttingDiameterMm=6&depthOfCutMm=0.3')
+    const ends = (cutter: Parameters<typeof withCutter>[1]) => {
+      const { values } = readBallSpeedDraft(withCutter(draft, cutter, inInches), inInches)
+      return [values.cuttingDiameterMm, values.cornerRadiusMm]
+    }
+    expect(ends({ form: 'ball', cuttingDiameterMm: 12.7, cornerRadiusMm: 6.35 })).toEqual([12.7, undefined])
+    expect(ends({ form: 'cornerRadius', cuttingDiameterMm: 10, cornerRadiusMm: 0.5 })).toEqual([10, 0.5])
+  })
+
+  it('takes no id from an address but plain ones', () => {
+    expect(picksFromAddress(new URLSearchParams('cutter=1%20or%201&holder=-2'))).toEqual({
+      cutter: null,
+      holder: null,
+    })
   })
 
   it('takes nothing from an address but plain numbers', () => {

@@ -5,6 +5,7 @@ import {
 } from '@/core/ball-end/ball-speed-answer'
 import { stepoverForScallopMm } from '@/core/ball-end/scallop'
 import { CoreInputError } from '@/core/core-input-error'
+import { leastSpeedLimit, type SpeedLimit, type SpeedLimits } from '@/core/speeds/speed-limit'
 import { decimalText } from '@/core/units/decimal-text'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { mmPerInch } from '@/core/units/length-unit'
@@ -52,6 +53,8 @@ export interface BallSpeedReading {
   request: BallSpeedRequest | null
   answer: BallSpeedAnswer | null
   faults: Partial<Record<BallSpeedField, string>>
+  /** What caps the speed: the spindle as it was typed, or the holder or cutter picked. */
+  limit: SpeedLimit | null
   /** Every field that could be read, for the address bar. */
   values: Partial<Record<BallSpeedField, number>>
 }
@@ -91,10 +94,39 @@ export function draftFromAddress(params: URLSearchParams, settings: TypingSettin
   ) as BallSpeedDraft
 }
 
+/** Ids of what was picked from the crib, by the names the address bar has. */
+export interface BallSpeedPicks {
+  cutter: string | null
+  holder: string | null
+}
+
+export function picksFromAddress(params: URLSearchParams): BallSpeedPicks {
+  const idOf = (name: string) => {
+    const text = params.get(name)
+    return text !== null && /^\d{1,18}$/.test(text) ? text : null
+  }
+  return { cutter: idOf('cutter'), holder: idOf('holder') }
+}
+
 /** The address of what was read, in the units of the API, so that it means the same to whoever opens it. */
-export function ballSpeedAddress(values: BallSpeedReading['values']): string {
+export function ballSpeedAddress(values: BallSpeedReading['values'], picks: BallSpeedPicks): string {
   const entries = Object.entries(values).map(([field, value]) => [field, decimalText(value, 0, 9)])
-  return new URLSearchParams(entries).toString()
+  const picked = Object.entries(picks).filter(([, id]) => id !== null)
+  return new URLSearchParams([...entries, ...picked]).toString()
+}
+
+/** The draft with the end of a cutter picked from the crib; a ball's radius stays blank, as it is typed. */
+export function withCutter(
+  draft: BallSpeedDraft,
+  cutter: { form: string; cuttingDiameterMm: number; cornerRadiusMm: number | null },
+  settings: TypingSettings,
+): BallSpeedDraft {
+  const { form, cuttingDiameterMm, cornerRadiusMm } = cutter
+  return {
+    ...draft,
+    cuttingDiameterMm: valueText('cuttingDiameterMm', cuttingDiameterMm, settings),
+    cornerRadiusMm: form === 'ball' ? '' : valueText('cornerRadiusMm', cornerRadiusMm ?? 0, settings),
+  }
 }
 
 /** The draft after a field was typed in; its partner becomes the one that is worked out. */
@@ -103,8 +135,15 @@ export function withTyped(draft: BallSpeedDraft, field: BallSpeedField, text: st
   return { ...draft, [field]: text, ...(partner ? { [partner]: '' } : {}) }
 }
 
-/** Reads every field, works the answer out, and says of each field what is wrong with it. */
-export function readBallSpeedDraft(draft: BallSpeedDraft, settings: TypingSettings): BallSpeedReading {
+/**
+ * Reads every field, works the answer out, and says of each field what is wrong with it. `picked` has the highest speeds
+ * of the holder and cutter picked from the crib; the spindle's is typed.
+ */
+export function readBallSpeedDraft(
+  draft: BallSpeedDraft,
+  settings: TypingSettings,
+  picked: SpeedLimits = {},
+): BallSpeedReading {
   const values: BallSpeedReading['values'] = {}
   const faults: BallSpeedReading['faults'] = {}
   for (const field of ballSpeedFields) {
@@ -113,20 +152,24 @@ export function readBallSpeedDraft(draft: BallSpeedDraft, settings: TypingSettin
     if (typeof read === 'number') values[field] = read
     else faults[field] = read.message
   }
-  const { cuttingDiameterMm, depthOfCutMm, tiltDeg = 0, scallopHeightMm, ...rest } = values
+  const { cuttingDiameterMm, depthOfCutMm, tiltDeg = 0, scallopHeightMm, maximumRpm, ...rest } = values
+  // A limit of nothing is left to the calculation, which says so at its field.
+  const limit = maximumRpm === 0 ? null : leastSpeedLimit({ ...picked, spindle: maximumRpm ?? null })
   if (cuttingDiameterMm === undefined) faults.cuttingDiameterMm ??= 'Enter the diameter of the ball.'
   if (depthOfCutMm === undefined) faults.depthOfCutMm ??= 'Enter the depth of cut.'
   if (cuttingDiameterMm === undefined || depthOfCutMm === undefined || Object.keys(faults).length > 0) {
-    return { request: null, answer: null, faults, values }
+    return { request: null, answer: null, faults, limit, values }
   }
   try {
     const request: BallSpeedRequest = { cuttingDiameterMm, depthOfCutMm, tiltDeg, ...rest }
+    const cap = limit?.rpm ?? maximumRpm
+    if (cap !== undefined) request.maximumRpm = cap
     if (scallopHeightMm !== undefined) request.stepoverMm = stepoverForScallopMm(request, scallopHeightMm)
-    return { request, answer: ballSpeedAnswer(request), faults, values }
+    return { request, answer: ballSpeedAnswer(request), faults, limit, values }
   } catch (error) {
     if (!(error instanceof CoreInputError)) throw error
     const field = ballSpeedFields.find((candidate) => candidate === error.path) ?? 'cuttingDiameterMm'
-    return { request: null, answer: null, faults: { [field]: error.message }, values }
+    return { request: null, answer: null, faults: { [field]: error.message }, limit, values }
   }
 }
 

@@ -10,6 +10,7 @@ import { useShop } from '../layout/shop-context'
 import { LengthField } from '../ui/length-field'
 import { TextField } from '../ui/text-field'
 import { MaterialSpeeds } from './material-speeds'
+import { CutterPick, HolderPick } from './picked-limits'
 import { RangeField } from './range-field'
 
 /** What is cut, how the tool leans, how fast it turns, and how far apart its passes lie. */
@@ -21,6 +22,7 @@ export function BallSpeedForm({ ballSpeed }: { ballSpeed: BallSpeed }) {
       onSubmit={(event) => event.preventDefault()}
     >
       <Group title="The tool">
+        <CutterPick ballSpeed={ballSpeed} />
         <Length ballSpeed={ballSpeed} field="cuttingDiameterMm" label="Diameter" symbol="DC" isRequired />
         <Length
           ballSpeed={ballSpeed}
@@ -50,15 +52,18 @@ export function BallSpeedForm({ ballSpeed }: { ballSpeed: BallSpeed }) {
       <Group title="The speed" note="Type either; the other is worked out.">
         <Plain ballSpeed={ballSpeed} field="spindleRpm" label="Spindle speed" symbol="n · rpm" />
         <Speed ballSpeed={ballSpeed} />
+        <MaterialSpeeds ballSpeed={ballSpeed} />
+      </Group>
+      <Group title="The limits">
         <Plain
           ballSpeed={ballSpeed}
           field="maximumRpm"
           label="Spindle limit"
           symbol="rpm"
-          hint="The least of spindle, holder and cutter"
+          hint="What the machine’s spindle may turn"
           className="col-span-2"
         />
-        <MaterialSpeeds ballSpeed={ballSpeed} />
+        <HolderPick ballSpeed={ballSpeed} />
       </Group>
       <Group title="The surface" note="Type either; the other is worked out.">
         <Length ballSpeed={ballSpeed} field="stepoverMm" label="Stepover" symbol="ae" />

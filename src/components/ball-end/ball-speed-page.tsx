@@ -2,6 +2,7 @@
 
 import { CircleCheck, TriangleAlert } from 'lucide-react'
 import type { BallSpeedAnswer, BallSpeedRequest } from '@/core/ball-end/ball-speed-answer'
+import type { SpeedLimit } from '@/core/speeds/speed-limit'
 import { useBallSpeed } from '@/hooks/use-ball-speed'
 import { formatLength } from '@/lib/format-length'
 import { PageHeading } from '../layout/page-heading'
@@ -32,7 +33,12 @@ function BallSpeedSheet() {
         <div className="flex min-w-0 flex-col gap-4 lg:col-start-2">
           {fault ? <Fault sentence={fault} hasEarlier={answer !== null} /> : null}
           {request && answer ? (
-            <Answer request={request} answer={answer} isEarlier={fault !== undefined} />
+            <Answer
+              request={request}
+              answer={answer}
+              limit={ballSpeed.answered.limit}
+              isEarlier={fault !== undefined}
+            />
           ) : null}
         </div>
         <div className="lg:col-start-1 lg:row-span-2 lg:row-start-1">
@@ -67,14 +73,16 @@ function Fault({ sentence, hasEarlier }: { sentence: string; hasEarlier: boolean
 function Answer({
   request,
   answer,
+  limit,
   isEarlier,
 }: {
   request: BallSpeedRequest
   answer: BallSpeedAnswer
+  limit: SpeedLimit | null
   isEarlier: boolean
 }) {
   const { unit } = useShop()
-  const verdict = ballSpeedVerdict(request, answer, unit)
+  const verdict = ballSpeedVerdict(request, answer, unit, limit)
   return (
     <>
       {isEarlier ? null : <Verdict verdict={verdict} />}

@@ -1,12 +1,18 @@
 import { describe, expect, it } from 'vitest'
 import { type BallSpeedRequest, ballSpeedAnswer } from '@/core/ball-end/ball-speed-answer'
+import type { LimitingPart } from '@/core/speeds/speed-limit'
 import { ballSpeedVerdict } from './ball-speed-verdict'
 
 const ball: BallSpeedRequest = { cuttingDiameterMm: 6, depthOfCutMm: 0.3, tiltDeg: 0 }
 
-function verdictOf(change: Partial<BallSpeedRequest>, unit: 'mm' | 'in' = 'mm') {
+function verdictOf(
+  change: Partial<BallSpeedRequest>,
+  unit: 'mm' | 'in' = 'mm',
+  part: LimitingPart = 'spindle',
+) {
   const request = { ...ball, ...change }
-  return ballSpeedVerdict(request, ballSpeedAnswer(request), unit)
+  const limit = request.maximumRpm == null ? null : { part, rpm: request.maximumRpm }
+  return ballSpeedVerdict(request, ballSpeedAnswer(request), unit, limit)
 }
 
 describe('the verdict on a ball-end speed', () => {
@@ -34,11 +40,11 @@ describe('the verdict on a ball-end speed', () => {
     )
   })
 
-  it('says what the limit costs, by the speed that was asked for', () => {
-    const [remark] = verdictOf({ wantedSpeedMPerMin: 200, maximumRpm: 18_000 }).remarks
-    expect(remark).toBe('200 m/min would need more than the limit of 18\u00a0000 rpm.')
+  it('says whose limit costs what, by the speed that was asked for', () => {
+    const [remark] = verdictOf({ wantedSpeedMPerMin: 200, maximumRpm: 18_000 }, 'mm', 'holder').remarks
+    expect(remark).toBe('200 m/min would need more than the holder’s limit of 18\u00a0000 rpm.')
     expect(verdictOf({ spindleRpm: 20_000, maximumRpm: 18_000 }).remarks[0]).toBe(
-      '20\u00a0000 rpm is over the limit, so 18\u00a0000 rpm is reckoned with.',
+      '20\u00a0000 rpm is over the spindle’s limit, so 18\u00a0000 rpm is reckoned with.',
     )
   })
 

@@ -1,9 +1,11 @@
 import type { BallSpeedAnswer, BallSpeedRequest } from '@/core/ball-end/ball-speed-answer'
 import { isBallEnd } from '@/core/ball-end/corner-diameter'
+import type { SpeedLimit } from '@/core/speeds/speed-limit'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { formatAngle } from '@/lib/format-angle'
 import { formatLength } from '@/lib/format-length'
 import { formatRpm, formatSpeed } from '@/lib/format-speed'
+import { limitName } from '@/lib/speed-limit-words'
 
 export interface BallSpeedVerdict {
   kind: 'holds' | 'caution'
@@ -13,13 +15,14 @@ export interface BallSpeedVerdict {
   remarks: string[]
 }
 
-/** What the answer comes to, in the person's unit. */
+/** What the answer comes to, in the person's unit. `limit` is what caps the spindle speed. */
 export function ballSpeedVerdict(
   request: BallSpeedRequest,
   answer: BallSpeedAnswer,
   unit: LengthUnit,
+  limit: SpeedLimit | null,
 ): BallSpeedVerdict {
-  const remarks = [limitRemark(request, answer, unit), tipRemark(answer), deepRemark(request)].filter(
+  const remarks = [limitRemark(request, answer, unit, limit), tipRemark(answer), deepRemark(request)].filter(
     (remark) => remark !== null,
   )
   return {
@@ -63,12 +66,17 @@ function tipRemark(answer: BallSpeedAnswer): string | null {
   return `The dead tip is in the cut and rubs: lean the tool more than ${formatAngle(tiltToClearTipDeg)} to lift it out${more}.`
 }
 
-function limitRemark(request: BallSpeedRequest, answer: BallSpeedAnswer, unit: LengthUnit): string | null {
-  if (!answer.spindleLimited || answer.speedMPerMin === null || answer.spindleRpm === null) return null
-  const limit = formatRpm(answer.spindleRpm)
+function limitRemark(
+  request: BallSpeedRequest,
+  answer: BallSpeedAnswer,
+  unit: LengthUnit,
+  limit: SpeedLimit | null,
+): string | null {
+  if (!answer.spindleLimited || answer.speedMPerMin === null || limit === null) return null
+  const cap = formatRpm(limit.rpm)
   return request.wantedSpeedMPerMin == null
-    ? `${formatRpm(request.spindleRpm ?? 0)} is over the limit, so ${limit} is reckoned with.`
-    : `${formatSpeed(request.wantedSpeedMPerMin, unit)} would need more than the limit of ${limit}.`
+    ? `${formatRpm(request.spindleRpm ?? 0)} is over ${limitName(limit)}, so ${cap} is reckoned with.`
+    : `${formatSpeed(request.wantedSpeedMPerMin, unit)} would need more than ${limitName(limit)} of ${cap}.`
 }
 
 function deepRemark({ cuttingDiameterMm, cornerRadiusMm, depthOfCutMm }: BallSpeedRequest): string | null {

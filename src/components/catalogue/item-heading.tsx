@@ -31,7 +31,7 @@ export function ItemHeading<Row extends CatalogueRow>({
           <Link
             href={cataloguePaths[row.kind]}
             prefetch={false}
-            className="text-accent inline-flex items-center hover:underline pointer-coarse:min-h-11"
+            className="text-accent inline-flex min-h-6 items-center hover:underline pointer-coarse:min-h-11"
           >
             {definition.title}
           </Link>

@@ -2,26 +2,37 @@
 
 import Link from 'next/link'
 import { useState } from 'react'
+import { HolderChoice } from '@/components/ball-end/picked-limits'
 import { cellClass, headingCellClass, ItemSection } from '@/components/catalogue/item-section'
 import { SectionState } from '@/components/catalogue/section-state'
 import { useShop } from '@/components/layout/shop-context'
 import { Notice } from '@/components/ui/notice'
 import { TextField } from '@/components/ui/text-field'
+import { leastSpeedLimit, type SpeedLimit, type SpeedLimits } from '@/core/speeds/speed-limit'
 import { type SpindleRange, spindleRange } from '@/core/speeds/spindle-range'
 import { holeToolForms } from '@/core/tooling'
 import { parseCount } from '@/core/units/parse-count'
+import { useReachItem } from '@/hooks/use-reach-items'
 import { useStartingSpeeds } from '@/hooks/use-starting-speeds'
 import { substrateNames } from '@/lib/cutter-words'
 import { formatRpm, formatSpeedRange } from '@/lib/format-speed'
+import { limitName, speedLimitSentence } from '@/lib/speed-limit-words'
 import type { CutterResponse } from '@/schemas/cutter'
 import type { StartingSpeed } from '@/schemas/starting-speed'
 
 /** What the shop's table of starting speeds means for this cutter, within what it and its holder may turn. */
 export function CutterSpeedsSection({ cutter }: { cutter: CutterResponse }) {
   const { rows, error, isLoading, refresh } = useStartingSpeeds()
+  const { unit } = useShop()
   const [typed, setTyped] = useState('')
-  const limit = typed.trim() === '' ? null : parseCount(typed)
-  const limitRpm = limit?.ok && limit.count > 0 ? limit.count : null
+  const [holderId, setHolderId] = useState<string | null>(null)
+  const { row: holder, error: holderError } = useReachItem('holder', holderId)
+  const spindle = typed.trim() === '' ? null : parseCount(typed)
+  const limits: SpeedLimits = {
+    spindle: spindle?.ok && spindle.count > 0 ? spindle.count : null,
+    holder: holder?.maximumRpm ?? null,
+    cutter: cutter.maximumRpm,
+  }
   const isHoleTool = holeToolForms.some((form) => form === cutter.form)
   const shown = rows.filter((row) => cutter.substrate === null || row.substrate === cutter.substrate)
   return (
@@ -44,20 +55,27 @@ export function CutterSpeedsSection({ cutter }: { cutter: CutterResponse }) {
         <SectionState sentence="Loading the starting speeds …" />
       ) : (
         <div className="flex flex-col gap-3 pt-3">
-          <div className="flex flex-wrap items-end gap-x-8 gap-y-2">
+          <div className="grid items-start gap-x-8 gap-y-2 sm:grid-cols-[12rem_minmax(0,26rem)]">
             <TextField
-              label="Limit of spindle and holder"
+              label="Spindle limit"
               symbol="rpm"
               inputMode="numeric"
               autoComplete="off"
-              className="w-64"
               value={typed}
               onChange={(event) => setTyped(event.target.value)}
-              error={limit && !limit.ok ? limit.message : null}
+              error={spindleFault(spindle)}
             />
-            <p className="max-w-[60ch] pb-2">{limitSentence(cutter)}</p>
+            <HolderChoice
+              holder={{ id: holderId, row: holder, error: holderError }}
+              unit={unit}
+              onPick={setHolderId}
+            />
           </div>
-          <SpeedTable cutter={cutter} rows={shown} limitRpm={limitRpm} />
+          <p className="max-w-[75ch]" role="status">
+            {speedLimitSentence(limits)}
+            {cutterRemarks(cutter)}
+          </p>
+          <SpeedTable cutter={cutter} rows={shown} limit={leastSpeedLimit(limits)} />
           <Notice kind="caution">
             These are where a cut may start, at the full diameter; not advice and not a limit. The tool
             maker’s speeds, the holder’s limit and the shop’s rules go first. Closed guard, eye protection.
@@ -68,25 +86,27 @@ export function CutterSpeedsSection({ cutter }: { cutter: CutterResponse }) {
   )
 }
 
-function limitSentence({ maximumRpm, substrate, form }: CutterResponse): string {
-  const limit =
-    maximumRpm === null
-      ? 'The catalogue has no highest speed (RPMX) for this cutter.'
-      : `Held to this cutter’s highest speed, ${formatRpm(maximumRpm)}.`
+function spindleFault(spindle: ReturnType<typeof parseCount> | null): string | null {
+  if (spindle === null) return null
+  if (!spindle.ok) return spindle.message
+  return spindle.count > 0 ? null : 'A spindle that stands still limits nothing: enter more than 0.'
+}
+
+function cutterRemarks({ substrate, form }: CutterResponse): string {
   const made = substrate === null ? ' What it is made of is not known, so both are listed.' : ''
   const ball =
     form === 'ball' ? ' A ball in a shallow cut runs on less than its diameter and may turn faster.' : ''
-  return `${limit}${made}${ball}`
+  return `${made}${ball}`
 }
 
 function SpeedTable({
   cutter,
   rows,
-  limitRpm,
+  limit,
 }: {
   cutter: CutterResponse
   rows: StartingSpeed[]
-  limitRpm: number | null
+  limit: SpeedLimit | null
 }) {
   const { unit } = useShop()
   if (rows.length === 0) return <p>The shop’s table has no speed for what this cutter is made of.</p>
@@ -116,9 +136,7 @@ function SpeedTable({
               </th>
               <td className={`${cellClass} text-right whitespace-nowrap`}>{formatSpeedRange(row, unit)}</td>
               <td className={`${cellClass} text-right`}>
-                <SpindleWords
-                  range={spindleRange(cutter.cuttingDiameterMm, row, [cutter.maximumRpm, limitRpm])}
-                />
+                <SpindleWords range={spindleRange(cutter.cuttingDiameterMm, row, limit?.rpm)} limit={limit} />
               </td>
             </tr>
           ))}
@@ -128,12 +146,12 @@ function SpeedTable({
   )
 }
 
-function SpindleWords({ range }: { range: SpindleRange }) {
-  if (range.limited === 'all') {
+function SpindleWords({ range, limit }: { range: SpindleRange; limit: SpeedLimit | null }) {
+  if (range.limited === 'all' && limit) {
     return (
       <>
         <span className="font-semibold">{formatRpm(range.highRpm)}</span>
-        <span className="text-ink-soft block text-sm">the limit; slower than the range</span>
+        <span className="text-ink-soft block text-sm">{limitName(limit)}; slower than the range</span>
       </>
     )
   }
@@ -142,8 +160,8 @@ function SpindleWords({ range }: { range: SpindleRange }) {
       <span className="font-semibold">
         {formatRpm(range.lowRpm).replace(' rpm', '')} to {formatRpm(range.highRpm)}
       </span>
-      {range.limited === 'high' ? (
-        <span className="text-ink-soft block text-sm">held to the limit</span>
+      {range.limited === 'high' && limit ? (
+        <span className="text-ink-soft block text-sm">held to {limitName(limit)}</span>
       ) : null}
     </>
   )

@@ -13,7 +13,7 @@ export interface ItemPickerProps<Slot extends ToolSlot> {
   slot: Slot
   label: string
   unit: LengthUnit
-  onPick: (id: string) => void
+  onPick: (id: string, row: CatalogueTypes[Slot]['row']) => void
   /** Narrows what is offered, and says so. */
   filter?: Readonly<Record<string, string>>
   filterNote?: string | null
@@ -35,7 +35,7 @@ export function ItemPicker<Slot extends ToolSlot>(props: ItemPickerProps<Slot>) 
 
   function pick(row: CatalogueTypes[Slot]['row'] | undefined) {
     if (!row) return
-    onPick(row.id)
+    onPick(row.id, row)
     setText('')
     setIsOpen(false)
   }

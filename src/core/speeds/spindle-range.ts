@@ -14,9 +14,9 @@ export interface SpindleRange {
 }
 
 /**
- * The spindle speeds at which a diameter runs within a range of cutting speed, held to the least of the limits given.
+ * The spindle speeds at which a diameter runs within a range of cutting speed, held to the limit given.
  *
- * Shapes     `limitsRpm`: what is known of cutter, holder and spindle; null and absent limits are left out.
+ * Shapes     `limitRpm`: the least of what is known of spindle, holder and cutter; absent where nothing is.
  * Units      Millimetres and m/min in, revolutions a minute out.
  * Result     lowRpm <= highRpm; both the limit where even the low end is above it.
  * Errors     CoreInputError `not-finite`, `not-positive`, `too-large`, `out-of-range` where low is above high.
@@ -24,19 +24,18 @@ export interface SpindleRange {
  * Tolerance  As spindleRpmForSpeed.
  *
  * @example
- * spindleRange(10, { lowMPerMin: 31.41592653589793, highMPerMin: 62.83185307179586 }, [1500]) // => { lowRpm: 1000, highRpm: 1500, limited: 'high' }
+ * spindleRange(10, { lowMPerMin: 31.41592653589793, highMPerMin: 62.83185307179586 }, 1500) // => { lowRpm: 1000, highRpm: 1500, limited: 'high' }
  */
 export function spindleRange(
   diameterMm: number,
   range: SpeedRange,
-  limitsRpm: readonly (number | null | undefined)[] = [],
+  limitRpm = Number.POSITIVE_INFINITY,
 ): SpindleRange {
   if (range.lowMPerMin > range.highMPerMin) {
     throw new CoreInputError('out-of-range', 'lowMPerMin', 'The lower speed is above the higher.')
   }
   const lowRpm = spindleRpmForSpeed(diameterMm, range.lowMPerMin)
   const highRpm = spindleRpmForSpeed(diameterMm, range.highMPerMin)
-  const limitRpm = Math.min(...limitsRpm.filter((limit) => limit != null))
   if (highRpm <= limitRpm) return { lowRpm, highRpm, limited: 'no' }
   return {
     lowRpm: Math.min(lowRpm, limitRpm),
