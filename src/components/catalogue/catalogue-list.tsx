@@ -1,7 +1,6 @@
 'use client'
 
 import Link from 'next/link'
-import { useEffect, useRef } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { useCatalogueRows } from '@/hooks/use-catalogue-rows'
@@ -12,6 +11,7 @@ import { CatalogueState } from './catalogue-state'
 import { type CatalogueView, queryParams } from './catalogue-view'
 import { placeCodes } from './columns'
 import { StockWord } from './stock-word'
+import { useEndReached } from './use-end-reached'
 
 export interface CatalogueListProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
@@ -87,25 +87,4 @@ function ListRow({ row, facts }: { row: CatalogueRow; facts: string }) {
       {source ? <span className="text-ink-soft col-span-2 truncate text-sm">{source}</span> : null}
     </Link>
   )
-}
-
-function useEndReached(isWatching: boolean, onReach: () => void) {
-  const end = useRef<HTMLDivElement>(null)
-  const latest = useRef(onReach)
-  useEffect(() => {
-    latest.current = onReach
-  })
-  useEffect(() => {
-    const element = end.current
-    if (!element || !isWatching) return
-    const observer = new IntersectionObserver(
-      (entries) => {
-        if (entries.some((entry) => entry.isIntersecting)) latest.current()
-      },
-      { rootMargin: '600px' },
-    )
-    observer.observe(element)
-    return () => observer.disconnect()
-  }, [isWatching])
-  return end
 }

@@ -1,17 +1,16 @@
 'use client'
 
-import { Download, ListFilter, Pencil, Plus, Upload } from 'lucide-react'
+import { Download, Pencil, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
 import { useRouter } from 'next/navigation'
 import { type ReactNode, useMemo, useRef, useState } from 'react'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useCan } from '@/components/layout/shop-context'
 import { Button, ButtonLink, buttonClass } from '@/components/ui/button'
-import { Dialog } from '@/components/ui/dialog'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
-import { useCatalogueCounts } from '@/hooks/use-catalogue-counts'
-import { itemPagePath } from '@/lib/catalogue-paths'
+import { useListCounts } from '@/hooks/use-list-counts'
+import { catalogueApiPath, itemPagePath } from '@/lib/catalogue-paths'
 import { importKindOf } from '@/schemas/import-fields'
 import type { CatalogueColumn } from './catalogue-column'
 import type { CatalogueDefinition } from './catalogue-definition'
@@ -22,6 +21,7 @@ import type { CatalogueRow } from './catalogue-row'
 import { type CatalogueView, exportPath, isNarrowed, queryParams } from './catalogue-view'
 import { ColumnChooser } from './column-chooser'
 import { EditBar } from './edit-bar'
+import { FilterDrawer } from './filter-drawer'
 import { FilterFields } from './filter-fields'
 import { ItemFormDialog } from './item-form-dialog'
 import { MakerList } from './maker-list'
@@ -166,7 +166,11 @@ function useFilterCounts<Row extends CatalogueRow>(
   view: CatalogueView,
   isWanted: boolean,
 ) {
-  return useCatalogueCounts(definition.kind, queryParams({ ...view, sort: '' }).toString(), isWanted)
+  return useListCounts(
+    catalogueApiPath(definition.kind),
+    queryParams({ ...view, sort: '' }).toString(),
+    isWanted,
+  )
 }
 
 /** Only while this is on does a list change under the hand; otherwise a click opens a row. */
@@ -272,36 +276,5 @@ function CatalogueActions<Row extends CatalogueRow>({
         </>
       ) : null}
     </div>
-  )
-}
-
-function FilterDrawer({
-  count,
-  onClear,
-  children,
-}: {
-  count: number
-  onClear: () => void
-  children: ReactNode
-}) {
-  const [isOpen, setIsOpen] = useState(false)
-  return (
-    <>
-      <Button className="min-h-11" onClick={() => setIsOpen(true)}>
-        <ListFilter aria-hidden="true" className="size-5" />
-        Filters{count > 0 ? ` (${count})` : ''}
-      </Button>
-      <Dialog isOpen={isOpen} onOpenChange={setIsOpen} title="Sort and filter" shape="side">
-        <div className="flex flex-col gap-4">
-          {children}
-          <Button variant="primary" onClick={() => setIsOpen(false)}>
-            Show the list
-          </Button>
-          <Button disabled={count === 0} onClick={onClear}>
-            Clear all
-          </Button>
-        </div>
-      </Dialog>
-    </>
   )
 }

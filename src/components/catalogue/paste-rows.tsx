@@ -11,7 +11,7 @@ import { TextAreaField } from '@/components/ui/text-field'
 import { useAttempt } from '@/components/ui/use-attempt'
 import { createImport } from '@/hooks/use-import'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
-import type { ImportKind } from '@/schemas/import-fields'
+import { hasLengths, type ImportKind } from '@/schemas/import-fields'
 import { isBlock, pastedBlock, pastedFile } from './pasted-block'
 
 export interface PasteRowsProps {
@@ -72,7 +72,9 @@ function PasteForm({
     <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
       <TextAreaField
         label="Rows"
-        hint={`Bare numbers are taken as ${unit}, unless a heading says otherwise.`}
+        hint={
+          hasLengths(kind) ? `Bare numbers are taken as ${unit}, unless a heading says otherwise.` : undefined
+        }
         rows={8}
         wrap="off"
         spellCheck={false}

@@ -1,6 +1,6 @@
 'use client'
 
-import { type RefObject, useCallback, useEffect, useMemo, useRef, useState } from 'react'
+import { type RefObject, useCallback, useMemo, useRef, useState } from 'react'
 import { toast } from 'sonner'
 import type { CellEdit } from '@/components/grid/parts-list-column'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
@@ -14,6 +14,7 @@ import { type EditStep, undoChanges, withStep } from './edit-history'
 import { currentRow, type EditRefusal, refusalMessage } from './edit-refusal'
 import type { ItemField } from './item-form-definition'
 import { formFields, type Manner, readTypedField, typedText } from './typed-values'
+import { useUndoKey } from './use-undo-key'
 
 export interface GridEditing<Row> {
   /** What can be typed into a column, or undefined. */
@@ -181,26 +182,4 @@ export function useGridEditing<Row extends CatalogueRow>(
     ...{ cellEdit, fields, refusals, steps, selected, isBusy: waiting > 0 },
     ...{ handleEdit, handleSelect: setSelected, takeBack, undo, changeSelected },
   }
-}
-
-/** Ctrl+Z, wherever no text of its own is being written. */
-function useUndoKey(isOn: boolean, onUndo: () => void): void {
-  const latest = useRef(onUndo)
-  useEffect(() => {
-    latest.current = onUndo
-  })
-  useEffect(() => {
-    if (!isOn) return
-    const handle = (event: KeyboardEvent) => {
-      const isUndo = event.key.toLowerCase() === 'z' && (event.ctrlKey || event.metaKey) && !event.shiftKey
-      const target = event.target
-      const isTyping =
-        target instanceof Element && target.closest('input:not([type=checkbox]), textarea, select')
-      if (!isUndo || isTyping) return
-      event.preventDefault()
-      latest.current()
-    }
-    window.addEventListener('keydown', handle)
-    return () => window.removeEventListener('keydown', handle)
-  }, [isOn])
 }

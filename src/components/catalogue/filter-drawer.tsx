@@ -1,0 +1,38 @@
+'use client'
+
+import { ListFilter } from 'lucide-react'
+import { type ReactNode, useState } from 'react'
+import { Button } from '@/components/ui/button'
+import { Dialog } from '@/components/ui/dialog'
+
+/** Sorting and filtering of a list on a phone: out of the way until it is asked for. */
+export function FilterDrawer({
+  count,
+  onClear,
+  children,
+}: {
+  count: number
+  onClear: () => void
+  children: ReactNode
+}) {
+  const [isOpen, setIsOpen] = useState(false)
+  return (
+    <>
+      <Button className="min-h-11" onClick={() => setIsOpen(true)}>
+        <ListFilter aria-hidden="true" className="size-5" />
+        Filters{count > 0 ? ` (${count})` : ''}
+      </Button>
+      <Dialog isOpen={isOpen} onOpenChange={setIsOpen} title="Sort and filter" shape="side">
+        <div className="flex flex-col gap-4">
+          {children}
+          <Button variant="primary" onClick={() => setIsOpen(false)}>
+            Show the list
+          </Button>
+          <Button disabled={count === 0} onClick={onClear}>
+            Clear all
+          </Button>
+        </div>
+      </Dialog>
+    </>
+  )
+}
