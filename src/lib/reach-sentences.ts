@@ -78,6 +78,7 @@ export const messageKinds: Readonly<Record<ReachMessageCode, MessageKind>> = {
   'spindle-taken-as-rigid': 'assumed',
   'collet-range-position': 'assumed',
   'opening-too-narrow': 'stops',
+  'hole-too-narrow': 'stops',
   'corner-too-tight': 'stops',
   'floor-radius-too-small': 'stops',
   'hole-diameter-mismatch': 'stops',
@@ -131,6 +132,8 @@ const sentences: {
 
   'opening-too-narrow': ({ openingWidthMm, neededMm, shortfallMm }, _, size) =>
     `The opening of ${size(openingWidthMm)} is too narrow by ${size(shortfallMm)}: this cutter needs ${size(neededMm)}.`,
+  'hole-too-narrow': ({ holeDiameterMm, neededMm, shortfallMm }, _, size) =>
+    `The hole of ${size(holeDiameterMm)} is too narrow by ${size(shortfallMm)}: this cutter needs ${size(neededMm)}.`,
   'corner-too-tight': ({ insideCornerRadiusMm, toolRadiusMm }, _, size) =>
     `The inside corner of ${size(insideCornerRadiusMm)} is tighter than the tool’s radius of ${size(toolRadiusMm)}.`,
   'floor-radius-too-small': ({ floorRadiusMm, cornerRadiusMm }, _, size) =>

@@ -21,7 +21,7 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
   const kept = items.find(({ id }) => id === keptId) ?? items[0]
   if (!kept) return null
   return (
-    <table className="border-ink w-full border-t-2" aria-label={`The same as ${kept.code}`}>
+    <table className="border-ink w-full border-t-2 sm:table-fixed" aria-label={`The same as ${kept.code}`}>
       <thead className="max-sm:sr-only">
         <tr className="border-hairline text-ink-soft border-b text-left text-sm [&>th]:py-1.5 [&>th]:pr-3 [&>th]:font-normal">
           <th scope="col" className="w-24">
@@ -32,7 +32,7 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
           <th scope="col" className="w-24 text-right">
             On hand
           </th>
-          <th scope="col" className="w-44">
+          <th scope="col" className="w-56 lg:w-72">
             <span className="sr-only">Merge</span>
           </th>
         </tr>
@@ -44,7 +44,7 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
             className="border-hairline border-b align-baseline max-sm:grid max-sm:grid-cols-[auto_1fr_auto] max-sm:gap-x-3 max-sm:py-2 [&>td]:py-1.5 [&>td]:pr-3"
           >
             <td>
-              <label className="flex min-h-9 items-center gap-2 pointer-coarse:min-h-11">
+              <label className="flex min-h-8 items-center gap-2 pointer-coarse:min-h-11">
                 <input
                   type="radio"
                   className="accent-accent size-5"
@@ -64,8 +64,9 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
                 {item.code}
               </Link>
               <span className="text-ink-soft block text-sm">
-                {item.description}
-                {item.isTrackedByPiece ? ' · tracked piece by piece' : ''}
+                {[item.description, item.isTrackedByPiece ? 'tracked piece by piece' : '']
+                  .filter(Boolean)
+                  .join(' · ')}
               </span>
             </td>
             <td className="max-sm:order-last max-sm:col-span-2 max-sm:col-start-2 max-sm:text-sm">

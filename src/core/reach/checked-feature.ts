@@ -13,6 +13,8 @@ export interface CheckedWall {
   /** Counted off reach and first touches; see `WallPlacement`. */
   leadMm: number
   openingWidthMm: number | null
+  /** The opening is a hole that the tool circles in. */
+  isHole: boolean
   insideCornerRadiusMm: number | null
   floorRadiusMm: number | null
   obstacles: readonly Obstacle[]
@@ -68,6 +70,7 @@ function checkedHole(hole: HoleFeature, isHoleTool: boolean): CheckedFeature {
     throughMm: breakThroughMm,
     leadMm: breakThroughMm,
     openingWidthMm: diameterMm,
+    isHole: true,
     insideCornerRadiusMm: null,
     floorRadiusMm: null,
     obstacles: [],
@@ -83,6 +86,7 @@ function checkedWall(wall: WallFeature, cutter: CutterDimensions): CheckedWall {
     throughMm: notNegativeOr(wall.throughMm, 0, 'feature.throughMm', 'The allowance below the floor'),
     leadMm: 0,
     openingWidthMm: positiveOrNull(wall.openingWidthMm, 'feature.openingWidthMm', 'The opening'),
+    isHole: false,
     insideCornerRadiusMm: notNegativeOr(
       wall.insideCornerRadiusMm,
       null,

@@ -44,10 +44,7 @@ function openingMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPl
   const { openingWidthMm, insideCornerRadiusMm, floorRadiusMm } = wall
   const neededMm = 2 * at.standOffMm
   if (openingWidthMm !== null && openingWidthMm < neededMm - overlapToleranceMm)
-    messages.push({
-      code: 'opening-too-narrow',
-      values: { openingWidthMm, neededMm, shortfallMm: neededMm - openingWidthMm },
-    })
+    messages.push(tooNarrow(openingWidthMm, neededMm, wall.isHole))
   if (insideCornerRadiusMm !== null && insideCornerRadiusMm < cutter.radiusMm - overlapToleranceMm)
     messages.push({
       code: 'corner-too-tight',
@@ -67,6 +64,13 @@ function openingMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPl
       },
     })
   return messages
+}
+
+function tooNarrow(widthMm: number, neededMm: number, isHole: boolean): ReachMessage {
+  const needed = { neededMm, shortfallMm: neededMm - widthMm }
+  return isHole
+    ? { code: 'hole-too-narrow', values: { holeDiameterMm: widthMm, ...needed } }
+    : { code: 'opening-too-narrow', values: { openingWidthMm: widthMm, ...needed } }
 }
 
 function wallFormMessages(cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {

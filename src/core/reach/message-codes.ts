@@ -33,6 +33,8 @@ export interface ReachMessageValues {
 
   /** The opening at the floor is narrower than the tool. */
   'opening-too-narrow': { openingWidthMm: number; neededMm: number; shortfallMm: number }
+  /** A tool that circles in a hole is wider than the hole. */
+  'hole-too-narrow': { holeDiameterMm: number; neededMm: number; shortfallMm: number }
   /** The inside corner is tighter than the tool's radius. */
   'corner-too-tight': { insideCornerRadiusMm: number; toolRadiusMm: number; shortfallMm: number }
   /** The floor's radius is smaller than the tool's corner radius. */

@@ -142,7 +142,7 @@ describe('verdict', () => {
       'hole-diameter-mismatch',
     ],
     ['circles in a wider hole', { feature: hole(5, 8) }, 'reaches', null],
-    ['does not go into a narrower hole', { feature: hole(5, 3) }, 'impossible', 'opening-too-narrow'],
+    ['does not go into a narrower hole', { feature: hole(5, 3) }, 'impossible', 'hole-too-narrow'],
     [
       'is not held by a collet of another size',
       { feature: wall(5), collet: { series: 'ER20', minimumMm: 4, maximumMm: 5 } },
