@@ -24,6 +24,15 @@ export function useLocations() {
   return { data, error, isLoading, refresh: mutate }
 }
 
+/** The places that were archived; asked only of those who may bring one back. */
+export function useArchivedLocations(isAsked: boolean) {
+  const { data, error, mutate } = useSWR<LocationResponse[], Error>(
+    isAsked ? '/api/locations?archived=only&limit=500' : null,
+    readAll,
+  )
+  return { data, error, refresh: mutate }
+}
+
 /** What lies in a location and in all that stands in it. */
 export function useLocationContents(id: string) {
   const { data, error, isLoading } = useSWR<LocationContents>(`/api/locations/${id}/contents`, getJson)

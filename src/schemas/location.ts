@@ -63,6 +63,8 @@ export const updateLocationRequestSchema = z.object({
   code: code.optional(),
   name: name.optional(),
   parentId: idSchema.optional(),
+  /** Null brings an archived location back; only DELETE archives one. */
+  archivedAt: z.iso.datetime().nullable().optional(),
 })
 export type UpdateLocationRequest = z.output<typeof updateLocationRequestSchema>
 

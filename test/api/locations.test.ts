@@ -44,6 +44,7 @@ describe('a crib', () => {
     expect(cribs.find((one) => one.code === code)).toEqual({
       id: made.body.cribId,
       code,
+      members: 0,
       name: 'By the saws',
       timeZone: 'America/Chicago',
       locationId: made.body.id,
@@ -144,6 +145,46 @@ describe('archiving a place', () => {
     const scrap = await db('locations').where('kind', 'scrap').first('id')
     expect((await crib.remove(`/api/locations/${scrap.id}`)).status).toBe(404)
     expect((await crib.patch(`/api/locations/${scrap.id}`, { version: 1, name: 'x' })).status).toBe(404)
+  })
+})
+
+describe('bringing an archived place back', () => {
+  const added = async (kind: string, parentId: string): Promise<string> =>
+    (await crib.post('/api/locations', place(kind, uniqueCode(kind), parentId))).body.id
+
+  it('gives it its code, name and place again, and is written down', async () => {
+    const drawerId = await added('drawer', shelf.cribLocationId)
+    expect((await crib.remove(`/api/locations/${drawerId}`)).status).toBe(204)
+    const [before] = await allRows(crib, `/api/locations?archived=only&cribId=${shelf.cribId}&kind=drawer`)
+    const answer = await crib.patch(`/api/locations/${drawerId}`, {
+      version: before?.version,
+      archivedAt: null,
+    })
+    expect(answer.status).toBe(200)
+    expect(answer.body).toMatchObject({
+      code: before?.code,
+      parentId: shelf.cribLocationId,
+      archivedAt: null,
+    })
+    const entry = { action: 'location-restored', entity_id: drawerId, actor_id: crib.user.id }
+    expect(await db('audit_entries').where(entry)).toHaveLength(1)
+    expect((await crib.get(`/api/locations/${await added('bin', drawerId)}/contents`)).status).toBe(200)
+  })
+
+  it('is refused while what it stands in is archived', async () => {
+    const drawerId = await added('drawer', shelf.cribLocationId)
+    const binId = await added('bin', drawerId)
+    await crib.remove(`/api/locations/${binId}`)
+    await crib.remove(`/api/locations/${drawerId}`)
+    const rows = await allRows(crib, `/api/locations?archived=only&cribId=${shelf.cribId}`)
+    const version = (id: string) => rows.find((row) => row.id === id)?.version
+    const back = (id: string) =>
+      crib.patch(`/api/locations/${id}`, { version: version(id), archivedAt: null })
+    const refused = await back(binId)
+    expect(refused.status).toBe(422)
+    expect(refused.body.detail).toContain('bring that back first')
+    expect((await back(drawerId)).status).toBe(200)
+    expect((await back(binId)).status).toBe(200)
   })
 })
 

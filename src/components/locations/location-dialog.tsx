@@ -123,7 +123,10 @@ function LocationForm({ location, onChanged }: { location: LocationResponse; onC
           </Button>
         )}
       </div>
-      <p className="text-ink-soft text-sm">A place that holds anything stays until it is empty.</p>
+      <p className="text-ink-soft text-sm">
+        A place that holds anything stays until it is empty. What is archived can be brought back, at the end
+        of the locations.
+      </p>
     </form>
   )
 }

@@ -1,7 +1,7 @@
 'use client'
 
 import { useState } from 'react'
-import { useLocations } from '@/hooks/use-locations'
+import { useArchivedLocations, useLocations } from '@/hooks/use-locations'
 import { faultSentence } from '@/lib/field-faults'
 import type { LocationResponse } from '@/schemas/location'
 import { PageHeading } from '../layout/page-heading'
@@ -9,6 +9,7 @@ import { useCan } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { StateSentence } from '../ui/state-sentence'
 import { AddLocationDialog } from './add-location-dialog'
+import { ArchivedPlaces } from './archived-places'
 import { CabinetElevation, PlaceButton } from './cabinet-elevation'
 import { LocationDialog } from './location-dialog'
 import { type LocationNode, locationTree } from './location-tree'
@@ -21,6 +22,7 @@ export function LocationsPage() {
   const [parent, setParent] = useState<LocationResponse | 'crib' | null>(null)
   const [isPattern, setIsPattern] = useState(false)
   const mayKeep = useCan('keepCrib')
+  const archived = useArchivedLocations(mayKeep)
   const tree = data ? locationTree(data) : null
 
   function handleChanged() {
@@ -28,6 +30,7 @@ export function LocationsPage() {
     setParent(null)
     setIsPattern(false)
     void refresh()
+    void archived.refresh()
   }
 
   return (
@@ -53,6 +56,7 @@ export function LocationsPage() {
         <StateSentence sentence="There is no crib yet. Bins stand in a crib, so that comes first." />
       ) : null}
       {tree && tree.others.length > 0 ? <Elsewhere places={tree.others} onOpen={setOpened} /> : null}
+      {mayKeep && tree ? <ArchivedPlaces archived={archived} onRestored={handleChanged} /> : null}
       {opened ? (
         <LocationDialog location={opened} onClose={() => setOpened(null)} onChanged={handleChanged} />
       ) : null}

@@ -75,9 +75,15 @@ function toColumns(location: NewLocation) {
 export async function updateLocation(
   trx: Knex,
   id: string,
-  change: { code?: string | undefined; name?: string | undefined; parentId?: string | undefined },
+  change: {
+    code?: string | undefined
+    name?: string | undefined
+    parentId?: string | undefined
+    isRestored?: boolean
+  },
 ): Promise<void> {
-  const given = { code: change.code, name: change.name, parent_id: change.parentId }
+  const { code, name, parentId, isRestored } = change
+  const given = { code, name, parent_id: parentId, archived_at: isRestored ? null : undefined }
   const set = Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined))
   if (Object.keys(set).length > 0) await trx('locations').where('id', id).update(set)
 }

@@ -8,7 +8,7 @@ import {
 
 const sentences: Record<string, string> = {
   locations_ranks_of_tree: 'A cabinet stands in a crib, a drawer in a crib or cabinet, a bin in any of them.',
-  locations_parent_in_use: 'Where it should stand is archived.',
+  locations_parent_in_use: 'Where it should stand is archived: bring that back first.',
   locations_parent_in_crib: 'A location stays in its crib.',
 }
 

@@ -10,7 +10,7 @@ import { explainingLocationRefusals } from './explain-location-refusal'
 import { readLocation } from './read-location'
 import { refuseKeptLocation } from './refuse-kept-location'
 
-/** Renames a location or moves it within its crib. A crib is renamed itself, and its root follows. */
+/** Renames a location, moves it within its crib or brings it back. A crib is renamed itself, and its root follows. */
 export async function updateLocation(
   actor: Actor,
   id: string,
@@ -25,18 +25,19 @@ export async function updateLocation(
           extra: { current: before },
         })
       }
-      const { version: _, ...change } = request
+      const { version: _, archivedAt, ...change } = request
       if (location.kind === 'crib' && location.cribId) {
         if (change.parentId !== undefined) refuseParent()
         await updateCrib(trx, location.cribId, change)
       } else {
         if (change.parentId !== undefined && location.parentId === null) refuseParent()
-        await writeLocation(trx, id, change)
+        await writeLocation(trx, id, { ...change, isRestored: archivedAt === null })
       }
       const after = await readLocation(trx, id)
       await createAuditEntry(trx, {
         actorId: actor.id,
-        action: 'location-changed',
+        action:
+          before.archivedAt !== null && after.archivedAt === null ? 'location-restored' : 'location-changed',
         entity: 'location',
         entityId: id,
         before,
