@@ -39,6 +39,20 @@ async function waitingBackends(): Promise<number> {
   return Number(row?.count)
 }
 
+it('the database is told what was staged, so that it does not plan for a row where there are thousands', async () => {
+  await site.checked({ kind: 'cutters', content: manyCutters('PLA', 2_000) })
+  // As autovacuum may have left it: it knows of the first file and of no other.
+  await site.db.raw('analyze import_rows')
+  const { id } = await site.checked({ kind: 'cutters', content: manyCutters('PLB', 3_000) })
+  const { rows } = await site.db.raw(
+    'explain (format json) select line from import_rows where import_id = ?',
+    [id],
+  )
+  const expected = rows[0]['QUERY PLAN'][0].Plan['Plan Rows']
+  expect(expected).toBeGreaterThan(1_500)
+  expect(expected).toBeLessThan(6_000)
+})
+
 describe('a cancel', () => {
   it('it leaves no row, no file and nothing in the catalogue', async () => {
     const { id } = await site.checked({ kind: 'cutters', content: manyCutters('LA', 3) })

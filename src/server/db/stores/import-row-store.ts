@@ -46,6 +46,14 @@ function escapeCopy(json: string): string {
   return json.replaceAll('\\', '\\\\')
 }
 
+/**
+ * Has PostgreSQL look at what was staged. Of rows that came since it last looked it expects one, and would then compare
+ * each row of a file with every other.
+ */
+export async function analyzeImportRows(db: Knex): Promise<void> {
+  await db.raw('analyze import_rows')
+}
+
 export async function removeImportRows(trx: Knex, importId: string): Promise<void> {
   await trx('import_rows').where('import_id', importId).delete()
 }

@@ -4,6 +4,7 @@ import { listedProblems } from '@/schemas/import-limits'
 import type { ImportColumn } from '@/schemas/import-mapping'
 import { db } from '../../db/connection'
 import {
+  analyzeImportRows,
   copyImportRows,
   countOutcomes,
   rejectDuplicates,
@@ -98,6 +99,7 @@ class ImportCheck {
     })
     const reader = new RowReader(survey.columns, reading)
     await this.stageRows(path, survey, reader)
+    await analyzeImportRows(db())
     await this.finish(survey.columns)
   }
 
