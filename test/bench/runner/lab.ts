@@ -13,12 +13,16 @@ import { chromium } from '../../support/chromium'
 import { layBuildTree } from './build-tree'
 
 const templateName = 'bench_template'
+/** Where the bare routes of a site find what they run, in its folder. */
+export const statementsFile = 'statements.json'
 
 /** A web server with its worker, over a database of its own. */
 export interface BenchSite {
   address: string
   databaseUrl: string
   workerPid: number
+  /** Its data and logs, and the statements its bare routes run. */
+  folder: string
   /** Ends both, so that they cost the next measurement nothing; the lab does so at the end by itself. */
   stop(): Promise<void>
 }
@@ -87,6 +91,7 @@ export class Lab {
         PORT: String(port),
         BASE_URL: address,
         LOG_LEVEL: 'warn',
+        BENCH_STATEMENTS: join(folder, statementsFile),
       },
     }
     const web = this.#started.add(startWebServer(site, '127.0.0.1', port, builtFolder))
@@ -95,7 +100,7 @@ export class Lab {
     const stop = async () => {
       await Promise.all([web.stop(), worker.stop()])
     }
-    return { address, databaseUrl: url, workerPid: worker.pid ?? 0, stop }
+    return { address, databaseUrl: url, workerPid: worker.pid ?? 0, folder, stop }
   }
 
   /** The demo shop, one for all benches. */

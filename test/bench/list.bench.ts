@@ -1,0 +1,94 @@
+import { writeFileSync } from 'node:fs'
+import { join } from 'node:path'
+import pg from 'pg'
+import { type Bench, type Figure, ratioFigure } from './runner/bench'
+import { bigShop } from './runner/big-shop'
+import { type BenchSite, type Lab, statementsFile } from './runner/lab'
+import { listStatements, type Statement } from './runner/list-statements'
+import { answerTimes } from './runner/load'
+import { sessionCookie } from './runner/session'
+import { percentile } from './runner/statistics'
+
+const share = 0.975
+const ratioLimit = 1.5
+const sqlLimitMs = 100
+const rounds = 8
+const roundSeconds = 3
+const warmUpSeconds = 3
+const sqlRuns = 200
+const sqlWarmUps = 20
+
+/** Three blocks of the cutter list as the grid asks for them. */
+const views = {
+  plain: 'limit=100&offset=0',
+  filtered:
+    'q=ball+long&form=ball,cornerRadius&cuttingDiameterMm.min=6&cuttingDiameterMm.max=12&limit=100&offset=0',
+  jump: 'limit=100&offset=90000',
+}
+type View = keyof typeof views
+const viewNames: Readonly<Record<View, string>> = {
+  plain: 'plain',
+  filtered: 'filtered with search',
+  jump: 'a jump to row 90,000',
+}
+
+/**
+ * Views of the cutter list at 100,000 cutters, ten connections at once, against a bare route of the same server that
+ * runs the same statements and answers their rows: what is between is session, permission, query, mapping and checked
+ * answer. The two are asked in turn. Then the statements alone, one connection and nothing else going on.
+ */
+export const bench: Bench = {
+  name: 'list',
+  run: async (lab) => {
+    const site = await bigShop(lab)
+    const statements = await listStatements(site.databaseUrl, views)
+    writeFileSync(join(site.folder, statementsFile), JSON.stringify(statements))
+    const cookie = await sessionCookie(site)
+    const figures: Figure[] = []
+    for (const view of Object.keys(views) as View[]) {
+      figures.push(await routeFigure(lab, site, cookie, view))
+      figures.push(await sqlFigure(site, view, statements[view]))
+    }
+    return figures
+  },
+}
+
+async function routeFigure(lab: Lab, site: BenchSite, cookie: string, view: View): Promise<Figure> {
+  const ours = `${site.address}/api/cutters?${views[view]}`
+  const bare = `${site.address}/api/bench/list?view=${view}`
+  const times: { ours: number[]; bare: number[] } = { ours: [], bare: [] }
+  await answerTimes(ours, { cookie }, warmUpSeconds)
+  await answerTimes(bare, { cookie }, warmUpSeconds)
+  for (let round = 0; round < rounds && !lab.signal.aborted; round += 1) {
+    times.ours.push(...(await answerTimes(ours, { cookie }, roundSeconds)))
+    times.bare.push(...(await answerTimes(bare, { cookie }, roundSeconds)))
+  }
+  const sides = {
+    ours: percentile(times.ours, share),
+    other: percentile(times.bare, share),
+    unit: 'ms' as const,
+  }
+  const perSecond = ({ length }: number[]) => Math.round(length / rounds / roundSeconds)
+  const note = `${perSecond(times.ours)} answers a second, bare ${perSecond(times.bare)}`
+  const samples = Math.min(times.ours.length, times.bare.length)
+  return ratioFigure(`${viewNames[view]}, p97.5`, sides, ratioLimit, samples, note)
+}
+
+async function sqlFigure(site: BenchSite, view: View, statements: readonly Statement[]): Promise<Figure> {
+  const database = new pg.Client({ connectionString: site.databaseUrl })
+  await database.connect()
+  const times: number[] = []
+  for (let run = -sqlWarmUps; run < sqlRuns; run += 1) {
+    const startedAt = performance.now()
+    for (const { sql, bindings } of statements) await database.query(sql, bindings)
+    if (run >= 0) times.push(performance.now() - startedAt)
+  }
+  await database.end()
+  return {
+    name: `${viewNames[view]}, its ${statements.length} statements alone, p97.5`,
+    value: percentile(times, share),
+    unit: 'ms',
+    limit: { atMost: sqlLimitMs },
+    samples: sqlRuns,
+  }
+}
