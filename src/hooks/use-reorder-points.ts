@@ -2,18 +2,16 @@ import { catalogueKinds } from '@/core/stock/kinds'
 import { callApi, getJson } from '@/lib/api-client'
 import { catalogueApiPath } from '@/lib/catalogue-paths'
 import type { ReorderPointResponse, ReorderPointRow } from '@/schemas/reordering'
+import { type CatalogueBlock, catalogueBlockUrl } from './use-catalogue-rows'
 
-export const reorderPointBlockSize = 100
+export const reorderPointsApiPath = '/api/reorder-points'
 
 /** One block of the list, for a grid that jumps. */
 export function readReorderPointBlock(
-  filters: { cribId: string; q: string },
+  query: string,
   offset: number,
-): Promise<{ rows: ReorderPointRow[]; total?: number }> {
-  const query = new URLSearchParams({ limit: String(reorderPointBlockSize), offset: String(offset) })
-  if (filters.cribId) query.set('cribId', filters.cribId)
-  if (filters.q) query.set('q', filters.q)
-  return getJson(`/api/reorder-points?${query}`)
+): Promise<CatalogueBlock<ReorderPointRow>> {
+  return getJson(catalogueBlockUrl(reorderPointsApiPath, query, offset))
 }
 
 export type ReorderPointChange = Partial<
@@ -40,8 +38,26 @@ export async function saveReorderPoint(
   return { ...row, ...saved }
 }
 
-export function reorderPointUrl({ itemId, cribId }: { itemId: string; cribId: string }): string {
-  return `/api/reorder-points/${itemId}/${cribId}`
+/** Changes many rows, all of them or none; answers them as they have become, in the same order. */
+export async function saveReorderPoints(
+  changes: readonly { row: ReorderPointRow; change: ReorderPointChange }[],
+): Promise<ReorderPointRow[]> {
+  const rows = changes.map(({ row: { itemId, cribId, version, reorderPoint, orderUpTo }, change }) => ({
+    ...{ itemId, cribId, version, reorderPoint, orderUpTo },
+    ...change,
+  }))
+  const saved = await callApi<{ rows: ReorderPointResponse[] }>('PUT', reorderPointsApiPath, {
+    body: { rows },
+  })
+  return changes.map(({ row }, index) => ({ ...row, ...saved.rows[index] }))
+}
+
+export async function removeReorderPoint(row: ReorderPointRow): Promise<void> {
+  await callApi('DELETE', reorderPointUrl(row))
+}
+
+function reorderPointUrl({ itemId, cribId }: { itemId: string; cribId: string }): string {
+  return `${reorderPointsApiPath}/${itemId}/${cribId}`
 }
 
 /**
@@ -51,18 +67,29 @@ export function reorderPointUrl({ itemId, cribId }: { itemId: string; cribId: st
 export async function createReorderPoint(
   code: string,
   cribId: string,
-  values: { reorderPoint: number | string; orderUpTo: number | string },
+  values: ReorderPointChange,
 ): Promise<boolean> {
-  if (code === '') return false
-  for (const kind of catalogueKinds) {
-    const query = new URLSearchParams({ code, sort: 'code', limit: '100' })
-    const { rows } = await getJson<{ rows: { id: string; code: string }[] }>(
-      `${catalogueApiPath(kind)}?${query}`,
-    )
-    const item = rows.find((row) => row.code.toLowerCase() === code.toLowerCase())
-    if (!item) continue
-    await callApi('PUT', reorderPointUrl({ itemId: item.id, cribId }), { body: values })
-    return true
-  }
-  return false
+  const itemId = code === '' ? null : await findItemId(code)
+  if (itemId === null) return false
+  await callApi('PUT', reorderPointUrl({ itemId, cribId }), { body: values })
+  return true
 }
+
+async function findItemId(code: string): Promise<string | null> {
+  for (const kind of catalogueKinds) {
+    // Many codes may hold this one; the list is read on until it is found.
+    for (let offset = 0; ; ) {
+      const query = new URLSearchParams({ code, sort: 'code' }).toString()
+      const { rows } = await getJson<CatalogueBlock<{ id: string; code: string }>>(
+        catalogueBlockUrl(catalogueApiPath(kind), query, offset, mostRows),
+      )
+      const item = rows.find((row) => row.code.toLowerCase() === code.toLowerCase())
+      if (item) return item.id
+      if (rows.length < mostRows) break
+      offset += mostRows
+    }
+  }
+  return null
+}
+
+const mostRows = 500

@@ -41,7 +41,7 @@ test('reorder points are edited in place, and one that cannot be says why and ch
 }) => {
   await signIn(page, 'cribManager')
   await page.goto('/reorder-points')
-  await page.getByLabel('Search').fill(code)
+  await page.getByRole('searchbox', { name: 'Search reorder points' }).fill(code)
   const cell = page.locator('[row-index="0"] [col-id="packSize"]')
   await expect(page.locator('[row-index="0"] [col-id="itemCode"]')).toHaveText(code)
   await cell.dblclick()

@@ -6,7 +6,7 @@ import { faultSentence } from '@/lib/field-faults'
 import { roleNames } from '@/lib/role-names'
 import type { Person, PersonLink } from '@/schemas/person'
 import { PageHeading } from '../layout/page-heading'
-import { Button } from '../ui/button'
+import { Button, ButtonLink } from '../ui/button'
 import { StateSentence } from '../ui/state-sentence'
 import { LinkDialog } from './link-dialog'
 import { PersonDialog } from './person-dialog'
@@ -26,6 +26,7 @@ export function PeoplePage({ initialRows }: { initialRows: Person[] }) {
   return (
     <>
       <PageHeading title="People" note="Who may sign in, and what their role lets them do.">
+        <ButtonLink href="/crib-members">Who gets the mail</ButtonLink>
         <Button variant="primary" onClick={() => setEdited('new')}>
           Add a person
         </Button>

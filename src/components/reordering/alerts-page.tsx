@@ -9,12 +9,15 @@ import { faultSentence } from '@/lib/field-faults'
 import { formatInstant } from '@/lib/format-instant'
 import type { AlertResponse } from '@/schemas/reordering'
 import { PageHeading } from '../layout/page-heading'
+import { useCan } from '../layout/shop-context'
 import { Button, ButtonLink } from '../ui/button'
 import { SelectField } from '../ui/select-field'
 import { StateSentence } from '../ui/state-sentence'
+import { MembersNotice } from './members-notice'
 
 /** What fell to its reorder point and has not come back above it. */
 export function AlertsPage() {
+  const canKeep = useCan('keepCrib')
   const [cribId, setCribId] = useState('')
   const { data: cribs } = useCribs()
   const { data, error, refresh } = useOpenAlerts(cribId)
@@ -36,7 +39,13 @@ export function AlertsPage() {
         <ButtonLink href="/reorder-points" className="self-end">
           Reorder points
         </ButtonLink>
+        {canKeep ? (
+          <ButtonLink href="/crib-members" className="self-end">
+            Who gets the mail
+          </ButtonLink>
+        ) : null}
       </PageHeading>
+      <MembersNotice cribId={cribId} />
       {error ? (
         <StateSentence sentence={faultSentence(error)}>
           <Button onClick={() => void refresh()}>Try again</Button>

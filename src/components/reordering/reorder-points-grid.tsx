@@ -3,95 +3,112 @@
 import Link from 'next/link'
 import { useRouter } from 'next/navigation'
 import { type RefObject, useCallback, useMemo, useState } from 'react'
-import { readReorderPointBlock, reorderPointBlockSize } from '@/hooks/use-reorder-points'
+import { blockSize } from '@/hooks/use-catalogue-rows'
+import { readReorderPointBlock } from '@/hooks/use-reorder-points'
 import { itemPagePath } from '@/lib/catalogue-paths'
-import { faultSentence } from '@/lib/field-faults'
 import type { ReorderPointRow } from '@/schemas/reordering'
 import type { SupplierResponse } from '@/schemas/supplier'
+import { type CatalogueView, queryParams } from '../catalogue/catalogue-view'
 import type { PartsListColumn } from '../grid/parts-list-column'
 import { PartsListGrid, type PartsListHandle } from '../grid/parts-list-grid'
-import { Button } from '../ui/button'
-import { StateSentence } from '../ui/state-sentence'
-import { type EditedField, editedFields, supplierChoices, typedText } from './reorder-point-fields'
-import type { useReorderPointEditing } from './use-reorder-point-editing'
-
-type Editing = ReturnType<typeof useReorderPointEditing>
+import { editedFields, shownText, supplierChoices } from './reorder-point-fields'
+import { ReorderPointsState } from './reorder-points-state'
+import type { ReorderPointEditing } from './use-reorder-point-editing'
 
 export interface ReorderPointsGridProps {
-  filters: { cribId: string; q: string }
+  view: CatalogueView
+  onViewChange: (change: Partial<CatalogueView>) => void
   suppliers: readonly SupplierResponse[]
-  editing: Editing | undefined
+  /** Present for those who may change rows. */
+  editing: ReorderPointEditing | undefined
+  onTotal: (total: number | null) => void
+  onClear: () => void
+  onAdd: () => void
   handleRef: RefObject<PartsListHandle | null>
 }
 
-const unsorted = () => undefined
+type LoadState = { state: 'loading' | 'ready' | 'empty' | 'failed'; failure?: unknown }
 
-export default function ReorderPointsGrid({
-  filters,
-  suppliers,
-  editing,
-  handleRef,
-}: ReorderPointsGridProps) {
+const unmoved = () => undefined
+
+export default function ReorderPointsGrid(props: ReorderPointsGridProps) {
+  const { view, onViewChange, suppliers, editing, onTotal, handleRef } = props
   const router = useRouter()
-  const [state, setState] = useState<'ready' | 'empty' | { failure: unknown }>('ready')
-  const { cribId, q } = filters
-  const columns = useColumns(suppliers, editing?.cellEdit)
-  const loadBlock = useCallback((offset: number) => readReorderPointBlock({ cribId, q }, offset), [cribId, q])
-  const handleLoad = useCallback((total: number) => setState(total === 0 ? 'empty' : 'ready'), [])
-  const handleFailure = useCallback((failure: unknown) => setState({ failure }), [])
+  const [load, setLoad] = useState<LoadState>({ state: 'loading' })
+  const columns = useReorderPointColumns(suppliers, editing?.cellEdit)
+  const narrowing = queryParams({ ...view, sort: '' }).toString()
+  const loadBlock = useCallback(
+    (offset: number, sort: string) => {
+      const sorted = sort ? `${narrowing}${narrowing ? '&' : ''}sort=${sort}` : narrowing
+      return readReorderPointBlock(sorted, offset)
+    },
+    [narrowing],
+  )
+  const handleLoad = useCallback(
+    (total: number) => {
+      setLoad({ state: total === 0 ? 'empty' : 'ready' })
+      onTotal(total)
+    },
+    [onTotal],
+  )
+  const handleFailure = useCallback(
+    (failure: unknown) => {
+      setLoad({ state: 'failed', failure })
+      onTotal(null)
+    },
+    [onTotal],
+  )
   return (
-    <>
+    <div className="relative min-h-0 flex-1">
       <PartsListGrid<ReorderPointRow>
         columns={columns}
-        sort=""
-        blockSize={reorderPointBlockSize}
+        sort={view.sort}
+        blockSize={blockSize}
         label="Reorder points"
         loadBlock={loadBlock}
-        onSortChange={unsorted}
-        onOrderChange={unsorted}
+        onSortChange={(sort) => onViewChange({ sort })}
+        onOrderChange={unmoved}
         onOpen={(row) => router.push(row.itemKind ? itemPagePath(row.itemKind, row.itemId) : '/alerts')}
         onLoad={handleLoad}
         onFailure={handleFailure}
         handleRef={handleRef}
         editing={editing && { onEdit: editing.handleEdit, onSelect: editing.setSelected }}
       />
-      {state === 'ready' ? null : (
+      {load.state === 'ready' ? null : (
         <div className="bg-sheet absolute inset-0 top-[46px] z-10">
-          {state === 'empty' ? (
-            <StateSentence sentence="No reorder point here. Add one, or search for less." />
-          ) : (
-            <StateSentence sentence={faultSentence(state.failure)}>
-              <Button onClick={() => handleRef.current?.reload()}>Try again</Button>
-            </StateSentence>
-          )}
+          <ReorderPointsState
+            state={load.state}
+            failure={load.failure}
+            view={view}
+            onRetry={() => {
+              setLoad({ state: 'loading' })
+              handleRef.current?.reload()
+            }}
+            onClear={props.onClear}
+            onAdd={props.onAdd}
+          />
         </div>
       )}
-    </>
+    </div>
   )
 }
 
-function useColumns(
+function useReorderPointColumns(
   suppliers: readonly SupplierResponse[],
-  cellEdit: Editing['cellEdit'] | undefined,
+  cellEdit: ReorderPointEditing['cellEdit'] | undefined,
 ): PartsListColumn<ReorderPointRow>[] {
   return useMemo(
-    () => [
-      fixed('itemCode', 'Item', 140, (row) => row.itemCode, { isPinned: true, Cell: CodeCell }),
-      fixed('description', 'Description', 240, (row) => row.description),
-      fixed('cribCode', 'Crib', 90, (row) => row.cribCode),
-      fixed('position', 'Available and coming', 170, (row) => String(row.position), { isFigure: true }),
-      ...editedFields.map((field) => ({
-        ...fixed(field.field, field.label, field.width, (row: ReorderPointRow) => shownText(row, field), {
-          isFigure: field.kind === 'count' || field.kind === 'optionalCount',
-        }),
-        edit: cellEdit?.(field.field, field.kind === 'supplier' ? supplierChoices(suppliers) : undefined),
-      })),
-    ],
+    () =>
+      reorderPointColumns.map((column) => {
+        const field = editedFields.find((one) => one.field === column.id)
+        const choices = field?.kind === 'supplier' ? supplierChoices(suppliers) : undefined
+        return { ...column, edit: field ? cellEdit?.(field.field, choices) : undefined }
+      }),
     [suppliers, cellEdit],
   )
 }
 
-function fixed(
+function column(
   id: string,
   name: string,
   width: number,
@@ -99,21 +116,33 @@ function fixed(
   more: Partial<PartsListColumn<ReorderPointRow>> = {},
 ): PartsListColumn<ReorderPointRow> {
   return {
-    id,
-    heading: name,
-    name,
-    unitText: '',
-    width,
-    isFigure: false,
-    isSortable: false,
-    isShown: true,
-    text,
+    ...{ id, name, width, text, heading: name, unitText: '' },
+    ...{ isFigure: false, isSortable: true, isShown: true },
     ...more,
   }
 }
 
-function shownText(row: ReorderPointRow, { field, kind }: EditedField): string {
-  return kind === 'supplier' ? (row.supplierName ?? '') : typedText(row, field)
+/** The columns, by the names the API sorts by. */
+export const reorderPointColumns: readonly PartsListColumn<ReorderPointRow>[] = [
+  column('itemCode', 'Item', 150, (row) => row.itemCode, { isPinned: true, Cell: CodeCell }),
+  column('description', 'Description', 220, (row) => row.description),
+  column('cribCode', 'Crib', 80, (row) => row.cribCode),
+  column('onHand', 'On hand', 95, (row) => String(row.onHand), { isFigure: true }),
+  column('position', 'Available and coming', 170, positionText, { isFigure: true, Cell: PositionCell }),
+  ...editedFields.map((field) =>
+    column(field.field, field.label, field.width, (row) => shownText(row, field), {
+      isFigure: field.kind === 'count' || field.kind === 'optionalCount',
+    }),
+  ),
+]
+
+function positionText(row: ReorderPointRow): string {
+  return row.position <= row.reorderPoint ? `${row.position}, low` : String(row.position)
+}
+
+function PositionCell({ row }: { row: ReorderPointRow }) {
+  if (row.position > row.reorderPoint) return row.position
+  return <span className="text-caution font-semibold">{positionText(row)}</span>
 }
 
 function CodeCell({ row }: { row: ReorderPointRow }) {

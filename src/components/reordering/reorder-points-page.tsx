@@ -1,137 +1,254 @@
 'use client'
 
+import { Download, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
-import { useRef, useState } from 'react'
-import { useCribs } from '@/hooks/use-cribs'
+import { useMemo, useRef, useState } from 'react'
+import { useListCounts } from '@/hooks/use-list-counts'
+import { reorderPointsApiPath } from '@/hooks/use-reorder-points'
 import { useSuppliers } from '@/hooks/use-suppliers'
+import type { ReorderPointRow } from '@/schemas/reordering'
+import type { SupplierResponse } from '@/schemas/supplier'
+import { type CatalogueView, queryParams } from '../catalogue/catalogue-view'
+import { FilterDrawer } from '../catalogue/filter-drawer'
+import { SearchBox } from '../catalogue/search-box'
+import { SortSelect } from '../catalogue/sort-select'
+import { useCatalogueView } from '../catalogue/use-catalogue-view'
 import type { PartsListHandle } from '../grid/parts-list-grid'
-import { PageHeading } from '../layout/page-heading'
 import { useCan } from '../layout/shop-context'
-import { Button, ButtonLink } from '../ui/button'
-import { Notice } from '../ui/notice'
-import { SelectField } from '../ui/select-field'
+import { Button, ButtonLink, buttonClass } from '../ui/button'
 import { StateSentence } from '../ui/state-sentence'
-import { TextField } from '../ui/text-field'
-import { AddReorderPointDialog } from './add-reorder-point-dialog'
+import { useMediaQuery } from '../ui/use-media-query'
 import { ChangeSelectedDialog } from './change-selected-dialog'
-import { SupplierDialog } from './supplier-dialog'
+import { EditNotices } from './edit-notices'
+import { MembersNotice } from './members-notice'
+import { RemoveSelectedDialog } from './remove-selected-dialog'
+import { ReorderPointDialog } from './reorder-point-dialog'
+import { editedFields } from './reorder-point-fields'
+import { isListNarrowed, ReorderPointFilters, reorderPointFilterNames } from './reorder-point-filters'
+import { ReorderPointList, useReorderPointList } from './reorder-point-list'
+import { ReorderPointsState } from './reorder-points-state'
 import { useReorderPointEditing } from './use-reorder-point-editing'
 
+/** The grid's code comes only where a grid is shown. */
 const ReorderPointsGrid = dynamic(() => import('./reorder-points-grid'), {
   ssr: false,
   loading: () => <StateSentence sentence="Reading the reorder points …" />,
 })
 
+interface ShapeProps {
+  view: CatalogueView
+  onViewChange: (change: Partial<CatalogueView>) => void
+  onClear: () => void
+  suppliers: readonly SupplierResponse[]
+}
+
 /** When each item of each crib is low, edited in place. */
 export function ReorderPointsPage() {
-  const [cribId, setCribId] = useState('')
-  const [q, setQ] = useState('')
-  const [open, setOpen] = useState<'add' | 'change' | 'supplier' | null>(null)
-  const grid = useRef<PartsListHandle | null>(null)
+  const isWide = useMediaQuery('(min-width: 48rem)')
+  const [view, onViewChange] = useCatalogueView(reorderPointFilterNames)
+  const { data } = useSuppliers()
+  const suppliers = useMemo(() => data?.rows ?? [], [data])
+  const shared = {
+    ...{ view, onViewChange, suppliers },
+    onClear: () => onViewChange({ q: '', filters: {}, sort: '' }),
+  }
+  return (
+    <div className="flex flex-1 flex-col md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
+      {isWide === null ? <StateSentence sentence="Reading the reorder points …" /> : null}
+      {isWide === true ? <WidePage {...shared} /> : null}
+      {isWide === false ? <NarrowPage {...shared} /> : null}
+    </div>
+  )
+}
+
+function WidePage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
   const canKeep = useCan('keepCrib')
-  const editing = useReorderPointEditing(grid)
-  const { data: cribs } = useCribs()
-  const { data: suppliers, refresh: refreshSuppliers } = useSuppliers()
-  const rows = suppliers?.rows ?? []
+  const grid = useRef<PartsListHandle>(null)
+  const [total, setTotal] = useState<number | null>(null)
+  const [open, setOpen] = useState<'add' | 'change' | 'remove' | null>(null)
+  const editing = useReorderPointEditing(grid, canKeep)
+  const counts = useCounts(view, total !== null)
+  const close = () => setOpen(null)
+  const reload = () => {
+    close()
+    grid.current?.clearSelection()
+    grid.current?.reload()
+  }
   return (
     <>
-      <PageHeading
-        title="Reorder points"
-        note={
-          canKeep
-            ? 'A double click, F2 or typing changes a cell; Enter keeps it, Esc leaves it. Space selects a row.'
-            : 'At or below its reorder point an item is low.'
-        }
-      >
-        <ButtonLink href="/alerts">Low stock</ButtonLink>
-        {canKeep ? (
-          <>
-            <Button variant="primary" onClick={() => setOpen('add')}>
-              Add a reorder point
-            </Button>
-            <Button onClick={() => setOpen('supplier')}>Add a supplier</Button>
-            <Button disabled={editing.selected.length === 0} onClick={() => setOpen('change')}>
-              Change{' '}
-              {editing.selected.length === 0 ? 'the rows selected' : `${editing.selected.length} selected`}
-            </Button>
-          </>
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
+        <h1 className="text-2xl">Reorder points</h1>
+        <p className="text-ink-soft mr-auto" role="status">
+          {total === null ? '' : totalText(total, view)}
+        </p>
+        <SearchBox
+          value={view.q}
+          label="Search reorder points"
+          onSearch={(q) => onViewChange({ q })}
+          onLeaveDown={() => grid.current?.focusFirstRow()}
+        />
+        <Actions view={view} onAdd={() => setOpen('add')} />
+      </div>
+      <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
+        <ReorderPointFilters
+          shape="row"
+          values={view.filters}
+          counts={counts}
+          onChange={(filters) => onViewChange({ filters })}
+        />
+        {isListNarrowed(view) ? (
+          <Button variant="quiet" size="compact" className="self-end" onClick={onClear}>
+            Clear all
+          </Button>
         ) : null}
-      </PageHeading>
-      <div className="flex flex-wrap items-end gap-3 px-4 pb-3 lg:px-6">
-        <TextField
-          label="Search"
-          defaultValue=""
-          placeholder="Code, maker, description"
-          onChange={(event) => setQ(event.target.value.trim().slice(0, 200))}
-        />
-        <SelectField
-          label="Crib"
-          value={cribId}
-          onChange={(event) => setCribId(event.target.value)}
-          options={[
-            { value: '', label: 'All cribs' },
-            ...(cribs?.rows ?? []).map((crib) => ({ value: crib.id, label: `${crib.code} · ${crib.name}` })),
-          ]}
-        />
       </div>
-      {editing.refusals.map((refusal) => (
-        <div key={`${refusal.row.id} ${refusal.field.field}`} className="px-4 pb-2 lg:px-6">
-          <Notice kind="collision" isAnnounced>
-            <strong>
-              {refusal.row.itemCode} in {refusal.row.cribCode}, {refusal.field.label}
-            </strong>{' '}
-            was not changed to “{refusal.text}”. {refusal.message}{' '}
-            <Button
-              size="compact"
-              onClick={() => grid.current?.editCell(refusal.row.id, refusal.field.field)}
-            >
-              Correct it
-            </Button>{' '}
-            <Button
-              size="compact"
-              variant="quiet"
-              onClick={() => editing.takeBack(refusal.row, refusal.field.field, null)}
-            >
-              Leave it as it was
-            </Button>
-          </Notice>
-        </div>
-      ))}
-      <div className="relative h-[calc(100dvh-16rem)] min-h-96 shrink-0">
-        <ReorderPointsGrid
-          key={rows.length}
-          filters={{ cribId, q }}
-          suppliers={rows}
-          editing={canKeep ? editing : undefined}
-          handleRef={grid}
+      <MembersNotice cribId={view.filters.cribId ?? ''} />
+      {canKeep ? (
+        <EditNotices
+          editing={editing}
+          grid={grid}
+          onChangeSelected={() => setOpen('change')}
+          onRemoveSelected={() => setOpen('remove')}
         />
-      </div>
+      ) : null}
+      <ReorderPointsGrid
+        {...{ view, onViewChange, onClear, suppliers }}
+        editing={canKeep ? editing : undefined}
+        onTotal={setTotal}
+        onAdd={() => setOpen('add')}
+        handleRef={grid}
+      />
       {open === 'change' ? (
         <ChangeSelectedDialog
           rows={editing.selected}
-          suppliers={rows}
+          suppliers={suppliers}
           onChange={editing.changeSelected}
-          onClose={() => setOpen(null)}
+          onClose={close}
         />
+      ) : null}
+      {open === 'remove' ? (
+        <RemoveSelectedDialog rows={editing.selected} onClose={close} onRemoved={reload} />
       ) : null}
       {open === 'add' ? (
-        <AddReorderPointDialog
-          onClose={() => setOpen(null)}
-          onSaved={() => {
-            setOpen(null)
-            grid.current?.reload()
-          }}
-        />
-      ) : null}
-      {open === 'supplier' ? (
-        <SupplierDialog
-          onClose={() => setOpen(null)}
-          onSaved={() => {
-            setOpen(null)
-            void refreshSuppliers()
-          }}
-        />
+        <ReorderPointDialog row={null} suppliers={suppliers} onClose={close} onSaved={reload} />
       ) : null}
     </>
+  )
+}
+
+function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
+  const canKeep = useCan('keepCrib')
+  const [edited, setEdited] = useState<ReorderPointRow | 'new' | null>(null)
+  const [removed, setRemoved] = useState<ReorderPointRow | null>(null)
+  const counts = useCounts(view, true)
+  const list = useReorderPointList(queryParams(view).toString())
+  const reload = () => {
+    setEdited(null)
+    setRemoved(null)
+    void list.retry()
+  }
+  return (
+    <>
+      <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
+        <h1 className="text-2xl">Reorder points</h1>
+        <Actions view={view} onAdd={() => setEdited('new')} />
+        <div className="flex items-center gap-2">
+          <SearchBox value={view.q} label="Search reorder points" onSearch={(q) => onViewChange({ q })} />
+          <FilterDrawer
+            count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
+            onClear={() => onViewChange({ filters: {}, sort: '' })}
+          >
+            <SortSelect columns={sortColumns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
+            <ReorderPointFilters
+              shape="column"
+              values={view.filters}
+              counts={counts}
+              onChange={(filters) => onViewChange({ filters })}
+            />
+          </FilterDrawer>
+        </div>
+      </div>
+      <MembersNotice cribId={view.filters.cribId ?? ''} />
+      <ReorderPointList
+        list={list}
+        onEdit={canKeep ? setEdited : undefined}
+        state={
+          <ReorderPointsState
+            state={list.error ? 'failed' : list.isLoading ? 'loading' : 'empty'}
+            failure={list.error}
+            view={view}
+            onRetry={() => void list.retry()}
+            onClear={onClear}
+            onAdd={() => setEdited('new')}
+          />
+        }
+      />
+      {edited ? (
+        <ReorderPointDialog
+          row={edited === 'new' ? null : edited}
+          suppliers={suppliers}
+          onClose={() => setEdited(null)}
+          onSaved={reload}
+          onRemove={(row) => {
+            setEdited(null)
+            setRemoved(row)
+          }}
+        />
+      ) : null}
+      {removed ? (
+        <RemoveSelectedDialog rows={[removed]} onClose={() => setRemoved(null)} onRemoved={reload} />
+      ) : null}
+    </>
+  )
+}
+
+const sortColumns = [
+  { id: 'itemCode', name: 'Item', isSortable: true },
+  { id: 'position', name: 'Available and coming', isSortable: true },
+  ...editedFields.map(({ field, label }) => ({ id: field, name: label, isSortable: true })),
+]
+
+function useCounts(view: CatalogueView, isWanted: boolean) {
+  return useListCounts(reorderPointsApiPath, queryParams({ ...view, sort: '' }).toString(), isWanted)
+}
+
+function totalText(total: number, view: CatalogueView): string {
+  const found = isListNarrowed(view) ? 'found' : total === 1 ? 'reorder point' : 'reorder points'
+  return `${total.toLocaleString('en')} ${found}`
+}
+
+function Actions({ view, onAdd }: { view: CatalogueView; onAdd: () => void }) {
+  const canKeep = useCan('keepCrib')
+  return (
+    <div className="flex flex-wrap items-center gap-2">
+      <ButtonLink href="/alerts" size="compact">
+        Low stock
+      </ButtonLink>
+      <ButtonLink href="/suppliers" size="compact">
+        Suppliers
+      </ButtonLink>
+      <a
+        href={`${reorderPointsApiPath}/export?${queryParams(view)}`}
+        download
+        className={buttonClass({ size: 'compact' })}
+        title="The rows found, as they are sorted, as a CSV file that can be imported again"
+      >
+        <Download aria-hidden="true" className="size-4.5" />
+        Export
+      </a>
+      {canKeep ? (
+        <>
+          <ButtonLink href="/imports/new?kind=reorderPoints" size="compact" prefetch={false}>
+            <Upload aria-hidden="true" className="size-4.5" />
+            Import
+          </ButtonLink>
+          <Button variant="primary" size="compact" onClick={onAdd}>
+            <Plus aria-hidden="true" className="size-4.5" />
+            Add
+            <span className="sr-only"> a reorder point</span>
+          </Button>
+        </>
+      ) : null}
+    </div>
   )
 }
