@@ -40,3 +40,19 @@ test('the stick-out is stepped with gloves on, everything else with a finger', a
     expect(Math.min(target?.width ?? 0, target?.height ?? 0)).toBeGreaterThanOrEqual(44)
   }
 })
+
+test('on a phone the words of the first touch stand at the foot of the drawing, off every figure', async ({
+  page,
+}) => {
+  await page.goto(`/reach?obstacles=5x9&corner=4&opening=30&${check}`)
+  const drawing = page.getByRole('img', { name: /^Section of/ })
+  const words = drawing.getByText('nut touches next, 30 mm')
+  await expect(words).toBeVisible()
+  const foot = await words.boundingBox()
+  expect(foot).not.toBeNull()
+  for (const figure of [/^depth 25$/, /^reach 30$/, /^rises 9$/, /^opening 30$/, /^back 5$/, /^corner R4$/]) {
+    const box = await drawing.getByText(figure).boundingBox()
+    expect(box, String(figure)).not.toBeNull()
+    expect((box?.y ?? 0) + (box?.height ?? 0)).toBeLessThanOrEqual(foot?.y ?? 0)
+  }
+})

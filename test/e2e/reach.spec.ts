@@ -214,3 +214,31 @@ test('the figures of a drawing keep off the wall and the nut', async ({ page }) 
   if (!words || !nose) throw new Error('the first touch, or the nose, is not drawn')
   expect(words.y).toBeGreaterThan(nose.y + nose.height / 2)
 })
+
+test('the setback of an obstacle and an inside corner are dimensioned, and keep off the other figures', async ({
+  page,
+}) => {
+  await page.goto(`/reach?depth=25&obstacles=5x9&corner=4&opening=30&${necked}&${chuck}`)
+  const drawing = page.getByRole('img', { name: /inside corners of 4 mm radius/ })
+  await expect(drawing).toBeVisible()
+  const boxes = []
+  for (const name of [
+    /^set back 5$/,
+    /^inside corner R4$/,
+    /^opening 30$/,
+    /^depth 25$/,
+    /^nut touches next/,
+  ]) {
+    const box = await drawing.getByText(name).boundingBox()
+    expect(box, String(name)).not.toBeNull()
+    if (box) boxes.push(box)
+  }
+  for (const [index, one] of boxes.entries())
+    for (const other of boxes.slice(index + 1))
+      expect(
+        one.x + one.width <= other.x ||
+          other.x + other.width <= one.x ||
+          one.y + one.height <= other.y ||
+          other.y + other.height <= one.y,
+      ).toBe(true)
+})

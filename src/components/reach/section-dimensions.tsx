@@ -5,8 +5,9 @@ import { formatLength } from '@/lib/format-length'
 import { AngleDimension } from '../drawing/angle-dimension'
 import { DimensionLine } from '../drawing/dimension-line'
 import { dimensionSpacing } from '../drawing/drafting-style'
+import { LeaderLine } from '../drawing/leader-line'
 import { OpenDimension } from '../drawing/open-dimension'
-import { farWallMm, onSheet, type SectionLayout } from './section-layout'
+import { farWallMm, isNarrow, onSheet, type SectionLayout } from './section-layout'
 import { type SectionScene, topFaceMm } from './section-scene'
 import { toolTransform, toolY } from './section-tool'
 
@@ -52,8 +53,11 @@ export const PartDimensions = memo(function PartDimensions({
         at={x + dimensionSpacing}
         symbol="depth"
         text={said(feature.depthMm)}
+        overflow={at.kind === 'wall' && at.obstacles.length > 0 ? 'start' : 'end'}
       />
       <FeatureWidths scene={scene} layout={layout} unit={unit} />
+      <Setbacks scene={scene} layout={layout} unit={unit} />
+      <InsideCorner scene={scene} layout={layout} unit={unit} />
       <Angles scene={scene} layout={layout} />
     </g>
   )
@@ -76,6 +80,7 @@ function FeatureWidths({ scene, layout, unit }: Omit<SectionDimensionsProps, 're
           at={onSheet(layout, 0, -at.leadMm).y + dimensionSpacing}
           symbol={feature.kind === 'hole' ? 'Ø' : 'opening'}
           text={said(-farMm)}
+          overflow={insideCornerMm(scene) === null ? 'end' : 'start'}
         />
       )}
       {riseMm > 0 ? (
@@ -90,6 +95,62 @@ function FeatureWidths({ scene, layout, unit }: Omit<SectionDimensionsProps, 're
       ) : null}
     </g>
   )
+}
+
+const setbacksAtMost = 3
+
+/** How far behind the wall's top edge each obstacle stands, under the face it stands on, the nearest first. */
+function Setbacks({ scene, layout, unit }: Omit<SectionDimensionsProps, 'reachMm'>) {
+  const { at } = scene
+  if (at.kind === 'hole') return null
+  const topMm = topFaceMm(at)
+  const edgeMm = topMm * at.tanDraft
+  const top = onSheet(layout, 0, topMm).y
+  // On a wide sheet the words of the first touch stand right under the face.
+  const first = isNarrow(layout.sheet) ? dimensionSpacing : 2 * dimensionSpacing
+  const setbacks = [...new Set(at.obstacles.map(({ setbackMm }) => setbackMm))]
+    .filter((setbackMm) => setbackMm > 0)
+    .sort((one, other) => one - other)
+    .slice(0, setbacksAtMost)
+  return (
+    <g>
+      {setbacks.map((setbackMm, index) => (
+        <DimensionLine
+          key={setbackMm}
+          axis="horizontal"
+          from={onSheet(layout, edgeMm, topMm)}
+          to={onSheet(layout, edgeMm + setbackMm, topMm)}
+          at={Math.min(top + first, layout.bottom - dimensionSpacing) + index * dimensionSpacing}
+          symbol={isNarrow(layout.sheet) ? 'back' : 'set back'}
+          text={formatLength(setbackMm, unit, { withUnit: false })}
+        />
+      ))}
+    </g>
+  )
+}
+
+/** The section runs past the corner, so its radius is a note at the foot of the wall. */
+function InsideCorner({ scene, layout, unit }: Omit<SectionDimensionsProps, 'reachMm'>) {
+  const radiusMm = insideCornerMm(scene)
+  if (radiusMm === null) return null
+  const foot = onSheet(layout, 0, 0)
+  return (
+    <LeaderLine
+      target={{ x: foot.x, y: foot.y - cornerNoteRise }}
+      shoulder={{ x: foot.x + cornerNoteOut, y: foot.y + cornerNoteDrop }}
+      symbol={isNarrow(layout.sheet) ? 'corner' : 'inside corner'}
+      text={`R${formatLength(radiusMm, unit, { withUnit: false })}`}
+    />
+  )
+}
+
+const cornerNoteRise = 10
+const cornerNoteOut = 18
+const cornerNoteDrop = 18
+
+/** The radius of the wall's inside corner; null where there is none to be kept. */
+function insideCornerMm({ feature }: SectionScene): number | null {
+  return feature.kind === 'wall' && feature.insideCornerRadiusMm ? feature.insideCornerRadiusMm : null
 }
 
 function Angles({ scene, layout }: Pick<SectionDimensionsProps, 'scene' | 'layout'>) {
@@ -137,6 +198,8 @@ function besideDeg(toDeg: number, radius: number): number {
 }
 
 const endGap = 4
+/** Nearer to the top a figure beyond the end of its line would run into the scale. */
+const roomAtTop = 96
 
 /** Just before the end of an arc, over it: past the end the wall would run through the figure. */
 function beforeDeg(toDeg: number, radius: number): number {
@@ -156,6 +219,7 @@ export const ToolDimensions = memo(function ToolDimensions({
   const edge = -layout.toolRadiusMm * layout.pxPerMm
   const cutterEdge = -Math.max(scene.cutter.radiusMm, scene.cutter.shankRadiusMm) * layout.pxPerMm
   const outside = edge - firstLine
+  const turnY = onSheet(layout, layout.turn.uMm, layout.turn.hMm).y
   const place = (zMm: number, x: number) => ({ x: turn * x, y: turn * toolY(layout, zMm) })
   const dimension = (fromMm: number, toMm: number, line: number, symbol: string) => {
     const from = place(fromMm, fromMm === 0 ? cutterEdge : edge)
@@ -165,7 +229,7 @@ export const ToolDimensions = memo(function ToolDimensions({
         {...common}
         axis="vertical"
         to={place(toMm, toMm === noseMm ? line : edge)}
-        overflow={turn > 0 ? 'end' : 'start'}
+        overflow={turn > 0 && place(toMm, edge).y + turnY > roomAtTop ? 'end' : 'start'}
       />
     ) : (
       <OpenDimension {...common} toY={turn * toolY(layout, layout.cutZMm)} />

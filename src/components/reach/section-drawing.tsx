@@ -118,7 +118,7 @@ function Touches({
         <TouchMark
           at={limit}
           layout={layout}
-          text={limitText(answer, answer.limitedBy, answer.reachMm, unit, layout)}
+          text={limitText(answer, answer.limitedBy, answer.reachMm, unit)}
           tone={isCollision(answer) ? 'collision' : 'next'}
           dropPx={answer.limitedBy === 'floor' ? usualDropPx : dropPx(limit.hMm)}
         />
@@ -132,13 +132,11 @@ function limitText(
   limitedBy: NonNullable<ReachAnswer['limitedBy']>,
   reachMm: number,
   unit: LengthUnit,
-  layout: SectionLayout,
 ): string {
   if (limitedBy === 'floor') return 'collision: the far side is in the floor'
   const name = partNames[limitedBy]
   const at = sentenceLength(reachMm, unit)
-  if (isCollision(answer)) return `collision: ${name}, ${at}`
-  return isNarrow(layout.sheet) ? `${name}, ${at}` : `${name} touches next, ${at}`
+  return isCollision(answer) ? `collision: ${name}, ${at}` : `${name} touches next, ${at}`
 }
 
 /** Something is in the way at this depth; an impossible check may have other reasons. */

@@ -33,7 +33,9 @@ export interface SectionLayout extends SectionFrame {
 }
 
 const wideMargins = { left: 96, right: 92, top: 54, bottom: 58 }
-const narrowMargins = { left: 66, right: 70, top: 34, bottom: 46 }
+const narrowMargins = { left: 66, right: 70, top: 34, bottom: 74 }
+/** A phone's sheet ends in a line of words: what touches first. */
+const captionPx = 28
 const narrowSheetWidth = 560
 
 /** A phone's width: figures stand closer and words are fewer. */
@@ -66,7 +68,10 @@ export function sectionLayout(
     cutZMm,
     left: 12,
     right: sheet.width - margins.right,
-    bottom: Math.min(sheet.height - 10, frame.foot.y - extent.toolLowMm * frame.pxPerMm + slabPx),
+    bottom: Math.min(
+      sheet.height - (isNarrow(sheet) ? captionPx : 10),
+      frame.foot.y - extent.toolLowMm * frame.pxPerMm + slabPx,
+    ),
     turn: turnOf(scene),
     toolRadiusMm: extent.toolRadiusMm,
   }

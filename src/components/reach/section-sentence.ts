@@ -38,6 +38,7 @@ function featureWords({ feature, at }: SectionScene, said: (mm: number) => strin
     draftDeg > 0 ? ` with ${formatAngle(draftDeg)} of draft` : '',
     tiltDeg > 0 ? `, tilted ${formatAngle(tiltDeg)} away from it` : '',
     feature.openingWidthMm == null ? '' : `, in an opening of ${said(feature.openingWidthMm)}`,
+    feature.insideCornerRadiusMm ? `, inside corners of ${said(feature.insideCornerRadiusMm)} radius` : '',
     feature.obstacles?.length ? `, with ${feature.obstacles.length} standing beside it` : '',
   ].join('')
 }
