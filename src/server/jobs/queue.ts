@@ -14,12 +14,18 @@ function bossDb(knex: Knex): PgBoss.Db {
   }
 }
 
+const startLock = 72_616_453
+
 /** A queue on the pool of this process, with its tables and every queue in place; `supervise` in the worker alone. */
 export async function startBoss(options: { supervise: boolean }): Promise<PgBoss> {
   const boss = new PgBoss({ db: bossDb(db()), supervise: options.supervise, schedule: false })
   boss.on('error', (error) => log.error({ error: error.stack }, 'job queue'))
-  await boss.start()
-  for (const { name } of jobDefinitions) await boss.createQueue(name)
+  // Web server and worker may come up at once, and making the same queue twice is a deadlock to PostgreSQL.
+  await db().transaction(async (lock) => {
+    await lock.raw('select pg_advisory_xact_lock(?)', [startLock])
+    await boss.start()
+    for (const { name } of jobDefinitions) await boss.createQueue(name)
+  })
   return boss
 }
 
