@@ -1,10 +1,8 @@
-import { writeFileSync } from 'node:fs'
-import { join } from 'node:path'
 import pg from 'pg'
 import { type Bench, type Figure, ratioFigure } from './runner/bench'
 import { bigShop } from './runner/big-shop'
-import { type BenchSite, type Lab, statementsFile } from './runner/lab'
-import { listStatements, type Statement } from './runner/list-statements'
+import type { BenchSite, Lab } from './runner/lab'
+import { type ListView, listViews, type Statement } from './runner/list-statements'
 import { answerTimes } from './runner/load'
 import { sessionCookie } from './runner/session'
 import { percentile } from './runner/statistics'
@@ -18,15 +16,7 @@ const warmUpSeconds = 3
 const sqlRuns = 200
 const sqlWarmUps = 20
 
-/** Three blocks of the cutter list as the grid asks for them. */
-const views = {
-  plain: 'limit=100&offset=0',
-  filtered:
-    'q=ball+long&form=ball,cornerRadius&cuttingDiameterMm.min=6&cuttingDiameterMm.max=12&limit=100&offset=0',
-  jump: 'limit=100&offset=90000',
-}
-type View = keyof typeof views
-const viewNames: Readonly<Record<View, string>> = {
+const viewNames: Readonly<Record<ListView, string>> = {
   plain: 'plain',
   filtered: 'filtered with search',
   jump: 'a jump to row 90,000',
@@ -40,12 +30,10 @@ const viewNames: Readonly<Record<View, string>> = {
 export const bench: Bench = {
   name: 'list',
   run: async (lab) => {
-    const site = await bigShop(lab)
-    const statements = await listStatements(site.databaseUrl, views)
-    writeFileSync(join(site.folder, statementsFile), JSON.stringify(statements))
+    const { site, statements } = await bigShop(lab)
     const cookie = await sessionCookie(site)
     const figures: Figure[] = []
-    for (const view of Object.keys(views) as View[]) {
+    for (const view of Object.keys(listViews) as ListView[]) {
       figures.push(await routeFigure(lab, site, cookie, view))
       figures.push(await sqlFigure(site, view, statements[view]))
     }
@@ -53,8 +41,8 @@ export const bench: Bench = {
   },
 }
 
-async function routeFigure(lab: Lab, site: BenchSite, cookie: string, view: View): Promise<Figure> {
-  const ours = `${site.address}/api/cutters?${views[view]}`
+async function routeFigure(lab: Lab, site: BenchSite, cookie: string, view: ListView): Promise<Figure> {
+  const ours = `${site.address}/api/cutters?${listViews[view]}`
   const bare = `${site.address}/api/bench/list?view=${view}`
   const times: { ours: number[]; bare: number[] } = { ours: [], bare: [] }
   await answerTimes(ours, { cookie }, warmUpSeconds)
@@ -74,7 +62,7 @@ async function routeFigure(lab: Lab, site: BenchSite, cookie: string, view: View
   return ratioFigure(`${viewNames[view]}, p97.5`, sides, ratioLimit, samples, note)
 }
 
-async function sqlFigure(site: BenchSite, view: View, statements: readonly Statement[]): Promise<Figure> {
+async function sqlFigure(site: BenchSite, view: ListView, statements: readonly Statement[]): Promise<Figure> {
   const database = new pg.Client({ connectionString: site.databaseUrl })
   await database.connect()
   const times: number[] = []

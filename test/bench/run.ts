@@ -50,7 +50,7 @@ async function figuresOf(bench: Bench, lab: Lab): Promise<Pick<Outcome, 'figures
     const stopped = aborted(lab.signal).then((): never => {
       throw new Interrupted()
     })
-    return { figures: await Promise.race([bench.run(lab), stopped]), failure: null }
+    return { figures: await Promise.race([bench.run(lab), stopped, lab.failed]), failure: null }
   } catch (error) {
     return { figures: [], failure: reasonOf(error) }
   }

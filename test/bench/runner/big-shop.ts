@@ -1,13 +1,22 @@
+import { writeFileSync } from 'node:fs'
+import { join } from 'node:path'
 import pg from 'pg'
 import { cutterCsv, stockCsv } from './big-catalogue'
 import { importFile } from './import-file'
-import type { BenchSite, Lab } from './lab'
+import { type BenchSite, type Lab, statementsFile } from './lab'
+import { type ListView, listStatements, type Statement } from './list-statements'
 import { sessionCookie } from './session'
 
 const cutterCount = 100_000
 
+export interface BigShop {
+  site: BenchSite
+  /** What the cutter list asks the database, and the site's bare route with it. */
+  statements: Record<ListView, Statement[]>
+}
+
 /** The demo shop with 100,000 cutters more, every third in a bin, brought there by imports; one for all benches. */
-export function bigShop(lab: Lab): Promise<BenchSite> {
+export function bigShop(lab: Lab): Promise<BigShop> {
   return lab.once('big shop', async () => {
     const site = await lab.startSite(await lab.createDatabase())
     const cookie = await sessionCookie(site)
@@ -23,6 +32,8 @@ export function bigShop(lab: Lab): Promise<BenchSite> {
     // What PostgreSQL does by itself within minutes of such an import.
     await database.query('vacuum analyze')
     await database.end()
-    return site
+    const statements = await listStatements(site.databaseUrl)
+    writeFileSync(join(site.folder, statementsFile), JSON.stringify(statements))
+    return { site, statements }
   })
 }

@@ -36,10 +36,16 @@ export class Lab {
   readonly #started: Started
   readonly #made = new Map<string, Promise<unknown>>()
   #count = 0
+  #fail: (error: unknown) => void = () => undefined
+  /** Rejects when a site that was started ends before it was stopped; never resolves. */
+  readonly failed = new Promise<never>((_, reject) => {
+    this.#fail = reject
+  })
 
   constructor(run: TestRun, started: Started) {
     this.#run = run
     this.#started = started
+    this.failed.catch(() => undefined)
   }
 
   /** Aborts when somebody stops the run. */
@@ -97,7 +103,14 @@ export class Lab {
     const web = this.#started.add(startWebServer(site, '127.0.0.1', port, builtFolder))
     const worker = this.#started.add(startWorker(site))
     await Promise.race([waitForHealth(address, web, join(folder, 'web.log'), this.signal), worker.failed])
+    let isStopping = false
+    // A site that ends by itself ends the bench that measures it, with the reason.
+    for (const server of [web, worker])
+      server.failed.catch((error: unknown) => {
+        if (!isStopping) this.#fail(error)
+      })
     const stop = async () => {
+      isStopping = true
       await Promise.all([web.stop(), worker.stop()])
     }
     return { address, databaseUrl: url, workerPid: worker.pid ?? 0, folder, stop }
@@ -113,6 +126,7 @@ export class Lab {
   }
 
   async close(): Promise<void> {
+    this.#fail = () => undefined
     const browser = this.#made.get('browser') as Promise<Browser> | undefined
     await browser?.then((opened) => opened.close()).catch(() => undefined)
     await this.#started.stopAll()

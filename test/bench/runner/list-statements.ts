@@ -2,6 +2,15 @@ import { randomBytes } from 'node:crypto'
 import { cutterListQuerySchema } from '@/schemas/cutter'
 import type { Actor } from '@/server/auth/actor'
 
+/** Three blocks of the cutter list as the grid asks for them. */
+export const listViews = {
+  plain: 'limit=100&offset=0',
+  filtered:
+    'q=ball+long&form=ball,cornerRadius&cuttingDiameterMm.min=6&cuttingDiameterMm.max=12&limit=100&offset=0',
+  jump: 'limit=100&offset=90000',
+}
+export type ListView = keyof typeof listViews
+
 export interface Statement {
   sql: string
   bindings: unknown[]
@@ -18,25 +27,21 @@ const actor: Actor = {
   homeCribId: null,
 }
 
-/** The statements that the cutter list sends for each of these queries, in their order, caught on their way out. */
-export async function listStatements<View extends string>(
-  databaseUrl: string,
-  views: Readonly<Record<View, string>>,
-): Promise<Record<View, Statement[]>> {
+/** The statements that the cutter list sends for each of its views, in their order, caught on their way out. */
+export async function listStatements(databaseUrl: string): Promise<Record<ListView, Statement[]>> {
   // Nobody signs in here; the settings are read as a whole.
   Object.assign(process.env, { DATABASE_URL: databaseUrl, SESSION_SECRET: randomBytes(32).toString('hex') })
   const { db, closeDb } = await import('@/server/db/connection')
   const { listItems } = await import('@/server/services/catalogue/list-items')
-  let sent: Statement[] = []
-  db().on('query', ({ sql, bindings }: Statement) => sent.push({ sql, bindings }))
-  const statements: [string, Statement[]][] = []
-  for (const [view, query] of Object.entries<string>(views)) {
-    sent = []
-    const asked = Object.fromEntries(new URLSearchParams(query))
+  const sent: Record<ListView, Statement[]> = { plain: [], filtered: [], jump: [] }
+  for (const view of Object.keys(sent) as ListView[]) {
+    const note = ({ sql, bindings }: Statement) => sent[view].push({ sql, bindings })
+    const asked = Object.fromEntries(new URLSearchParams(listViews[view]))
+    db().on('query', note)
     const { rows } = await listItems(actor, 'cutter', cutterListQuerySchema.parse(asked))
+    db().off('query', note)
     if (rows.length === 0) throw new Error(`The view ${view} shows nothing.`)
-    statements.push([view, sent])
   }
   await closeDb()
-  return Object.fromEntries(statements) as Record<View, Statement[]>
+  return sent
 }

@@ -1,0 +1,5 @@
+import { BareGrid } from './bare-grid'
+
+export default function Page() {
+  return <BareGrid />
+}
