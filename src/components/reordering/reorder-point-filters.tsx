@@ -1,5 +1,7 @@
 'use client'
 
+import { useCribs } from '@/hooks/use-cribs'
+import { useSuppliers } from '@/hooks/use-suppliers'
 import type { CatalogueCounts } from '@/schemas/catalogue-counts'
 import type { CatalogueView } from '../catalogue/catalogue-view'
 import { classNames } from '../ui/class-names'
@@ -36,27 +38,47 @@ export function ReorderPointFilters({ values, counts, onChange, shape }: Reorder
     const { [name]: _, ...others } = values
     onChange(value === '' ? others : { ...others, [name]: value })
   }
+  const named = useNames()
   return reorderPointFilterNames.map((name) => (
     <SelectField
       key={name}
       label={labels[name].label}
       value={values[name] ?? ''}
       onChange={(event) => handleSet(name, event.target.value)}
-      options={[{ value: '', label: labels[name].any }, ...choicesOf(counts[name] ?? [], values[name])]}
+      options={[
+        { value: '', label: labels[name].any },
+        ...choicesOf(counts[name] ?? [], values[name], (value) => named(name, value)),
+      ]}
       className={classNames(shape === 'row' ? 'w-auto min-w-40 max-w-64' : 'w-full')}
     />
   ))
 }
 
-function choicesOf(counts: CatalogueCounts[string], chosen: string | undefined): SelectOption[] {
+/** The cribs and suppliers there are: what no row has is a choice too, where the address asks for it. */
+function useNames(): (name: FilterName, value: string) => string | undefined {
+  const { data: cribs } = useCribs()
+  const { data: suppliers } = useSuppliers({ withArchived: true })
+  return (name, value) => {
+    if (name === 'stockState') return stateNames[value]
+    if (name === 'supplierId') return suppliers?.rows.find(({ id }) => id === value)?.name
+    const crib = cribs?.rows.find(({ id }) => id === value)
+    return crib && `${crib.code} · ${crib.name}`
+  }
+}
+
+function choicesOf(
+  counts: CatalogueCounts[string],
+  chosen: string | undefined,
+  nameOf: (value: string) => string | undefined,
+): SelectOption[] {
   const options = counts.map(({ value, label, count }) => ({
     value,
-    label: `${label ?? stateNames[value] ?? value} (${count.toLocaleString('en')})`,
+    label: `${label ?? nameOf(value) ?? value} (${count.toLocaleString('en')})`,
   }))
   const isListed = chosen === undefined || options.some(({ value }) => value === chosen)
   return isListed
     ? options
-    : [{ value: chosen, label: stateNames[chosen] ?? 'The one in the address' }, ...options]
+    : [{ value: chosen, label: nameOf(chosen) ?? 'The one in the address' }, ...options]
 }
 
 /** Unlike in the catalogue, the crib narrows this list too. */
