@@ -1,4 +1,5 @@
-import { type FieldProblem, type Problem, problemSchema } from '@/schemas/problem'
+import type { FieldProblem, Problem } from '@/schemas/problem'
+import { readProblem } from './read-problem'
 
 /** An answer that is not a success, as a sentence; `problem` is null where no answer came at all. */
 export class ApiError extends Error {
@@ -43,9 +44,9 @@ export async function callApi<Answer>(
   if (response.status === 204) return undefined as Answer
   const answer: unknown = await response.json().catch(() => null)
   if (response.ok) return answer as Answer
-  const problem = problemSchema.safeParse(answer)
-  throw problem.success
-    ? new ApiError(problem.data.detail, problem.data)
+  const problem = readProblem(answer)
+  throw problem
+    ? new ApiError(problem.detail, problem)
     : new ApiError(`The server answered ${response.status} without saying why.`, null)
 }
 

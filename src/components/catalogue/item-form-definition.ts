@@ -1,6 +1,5 @@
 import type { ReactNode } from 'react'
 import type { FieldValues } from 'react-hook-form'
-import type { z } from 'zod'
 import type { SelectOption } from '@/components/ui/select-field'
 
 export interface ItemField {
@@ -30,7 +29,6 @@ export interface ItemFormDefinition<Row> {
   segments?: { hasPart: boolean; hint: string }
   /** Choices a new item begins with. */
   blank: FieldValues
-  requestSchema: z.ZodType
   draw: (row: Row) => ReactNode
   /** What was read so far with what a drawing can do without filled in, so that it appears early while typing. */
   completeForDrawing?: (body: FieldValues) => FieldValues

@@ -10,6 +10,7 @@ import { classNames } from '@/components/ui/class-names'
 import { Notice } from '@/components/ui/notice'
 import { useSaveItem } from '@/hooks/use-save-item'
 import { ApiError } from '@/lib/api-client'
+import { createItemSchemas } from '@/schemas/create-item'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import type { ItemFieldGroup } from './item-form-definition'
@@ -46,7 +47,7 @@ export function ItemForm<Row extends CatalogueRow>(props: ItemFormProps<Row>) {
   const [base, setBase] = useState(props.row)
   const form = useForm<FieldValues, unknown, FieldValues>({
     defaultValues: base ? typedRow(definition.form, base, manner) : blankValues(definition.form),
-    resolver: useMemo(() => itemResolver(definition.form, manner), [definition.form, manner]),
+    resolver: useMemo(() => itemResolver(definition.kind, definition.form, manner), [definition, manner]),
     mode: 'onBlur',
     reValidateMode: 'onChange',
   })
@@ -197,7 +198,7 @@ function FormDrawing<Row extends CatalogueRow>({
   const values = useWatch({ control })
   const { body } = readTyped(definition.form, values, manner)
   const completed = { ...(definition.form.completeForDrawing?.(body) ?? body), code: body.code || '–' }
-  const checked = definition.form.requestSchema.safeParse(completed)
+  const checked = createItemSchemas[definition.kind].safeParse(completed)
   // Faults the geometry itself has come last and under this code; before them something is not typed yet.
   const fault = checked.success ? null : checked.error.issues[0]
   const reason =

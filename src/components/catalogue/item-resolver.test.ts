@@ -16,24 +16,28 @@ const holder = {
 
 describe('itemResolver', () => {
   it('hands on what the server is sent, in millimetres', async () => {
-    const resolved = await itemResolver(holderForm, manner)(holder, undefined, options)
+    const resolved = await itemResolver('holder', holderForm, manner)(holder, undefined, options)
     expect(resolved.errors).toEqual({})
     expect(resolved.values).toMatchObject({ gaugeLengthMm: 100, bore: { kind: 'collet', series: 'ER16' } })
   })
 
   it('puts the fault of an inner field at that field', async () => {
     const typed = { ...holder, bore: { kind: 'fixed', series: '', diameterMm: 'six' } }
-    const { errors } = await itemResolver(holderForm, manner)(typed, undefined, options)
+    const { errors } = await itemResolver('holder', holderForm, manner)(typed, undefined, options)
     expect(errors).toMatchObject({ bore: { diameterMm: { message: expect.stringContaining('six') } } })
   })
 
   it('says a missing segment beside the segments, not in one of them', async () => {
-    const { errors } = await itemResolver(holderForm, manner)({ ...holder, segments: [] }, undefined, options)
+    const { errors } = await itemResolver('holder', holderForm, manner)(
+      { ...holder, segments: [] },
+      undefined,
+      options,
+    )
     expect(errors).toMatchObject({ segments: { root: { message: 'Give at least one segment.' } } })
   })
 
   it('refuses segments longer than the gauge length, as the server would', async () => {
-    const { errors } = await itemResolver(holderForm, manner)(
+    const { errors } = await itemResolver('holder', holderForm, manner)(
       { ...holder, gaugeLengthMm: '10' },
       undefined,
       options,

@@ -1,16 +1,19 @@
 import { type FieldErrors, type FieldValues, type Resolver, set } from 'react-hook-form'
+import type { CatalogueKind } from '@/core/stock/kinds'
+import { createItemSchemas } from '@/schemas/create-item'
 import type { FieldProblem } from '@/schemas/problem'
 import type { ItemFormDefinition } from './item-form-definition'
 import { type Manner, readTyped } from './typed-values'
 
 /** What was typed, read once into mm, then asked of the schema the server asks too; each fault lands at its field. */
 export function itemResolver<Row>(
+  kind: CatalogueKind,
   definition: ItemFormDefinition<Row>,
   manner: Manner,
 ): Resolver<FieldValues, unknown, FieldValues> {
   return (values) => {
     const { body, problems } = readTyped(definition, values, manner)
-    const checked = definition.requestSchema.safeParse(body)
+    const checked = createItemSchemas[kind].safeParse(body)
     const unread = new Set(problems.map((problem) => problem.path))
     const issues = checked.success
       ? []

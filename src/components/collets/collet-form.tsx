@@ -1,10 +1,12 @@
+import dynamic from 'next/dynamic'
 import { identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
-import { type ColletResponse, createColletRequestSchema } from '@/schemas/collet'
-import { ColletDrawing } from './collet-drawing'
+import type { ColletResponse } from '@/schemas/collet'
+
+// A list has the form's fields at hand for editing in place, but draws nothing.
+const ColletDrawing = dynamic(() => import('./collet-drawing').then((module) => module.ColletDrawing))
 
 export const colletForm: ItemFormDefinition<ColletResponse> = {
-  requestSchema: createColletRequestSchema,
   blank: {},
   draw: (collet) => <ColletDrawing code={collet.code} collet={collet} />,
   groups: [

@@ -1,10 +1,13 @@
+import dynamic from 'next/dynamic'
 import type { FieldValues } from 'react-hook-form'
 import { identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
 import { type CutterForm, cutterForms, substrates } from '@/core/tooling'
 import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
-import { type CutterResponse, createCutterRequestSchema } from '@/schemas/cutter'
-import { CutterDrawing } from './cutter-drawing'
+import type { CutterResponse } from '@/schemas/cutter'
+
+// A list has the form's fields at hand for editing in place, but draws nothing.
+const CutterDrawing = dynamic(() => import('./cutter-drawing').then((module) => module.CutterDrawing))
 
 function hasForm(...forms: CutterForm[]) {
   return (values: FieldValues) => forms.includes(values.form)
@@ -16,7 +19,6 @@ const mayHaveNeck = (values: FieldValues) => !neckless(values)
 
 /** The fields of a cutter: each form is asked only for what it has. */
 export const cutterForm: ItemFormDefinition<CutterResponse> = {
-  requestSchema: createCutterRequestSchema,
   blank: { form: 'square', substrate: 'carbide' },
   draw: (cutter) => <CutterDrawing code={cutter.code} cutter={cutter} />,
   groups: [

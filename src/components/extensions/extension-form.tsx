@@ -1,11 +1,15 @@
+import dynamic from 'next/dynamic'
 import { withWholeSegments } from '@/components/catalogue/complete-segments'
 import { boreFields, identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
-import { createExtensionRequestSchema, type ExtensionResponse } from '@/schemas/extension'
-import { ExtensionDrawing } from './extension-drawing'
+import type { ExtensionResponse } from '@/schemas/extension'
+
+// A list has the form's fields at hand for editing in place, but draws nothing.
+const ExtensionDrawing = dynamic(() =>
+  import('./extension-drawing').then((module) => module.ExtensionDrawing),
+)
 
 export const extensionForm: ItemFormDefinition<ExtensionResponse> = {
-  requestSchema: createExtensionRequestSchema,
   blank: { bore: { kind: 'collet' } },
   draw: (extension) => <ExtensionDrawing code={extension.code} extension={extension} />,
   completeForDrawing: (body) => withWholeSegments(body, 'projectionMm'),

@@ -1,14 +1,16 @@
+import dynamic from 'next/dynamic'
 import type { FieldValues } from 'react-hook-form'
 import { withWholeSegments } from '@/components/catalogue/complete-segments'
 import { boreFields, identityGroup } from '@/components/catalogue/item-fields'
 import type { ItemFormDefinition } from '@/components/catalogue/item-form-definition'
-import { createHolderRequestSchema, type HolderResponse } from '@/schemas/holder'
-import { HolderDrawing } from './holder-drawing'
+import type { HolderResponse } from '@/schemas/holder'
+
+// A list has the form's fields at hand for editing in place, but draws nothing.
+const HolderDrawing = dynamic(() => import('./holder-drawing').then((module) => module.HolderDrawing))
 
 const hasFixedBore = (values: FieldValues) => values.bore?.kind === 'fixed'
 
 export const holderForm: ItemFormDefinition<HolderResponse> = {
-  requestSchema: createHolderRequestSchema,
   blank: { bore: { kind: 'collet' } },
   draw: (holder) => <HolderDrawing code={holder.code} holder={holder} />,
   completeForDrawing: (body) => withWholeSegments(body, 'gaugeLengthMm'),

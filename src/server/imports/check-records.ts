@@ -1,11 +1,7 @@
 import { isDeepStrictEqual } from 'node:util'
 import type { Knex } from 'knex'
-import type { z } from 'zod'
 import type { CatalogueKind } from '@/core/stock/kinds'
-import { createColletRequestSchema } from '@/schemas/collet'
-import { createCutterRequestSchema } from '@/schemas/cutter'
-import { createExtensionRequestSchema } from '@/schemas/extension'
-import { createHolderRequestSchema } from '@/schemas/holder'
+import { createItemSchemas } from '@/schemas/create-item'
 import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
 import { geometryFromRow, geometryTables } from '../db/geometry-tables'
 import {
@@ -18,13 +14,6 @@ import type { StagedRow } from '../db/stores/import-row-store'
 import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
 import { type FlatRecord, textOf } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
-
-const requestSchemas: Readonly<Record<CatalogueKind, z.ZodType>> = {
-  cutter: createCutterRequestSchema,
-  holder: createHolderRequestSchema,
-  collet: createColletRequestSchema,
-  extension: createExtensionRequestSchema,
-}
 
 /** How the kinds of a file are called one by one. */
 export const itemKinds = {
@@ -145,7 +134,7 @@ class ItemCheck {
       if (!this.given.failed.has('code')) this.refuse(['code'], 'A new item needs a code of its own.')
       return
     }
-    const parsed = requestSchemas[this.kind].safeParse(requestOf(this.kind, whole))
+    const parsed = createItemSchemas[this.kind].safeParse(requestOf(this.kind, whole))
     if (parsed.success) return
     const hasFailures = this.problems.length > 0
     for (const issue of parsed.error.issues) {
