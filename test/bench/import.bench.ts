@@ -113,6 +113,6 @@ async function psql(url: string, ...commands: string[]): Promise<string> {
 /** A process's memory now and at its highest, as Linux counts it. */
 function residentMb(pid: number): { now: number; highest: number } {
   const status = readFileSync(`/proc/${pid}/status`, 'utf8')
-  const of = (name: string) => (Number(new RegExp(`${name}:\\s+(\\d+)`).exec(status)?.[1]) * 1024) / 1e6
+  const of = (name: string) => Number(new RegExp(`${name}:\\s+(\\d+)`).exec(status)?.[1]) / 1024
   return { now: of('VmRSS'), highest: of('VmHWM') }
 }

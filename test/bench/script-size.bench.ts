@@ -53,7 +53,7 @@ async function pageFigure(lab: Lab, site: BenchSite, measured: MeasuredPage): Pr
     return {
       name: path,
       value: gzippedKb(loaded),
-      unit: 'kB',
+      unit: 'KB',
       limit: { atMost: limitKb },
       samples: 1,
       note: `${loaded.length} script files`,

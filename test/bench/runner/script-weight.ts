@@ -5,8 +5,8 @@ export interface ScriptFile {
   body: Buffer
 }
 
-/** Kilobytes (of 1000 bytes) that these files take on the wire at gzip's usual level, each file counted once. */
+/** What these files take on the wire at gzip's usual level, each file counted once, in KB of 1024 bytes. */
 export function gzippedKb(files: readonly ScriptFile[]): number {
   const bodies = new Map(files.map(({ url, body }) => [url, body]))
-  return [...bodies.values()].reduce((sum, body) => sum + gzipSync(body).length, 0) / 1000
+  return [...bodies.values()].reduce((sum, body) => sum + gzipSync(body).length, 0) / 1024
 }
