@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, expect, test } from 'vitest'
-import { readFirstDayCounts } from '@/server/db/read-models/first-day-counts'
+import { readFirstDayCounts, readIsFirstDayOpen } from '@/server/db/read-models/first-day-counts'
 import { type Books, createBooks, post, receive } from '../support/books'
 import { createCollet, createCutter, createHolder } from '../support/catalogue'
 import { createTestDatabase, type TestDatabase } from '../support/database'
@@ -47,4 +47,21 @@ test('a new shop has nothing, and each thing counts once it is there', async () 
     people: 2,
     areSettingsSeen: true,
   })
+})
+
+test('the first day is open until bins, cutters, holders and stock are there, people or not', async () => {
+  const empty = await createTestDatabase()
+  const { db } = empty
+  try {
+    expect(await readIsFirstDayOpen(db)).toBe(true)
+    const books = await createBooks(db)
+    const cutterId = await createCutter(db)
+    expect(await readIsFirstDayOpen(db)).toBe(true)
+    await receive(db, { ...books, itemId: cutterId }, 1)
+    expect(await readIsFirstDayOpen(db)).toBe(true)
+    await createHolder(db)
+    expect(await readIsFirstDayOpen(db)).toBe(false)
+  } finally {
+    await empty.drop()
+  }
 })

@@ -2,7 +2,9 @@ import type { ReactNode } from 'react'
 import { Toaster } from 'sonner'
 import { AppHeader } from '@/components/layout/app-header'
 import { ShopProvider } from '@/components/layout/shop-context'
+import { can } from '@/core/policies/permissions'
 import { requireActor } from '@/server/auth/require-actor'
+import { isFirstDayOpen } from '@/server/services/first-day/get-first-day'
 import { getShopSettings } from '@/server/services/settings/get-shop-settings'
 
 export default async function ShopLayout({ children }: { children: ReactNode }) {
@@ -23,6 +25,7 @@ export default async function ShopLayout({ children }: { children: ReactNode }) 
         decimalComma: settings.decimalComma,
         currency: settings.currency,
         reachSettings: settings.reach,
+        isFirstDay: can(actor.role, 'keepCrib') && (await isFirstDayOpen()),
       }}
     >
       <a

@@ -1,5 +1,6 @@
 'use client'
 
+import Link from 'next/link'
 import { useShop } from '@/components/layout/shop-context'
 import { useItemStock } from '@/hooks/use-item'
 import { formatMoney } from '@/lib/format-money'
@@ -27,7 +28,7 @@ export function ItemStockSection({ row }: { row: CatalogueRow }) {
 }
 
 function StockTable({ stock, unitCost }: { stock: ItemStockResponse; unitCost: number | null }) {
-  const { currency } = useShop()
+  const { currency, isFirstDay } = useShop()
   return (
     <>
       <dl className="border-hairline flex border-b">
@@ -50,7 +51,18 @@ function StockTable({ stock, unitCost }: { stock: ItemStockResponse; unitCost: n
         ))}
       </dl>
       {stock.balances.length === 0 ? (
-        <p className="py-3">No piece of it is in the shop.</p>
+        <p className="py-3">
+          No piece of it is in the shop.
+          {isFirstDay ? (
+            <>
+              {' '}
+              <Link href="/imports/new?kind=stock" className="text-accent font-semibold underline">
+                Opening stock
+              </Link>{' '}
+              comes in from a file.
+            </>
+          ) : null}
+        </p>
       ) : (
         <table className="w-full">
           <thead>

@@ -4,11 +4,12 @@ import Link from 'next/link'
 import { StockWord } from '@/components/catalogue/stock-word'
 import { decimalText } from '@/core/units/decimal-text'
 import { useFittingCutters } from '@/hooks/use-fits'
+import { useReachOffers } from '@/hooks/use-reach-items'
 import { itemPagePath } from '@/lib/catalogue-paths'
 import { cutterFormNames } from '@/lib/cutter-words'
 import { formatLength } from '@/lib/format-length'
 import type { FittingCutter } from '@/schemas/fits'
-import { useShop } from '../layout/shop-context'
+import { useCan, useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { StateSentence } from '../ui/state-sentence'
@@ -31,12 +32,13 @@ export function PocketResults({ query }: { query: string }) {
     <section aria-label="Cutters that could" className="flex flex-col gap-3">
       <p className="text-lg font-semibold" role="status">
         {total === 0
-          ? 'No cutter in the catalogue is slim and long enough for this.'
+          ? noneSentence(asked)
           : `${total} ${total === 1 ? 'cutter' : 'cutters'} could, the thickest and shortest first.`}
       </p>
+      {total === 0 ? <EmptyCatalogue /> : null}
       {rows.length > 0 ? <CutterTable rows={rows} asked={asked} /> : null}
       {total > rows.length ? <p>The first {rows.length} are shown.</p> : null}
-      <p>
+      <p className={total === 0 ? 'hidden' : undefined}>
         <Link
           href={`/cutters?${listQuery(asked)}`}
           className="text-accent inline-flex items-center font-semibold hover:underline pointer-coarse:min-h-11"
@@ -56,6 +58,32 @@ export function PocketResults({ query }: { query: string }) {
         check clearance on the machine.
       </Notice>
     </section>
+  )
+}
+
+function noneSentence(asked: URLSearchParams): string {
+  const where = asked.get('inStock') === 'yes' ? 'in stock' : 'in the catalogue'
+  return `No cutter ${where} is slim and long enough for this.`
+}
+
+/** Where nothing could be found because nothing is there yet. */
+function EmptyCatalogue() {
+  const { rows, isLoading } = useReachOffers('cutter', '')
+  const mayKeep = useCan('keepCrib')
+  if (isLoading || rows.length > 0) return null
+  if (!mayKeep) return <p>There are no cutters in the catalogue yet. The crib manager adds them.</p>
+  return (
+    <p>
+      There are no cutters in the catalogue yet.{' '}
+      <Link href="/imports/new" className="text-accent font-semibold underline">
+        Bring them in from a file
+      </Link>
+      , or{' '}
+      <Link href="/first-day" className="text-accent font-semibold underline">
+        go through the first day
+      </Link>
+      .
+    </p>
   )
 }
 

@@ -8,7 +8,7 @@ import { can } from '@/core/policies/permissions'
 import { classNames } from '../ui/class-names'
 import { Dialog } from '../ui/dialog'
 import { LowStockCount, LowStockFigure } from './low-stock-count'
-import { navigationGroups } from './navigation'
+import { firstDayGroup, navigationGroups } from './navigation'
 import { useShop } from './shop-context'
 import { SignOutButton } from './sign-out-button'
 import { UnitSwitch } from './unit-switch'
@@ -20,8 +20,9 @@ function isCurrent(pathname: string, href: string): boolean {
 
 /** The places one's role may go to, grouped by the work. */
 function useGroups() {
-  const { role } = useShop().actor
-  return navigationGroups
+  const { actor, isFirstDay } = useShop()
+  const { role } = actor
+  return [...(isFirstDay ? [firstDayGroup] : []), ...navigationGroups]
     .map((group) => ({ ...group, links: group.links.filter((link) => can(role, link.permission)) }))
     .filter((group) => group.links.length > 0)
 }

@@ -6,8 +6,19 @@ export interface NavigationLink {
   permission: Permission
 }
 
+export interface NavigationGroup {
+  label: string
+  links: readonly NavigationLink[]
+}
+
+/** First of all while a shop still lacks what it begins with. */
+export const firstDayGroup: NavigationGroup = {
+  label: 'Begin',
+  links: [{ href: '/first-day', label: 'First day', permission: 'keepCrib' }],
+}
+
 /** The places of the product, in the order of the work: ask, look up, bring in, keep. */
-export const navigationGroups: readonly { label: string; links: readonly NavigationLink[] }[] = [
+export const navigationGroups: readonly NavigationGroup[] = [
   {
     label: 'Calculate',
     links: [

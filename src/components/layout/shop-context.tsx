@@ -14,6 +14,8 @@ export interface Shop {
   decimalComma: boolean
   currency: string
   reachSettings: ReachSettings
+  /** The shop still lacks something it begins with, and this person may bring it. */
+  isFirstDay: boolean
 }
 
 const ShopContext = createContext<Shop | null>(null)

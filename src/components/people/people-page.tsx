@@ -37,6 +37,12 @@ export function PeoplePage({ initialRows }: { initialRows: Person[] }) {
         </StateSentence>
       ) : null}
       <PeopleTable rows={data?.rows ?? []} onOpen={setEdited} />
+      {data?.rows.length === 1 ? (
+        <p className="max-w-[75ch] px-4 py-4 lg:px-6">
+          Nobody but you yet. Whoever takes tools out of the crib needs an account of their own, so that the
+          books say who has what: add them, and hand each the link to choose a password.
+        </p>
+      ) : null}
       {edited ? (
         <PersonDialog
           person={edited === 'new' ? null : edited}

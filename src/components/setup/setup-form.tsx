@@ -26,7 +26,13 @@ export function SetupForm({ token }: { token: string }) {
 
   return (
     <form onSubmit={handleSubmit} className="flex flex-col gap-4" noValidate>
-      <h1 className="text-2xl">Set up the shop</h1>
+      <div>
+        <h1 className="text-2xl">Set up the shop</h1>
+        <p className="text-ink-soft mt-1">
+          You become its first admin. All but the currency can be changed later; bins, catalogue, stock and
+          people come next.
+        </p>
+      </div>
       {fault ? (
         <Notice kind="collision" isAnnounced>
           {faultSentence(fault)}
@@ -45,8 +51,7 @@ export function SetupForm({ token }: { token: string }) {
         <TextField
           label="Currency"
           name="currency"
-          placeholder="EUR"
-          hint="As ISO 4217 writes it"
+          hint="Three letters, such as EUR or USD."
           error={faults.currency}
           isRequired
         />
@@ -62,8 +67,9 @@ export function SetupForm({ token }: { token: string }) {
         />
       </div>
       <TextField
-        label="Time zone"
+        label="Time zone of the crib"
         name="timeZone"
+        hint="Such as Europe/Vienna: it says when a day ends."
         defaultValue={Intl.DateTimeFormat().resolvedOptions().timeZone}
         suppressHydrationWarning
         error={faults.timeZone}

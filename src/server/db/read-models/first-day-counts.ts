@@ -3,6 +3,17 @@ import type { FirstDay } from '@/schemas/first-day'
 
 export type FirstDayCounts = Omit<FirstDay, 'isDone'> & { areSettingsSeen: boolean }
 
+/** Whether anything that a shop cannot work without is missing; asked with every page, so it counts nothing. */
+export async function readIsFirstDayOpen(db: Knex): Promise<boolean> {
+  const hasKind = (kind: string) => `exists(select from items where kind = '${kind}' and archived_at is null)`
+  const { rows } = await db.raw<{ rows: { isOpen: boolean }[] }>(
+    `select not (${hasKind('cutter')} and ${hasKind('holder')}
+        and exists(select from locations where kind = 'bin' and archived_at is null)
+        and exists(select from stock_levels where on_hand > 0)) as "isOpen"`,
+  )
+  return rows[0]?.isOpen ?? false
+}
+
 /** How much there is of each thing a shop begins with. */
 export async function readFirstDayCounts(db: Knex): Promise<FirstDayCounts> {
   const ofKind = (kind: string) =>

@@ -1,6 +1,11 @@
 import type { FirstDay } from '@/schemas/first-day'
 import { db } from '../../db/connection'
-import { readFirstDayCounts } from '../../db/read-models/first-day-counts'
+import { readFirstDayCounts, readIsFirstDayOpen } from '../../db/read-models/first-day-counts'
+
+/** Whether the shop still lacks bins, catalogue or stock. People alone keep nobody from working. */
+export function isFirstDayOpen(): Promise<boolean> {
+  return readIsFirstDayOpen(db())
+}
 
 /** Which steps of the first day are done. Nothing is ticked by hand: a step is done when what it brings is there. */
 export async function getFirstDay(): Promise<FirstDay> {
