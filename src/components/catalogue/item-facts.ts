@@ -1,8 +1,8 @@
-import { get } from 'react-hook-form'
 import { formatAngle } from '@/lib/format-angle'
 import { formatLength } from '@/lib/format-length'
 import type { ItemField, ItemFormDefinition } from './item-form-definition'
 import { formFields, type Manner } from './typed-values'
+import { valueAt } from './value-at'
 
 export interface ItemFact {
   path: string
@@ -20,7 +20,7 @@ export function itemFacts(
 ): ItemFact[] {
   const elsewhere = new Set(['code', 'description', 'maker', 'partNumber', 'unitCost'])
   return formFields(definition).flatMap((field) => {
-    const value: unknown = get(row, field.path)
+    const value: unknown = valueAt(row, field.path)
     if (elsewhere.has(field.path) || value === null || value === undefined || value === '') return []
     return [
       {

@@ -1,6 +1,7 @@
-import { type FieldValues, get } from 'react-hook-form'
+import type { FieldValues } from 'react-hook-form'
 import type { ItemFormDefinition } from './item-form-definition'
 import { formFields, type TypedSegment } from './typed-values'
+import { valueAt } from './value-at'
 
 /** A field that someone else changed meanwhile: as it was, as it is now, as it stands in the form. */
 export interface StaleField {
@@ -38,7 +39,7 @@ export function mergedValues(
 ): { path: string; value: unknown }[] {
   return comparedPaths(definition).map(({ path }) => {
     const isMine = shownText(definition, path, before) !== shownText(definition, path, mine)
-    return { path, value: get(isMine ? mine : theirs, path) }
+    return { path, value: valueAt(isMine ? mine : theirs, path) }
   })
 }
 
@@ -52,7 +53,7 @@ function shownText(
   path: string,
   values: FieldValues,
 ): string {
-  const value: unknown = get(values, path)
+  const value: unknown = valueAt(values, path)
   if (path === 'segments' && Array.isArray(value))
     return (value as TypedSegment[])
       .map(

@@ -1,4 +1,4 @@
-import { type FieldValues, get, set } from 'react-hook-form'
+import type { FieldValues } from 'react-hook-form'
 import { decimalText } from '@/core/units/decimal-text'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { parseAngle } from '@/core/units/parse-angle'
@@ -10,6 +10,7 @@ import { lengthInputText } from '@/lib/format-length'
 import { currencyDecimals } from '@/lib/format-money'
 import type { FieldProblem } from '@/schemas/problem'
 import type { ItemField, ItemFormDefinition } from './item-form-definition'
+import { putAt, valueAt } from './value-at'
 
 /** How a person writes and reads numbers. */
 export interface Manner {
@@ -40,7 +41,8 @@ export function blankSegment(part = 'holder'): TypedSegment {
 /** What the form opens with for a new item: everything empty but the usual choices. */
 export function blankValues(definition: AnyFormDefinition): FieldValues {
   const values: FieldValues = {}
-  for (const field of formFields(definition)) set(values, field.path, get(definition.blank, field.path) ?? '')
+  for (const field of formFields(definition))
+    putAt(values, field.path, valueAt(definition.blank, field.path) ?? '')
   if (definition.segments) values.segments = [blankSegment(definition.segments.hasPart ? 'nut' : 'holder')]
   return values
 }
@@ -49,9 +51,9 @@ export function blankValues(definition: AnyFormDefinition): FieldValues {
 export function typedRow(definition: AnyFormDefinition, row: object, manner: Manner): FieldValues {
   const values: FieldValues = {}
   for (const field of formFields(definition))
-    set(values, field.path, typedText(field, get(row, field.path), manner))
+    putAt(values, field.path, typedText(field, valueAt(row, field.path), manner))
   if (definition.segments) {
-    const segments: FieldValues[] = get(row, 'segments') ?? []
+    const segments = (valueAt(row, 'segments') ?? []) as FieldValues[]
     values.segments = segments.map((segment) => ({
       part: segment.part ?? 'holder',
       ...Object.fromEntries(
@@ -88,8 +90,8 @@ export function readTyped(definition: AnyFormDefinition, values: FieldValues, ma
   const read: ReadValues = { body: {}, problems: [] }
   for (const field of formFields(definition)) {
     const isShown = field.isShown?.(values) ?? true
-    if (isShown) readInto(read, field, field.path, get(values, field.path), manner)
-    else if (!field.path.includes('.')) set(read.body, field.path, null)
+    if (isShown) readInto(read, field, field.path, valueAt(values, field.path), manner)
+    else if (!field.path.includes('.')) putAt(read.body, field.path, null)
   }
   if (definition.segments) readSegments(read, values.segments ?? [], definition.segments.hasPart, manner)
   return read
@@ -105,7 +107,7 @@ export function readTypedField(
   readInto(read, field, field.path, text, manner)
   const [problem] = read.problems
   if (problem) return { ok: false, message: problem.message }
-  return { ok: true, value: get(read.body, field.path) ?? null }
+  return { ok: true, value: valueAt(read.body, field.path) ?? null }
 }
 
 function readSegments(read: ReadValues, segments: TypedSegment[], hasPart: boolean, manner: Manner): void {
@@ -124,20 +126,20 @@ function readInto(
 ): void {
   const text = typeof typed === 'string' ? typed : ''
   if (field.kind === 'line' || field.kind === 'text') {
-    set(read.body, path, text)
+    putAt(read.body, path, text)
     return
   }
   if (text.trim() === '') {
     // Left out where it must be there, so that the schema's own sentence asks for it.
-    if (!field.isRequired) set(read.body, path, null)
+    if (!field.isRequired) putAt(read.body, path, null)
     return
   }
   if (field.kind === 'choice') {
-    set(read.body, path, text)
+    putAt(read.body, path, text)
     return
   }
   const value = readNumber(field, text, manner)
-  if (typeof value === 'number') set(read.body, path, value)
+  if (typeof value === 'number') putAt(read.body, path, value)
   else read.problems.push({ path, message: value.message })
 }
 
