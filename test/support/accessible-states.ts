@@ -1,6 +1,7 @@
 import type { Page } from '@playwright/test'
 import { expect } from '@playwright/test'
 import type { Role } from '@/core/policies/permissions'
+import { chooseMore } from './browser'
 import type { NeckedToolRows } from './shop-rows'
 
 /** A state of a page: where it is, who sees it, and what is done until it stands. */
@@ -18,7 +19,8 @@ export const neckedCheck =
   'c.form=square&c.DC=3.175&c.APMX=6.35&c.LCF=6.35&c.DN=3&c.LU=38.1&c.DMM=3.175&c.OAL=76.2' +
   '&h.A=100&h.depth=75&h.grip=10&h.segments=nut:18x28'
 
-const shows = (text: string | RegExp) => (page: Page) => expect(page.getByText(text).first()).toBeVisible()
+export const shows = (text: string | RegExp) => (page: Page) =>
+  expect(page.getByText(text).first()).toBeVisible()
 const heading = (name: string | RegExp) => (page: Page) =>
   expect(page.getByRole('heading', { name }).first()).toBeVisible()
 const verdict = (text: string) => (page: Page) => expect(page.getByTestId('verdict')).toContainText(text)
@@ -33,13 +35,13 @@ const listRow = (page: Page) =>
   expect(page.locator('[row-id], main li a').filter({ visible: true }).first()).toBeVisible()
 
 /** Opens a dialog and sends what cannot be taken, so that the faults stand beside their fields. */
-const refused = (open: string | RegExp, send: string) => async (page: Page) => {
+export const refused = (open: string | RegExp, send: string) => async (page: Page) => {
   await opens(open)(page)
   await page.getByRole('dialog').getByRole('button', { name: send }).click()
   await expect(page.getByRole('dialog').locator('[aria-invalid="true"]').first()).toBeVisible()
 }
 
-const withoutServer = (pattern: RegExp) => async (page: Page) => {
+export const withoutServer = (pattern: RegExp) => async (page: Page) => {
   await page.route(pattern, (route) => route.abort())
   await page.reload()
   await expect(page.getByText(unreachable).first()).toBeVisible()
@@ -188,7 +190,7 @@ export const deskStates: PageState[] = [
     path: '/cutters',
     reach: async (page) => {
       await listRow(page)
-      await page.getByRole('button', { name: 'Columns' }).click()
+      await chooseMore(page, 'Columns')
       await expect(page.getByRole('list', { name: 'Shown', exact: true })).toBeVisible()
     },
   },

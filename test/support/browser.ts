@@ -1,4 +1,4 @@
-import { test as base, expect, type Page } from '@playwright/test'
+import { test as base, type ConsoleMessage, expect, type Page } from '@playwright/test'
 import type { Role } from '@/core/policies/permissions'
 import { createPerson, type TestPerson } from './people'
 
@@ -20,11 +20,20 @@ export const test = base.extend<{ elsewhere: Page }>({
   },
 })
 
-/** A refused answer, which tests provoke, and the recorder's script, which a frame that may run nothing refuses. */
-function isOfTheTools(text: string): boolean {
+/** A refused answer, which tests provoke. */
+function isRefusedAnswer(message: ConsoleMessage): boolean {
+  return message.text().startsWith('Failed to load resource')
+}
+
+/**
+ * The recorder of a trace runs its script in every frame, which the frame of a mail refuses as it refuses any. Without a
+ * trace nothing is said. What a mail itself would run is named by an address, `about:srcdoc`; the recorder's has none.
+ */
+function isRecorderInMail(page: Page, message: ConsoleMessage): boolean {
   return (
-    text.startsWith('Failed to load resource') ||
-    text.startsWith("Blocked script execution in 'about:srcdoc'")
+    new URL(page.url()).pathname.startsWith('/mail') &&
+    message.text().startsWith("Blocked script execution in 'about:srcdoc'") &&
+    message.location().url === ''
   )
 }
 
@@ -32,7 +41,8 @@ function complaintsOf(page: Page): string[] {
   const complaints: string[] = []
   page.on('pageerror', (error) => complaints.push(String(error)))
   page.on('console', (message) => {
-    if (message.type() === 'error' && !isOfTheTools(message.text())) complaints.push(message.text())
+    if (message.type() !== 'error' || isRefusedAnswer(message) || isRecorderInMail(page, message)) return
+    complaints.push(message.text())
   })
   return complaints
 }
@@ -55,6 +65,12 @@ export async function signIn(page: Page, role: Role): Promise<TestPerson> {
   const answer = await page.request.post('/api/session', { data: { email, password } })
   expect(answer.status()).toBe(200)
   return person
+}
+
+/** Takes one of the acts behind a list's “More”. */
+export async function chooseMore(page: Page, name: string): Promise<void> {
+  await page.getByRole('button', { name: 'More', exact: true }).click()
+  await page.getByRole('menuitem', { name, exact: true }).click()
 }
 
 /** How far the page can be scrolled to the side, which it should not be. */

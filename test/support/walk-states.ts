@@ -6,13 +6,14 @@ import { signedInAs, uniqueCode } from './api'
 import { checkedImport } from './api-imports'
 import { siteDatabase } from './api-stock'
 import { signIn, test } from './browser'
+import { createReorderingRows, reorderingStates } from './reordering-states'
 import { createNeckedTool } from './shop-rows'
 
 /** One test for each role: every page that role works with, in every state, light and dark. */
 export function testEveryState(extra: readonly PageState[]): void {
   let every: PageState[]
   let db: Knex
-  test.describe.configure({ timeout: 180_000 })
+  test.describe.configure({ timeout: 300_000 })
   test.beforeAll(async () => {
     db = siteDatabase()
     const crib = await signedInAs('cribManager')
@@ -26,7 +27,7 @@ export function testEveryState(extra: readonly PageState[]): void {
       extensionId: extensions[0]?.id ?? '',
       invitation: await openInvitation(),
     }
-    every = [...pageStates(shown), ...extra]
+    every = [...pageStates(shown), ...reorderingStates(await createReorderingRows(db, crib)), ...extra]
   })
   test.afterAll(() => db.destroy())
 

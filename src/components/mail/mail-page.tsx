@@ -17,13 +17,22 @@ export interface MailLine {
 }
 
 /** What the shop wrote to its people, and what became of it. */
-export function MailPage({ rows, hasServer }: { rows: MailLine[]; hasServer: boolean }) {
+export function MailPage({
+  rows,
+  total,
+  hasServer,
+}: {
+  rows: MailLine[]
+  total: number
+  hasServer: boolean
+}) {
   return (
     <>
       <PageHeading
         title="Mail"
         note="One mail for each event and person. What cannot go now is tried again until it goes."
       >
+        <ButtonLink href="/crib-members">Who gets the mail</ButtonLink>
         <ButtonLink href="/mail/preview">See the templates</ButtonLink>
       </PageHeading>
       {hasServer ? null : (
@@ -37,7 +46,14 @@ export function MailPage({ rows, hasServer }: { rows: MailLine[]; hasServer: boo
       {rows.length === 0 ? (
         <StateSentence sentence="No mail has been written yet. The first comes when an item falls to its reorder point." />
       ) : (
-        <MailTable rows={rows} />
+        <>
+          <MailTable rows={rows} />
+          {total > rows.length ? (
+            <p className="text-ink-soft px-4 py-3 lg:px-6">
+              What waits and the newest, {rows.length} of {total.toLocaleString('en')} mails.
+            </p>
+          ) : null}
+        </>
       )}
     </>
   )

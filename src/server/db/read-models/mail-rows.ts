@@ -1,4 +1,5 @@
 import type { Knex } from 'knex'
+import type { OutboxRow } from '../row-types'
 
 export interface MailRow {
   id: string
@@ -15,9 +16,12 @@ export interface MailRow {
 
 const mostShown = 300
 
-/** The outbox, what waits first and then the newest. */
-export async function readMails(db: Knex): Promise<MailRow[]> {
-  const rows = await db('outbox')
+type JoinedRow = OutboxRow & { crib_name: string; caught_id: string | null }
+
+/** The outbox, what waits first and then the newest, and how many mails there are in all. */
+export async function readMails(db: Knex): Promise<{ rows: MailRow[]; total: number }> {
+  const [counted] = await db('outbox').select(db.raw('count(*)::int as total'))
+  const rows: JoinedRow[] = await db('outbox')
     .join('cribs', 'cribs.id', 'outbox.crib_id')
     .select('outbox.*', {
       crib_name: 'cribs.name',
@@ -27,7 +31,11 @@ export async function readMails(db: Knex): Promise<MailRow[]> {
     })
     .orderByRaw('outbox.sent_at is not null, outbox.id desc')
     .limit(mostShown)
-  return rows.map((row) => ({
+  return { rows: rows.map(mailRow), total: counted.total }
+}
+
+function mailRow(row: JoinedRow): MailRow {
+  return {
     id: row.id,
     recipient: row.recipient,
     cribName: row.crib_name,
@@ -37,7 +45,7 @@ export async function readMails(db: Knex): Promise<MailRow[]> {
     nextAttemptAt: row.next_attempt_at.toISOString(),
     lastError: row.last_error,
     caughtId: row.caught_id,
-  }))
+  }
 }
 
 export async function findCaughtMail(

@@ -4,6 +4,6 @@ import { readMails } from '../../db/read-models/mail-rows'
 import { env } from '../../env'
 
 /** The mail of the shop, and whether it goes anywhere. */
-export async function listMails(): Promise<{ rows: MailRow[]; hasServer: boolean }> {
-  return { rows: await readMails(db()), hasServer: env().SMTP_URL !== undefined }
+export async function listMails(): Promise<{ rows: MailRow[]; total: number; hasServer: boolean }> {
+  return { ...(await readMails(db())), hasServer: env().SMTP_URL !== undefined }
 }
