@@ -50,20 +50,16 @@ export function ReorderPointDialog({ row, suppliers, onClose, onSaved, onRemove 
     const values = new FormData(event.currentTarget)
     const read = readTypedPoint(texts)
     setUnread(read.ok ? {} : read.faults)
-    if (!read.ok) return
+    const code = String(values.get('code') ?? '').trim()
+    const isCodeMissing = row === null && code === ''
+    setCodeFault(isCodeMissing ? 'Give the code of the item.' : undefined)
+    if (!read.ok || isCodeMissing) return
     void attempt(async () => {
       if (base) await saveReorderPoint(current ? { ...base, ...current } : base, read.change)
-      else if (!(await createFrom(values, read.change))) return
+      else if (!(await createReorderPoint(code, String(values.get('cribId') ?? ''), read.change)))
+        return setCodeFault('No item in use has this code.')
       onSaved()
     })
-  }
-
-  async function createFrom(values: FormData, change: Parameters<typeof createReorderPoint>[2]) {
-    const code = String(values.get('code') ?? '').trim()
-    setCodeFault(undefined)
-    const isFound = await createReorderPoint(code, String(values.get('cribId') ?? ''), change)
-    if (!isFound) setCodeFault(code === '' ? 'Give the code of the item.' : 'No item in use has this code.')
-    return isFound
   }
 
   function handleTakeTheirs() {

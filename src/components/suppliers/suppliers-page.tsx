@@ -145,7 +145,9 @@ function SupplierRow({
             className="text-accent inline-flex min-h-6 items-center hover:underline pointer-coarse:min-h-11"
           >
             {row.reorderPoints}
-            <span className="sm:sr-only">&nbsp;reorder points</span>
+            <span className="sm:sr-only">
+              &nbsp;{row.reorderPoints === 1 ? 'reorder point' : 'reorder points'}
+            </span>
           </Link>
         ) : (
           <span className="text-ink-soft max-sm:hidden">–</span>
