@@ -1,19 +1,10 @@
 import { z } from 'zod'
 import { catalogueKinds } from '@/core/stock/kinds'
-import { countsQuerySchemas } from './catalogue-counts'
+import { catalogueFilterSchemas } from './catalogue-counts'
 import { updateColletRequestSchema } from './collet'
 import { updateCutterRequestSchema } from './cutter'
 import { updateExtensionRequestSchema } from './extension'
 import { updateHolderRequestSchema } from './holder'
-
-/** Rows one such change touches at most: what can be checked and written down while someone waits. */
-export const foundLimit = 10_000
-
-/** Refusals that are told row by row; the others are counted. */
-export const listedRefusals = 200
-
-/** Days in which it can be taken back. */
-export const foundChangeDays = 30
 
 /** An item's own code is no value for many; a bore and an outline are more than one field. */
 const notOfMany = { version: true, archivedAt: true, code: true } as const
@@ -40,10 +31,10 @@ function rehearsalSchema<Filters extends z.ZodType, Change extends z.ZodType>(
 
 /** The filters are those of the list, as its address has them. */
 export const foundRehearsalRequestSchemas = {
-  cutter: rehearsalSchema(countsQuerySchemas.cutter, changeSchemas.cutter),
-  holder: rehearsalSchema(countsQuerySchemas.holder, changeSchemas.holder),
-  collet: rehearsalSchema(countsQuerySchemas.collet, changeSchemas.collet),
-  extension: rehearsalSchema(countsQuerySchemas.extension, changeSchemas.extension),
+  cutter: rehearsalSchema(catalogueFilterSchemas.cutter, changeSchemas.cutter),
+  holder: rehearsalSchema(catalogueFilterSchemas.holder, changeSchemas.holder),
+  collet: rehearsalSchema(catalogueFilterSchemas.collet, changeSchemas.collet),
+  extension: rehearsalSchema(catalogueFilterSchemas.extension, changeSchemas.extension),
 }
 
 /** What the rehearsal answered, sent back: only the rows it was about, as they were, are changed. */

@@ -29,9 +29,11 @@ beforeAll(async () => {
   await db.destroy()
 })
 
+const narrowing = 'form,substrate,maker,condition,locationId,stockState,cuttingDiameterMm,shankDiameterMm'
+
 type Counts = Record<string, { value: string; label?: string; count: number }[]>
-async function countsOf(query: string): Promise<Counts> {
-  const answer = await crib.get(`/api/cutters/counts?maker=${maker}&${query}`)
+async function countsOf(query: string, of = narrowing): Promise<Counts> {
+  const answer = await crib.get(`/api/cutters/counts?of=${of}&maker=${maker}&${query}`)
   expect(answer.status).toBe(200)
   return answer.body.counts as Counts
 }
@@ -78,12 +80,45 @@ describe('counts beside the choices', () => {
     ])
   })
 
+  it('are of the facets asked for alone, and of sizes the commonest, smallest first', async () => {
+    await createCutter(crib, { maker, cuttingDiameterMm: 3, shankDiameterMm: 6 })
+    const counts = await countsOf('cuttingDiameterMm.max=4', 'cuttingDiameterMm,cribId')
+    expect(Object.keys(counts).sort()).toEqual(['cribId', 'cuttingDiameterMm'])
+    expect(counts.cuttingDiameterMm).toEqual([
+      { value: '3', count: 1 },
+      { value: '6', count: 4 },
+    ])
+    const every = await countsOf('', 'cribId')
+    expect(countOf(every, 'cribId', shelf.cribId)).toBe(2)
+    expect(every.cribId?.some(({ count }) => count === 0)).toBe(true)
+  })
+
   it('are refused to be told by cost, and of what is no filter', async () => {
     const machinist = await signedInAs('machinist')
-    expect((await machinist.get('/api/cutters/counts?unitCost.min=1')).status).toBe(403)
-    expect(faultPaths(await crib.get('/api/cutters/counts?limit=5'))).toEqual(['limit'])
-    for (const kind of ['holders', 'collets', 'extensions'])
-      expect((await crib.get(`/api/${kind}/counts`)).status).toBe(200)
+    expect((await machinist.get('/api/cutters/counts?of=form&unitCost.min=1')).status).toBe(403)
+    expect(faultPaths(await crib.get('/api/cutters/counts?of=form&limit=5'))).toEqual(['limit'])
+    expect(faultPaths(await crib.get('/api/cutters/counts'))).toEqual(['of'])
+    expect(faultPaths(await crib.get('/api/cutters/counts?of=taper'))).toEqual(['of'])
+    for (const [kind, of] of Object.entries({
+      holders: 'boreKind,taper,series,gaugeLengthMm,boreDiameterMm,maker,cribId',
+      collets: 'series,minimumMm,maximumMm',
+      extensions: 'boreKind,series,projectionMm,boreDiameterMm',
+    }))
+      expect((await crib.get(`/api/${kind}/counts?of=${of}`)).status, kind).toBe(200)
+  })
+
+  it('of a taper and a series are what the list then answers', async () => {
+    for (const [kind, facet] of [
+      ['holders', 'taper'],
+      ['holders', 'series'],
+      ['collets', 'series'],
+    ]) {
+      const { counts } = (await crib.get(`/api/${kind}/counts?of=${facet}`)).body as unknown as { counts: Counts }
+      const [most] = counts[facet ?? ''] ?? []
+      expect(most?.count).toBeGreaterThan(0)
+      const list = await crib.get(`/api/${kind}?${facet}=${encodeURIComponent(most?.value ?? '')}`)
+      expect(list.body.total).toBe(most?.count)
+    }
   })
 })
 

@@ -17,7 +17,7 @@ test('the list is read and narrowed with a thumb, and loads no grid', async ({ p
   for (const row of await rows.getByRole('link').all())
     expect((await row.boundingBox())?.height).toBeGreaterThanOrEqual(44)
   await page.getByRole('button', { name: 'Filters (1)' }).click()
-  await page.getByRole('textbox', { name: 'Cutting diameter from' }).fill('5.5 mm')
+  await page.getByLabel('Cutting diameter from').fill('5.5 mm')
   await page.getByRole('button', { name: 'Show the list' }).click()
   await expect(rows).toHaveCount(1)
   await expect(page).toHaveURL(/cuttingDiameterMm\.min=5\.5/)

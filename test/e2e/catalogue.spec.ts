@@ -2,7 +2,7 @@ import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { chooseMore, expect, signIn, test } from '../support/browser'
 
 const dialog = (page: Page) => page.getByRole('dialog')
 const field = (page: Page, name: string) =>
@@ -156,23 +156,26 @@ test('each filter says how many rows its choices leave, and the address keeps wh
   for (const form of ['square', 'square', 'ball']) await makeCutter(page, { maker: mark, form })
   await page.goto(`/cutters?maker=${mark}`)
   const form = page.getByLabel('Form')
+  await form.hover()
   await expect(form.getByRole('option', { name: 'Square end mill (2)' })).toBeAttached()
   await expect(form.getByRole('option', { name: 'Drill (0)' })).toBeAttached()
   await form.selectOption({ label: 'Ball end mill (1)' })
   await expect(page.getByText('1 found')).toBeVisible()
-  await expect(page.getByLabel('Stock').getByRole('option', { name: 'Out (1)' })).toBeAttached()
+  const stock = page.getByLabel('Stock', { exact: true })
+  await stock.focus()
+  await expect(stock.getByRole('option', { name: 'Out (1)' })).toBeAttached()
   await page.getByRole('button', { name: 'More filters' }).click()
-  await page.getByRole('textbox', { name: 'Length of cut from' }).fill('13')
+  await page.getByLabel('Length of cut from').fill('13')
   await expect(page).toHaveURL(/form=ball.*lengthOfCutMm\.min=13/)
   await page.reload()
   await expect(page.getByText('0 found')).toBeVisible()
-  await expect(page.getByRole('textbox', { name: 'Length of cut from' })).toHaveValue('13')
+  await expect(page.getByLabel('Length of cut from')).toHaveValue('13')
 })
 
 test('a view is saved, renamed, shared and opened, without the column that is gone', async ({ page }) => {
   const name = uniqueCode('My view')
   await page.goto('/cutters?form=drill&sort=-cuttingDiameterMm&columns=code,cuttingDiameterMm')
-  await page.getByRole('button', { name: 'Views' }).click()
+  await chooseMore(page, 'Views')
   await dialog(page)
     .getByRole('textbox', { name: /^Save the list/ })
     .fill(name)
@@ -191,12 +194,12 @@ test('a view is saved, renamed, shared and opened, without the column that is go
   await page.goto('/cutters')
   const data = { kind: 'cutter', name: `${name} C`, isShared: false, query: 'form=tap&columns=code,finish' }
   expect((await page.request.post('/api/saved-views', { data })).status()).toBe(201)
-  await page.getByRole('button', { name: 'Views' }).click()
+  await chooseMore(page, 'Views')
   await dialog(page)
     .getByRole('button', { name: `${name} B`, exact: true })
     .click()
   await expect(page).toHaveURL('/cutters?form=drill&sort=-cuttingDiameterMm&columns=code,cuttingDiameterMm')
-  await page.getByRole('button', { name: 'Views' }).click()
+  await chooseMore(page, 'Views')
   await dialog(page)
     .getByRole('button', { name: `${name} C`, exact: true })
     .click()

@@ -1,6 +1,6 @@
 import { signedInAs, uniqueCode } from '../support/api'
 import { createCutter } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { chooseMore, expect, signIn, test } from '../support/browser'
 
 test('a list is worked from the keyboard alone: search, down to the second row, open, back', async ({
   page,
@@ -40,7 +40,7 @@ test('a view that was put together by hand survives a reload and opens for someo
   await expect(page.getByText('2 found')).toBeVisible()
   await page.getByRole('columnheader', { name: /Cutting diameter/ }).click()
   await expect(page).toHaveURL(/sort=cuttingDiameterMm/)
-  await page.getByRole('button', { name: 'Columns' }).click()
+  await chooseMore(page, 'Columns')
   await page.getByRole('checkbox', { name: 'Maker' }).click()
   await page.keyboard.press('Escape')
   await expect(page).toHaveURL(/columns=/)
@@ -67,7 +67,9 @@ test('an address nobody can read says so and offers the whole list', async ({ pa
 test('a column ticked by key keeps the keyboard, though it moves to the other list', async ({ page }) => {
   await signIn(page, 'machinist')
   await page.goto('/cutters')
-  await page.getByRole('button', { name: 'Columns' }).press('Enter')
+  await page.getByRole('button', { name: 'More', exact: true }).press('Enter')
+  await page.keyboard.press('ArrowDown')
+  await page.keyboard.press('Enter')
   const maker = page.getByRole('list', { name: 'Shown', exact: true }).getByLabel('Maker', { exact: true })
   await maker.focus()
   await page.keyboard.press('Space')
@@ -75,4 +77,6 @@ test('a column ticked by key keeps the keyboard, though it moves to the other li
   await expect(hidden).toBeFocused()
   await page.keyboard.press('Space')
   await expect(maker).toBeFocused()
+  await page.keyboard.press('Escape')
+  await expect(page.getByRole('button', { name: 'More', exact: true })).toBeFocused()
 })

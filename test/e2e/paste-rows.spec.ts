@@ -1,6 +1,6 @@
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
-import { expect, signIn, test } from '../support/browser'
+import { chooseMore, expect, signIn, test } from '../support/browser'
 
 /** What the browser does at Ctrl+V with a block of a spreadsheet on the clipboard. */
 function paste(page: Page, text: string): Promise<void> {
@@ -32,7 +32,7 @@ test('a block pasted over the list goes through the checks of an import', async 
 
 test('a block of 5,000 columns is refused in a sentence, and stays to be mended', async ({ page }) => {
   const wide = Array.from({ length: 5000 }, (_, index) => `c${index}`).join('\t')
-  await page.getByRole('button', { name: 'Paste rows' }).click()
+  await chooseMore(page, 'Paste rows')
   const dialog = page.getByRole('dialog')
   const rows = dialog.getByRole('textbox', { name: 'Rows' })
   await rows.fill(`${wide}\n1\t2`)

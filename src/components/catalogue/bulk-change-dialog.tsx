@@ -1,39 +1,34 @@
 'use client'
 
-import { useState } from 'react'
 import { toast } from 'sonner'
-import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
-import { SelectField } from '@/components/ui/select-field'
-import { TextField } from '@/components/ui/text-field'
 import { useAttempt } from '@/components/ui/use-attempt'
 import { faultSentence } from '@/lib/field-faults'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
-import { bulkFaults } from './edit-refusal'
-import type { ItemField } from './item-form-definition'
-import { type Manner, readTypedField } from './typed-values'
+import { bulkRefusals } from './edit-refusal'
+import { ManyField, useManyField } from './many-field'
+import { RefusedRows } from './refused-rows'
 import type { GridEditing } from './use-grid-editing'
 
 export interface BulkChangeDialogProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
   editing: GridEditing<Row>
-  isOpen: boolean
   onClose: () => void
 }
 
 /** One field of all rows selected: all are changed or none. */
-export function BulkChangeDialog<Row extends CatalogueRow>(props: BulkChangeDialogProps<Row>) {
-  const { definition, editing, isOpen, onClose } = props
+export default function BulkChangeDialog<Row extends CatalogueRow>(props: BulkChangeDialogProps<Row>) {
+  const { definition, editing, onClose } = props
   const count = editing.selected.length
   return (
     <Dialog
-      isOpen={isOpen}
+      isOpen
       onOpenChange={(open) => !open && onClose()}
       title={`Change ${count} ${count === 1 ? definition.one : definition.many}`}
-      description="All of them are changed, or none."
+      description="All of them are changed, or none. Undo takes it back."
     >
       <BulkChangeForm {...props} />
     </Dialog>
@@ -45,26 +40,19 @@ function BulkChangeForm<Row extends CatalogueRow>({
   editing,
   onClose,
 }: BulkChangeDialogProps<Row>) {
-  const shop = useShop()
-  const manner: Manner = shop
-  // A code is one item's own.
-  const fields = editing.fields.filter(({ path }) => path !== 'code')
-  const [path, setPath] = useState('maker')
-  const [text, setText] = useState('')
-  const [unread, setUnread] = useState<string | null>(null)
+  const many = useManyField(editing.fields)
   const { fault, isBusy, attempt } = useAttempt()
-  const field = fields.find((one) => one.path === path) ?? fields[0]
-  const faults = bulkFaults(fault, editing.selected, editing.fields)
+  const { field } = many
+  const refusals = bulkRefusals(fault, editing.selected, editing.fields)
   if (!field) return null
 
-  function handleSubmit(chosen: ItemField) {
-    const read = readTypedField(chosen, text, manner)
-    setUnread(read.ok ? null : read.message)
-    if (!read.ok) return
+  function handleSubmit() {
+    const typed = many.read()
+    if (!typed || !field) return
     const count = editing.selected.length
     void attempt(async () => {
-      await editing.changeSelected(chosen, read.value)
-      toast.success(`${chosen.label} of ${count} ${count === 1 ? definition.one : definition.many} changed.`)
+      await editing.changeSelected(field, typed.value)
+      toast.success(`${field.label} of ${count} ${count === 1 ? definition.one : definition.many} changed.`)
       onClose()
     })
   }
@@ -75,33 +63,14 @@ function BulkChangeForm<Row extends CatalogueRow>({
       className="flex flex-col gap-4"
       onSubmit={(event) => {
         event.preventDefault()
-        handleSubmit(field)
+        handleSubmit()
       }}
     >
-      <SelectField
-        label="Field"
-        value={field.path}
-        onChange={(event) => {
-          setPath(event.target.value)
-          setText('')
-          setUnread(null)
-        }}
-        options={fields.map((one) => ({
-          value: one.path,
-          label: one.symbol ? `${one.label} (${one.symbol})` : one.label,
-        }))}
-      />
-      <BulkValue field={field} text={text} onChange={setText} error={unread} unit={shop.unit} />
+      <ManyField many={many} />
       {fault ? (
         <Notice kind="collision" isAnnounced>
           <p>{faultSentence(fault)}</p>
-          {faults.length > 0 ? (
-            <ul className="mt-1 max-h-40 overflow-y-auto">
-              {faults.map((line) => (
-                <li key={line}>{line}</li>
-              ))}
-            </ul>
-          ) : null}
+          <RefusedRows refusals={refusals} />
         </Notice>
       ) : null}
       <div className="flex flex-wrap gap-3">
@@ -111,37 +80,5 @@ function BulkChangeForm<Row extends CatalogueRow>({
         <Button onClick={onClose}>Cancel</Button>
       </div>
     </form>
-  )
-}
-
-function BulkValue({
-  field,
-  text,
-  onChange,
-  error,
-  unit,
-}: {
-  field: ItemField
-  text: string
-  onChange: (text: string) => void
-  error: string | null
-  unit: string
-}) {
-  const label = field.kind === 'length' ? `To, ${unit}` : 'To'
-  const hint = field.isRequired ? undefined : 'Empty clears it.'
-  const shared = { label, hint, error: error ?? undefined, value: text }
-  if (field.options) {
-    const options = field.options.some(({ value }) => value === '')
-      ? field.options
-      : [{ value: '', label: 'Choose' }, ...field.options]
-    return <SelectField {...shared} options={options} onChange={(event) => onChange(event.target.value)} />
-  }
-  return (
-    <TextField
-      {...shared}
-      autoComplete="off"
-      list={field.listId}
-      onChange={(event) => onChange(event.target.value)}
-    />
   )
 }

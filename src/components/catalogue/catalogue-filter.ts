@@ -15,10 +15,11 @@ export type CatalogueFilter = FilterName &
   (
     | { kind: 'choice'; anyLabel: string; options: readonly SelectOption[] }
     /** The choices are what the counts have. */
-    | { kind: 'counted'; anyLabel: string }
+    | { kind: 'counted'; anyLabel: string; unknownLabel: string }
     /** What the counts have is offered while typing. */
     | { kind: 'text' }
-    | { kind: 'lengthRange' }
+    /** The sizes there are most of are offered while typing; what is worked out for each row has none to offer. */
+    | { kind: 'lengthRange'; isWorkedOut?: true }
   )
 
 export function filterParamNames(filters: readonly CatalogueFilter[]): string[] {
@@ -31,6 +32,13 @@ export function filterParamNames(filters: readonly CatalogueFilter[]): string[] 
 export const itemFilters: readonly CatalogueFilter[] = [
   { kind: 'text', name: 'maker', label: 'Maker' },
   {
+    kind: 'counted',
+    name: 'cribId',
+    label: 'Stock of',
+    anyLabel: 'All cribs',
+    unknownLabel: 'The crib in the address',
+  },
+  {
     kind: 'choice',
     name: 'stockState',
     label: 'Stock',
@@ -41,7 +49,13 @@ export const itemFilters: readonly CatalogueFilter[] = [
       { value: 'out', label: 'Out' },
     ],
   },
-  { kind: 'counted', name: 'locationId', label: 'Location', anyLabel: 'Anywhere' },
+  {
+    kind: 'counted',
+    name: 'locationId',
+    label: 'Location',
+    anyLabel: 'Anywhere',
+    unknownLabel: 'The place in the address',
+  },
   {
     kind: 'choice',
     name: 'condition',

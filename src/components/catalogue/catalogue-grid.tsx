@@ -64,7 +64,7 @@ export default function CatalogueGrid<Row extends CatalogueRow>(props: Catalogue
   )
 
   return (
-    <div className="relative min-h-0 flex-1 print:hidden">
+    <div className="relative min-h-0 flex-1">
       <PartsListGrid<Row>
         columns={gridColumns}
         sort={view.sort}

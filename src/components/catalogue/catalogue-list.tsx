@@ -1,6 +1,7 @@
 'use client'
 
 import Link from 'next/link'
+import { type RefObject, useImperativeHandle } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { useCatalogueRows } from '@/hooks/use-catalogue-rows'
@@ -19,6 +20,13 @@ export interface CatalogueListProps<Row extends CatalogueRow> {
   onClear: () => void
   onReset: () => void
   onAdd: () => void
+  handleRef: RefObject<CatalogueListHandle<Row> | null>
+}
+
+export interface CatalogueListHandle<Row> {
+  /** Reads again all that is loaded: something was changed. */
+  reload: () => void
+  loaded: () => { rows: Row[]; first: number; total: number }
 }
 
 /** The same rows for a thumb: what it is, what there is, where it lies. It grows as it is scrolled. */
@@ -27,6 +35,10 @@ export function CatalogueList<Row extends CatalogueRow>(props: CatalogueListProp
   const query = queryParams(view).toString()
   const { unit } = useShop()
   const list = useCatalogueRows<Row>(catalogueApiPath(definition.kind), query)
+  useImperativeHandle(props.handleRef, () => ({
+    reload: () => void list.retry(),
+    loaded: () => ({ rows: list.rows, first: 0, total: list.total ?? list.rows.length }),
+  }))
   const end = useEndReached(list.hasMore && !list.isLoadingMore && !list.error, list.loadMore)
   if (list.rows.length === 0)
     return (

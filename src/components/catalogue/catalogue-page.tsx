@@ -1,44 +1,26 @@
 'use client'
 
-import { Download, Pencil, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
 import { useRouter } from 'next/navigation'
-import { type ReactNode, useMemo, useRef, useState } from 'react'
-import type { PartsListHandle } from '@/components/grid/parts-list-grid'
+import { type ReactNode, useMemo, useState } from 'react'
 import { useCan } from '@/components/layout/shop-context'
-import { Button, ButtonLink, buttonClass } from '@/components/ui/button'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { useMediaQuery } from '@/components/ui/use-media-query'
-import { useListCounts } from '@/hooks/use-list-counts'
-import { catalogueApiPath, itemPagePath } from '@/lib/catalogue-paths'
-import { importKindOf } from '@/schemas/import-fields'
-import type { CatalogueColumn } from './catalogue-column'
+import { itemPagePath } from '@/lib/catalogue-paths'
 import type { CatalogueDefinition } from './catalogue-definition'
 import { filterParamNames } from './catalogue-filter'
-import type { CatalogueGridProps } from './catalogue-grid'
-import { CatalogueList } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
-import { type CatalogueView, exportPath, isNarrowed, queryParams } from './catalogue-view'
-import { ColumnChooser } from './column-chooser'
-import { EditBar } from './edit-bar'
-import { FilterDrawer } from './filter-drawer'
-import { FilterFields } from './filter-fields'
-import { ItemFormDialog } from './item-form-dialog'
-import { MakerList } from './maker-list'
-import { PasteRows } from './paste-rows'
-import { PrintList } from './print-list'
-import { SavedViews } from './saved-views-dialog'
-import { SearchBox } from './search-box'
-import { SortSelect } from './sort-select'
+import type { CatalogueShapeProps } from './catalogue-shape'
+import type { ItemFormDialogProps } from './item-form-dialog'
+import { NarrowCatalogue } from './narrow-catalogue'
 import { useCatalogueView } from './use-catalogue-view'
-import { useGridEditing } from './use-grid-editing'
+import { WideCatalogue } from './wide-catalogue'
 
-/** The grid's code comes only where a grid is shown: not on a phone, not on any other page. */
-const CatalogueGrid = dynamic(() => import('./catalogue-grid'), {
+const ItemFormDialog = dynamic(() => import('./item-form-dialog').then((module) => module.ItemFormDialog), {
   ssr: false,
-  loading: () => <StateSentence sentence="Loading the list …" />,
-}) as <Row extends CatalogueRow>(props: CatalogueGridProps<Row>) => ReactNode
+}) as <Row extends CatalogueRow>(props: ItemFormDialogProps<Row>) => ReactNode
 
+/** A list of one kind of item: a grid where there is room, rows for a thumb where there is not. */
 export function CataloguePage<Row extends CatalogueRow>({
   definition,
 }: {
@@ -51,9 +33,10 @@ export function CataloguePage<Row extends CatalogueRow>({
   const columns = useMemo(() => definition.columns(canSeeCosts), [definition, canSeeCosts])
   const [view, onViewChange] = useCatalogueView(filterNames)
   const [isAdding, setIsAdding] = useState(false)
-  const shared = {
+  const shared: CatalogueShapeProps<Row> = {
     definition,
     columns,
+    shownIds: useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns]),
     view,
     onViewChange,
     onClear: () => onViewChange({ q: '', filters: {} }),
@@ -61,171 +44,23 @@ export function CataloguePage<Row extends CatalogueRow>({
     onAdd: () => setIsAdding(true),
   }
   return (
-    <div className="flex flex-1 flex-col print:block print:h-auto! md:h-[calc(100dvh-3.5rem)] md:flex-none lg:h-[calc(100dvh-3rem)]">
-      {isWide !== null && !isAdding ? <MakerList kind={definition.kind} /> : null}
+    <div className="flex flex-1 flex-col print:hidden md:h-[calc(100dvh-3.5rem)] md:flex-none min-[84rem]:h-[calc(100dvh-3rem)]">
       {isWide === null ? <StateSentence sentence={`Loading the ${definition.many} …`} /> : null}
       {isWide === true ? <WideCatalogue {...shared} /> : null}
       {isWide === false ? <NarrowCatalogue {...shared} /> : null}
-      <ItemFormDialog
-        definition={definition}
-        row={null}
-        isOpen={isAdding}
-        onClose={() => setIsAdding(false)}
-        onSaved={(row) => {
-          setIsAdding(false)
-          router.push(itemPagePath(row.kind, row.id))
-        }}
-      />
-    </div>
-  )
-}
-
-interface CatalogueShapeProps<Row extends CatalogueRow> {
-  definition: CatalogueDefinition<Row>
-  columns: readonly CatalogueColumn<Row>[]
-  view: CatalogueView
-  onViewChange: (change: Partial<CatalogueView>) => void
-  onClear: () => void
-  onReset: () => void
-  onAdd: () => void
-}
-
-function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
-  const { definition, columns, view, onViewChange, onClear } = props
-  const [total, setTotal] = useState<number | null>(null)
-  const counts = useFilterCounts(definition, view, total !== null)
-  const grid = useRef<PartsListHandle>(null)
-  const mayKeep = useCan('keepCrib')
-  const shownIds = useMemo(() => shownColumnIds(columns, view.columns), [columns, view.columns])
-  const [isEditing, setIsEditing] = useState(false)
-  const editing = useGridEditing(definition, grid, isEditing)
-  return (
-    <>
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6 print:hidden">
-        <h1 className="text-2xl">{definition.title}</h1>
-        <p className="text-ink-soft mr-auto" role="status">
-          {total === null
-            ? ''
-            : `${total.toLocaleString('en')} ${isNarrowed(view) ? 'found' : total === 1 ? definition.one : definition.many}`}
-        </p>
-        <SearchBox
-          value={view.q}
-          label={`Search ${definition.many}`}
-          onSearch={(q) => onViewChange({ q })}
-          onLeaveDown={() => grid.current?.focusFirstRow()}
-        />
-        <CatalogueActions
+      {isAdding ? (
+        <ItemFormDialog
           definition={definition}
-          exportHref={exportPath(definition.kind, view, shownIds)}
-          onAdd={props.onAdd}
-        >
-          <ColumnChooser
-            columns={columns}
-            shown={shownIds}
-            isUsual={view.columns === null}
-            onChange={(ids) => onViewChange({ columns: ids })}
-          />
-          <SavedViews {...{ definition, columns, view, onViewChange }} />
-          <PrintList {...{ definition, columns, shownIds, view }} />
-          {mayKeep ? (
-            <>
-              <PasteRows kind={importKindOf[definition.kind]} many={definition.many} />
-              <EditToggle isEditing={isEditing} onChange={setIsEditing} />
-            </>
-          ) : null}
-        </CatalogueActions>
-      </div>
-      <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6 print:hidden">
-        <FilterFields
-          shape="row"
-          filters={definition.filters}
-          values={view.filters}
-          counts={counts}
-          onChange={(filters) => onViewChange({ filters })}
+          row={null}
+          isOpen
+          onClose={() => setIsAdding(false)}
+          onSaved={(row) => {
+            setIsAdding(false)
+            router.push(itemPagePath(row.kind, row.id))
+          }}
         />
-        {isNarrowed(view) ? (
-          <Button variant="quiet" size="compact" className="self-end" onClick={onClear}>
-            Clear all
-          </Button>
-        ) : null}
-      </div>
-      {isEditing ? <EditBar definition={definition} editing={editing} grid={grid} /> : null}
-      <CatalogueGrid
-        {...props}
-        shownIds={shownIds}
-        onTotal={setTotal}
-        handleRef={grid}
-        editing={isEditing ? editing : undefined}
-      />
-    </>
-  )
-}
-
-function useFilterCounts<Row extends CatalogueRow>(
-  definition: CatalogueDefinition<Row>,
-  view: CatalogueView,
-  isWanted: boolean,
-) {
-  return useListCounts(
-    catalogueApiPath(definition.kind),
-    queryParams({ ...view, sort: '' }).toString(),
-    isWanted,
-  )
-}
-
-/** Only while this is on does a list change under the hand; otherwise a click opens a row. */
-function EditToggle({ isEditing, onChange }: { isEditing: boolean; onChange: (isEditing: boolean) => void }) {
-  return (
-    <Button
-      size="compact"
-      aria-pressed={isEditing}
-      variant={isEditing ? 'primary' : 'secondary'}
-      onClick={() => onChange(!isEditing)}
-    >
-      <Pencil aria-hidden="true" className="size-4.5" />
-      {isEditing ? 'Done editing' : 'Edit in list'}
-    </Button>
-  )
-}
-
-function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
-  const { definition, columns, view, onViewChange } = props
-  const counts = useFilterCounts(definition, view, true)
-  return (
-    <>
-      <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
-        <div className="flex items-center justify-between">
-          <h1 className="text-2xl">{definition.title}</h1>
-          <CatalogueActions
-            definition={definition}
-            exportHref={exportPath(definition.kind, view, shownColumnIds(columns, view.columns))}
-            onAdd={props.onAdd}
-          />
-        </div>
-        <div className="flex items-center gap-2">
-          <SearchBox
-            value={view.q}
-            label={`Search ${definition.many}`}
-            onSearch={(q) => onViewChange({ q })}
-          />
-          <FilterDrawer
-            count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
-            onClear={() => onViewChange({ filters: {}, sort: '' })}
-          >
-            <SavedViews {...{ definition, columns, view, onViewChange }} />
-            <SortSelect columns={columns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
-            <FilterFields
-              shape="column"
-              filters={definition.filters}
-              values={view.filters}
-              counts={counts}
-              onChange={(filters) => onViewChange({ filters })}
-            />
-          </FilterDrawer>
-        </div>
-      </div>
-      <CatalogueList {...props} />
-    </>
+      ) : null}
+    </div>
   )
 }
 
@@ -236,45 +71,4 @@ function shownColumnIds(
 ): string[] {
   const known = asked?.filter((id) => columns.some((column) => column.id === id)) ?? []
   return known.length > 0 ? known : columns.filter((column) => column.isUsual).map((column) => column.id)
-}
-
-function CatalogueActions<Row extends CatalogueRow>({
-  definition,
-  exportHref,
-  onAdd,
-  children,
-}: {
-  definition: CatalogueDefinition<Row>
-  exportHref: string
-  onAdd: () => void
-  children?: ReactNode
-}) {
-  const mayKeep = useCan('keepCrib')
-  return (
-    <div className="flex flex-wrap items-center gap-2">
-      {children}
-      <a
-        href={exportHref}
-        download
-        className={buttonClass({ size: 'compact' })}
-        title="The rows found, as they are sorted, with the columns shown, as a CSV file"
-      >
-        <Download aria-hidden="true" className="size-4.5" />
-        Export
-      </a>
-      {mayKeep ? (
-        <>
-          <ButtonLink href="/imports" size="compact" prefetch={false} className="hidden! md:inline-flex!">
-            <Upload aria-hidden="true" className="size-4.5" />
-            Import
-          </ButtonLink>
-          <Button variant="primary" size="compact" onClick={onAdd}>
-            <Plus aria-hidden="true" className="size-4.5" />
-            Add
-            <span className="sr-only"> a {definition.one}</span>
-          </Button>
-        </>
-      ) : null}
-    </div>
-  )
 }

@@ -6,7 +6,7 @@ import { StateSentence } from '@/components/ui/state-sentence'
 import { ApiError } from '@/lib/api-client'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
-import { type CatalogueView, isNarrowed } from './catalogue-view'
+import { type CatalogueView, hasFilters, isNarrowed } from './catalogue-view'
 
 export interface CatalogueStateProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
@@ -59,9 +59,9 @@ export function CatalogueState<Row extends CatalogueRow>(props: CatalogueStatePr
   )
 }
 
-function nothingFound(one: string, { q, filters }: CatalogueView): string {
-  if (q === '') return `No ${one} passes these filters.`
-  return Object.keys(filters).length === 0
-    ? `No ${one} matches “${q}”.`
-    : `No ${one} that passes these filters matches “${q}”.`
+function nothingFound(one: string, view: CatalogueView): string {
+  if (view.q === '') return `No ${one} passes these filters.`
+  return hasFilters(view)
+    ? `No ${one} that passes these filters matches “${view.q}”.`
+    : `No ${one} matches “${view.q}”.`
 }

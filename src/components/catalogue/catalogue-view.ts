@@ -43,8 +43,20 @@ export function queryParams(view: Omit<CatalogueView, 'columns'>): URLSearchPara
   return params
 }
 
+/** Whose stock the figures are of: it leaves every row in the list. */
+const figuresOnly = 'cribId'
+
 export function isNarrowed(view: CatalogueView): boolean {
-  return view.q !== '' || Object.keys(view.filters).length > 0
+  return view.q !== '' || hasFilters(view)
+}
+
+export function hasFilters({ filters }: CatalogueView): boolean {
+  return Object.keys(filters).some((name) => name !== figuresOnly)
+}
+
+/** The search and the filters alone, as the API is asked what they leave. */
+export function narrowingText(view: CatalogueView): string {
+  return queryParams({ ...view, sort: '' }).toString()
 }
 
 /** Where the same rows are to be had as a file, with these columns. */

@@ -1,8 +1,8 @@
 'use client'
 
-import { ArrowDown, ArrowUp, Columns3 } from 'lucide-react'
+import { ArrowDown, ArrowUp } from 'lucide-react'
 import { Popover } from 'radix-ui'
-import { useEffect, useRef } from 'react'
+import { type RefObject, useEffect, useRef } from 'react'
 import { buttonClass } from '@/components/ui/button'
 
 export interface ChoosableColumn {
@@ -17,10 +17,14 @@ export interface ColumnChooserProps {
   shown: readonly string[]
   onChange: (shown: string[] | null) => void
   isUsual: boolean
+  /** The button it hangs from. */
+  anchor: RefObject<HTMLElement | null>
+  onClose: () => void
 }
 
 /** Which columns stand in the list and in what order; also by keyboard, which dragging a heading is not. */
-export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChooserProps) {
+export default function ColumnChooser(props: ColumnChooserProps) {
+  const { columns, shown, onChange, isUsual, anchor, onClose } = props
   const byId = new Map(columns.map((column) => [column.id, column]))
   const shownColumns = shown.flatMap((id) => byId.get(id) ?? [])
   const hiddenColumns = columns.filter((column) => !shown.includes(column.id))
@@ -42,16 +46,19 @@ export function ColumnChooser({ columns, shown, onChange, isUsual }: ColumnChoos
   }
 
   return (
-    <Popover.Root>
-      <Popover.Trigger className={buttonClass({ variant: 'secondary', size: 'compact' })}>
-        <Columns3 aria-hidden="true" className="size-4.5" />
-        Columns
-      </Popover.Trigger>
+    <Popover.Root open onOpenChange={(isOpen) => !isOpen && onClose()}>
+      <Popover.Anchor virtualRef={anchor as RefObject<HTMLElement>} />
       <Popover.Portal>
         <Popover.Content
           ref={listsRef}
+          aria-label="Columns"
           align="end"
           sideOffset={6}
+          collisionPadding={8}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault()
+            anchor.current?.focus()
+          }}
           className="bg-sheet border-ink z-40 flex max-h-(--radix-popover-content-available-height) w-92 flex-col overflow-y-auto border py-2 shadow-xl"
         >
           <ul aria-label="Shown">

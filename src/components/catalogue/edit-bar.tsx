@@ -1,11 +1,10 @@
 'use client'
 
 import { ListChecks, Undo2 } from 'lucide-react'
-import { type RefObject, useState } from 'react'
+import type { RefObject } from 'react'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { Button } from '@/components/ui/button'
 import { Notice } from '@/components/ui/notice'
-import { BulkChangeDialog } from './bulk-change-dialog'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import type { EditRefusal } from './edit-refusal'
@@ -15,11 +14,17 @@ export interface EditBarProps<Row extends CatalogueRow> {
   definition: CatalogueDefinition<Row>
   editing: GridEditing<Row>
   grid: RefObject<PartsListHandle | null>
+  /** How many the list has; null while nobody knows. */
+  total: number | null
+  isNarrowed: boolean
+  onChangeSelected: () => void
+  onChangeFound: () => void
+  onDone: () => void
 }
 
 /** Over a list that is being edited: how, what can be taken back, what was not taken, and the rows selected. */
-export function EditBar<Row extends CatalogueRow>({ definition, editing, grid }: EditBarProps<Row>) {
-  const [isChanging, setIsChanging] = useState(false)
+export function EditBar<Row extends CatalogueRow>(props: EditBarProps<Row>) {
+  const { definition, editing, grid, total } = props
   const { steps, selected, refusals } = editing
   const last = steps.at(-1)
   return (
@@ -33,20 +38,21 @@ export function EditBar<Row extends CatalogueRow>({ definition, editing, grid }:
           <Undo2 aria-hidden="true" className="size-4.5" />
           Undo{last ? `: ${last.name}` : ''}
         </Button>
-        <Button size="compact" disabled={selected.length === 0} onClick={() => setIsChanging(true)}>
+        <Button size="compact" disabled={selected.length === 0} onClick={props.onChangeSelected}>
           <ListChecks aria-hidden="true" className="size-4.5" />
           {selected.length === 0 ? 'Change the rows selected' : `Change ${selected.length} selected`}
+        </Button>
+        <Button size="compact" disabled={!total} onClick={props.onChangeFound}>
+          Change all {total ? `${total.toLocaleString('en')} ` : ''}
+          {props.isNarrowed ? 'found' : definition.many}
+        </Button>
+        <Button size="compact" variant="primary" onClick={props.onDone}>
+          Done editing
         </Button>
       </div>
       {refusals.map((refusal) => (
         <RefusalNotice key={`${refusal.row.id} ${refusal.columnId}`} {...{ refusal, editing, grid }} />
       ))}
-      <BulkChangeDialog
-        definition={definition}
-        editing={editing}
-        isOpen={isChanging}
-        onClose={() => setIsChanging(false)}
-      />
     </div>
   )
 }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import { type EditStep, longestHistory, undoChanges, withStep } from './edit-history'
+import { type EditStep, longestHistory, type RowsStep, undoChanges, withStep } from './edit-history'
 
-const step: EditStep = {
+const step: RowsStep = {
   field: 'maker',
   name: 'Maker of 2 cutters',
   rows: [

@@ -1,9 +1,18 @@
-/** What one act changed, row by row, so that it can be taken back. */
-export interface EditStep {
+/** What one act changed, so that it can be taken back. */
+export type EditStep = RowsStep | FoundStep
+
+/** Row by row: an edit, or a change of the rows selected. */
+export interface RowsStep {
   field: string
   /** As a person would say it: `DC of EM-12`, `Maker of 14 cutters`. */
   name: string
   rows: readonly { id: string; before: unknown; after: unknown }[]
+}
+
+/** A change of everything found, whose rows the server keeps. */
+export interface FoundStep {
+  name: string
+  foundId: string
 }
 
 /** The last acts that can be taken back; older ones are let go. */
@@ -17,7 +26,7 @@ export function withStep(steps: readonly EditStep[], step: EditStep): EditStep[]
  * What takes a step back, or null where a row says otherwise by now: someone else, or a later edit, changed it since.
  */
 export function undoChanges(
-  step: EditStep,
+  step: RowsStep,
   rowOf: (id: string) => { version: number } | undefined,
 ): { id: string; version: number; [field: string]: unknown }[] | null {
   const changes = step.rows.map(({ id, before, after }) => {

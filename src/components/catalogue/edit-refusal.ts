@@ -2,6 +2,7 @@ import { ApiError } from '@/lib/api-client'
 import { faultSentence } from '@/lib/field-faults'
 import type { CatalogueRow } from './catalogue-row'
 import type { ItemField } from './item-form-definition'
+import type { Refusal } from './refused-rows'
 
 /** What was typed into a cell and not taken. */
 export interface EditRefusal<Row> {
@@ -36,17 +37,22 @@ export function currentRow<Row extends CatalogueRow>(error: unknown): Row | null
 }
 
 /** What stands against a change of many rows, row by row. */
-export function bulkFaults(
+export function bulkRefusals(
   error: unknown,
   rows: readonly { code: string }[],
   fields: readonly ItemField[],
-): string[] {
+): Refusal[] {
   if (!(error instanceof ApiError)) return []
   return error.fieldProblems.flatMap(({ path, message }) => {
     const [, index = '', ...rest] = path.split('.')
     const code = rows[Number(index)]?.code
     if (!path.startsWith('changes.') || !code) return []
-    const label = fields.find((field) => field.path === rest.join('.'))?.label
-    return [label ? `${code}: ${label}: ${message}` : `${code}: ${message}`]
+    return [{ code, reason: labelled(rest.join('.'), message, fields) }]
   })
+}
+
+/** A reason with the field it is about, where that is one of the form. */
+export function labelled(path: string, message: string, fields: readonly ItemField[]): string {
+  const label = fields.find((field) => field.path === path)?.label
+  return label ? `${label}: ${message}` : message
 }

@@ -25,12 +25,14 @@ export function FilterDrawer({
       <Dialog isOpen={isOpen} onOpenChange={setIsOpen} title="Sort and filter" shape="side">
         <div className="flex flex-col gap-4">
           {children}
-          <Button variant="primary" onClick={() => setIsOpen(false)}>
-            Show the list
-          </Button>
-          <Button disabled={count === 0} onClick={onClear}>
-            Clear all
-          </Button>
+          <div className="bg-sheet border-hairline sticky bottom-0 -mx-5 -mb-4 flex flex-wrap gap-2 border-t px-5 py-3">
+            <Button variant="primary" className="flex-1" onClick={() => setIsOpen(false)}>
+              Show the list
+            </Button>
+            <Button disabled={count === 0} onClick={onClear}>
+              Clear all
+            </Button>
+          </div>
         </div>
       </Dialog>
     </>

@@ -1,11 +1,13 @@
 'use client'
 
-import { useEffect, useId, useRef, useState } from 'react'
+import { type FocusEvent, useEffect, useId, useRef, useState } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { controlClass } from '@/components/ui/field'
 import type { SelectOption } from '@/components/ui/select-field'
+import type { CatalogueKind } from '@/core/stock/kinds'
 import { parseLength } from '@/core/units/parse-length'
+import { useCatalogueCounts } from '@/hooks/use-catalogue-counts'
 import { lengthInputText } from '@/lib/format-length'
 import type { CatalogueCounts } from '@/schemas/catalogue-counts'
 import type { CatalogueFilter } from './catalogue-filter'
@@ -14,17 +16,18 @@ import { useDelayed } from './use-delayed'
 type Choices = CatalogueCounts[string]
 
 export interface FilterFieldsProps {
+  kind: CatalogueKind
+  /** The search and the filters as the API takes them: what is counted within. */
+  narrowing: string
   filters: readonly CatalogueFilter[]
   values: Readonly<Record<string, string>>
   onChange: (values: Record<string, string>) => void
-  /** How many rows each choice would leave. */
-  counts: CatalogueCounts
   /** In one line over the list, or one under the other in a drawer. */
   shape: 'row' | 'column'
 }
 
 /** The ways to narrow a list; each change takes hold as soon as it can be read. */
-export function FilterFields({ filters, values, counts, onChange, shape }: FilterFieldsProps) {
+export function FilterFields({ kind, narrowing, filters, values, onChange, shape }: FilterFieldsProps) {
   const [isMoreShown, setIsMoreShown] = useState(false)
   const latest = useRef(values)
   useEffect(() => {
@@ -49,9 +52,8 @@ export function FilterFields({ filters, values, counts, onChange, shape }: Filte
       {shown.map((filter) => (
         <FilterBox
           key={filter.name}
-          filter={filter}
-          values={values}
-          counts={counts[filter.name]}
+          {...{ kind, narrowing, filter, values }}
+          isCountedAtOnce={shape === 'column' && filter.kind !== 'lengthRange'}
           onSet={handleSet}
           className={boxClass}
         />
@@ -72,19 +74,31 @@ export function FilterFields({ filters, values, counts, onChange, shape }: Filte
 }
 
 interface FilterBoxProps {
+  kind: CatalogueKind
+  narrowing: string
   filter: CatalogueFilter
   values: Readonly<Record<string, string>>
-  counts: Choices | undefined
+  /** Else once a hand or the keyboard comes near. */
+  isCountedAtOnce: boolean
   onSet: (name: string, value: string) => void
   className: string
 }
 
-function FilterBox({ filter, values, counts, onSet, className }: FilterBoxProps) {
+function FilterBox(props: FilterBoxProps) {
+  const { kind, narrowing, filter, values, onSet, className } = props
   const id = useId()
-  if (filter.kind === 'lengthRange') return <LengthRange {...{ values, onSet, className }} filter={filter} />
+  const [isNear, setIsNear] = useState(props.isCountedAtOnce)
   const value = values[filter.name] ?? ''
+  // A place or a crib from the address has no name but the one that comes with its count.
+  const isNamedByCounts = filter.kind === 'counted' && value !== ''
+  const isCountable = filter.kind !== 'lengthRange' || !filter.isWorkedOut
+  const isWanted = isCountable && (isNear || isNamedByCounts)
+  const counts = useCatalogueCounts(kind, narrowing, filter.name, isWanted)
+  const nearing = { onPointerEnter: () => setIsNear(true), onFocus: () => setIsNear(true) }
+  if (filter.kind === 'lengthRange')
+    return <LengthRange {...{ values, onSet, className, nearing }} filter={filter} offered={counts} />
   return (
-    <div className={`flex flex-col text-sm ${className}`}>
+    <div className={`flex flex-col text-sm ${className}`} {...nearing}>
       <label htmlFor={id} className="text-ink-soft">
         {filter.label}
       </label>
@@ -126,7 +140,7 @@ function choicesOf(
     label: `${label ?? value} (${count.toLocaleString('en')})`,
   }))
   const isListed = chosen === '' || options.some((option) => option.value === chosen)
-  return isListed ? options : [{ value: chosen, label: 'The place in the address' }, ...options]
+  return isListed ? options : [{ value: chosen, label: filter.unknownLabel }, ...options]
 }
 
 const filterClass = controlClass.replace('min-h-10', 'min-h-9')
@@ -209,12 +223,17 @@ function LengthRange({
   values,
   onSet,
   className,
-}: Omit<FilterBoxProps, 'filter' | 'counts'> & {
+  nearing,
+  offered,
+}: Pick<FilterBoxProps, 'values' | 'onSet' | 'className'> & {
   filter: Extract<CatalogueFilter, { kind: 'lengthRange' }>
+  nearing: { onPointerEnter: () => void; onFocus: (event: FocusEvent) => void }
+  offered: Choices | undefined
 }) {
-  const { unit } = useShop()
+  const { unit, decimalComma } = useShop()
+  const listId = useId()
   return (
-    <fieldset className={`flex flex-col text-sm ${className}`}>
+    <fieldset className={`flex flex-col text-sm ${className}`} {...nearing}>
       <legend className="text-ink-soft float-left">
         {filter.label}, {unit}
       </legend>
@@ -223,15 +242,27 @@ function LengthRange({
           name={`${filter.name}.min`}
           label={`${filter.label} from`}
           words="from"
-          {...{ values, onSet }}
+          {...{ values, onSet, listId }}
         />
         <LengthBound
           name={`${filter.name}.max`}
           label={`${filter.label} to`}
           words="to"
-          {...{ values, onSet }}
+          {...{ values, onSet, listId }}
         />
       </span>
+      <datalist id={listId}>
+        {(offered ?? []).map((choice) => {
+          const text = lengthInputText(Number(choice.value), unit, { decimalComma })
+          return (
+            <option
+              key={choice.value}
+              value={text}
+              label={`${text} (${choice.count.toLocaleString('en')})`}
+            />
+          )
+        })}
+      </datalist>
     </fieldset>
   )
 }
@@ -242,7 +273,13 @@ function LengthBound({
   words,
   values,
   onSet,
-}: Pick<FilterBoxProps, 'values' | 'onSet'> & { name: string; label: string; words: string }) {
+  listId,
+}: Pick<FilterBoxProps, 'values' | 'onSet'> & {
+  name: string
+  label: string
+  words: string
+  listId: string
+}) {
   const { unit, decimalComma } = useShop()
   const given = values[name]
   const shown =
@@ -260,6 +297,7 @@ function LengthBound({
     <span className="flex-1 sm:w-24 sm:flex-none">
       <input
         type="text"
+        list={listId}
         aria-label={label}
         placeholder={words}
         aria-invalid={fault ? true : undefined}

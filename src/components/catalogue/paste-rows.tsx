@@ -1,8 +1,7 @@
 'use client'
 
-import { ClipboardPaste } from 'lucide-react'
 import { useRouter } from 'next/navigation'
-import { type FormEvent, useEffect, useState } from 'react'
+import { type FormEvent, useState } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
@@ -12,32 +11,29 @@ import { useAttempt } from '@/components/ui/use-attempt'
 import { createImport } from '@/hooks/use-import'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { hasLengths, type ImportKind } from '@/schemas/import-fields'
-import { isBlock, pastedBlock, pastedFile } from './pasted-block'
+import { pastedBlock, pastedFile } from './pasted-block'
 
 export interface PasteRowsProps {
   kind: ImportKind
   many: string
+  /** What was pasted over the list; empty where the dialog was asked for. */
+  firstText: string
+  onClose: () => void
 }
 
-/** The button and its dialog; a block pasted over the list, where nothing is being typed, opens it too. */
-export function PasteRows({ kind, many }: PasteRowsProps) {
-  const [text, setText] = useState<string | null>(null)
-  useBlockPaste(setText)
+/** Rows of a spreadsheet on their way to the checks of an import. */
+export default function PasteRows({ kind, many, firstText, onClose }: PasteRowsProps) {
+  const [text, setText] = useState(firstText)
   return (
-    <>
-      <Button size="compact" onClick={() => setText('')}>
-        <ClipboardPaste aria-hidden="true" className="size-4.5" />
-        Paste rows
-      </Button>
-      <Dialog
-        isOpen={text !== null}
-        onOpenChange={(isOpen) => !isOpen && setText(null)}
-        title={`Paste ${many} from a spreadsheet`}
-        description="Nothing is changed by this. The rows are checked like a file, and you see what each would do."
-      >
-        <PasteForm kind={kind} text={text ?? ''} onChange={setText} />
-      </Dialog>
-    </>
+    <Dialog
+      isOpen
+      onOpenChange={(isOpen) => !isOpen && onClose()}
+      title={`Paste ${many} from a spreadsheet`}
+      description="Nothing is changed by this. The rows are checked like a file, and you see what each would do."
+      shape="wide"
+    >
+      <PasteForm kind={kind} text={text} onChange={setText} />
+    </Dialog>
   )
 }
 
@@ -106,21 +102,4 @@ function PasteForm({
       </Button>
     </form>
   )
-}
-
-function useBlockPaste(onPaste: (text: string) => void): void {
-  useEffect(() => {
-    const handle = (event: ClipboardEvent) => {
-      const target = event.target
-      const isTyping =
-        target instanceof Element &&
-        target.closest('input:not([type=checkbox]), textarea, select, [role="dialog"]')
-      const text = event.clipboardData?.getData('text/plain') ?? ''
-      if (isTyping || !isBlock(text)) return
-      event.preventDefault()
-      onPaste(text)
-    }
-    window.addEventListener('paste', handle)
-    return () => window.removeEventListener('paste', handle)
-  }, [onPaste])
 }

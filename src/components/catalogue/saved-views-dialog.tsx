@@ -1,6 +1,5 @@
 'use client'
 
-import { Bookmark } from 'lucide-react'
 import { useState } from 'react'
 import { toast } from 'sonner'
 import { Button } from '@/components/ui/button'
@@ -23,21 +22,19 @@ export interface SavedViewsProps<Row extends CatalogueRow> {
   columns: readonly CatalogueColumn<Row>[]
   view: CatalogueView
   onViewChange: (change: Partial<CatalogueView>) => void
+  onClose: () => void
 }
 
-/** The button and, behind it, the views to open, one's own to rename or remove, and the present one to keep. */
-export function SavedViews<Row extends CatalogueRow>(props: SavedViewsProps<Row>) {
-  const [isOpen, setIsOpen] = useState(false)
+/** The views to open, one's own to rename or remove, and the present one to keep. */
+export default function SavedViews<Row extends CatalogueRow>(props: SavedViewsProps<Row>) {
   return (
-    <>
-      <Button size="compact" onClick={() => setIsOpen(true)}>
-        <Bookmark aria-hidden="true" className="size-4.5" />
-        Views
-      </Button>
-      <Dialog isOpen={isOpen} onOpenChange={setIsOpen} title={`Views of the ${props.definition.many}`}>
-        <SavedViewList {...props} onDone={() => setIsOpen(false)} />
-      </Dialog>
-    </>
+    <Dialog
+      isOpen
+      onOpenChange={(isOpen) => !isOpen && props.onClose()}
+      title={`Views of the ${props.definition.many}`}
+    >
+      <SavedViewList {...props} />
+    </Dialog>
   )
 }
 
@@ -46,8 +43,8 @@ function SavedViewList<Row extends CatalogueRow>({
   columns,
   view,
   onViewChange,
-  onDone,
-}: SavedViewsProps<Row> & { onDone: () => void }) {
+  onClose,
+}: SavedViewsProps<Row>) {
   const saved = useSavedViews(definition.kind)
   const { fault, isBusy, attempt } = useAttempt()
 
@@ -60,7 +57,7 @@ function SavedViewList<Row extends CatalogueRow>({
         { duration: 15_000 },
       )
     }
-    onDone()
+    onClose()
   }
 
   return (

@@ -6,11 +6,12 @@ import type { CellEdit } from '@/components/grid/parts-list-column'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useShop } from '@/components/layout/shop-context'
 import { type ItemChange, useChangeItems } from '@/hooks/use-change-items'
+import { useChangeFound } from '@/hooks/use-found-changes'
 import { useSaveItem } from '@/hooks/use-save-item'
 import { faultSentence } from '@/lib/field-faults'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
-import { type EditStep, undoChanges, withStep } from './edit-history'
+import { type EditStep, type FoundStep, type RowsStep, undoChanges, withStep } from './edit-history'
 import { currentRow, type EditRefusal, refusalMessage } from './edit-refusal'
 import type { ItemField } from './item-form-definition'
 import { formFields, type Manner, readTypedField, typedText } from './typed-values'
@@ -30,6 +31,9 @@ export interface GridEditing<Row> {
   undo: () => void
   /** One field of all rows selected; throws what stands against it. */
   changeSelected: (field: ItemField, value: unknown) => Promise<void>
+  /** Everything found was changed, or that was taken back, elsewhere on the page. */
+  noteFound: (step: FoundStep) => void
+  forgetFound: (foundId: string) => void
 }
 
 function fieldValue(row: object, field: string): unknown {
@@ -47,6 +51,7 @@ export function useGridEditing<Row extends CatalogueRow>(
   const manner: Manner = useShop()
   const save = useSaveItem<Row>(definition.kind)
   const changeItems = useChangeItems<Row>(definition.kind)
+  const changeFound = useChangeFound(definition.kind)
   const [refusals, setRefusals] = useState<EditRefusal<Row>[]>([])
   const [steps, setSteps] = useState<EditStep[]>([])
   const [selected, setSelected] = useState<Row[]>([])
@@ -140,16 +145,26 @@ export function useGridEditing<Row extends CatalogueRow>(
     if (!step) return
     setSteps((past) => past.filter((one) => one !== step))
     enqueue(async () => {
-      const changes = undoChanges(step, (id) => known.current.get(id))
       try {
-        if (!changes) throw new Error('It was changed again since.')
-        show(await sendChanges(changes))
+        if ('foundId' in step) await undoFound(step)
+        else await undoRows(step)
         toast.success(`${step.name} is as it was.`)
       } catch (error) {
         toast.error(`${step.name} was not taken back. ${faultSentence(error)}`)
         grid.current?.refresh()
       }
     })
+  }
+
+  async function undoRows(step: RowsStep): Promise<void> {
+    const changes = undoChanges(step, (id) => known.current.get(id))
+    if (!changes) throw new Error('It was changed again since.')
+    show(await sendChanges(changes))
+  }
+
+  async function undoFound({ foundId }: FoundStep): Promise<void> {
+    await changeFound.undo(foundId)
+    grid.current?.refresh()
   }
 
   async function sendChanges(changes: ItemChange[]): Promise<Row[]> {
@@ -177,9 +192,19 @@ export function useGridEditing<Row extends CatalogueRow>(
     }
   }
 
+  function noteFound(step: FoundStep) {
+    setSteps((past) => withStep(past, step))
+    grid.current?.refresh()
+  }
+
+  function forgetFound(foundId: string) {
+    setSteps((past) => past.filter((step) => !('foundId' in step) || step.foundId !== foundId))
+    grid.current?.refresh()
+  }
+
   useUndoKey(isOn, undo)
   return {
     ...{ cellEdit, fields, refusals, steps, selected, isBusy: waiting > 0 },
-    ...{ handleEdit, handleSelect: setSelected, takeBack, undo, changeSelected },
+    ...{ handleEdit, handleSelect: setSelected, takeBack, undo, changeSelected, noteFound, forgetFound },
   }
 }

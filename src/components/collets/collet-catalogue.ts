@@ -21,6 +21,7 @@ export const colletCatalogue: CatalogueDefinition<ColletResponse> = {
   ],
   filters: [
     { kind: 'text', name: 'series', label: 'Series' },
+    { kind: 'lengthRange', name: 'minimumMm', label: 'Smallest shank' },
     { kind: 'lengthRange', name: 'maximumMm', label: 'Largest shank' },
     ...itemFilters,
   ],

@@ -8,7 +8,7 @@ import {
   lengthColumn,
   textColumn,
 } from '@/components/catalogue/columns'
-import { cutterForms } from '@/core/tooling'
+import { cutterForms, substrates } from '@/core/tooling'
 import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { formatLength } from '@/lib/format-length'
 import type { CutterResponse } from '@/schemas/cutter'
@@ -54,10 +54,30 @@ export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
     { kind: 'lengthRange', name: 'cuttingDiameterMm', label: 'Cutting diameter' },
     { kind: 'lengthRange', name: 'lengthOfCutMm', label: 'Length of cut', isMore: true },
     { kind: 'lengthRange', name: 'reachLengthMm', label: 'Reach', isMore: true },
-    { kind: 'lengthRange', name: 'usableDepthMm', label: 'Depth of a straight wall', isMore: true },
-    { kind: 'lengthRange', name: 'endRadiusMm', label: 'Radius at the floor', isMore: true },
+    {
+      kind: 'lengthRange',
+      name: 'usableDepthMm',
+      label: 'Depth of a straight wall',
+      isMore: true,
+      isWorkedOut: true,
+    },
+    {
+      kind: 'lengthRange',
+      name: 'endRadiusMm',
+      label: 'Radius at the floor',
+      isMore: true,
+      isWorkedOut: true,
+    },
     { kind: 'lengthRange', name: 'shankDiameterMm', label: 'Shank', isMore: true },
     { kind: 'lengthRange', name: 'cornerRadiusMm', label: 'Corner radius', isMore: true },
+    {
+      kind: 'choice',
+      name: 'substrate',
+      label: 'Made of',
+      anyLabel: 'Any',
+      isMore: true,
+      options: substrates.map((substrate) => ({ value: substrate, label: substrateNames[substrate] })),
+    },
     ...itemFilters,
   ],
   facts: (row, unit) => {

@@ -49,6 +49,7 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
     },
     { kind: 'text', name: 'series', label: 'Collet series' },
     { kind: 'lengthRange', name: 'projectionMm', label: 'Projection' },
+    { kind: 'lengthRange', name: 'boreDiameterMm', label: 'Fixed bore', isMore: true },
     ...itemFilters,
   ],
   facts: (row, unit) => `${boreWords(row.bore, unit)} · E ${formatLength(row.projectionMm, unit)}`,

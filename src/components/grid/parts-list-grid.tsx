@@ -65,6 +65,8 @@ export interface PartsListHandle {
   redrawRow: (id: string) => void
   editCell: (id: string, columnId: string) => void
   clearSelection: () => void
+  /** The rows loaded around the first one on screen, and how many come before them. */
+  loadedRows: () => { first: number; rows: readonly { id: string }[] }
 }
 
 export interface PartsListEditing<Row> {
@@ -226,7 +228,20 @@ function useHandle<Row>(
       api.current?.startEditingCell({ rowIndex, colKey: columnId })
     },
     clearSelection: () => api.current?.deselectAll(),
+    loadedRows: () => loadedRun(api.current),
   }))
+}
+
+/** A block further up or down may not be loaded: only what hangs together is answered. */
+function loadedRun<Row>(grid: GridApi<Row> | null): { first: number; rows: { id: string }[] } {
+  if (!grid) return { first: 0, rows: [] }
+  const rowAt = (index: number) => grid.getDisplayedRowAtIndex(index)?.data as { id: string } | undefined
+  const shown = Math.max(0, grid.getFirstDisplayedRowIndex())
+  let first = shown
+  while (first > 0 && rowAt(first - 1)) first -= 1
+  const rows: { id: string }[] = []
+  for (let row = rowAt(first); row; row = rowAt(first + rows.length)) rows.push(row)
+  return { first, rows }
 }
 
 function sortOf<Row>(grid: GridApi<Row>): string {

@@ -54,6 +54,7 @@ export const holderCatalogue: CatalogueDefinition<HolderResponse> = {
     { kind: 'text', name: 'taper', label: 'Taper' },
     { kind: 'text', name: 'series', label: 'Collet series' },
     { kind: 'lengthRange', name: 'gaugeLengthMm', label: 'Gauge length' },
+    { kind: 'lengthRange', name: 'boreDiameterMm', label: 'Fixed bore', isMore: true },
     ...itemFilters,
   ],
   facts: (row, unit) =>

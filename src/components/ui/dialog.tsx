@@ -10,14 +10,15 @@ export interface DialogProps {
   onOpenChange: (isOpen: boolean) => void
   title: string
   description?: string
-  /** `side` slides along the right edge, for forms that stand beside what they change. */
-  shape?: 'centre' | 'side'
+  /** `wide` is for tables; `side` slides along the right edge, for forms that stand beside what they change. */
+  shape?: 'centre' | 'wide' | 'side'
   children: ReactNode
 }
 
 const shapes = {
   centre:
     'top-1/2 left-1/2 max-h-[calc(100dvh-2rem)] w-[min(36rem,calc(100vw-2rem))] -translate-x-1/2 -translate-y-1/2',
+  wide: 'top-1/2 left-1/2 max-h-[calc(100dvh-2rem)] w-[min(60rem,calc(100vw-2rem))] -translate-x-1/2 -translate-y-1/2',
   side: 'top-0 right-0 h-dvh w-[min(44rem,100vw)]',
 } as const
 

@@ -3,12 +3,8 @@ import type { z } from 'zod'
 import type { CatalogueKind } from '@/core/stock/kinds'
 import { AppError } from '@/lib/app-error'
 import type { CatalogueTypes } from '@/schemas/catalogue'
-import {
-  type FoundRehearsal,
-  foundLimit,
-  type foundRefusalSchema,
-  listedRefusals,
-} from '@/schemas/found-change'
+import type { FoundRehearsal, foundRefusalSchema } from '@/schemas/found-change'
+import { foundLimit, listedRefusals } from '@/schemas/found-change-limits'
 import type { Database } from '../../db/connection'
 import { readCatalogueRows } from '../../db/read-models/catalogue-rows'
 import { changedFields, impossibleFields } from './item-change'

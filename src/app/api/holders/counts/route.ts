@@ -2,7 +2,7 @@ import { catalogueCountsResponseSchema, countsQuerySchemas } from '@/schemas/cat
 import { route } from '@/server/http/route'
 import { countItems } from '@/server/services/catalogue/count-items'
 
-/** How many rows each choice of each filter would leave, with the other filters as they are. */
+/** How many rows each choice of the filters asked for would leave, with the other filters as they are. */
 export const GET = route({
   access: 'see',
   query: countsQuerySchemas.holder,
