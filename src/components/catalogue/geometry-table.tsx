@@ -1,9 +1,9 @@
 'use client'
 
 import { useShop } from '@/components/layout/shop-context'
+import { SymbolName } from '@/components/ui/symbol-name'
 import type { HolderSegmentPart, OutlineSegment } from '@/core/tooling'
 import { formatLength } from '@/lib/format-length'
-import { symbolTitle } from '@/lib/symbol-names'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import { itemFacts } from './item-facts'
@@ -32,11 +32,8 @@ export function GeometryTable<Row extends CatalogueRow>({
         <tbody>
           {facts.map((fact) => (
             <tr key={fact.path} className="border-hairline border-b">
-              <td
-                className={`${cellClass} text-ink-soft w-14 text-sm`}
-                title={fact.symbol ? symbolTitle(fact.symbol) : undefined}
-              >
-                {fact.symbol}
+              <td className={`${cellClass} text-ink-soft w-14 text-sm`}>
+                {fact.symbol ? <SymbolName text={fact.symbol} /> : null}
               </td>
               <th scope="row" className={`${cellClass} text-left font-normal`}>
                 {fact.label}

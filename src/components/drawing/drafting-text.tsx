@@ -16,6 +16,7 @@ export function DraftingText({ x, y, text, symbol, anchor = 'middle', isStrong }
   const title = symbol ? symbolTitle(symbol) : undefined
   return (
     <text
+      data-name={title}
       x={x}
       y={y}
       textAnchor={anchor}
@@ -27,7 +28,6 @@ export function DraftingText({ x, y, text, symbol, anchor = 'middle', isStrong }
       strokeLinejoin="round"
       paintOrder="stroke"
     >
-      {title ? <title>{title}</title> : null}
       {symbol ? (
         <tspan fill="var(--ink-soft)" fontWeight={400}>
           {`${symbol} `}

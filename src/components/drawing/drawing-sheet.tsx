@@ -2,6 +2,7 @@
 
 import type { ReactNode } from 'react'
 import type { LengthUnit } from '@/core/units/length-unit'
+import { DrawnNames } from './drawn-names'
 import { useElementWidth } from './use-element-width'
 
 export interface SheetContent {
@@ -30,14 +31,16 @@ export function DrawingSheet({ sentence, code, unit, draw, note }: DrawingSheetP
   return (
     <figure className="border-ink bg-sheet border">
       <div ref={ref} className="overflow-hidden">
-        <svg
-          role="img"
-          aria-label={sentence}
-          viewBox={`0 0 ${width} ${height}`}
-          className="block h-auto w-full"
-        >
-          {body}
-        </svg>
+        <DrawnNames>
+          <svg
+            role="img"
+            aria-label={sentence}
+            viewBox={`0 0 ${width} ${height}`}
+            className="block h-auto w-full"
+          >
+            {body}
+          </svg>
+        </DrawnNames>
       </div>
       <figcaption className="border-ink flex flex-wrap justify-end border-t text-sm">
         {note ? <span className="text-ink-soft mr-auto px-3 py-1.5">{note}</span> : null}

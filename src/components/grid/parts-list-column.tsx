@@ -36,7 +36,6 @@ export function columnDef<Row>(column: PartsListColumn<Row>, initialSort: string
   return {
     colId: column.id,
     headerName: column.heading,
-    headerTooltip: column.name,
     type: column.isFigure ? 'rightAligned' : undefined,
     headerComponentParams: {
       innerHeaderComponent: PartsListHeading,

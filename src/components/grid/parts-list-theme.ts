@@ -6,18 +6,6 @@ const focusedRow = createPart({
   css: '.ag-row-focus { background-color: var(--accent-wash); }',
 })
 
-/** A heading reached by keyboard says its name in full, as the pointer's tooltip does. */
-const focusedHeading = createPart({
-  feature: 'partsListFocusedHeading',
-  css: `
-    .ag-header-cell:focus-visible .parts-list-symbol { display: none; }
-    .ag-header-cell:focus-visible .parts-list-name {
-      position: static; display: block; width: auto; height: auto; margin: 0; overflow: visible;
-      clip-path: none; white-space: normal; font-size: 11px; line-height: 1.1;
-    }
-  `,
-})
-
 /** What can be typed into is underlined by dots; what was not taken stands out by more than its colour. */
 const editedCells = createPart({
   feature: 'partsListEditedCells',
@@ -34,7 +22,6 @@ const editedCells = createPart({
 export const partsListTheme = themeQuartz
   .withPart(focusedRow)
   .withPart(editedCells)
-  .withPart(focusedHeading)
   .withParams({
     accentColor: 'var(--accent)',
     backgroundColor: 'var(--sheet)',

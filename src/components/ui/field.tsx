@@ -1,6 +1,9 @@
-import { type ReactNode, useId } from 'react'
+'use client'
+
+import { type ReactNode, useId, useRef } from 'react'
 import { symbolTitle } from '@/lib/symbol-names'
 import { classNames } from './class-names'
+import { FieldSymbol } from './field-symbol'
 
 export interface FieldProps {
   label: string
@@ -15,6 +18,7 @@ export interface FieldProps {
 
 interface ControlWiring {
   id: string
+  'aria-labelledby': string | undefined
   'aria-describedby': string | undefined
   'aria-invalid': true | undefined
 }
@@ -32,14 +36,14 @@ export function Field({
   const id = useId()
   const hintId = hint ? `${id}-hint` : undefined
   const errorId = error ? `${id}-error` : undefined
-  const describedBy = [hintId, errorId].filter(Boolean).join(' ') || undefined
+  const [labelId, symbolId, nameId] = [`${id}-label`, `${id}-symbol`, `${id}-name`]
+  const isNamed = symbol !== undefined && symbolTitle(symbol) !== undefined
+  const describedBy = [hintId, errorId, isNamed && nameId].filter(Boolean).join(' ') || undefined
+  const field = useRef<HTMLDivElement>(null)
   return (
-    <div className={classNames('flex flex-col gap-1', className)}>
-      <label
-        htmlFor={id}
-        className="flex items-baseline justify-between gap-2 text-[0.9375rem] font-semibold"
-      >
-        <span>
+    <div ref={field} className={classNames('flex flex-col gap-1', className)}>
+      <div className="flex items-baseline justify-between gap-2 text-[0.9375rem]">
+        <label id={labelId} htmlFor={id} className="flex-1 font-semibold">
           {label}
           {isRequired ? (
             <span className="text-ink-soft font-normal" aria-hidden="true">
@@ -47,14 +51,15 @@ export function Field({
               *
             </span>
           ) : null}
-        </span>
-        {symbol ? (
-          <span className="text-ink-soft text-xs font-normal tracking-wide" title={symbolTitle(symbol)}>
-            {symbol}
-          </span>
-        ) : null}
-      </label>
-      {children({ id, 'aria-describedby': describedBy, 'aria-invalid': error ? true : undefined })}
+        </label>
+        {symbol ? <FieldSymbol id={symbolId} text={symbol} {...{ nameId, field }} /> : null}
+      </div>
+      {children({
+        id,
+        'aria-labelledby': symbol ? `${labelId} ${symbolId}` : undefined,
+        'aria-describedby': describedBy,
+        'aria-invalid': error ? true : undefined,
+      })}
       {hint ? (
         <p id={hintId} className="text-ink-soft text-sm">
           {hint}
