@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { distanceMmSchema, lengthMmSchema, lineSchema } from './fields'
+import { setFilter, valuesFilter } from './paging'
 
 /** What takes a shank, in a holder as in an extension. */
 export const boreSchema = z.discriminatedUnion(
@@ -40,3 +41,8 @@ export function segmentsSchema<Segment extends z.ZodType>(segment: Segment) {
 }
 
 export const boreKinds = ['collet', 'fixed'] as const
+
+/** What a list of holders or extensions is sorted and filtered by of their bores. */
+export const boreNumberFields = ['boreDiameterMm', 'boreDepthMm', 'minimumGripMm', 'gripStartMm'] as const
+export const boreWordFields = ['series', 'boreKind'] as const
+export const boreFilterFields = { series: valuesFilter, boreKind: setFilter(boreKinds) }

@@ -1,6 +1,14 @@
 import { z } from 'zod'
 import { extensionProblems } from '@/core/catalogue/holding-problems'
-import { boreKinds, clampingFields, clampingResponseFields, segmentFields, segmentsSchema } from './bore'
+import {
+  boreFilterFields,
+  boreNumberFields,
+  boreWordFields,
+  clampingFields,
+  clampingResponseFields,
+  segmentFields,
+  segmentsSchema,
+} from './bore'
 import { lengthMmSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
 import {
@@ -9,8 +17,6 @@ import {
   listQuerySchema,
   listResponseSchema,
   numberFilters,
-  setFilter,
-  valuesFilter,
 } from './paging'
 
 export const extensionSegmentSchema = z.object(segmentFields)
@@ -42,26 +48,14 @@ export type ExtensionResponse = z.infer<typeof extensionResponseSchema>
 
 export const extensionListResponseSchema = listResponseSchema(extensionResponseSchema)
 
-const extensionNumberFields = [
-  'projectionMm',
-  'boreDiameterMm',
-  'boreDepthMm',
-  'minimumGripMm',
-  'gripStartMm',
-] as const
+const extensionNumberFields = ['projectionMm', ...boreNumberFields] as const
 
-export const extensionSortFields = [
-  ...itemSortFields,
-  'series',
-  'boreKind',
-  ...extensionNumberFields,
-] as const
+export const extensionSortFields = [...itemSortFields, ...boreWordFields, ...extensionNumberFields] as const
 
 export const extensionListQuerySchema = listQuerySchema(
   {
     ...itemListQueryFields,
-    series: valuesFilter,
-    boreKind: setFilter(boreKinds),
+    ...boreFilterFields,
     ...numberFilters(extensionNumberFields),
   },
   extensionSortFields,

@@ -1,7 +1,15 @@
 import { z } from 'zod'
 import { holderProblems } from '@/core/catalogue/holding-problems'
 import { holderSegmentParts } from '@/core/tooling'
-import { boreKinds, clampingFields, clampingResponseFields, segmentFields, segmentsSchema } from './bore'
+import {
+  boreFilterFields,
+  boreNumberFields,
+  boreWordFields,
+  clampingFields,
+  clampingResponseFields,
+  segmentFields,
+  segmentsSchema,
+} from './bore'
 import { countSchema, lengthMmSchema, optionalLineSchema } from './fields'
 import { addProblems, changeFields, itemFields, itemResponseFields } from './item'
 import {
@@ -10,7 +18,6 @@ import {
   listQuerySchema,
   listResponseSchema,
   numberFilters,
-  setFilter,
   valuesFilter,
 } from './paging'
 
@@ -54,10 +61,7 @@ export const holderListResponseSchema = listResponseSchema(holderResponseSchema)
 
 const holderNumberFields = [
   'gaugeLengthMm',
-  'boreDiameterMm',
-  'boreDepthMm',
-  'minimumGripMm',
-  'gripStartMm',
+  ...boreNumberFields,
   'sideLockInsertionMm',
   'maximumRpm',
 ] as const
@@ -65,8 +69,7 @@ const holderNumberFields = [
 export const holderSortFields = [
   ...itemSortFields,
   'taper',
-  'series',
-  'boreKind',
+  ...boreWordFields,
   ...holderNumberFields,
 ] as const
 
@@ -74,8 +77,7 @@ export const holderListQuerySchema = listQuerySchema(
   {
     ...itemListQueryFields,
     taper: valuesFilter,
-    series: valuesFilter,
-    boreKind: setFilter(boreKinds),
+    ...boreFilterFields,
     ...numberFilters(holderNumberFields),
   },
   holderSortFields,

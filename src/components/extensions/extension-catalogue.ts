@@ -1,13 +1,14 @@
+import {
+  boreColumns,
+  boreDiameterFilter,
+  boreKindFilter,
+  clampingLengths,
+  colletSeriesFilter,
+} from '@/components/catalogue/bore-columns'
 import { boreWords } from '@/components/catalogue/bore-words'
 import type { CatalogueDefinition } from '@/components/catalogue/catalogue-definition'
 import { itemFilters } from '@/components/catalogue/catalogue-filter'
-import {
-  boreDiameterColumn,
-  codeColumn,
-  itemColumns,
-  lengthColumn,
-  textColumn,
-} from '@/components/catalogue/columns'
+import { codeColumn, itemColumns, lengthColumn } from '@/components/catalogue/columns'
 import { formatLength } from '@/lib/format-length'
 import type { ExtensionResponse } from '@/schemas/extension'
 import { extensionForm } from './extension-form'
@@ -19,37 +20,18 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
   many: 'extensions',
   columns: (canSeeCosts) => [
     codeColumn(),
-    textColumn('boreKind', 'Holds by', (row) => (row.bore.kind === 'collet' ? 'Collet' : 'Fixed bore'), {
-      width: 112,
-    }),
-    textColumn('series', 'Series', (row) => (row.bore.kind === 'collet' ? row.bore.series : ''), {
-      name: 'Collet series',
-      width: 90,
-    }),
-    boreDiameterColumn(),
+    ...boreColumns(),
     lengthColumn('projectionMm', 'E', 'Projection (E)'),
-    lengthColumn('boreDepthMm', 'Bore depth', 'Bore depth', { width: 104 }),
-    lengthColumn('minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)'),
-    lengthColumn('gripStartMm', 'Grip start', 'Where gripping begins behind the nose face', {
-      width: 100,
-      isUsual: false,
-    }),
+    ...clampingLengths.map(([field, heading, name, look]) =>
+      lengthColumn<ExtensionResponse>(field, heading, name, look),
+    ),
     ...itemColumns<ExtensionResponse>(canSeeCosts),
   ],
   filters: [
-    {
-      kind: 'choice',
-      name: 'boreKind',
-      label: 'Holds by',
-      anyLabel: 'Any',
-      options: [
-        { value: 'collet', label: 'Collet' },
-        { value: 'fixed', label: 'Fixed bore' },
-      ],
-    },
-    { kind: 'text', name: 'series', label: 'Collet series' },
+    boreKindFilter,
+    colletSeriesFilter,
     { kind: 'lengthRange', name: 'projectionMm', label: 'Projection' },
-    { kind: 'lengthRange', name: 'boreDiameterMm', label: 'Fixed bore', isMore: true },
+    boreDiameterFilter,
     ...itemFilters,
   ],
   facts: (row, unit) => `${boreWords(row.bore, unit)} · E ${formatLength(row.projectionMm, unit)}`,

@@ -1,8 +1,14 @@
+import {
+  boreColumns,
+  boreDiameterFilter,
+  boreKindFilter,
+  clampingLengths,
+  colletSeriesFilter,
+} from '@/components/catalogue/bore-columns'
 import { boreWords } from '@/components/catalogue/bore-words'
 import type { CatalogueDefinition } from '@/components/catalogue/catalogue-definition'
 import { itemFilters } from '@/components/catalogue/catalogue-filter'
 import {
-  boreDiameterColumn,
   codeColumn,
   countColumn,
   itemColumns,
@@ -21,40 +27,21 @@ export const holderCatalogue: CatalogueDefinition<HolderResponse> = {
   columns: (canSeeCosts) => [
     codeColumn(),
     textColumn('taper', 'Taper', (row) => row.taper ?? '', { name: 'Spindle taper', width: 96 }),
-    textColumn('boreKind', 'Holds by', (row) => (row.bore.kind === 'collet' ? 'Collet' : 'Fixed bore'), {
-      width: 112,
-    }),
-    textColumn('series', 'Series', (row) => (row.bore.kind === 'collet' ? row.bore.series : ''), {
-      name: 'Collet series',
-      width: 90,
-    }),
-    boreDiameterColumn(),
+    ...boreColumns(),
     lengthColumn('gaugeLengthMm', 'A', 'Gauge length (A)'),
-    lengthColumn('boreDepthMm', 'Bore depth', 'Bore depth', { width: 104 }),
-    lengthColumn('minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)'),
-    lengthColumn('gripStartMm', 'Grip start', 'Where gripping begins behind the nose face', {
-      width: 100,
-      isUsual: false,
-    }),
+    ...clampingLengths.map(([field, heading, name, look]) =>
+      lengthColumn<HolderResponse>(field, heading, name, look),
+    ),
     lengthColumn('sideLockInsertionMm', 'Side-lock', 'Side-lock insertion', { width: 96, isUsual: false }),
     countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', { isUsual: false, width: 90 }),
     ...itemColumns<HolderResponse>(canSeeCosts),
   ],
   filters: [
-    {
-      kind: 'choice',
-      name: 'boreKind',
-      label: 'Holds by',
-      anyLabel: 'Any',
-      options: [
-        { value: 'collet', label: 'Collet' },
-        { value: 'fixed', label: 'Fixed bore' },
-      ],
-    },
+    boreKindFilter,
     { kind: 'text', name: 'taper', label: 'Taper' },
-    { kind: 'text', name: 'series', label: 'Collet series' },
+    colletSeriesFilter,
     { kind: 'lengthRange', name: 'gaugeLengthMm', label: 'Gauge length' },
-    { kind: 'lengthRange', name: 'boreDiameterMm', label: 'Fixed bore', isMore: true },
+    boreDiameterFilter,
     ...itemFilters,
   ],
   facts: (row, unit) =>
