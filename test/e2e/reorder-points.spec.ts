@@ -2,7 +2,7 @@ import type { Page } from '@playwright/test'
 import { expectAccessible } from '../support/accessibility'
 import { type ApiClient, signedInAs, uniqueCode } from '../support/api'
 import { createCutter, createShelf, type Shelf } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { chooseMore, expect, signIn, test } from '../support/browser'
 
 let crib: ApiClient
 let shelf: Shelf
@@ -194,9 +194,9 @@ test('what it exports changes nothing when it is imported again', async ({ page 
   await signIn(page, 'cribManager')
   await page.goto(`/reorder-points?cribId=${shelf.cribId}`)
   const coming = page.waitForEvent('download')
-  await page.getByRole('link', { name: 'Export' }).click()
+  await chooseMore(page, 'Export as CSV')
   const path = await (await coming).path()
-  await page.getByRole('link', { name: 'Import', exact: true }).click()
+  await chooseMore(page, 'Import a file')
   await expect(page.getByRole('radio', { name: /^Reorder points/ })).toBeChecked()
   await expect(page.getByLabel('Bare numbers are in')).toHaveCount(0)
   await page.locator('input[type="file"]').setInputFiles(path)
@@ -210,7 +210,10 @@ test('a machinist reads the points and changes none', async ({ page }) => {
   await expect(cell(page, 0, 'itemCode')).toHaveText(codes[0] ?? '')
   for (const name of ['Add a reorder point', 'Change the rows selected', 'Take away'])
     await expect(page.getByRole('button', { name })).toHaveCount(0)
-  await expect(page.getByRole('link', { name: 'Import' })).toHaveCount(0)
+  await page.getByRole('button', { name: 'More' }).click()
+  await expect(page.getByRole('menuitem', { name: 'Export as CSV' })).toBeVisible()
+  await expect(page.getByRole('menuitem', { name: /Import|Paste/ })).toHaveCount(0)
+  await page.keyboard.press('Escape')
   await cell(page, 0, 'reorderPoint').click()
   await expect(page).toHaveURL(new RegExp(`/cutters/${itemIds[0]}$`))
 })
@@ -235,4 +238,20 @@ test('the list says that it failed, that it is empty and that nothing was found,
   await page.reload()
   await expect(page.getByText('No item is watched yet, so nothing is ever called low.')).toBeVisible()
   await expectAccessible(page, 'reorder points, none')
+})
+
+test('rows pasted from a spreadsheet go through the checks of an import', async ({ page }) => {
+  await signIn(page, 'cribManager')
+  await page.goto(`/reorder-points?cribId=${shelf.cribId}`)
+  await expect(cell(page, 0, 'itemCode')).toHaveText(codes[0] ?? '')
+  await chooseMore(page, 'Paste rows')
+  const { rows: cribs } = (await crib.get('/api/cribs')).body
+  const crate = cribs.find(({ id }) => id === shelf.cribId)?.code
+  const lines = codes.map((code, at) => [code, crate, at === 0 ? '9' : '2', at === 1 ? '1' : '15'].join('\t'))
+  const dialog = page.getByRole('dialog')
+  await dialog.getByLabel('Rows').fill(['Item\tCrib\tMin\tMax', ...lines].join('\n'))
+  await expect(dialog.getByText('Bare numbers')).toHaveCount(0)
+  await dialog.getByRole('button', { name: 'Check these rows' }).click()
+  await expect(page.getByText('This file would change 2; 1 is rejected.')).toBeVisible()
+  await expect(page.getByText('The reorder point is above the order-up-to level.')).toBeVisible()
 })

@@ -96,6 +96,10 @@ export function reorderingStates({ cribId, code, supplierName, mailId }: Reorder
       'reorder points, adding',
       refused('Add a reorder point', 'Add the reorder point'),
     ),
+    state('cribManager', points, 'reorder points, their menu', async (page) => {
+      await page.getByRole('button', { name: 'More' }).click()
+      await expect(page.getByRole('menuitem', { name: 'Paste rows' })).toBeVisible()
+    }),
     state('cribManager', '/suppliers', 'suppliers', shows(supplierName)),
     state('cribManager', '/suppliers', 'suppliers, adding', refused('Add a supplier', 'Add the supplier')),
     state('cribManager', '/suppliers', 'suppliers, failed', withoutServer(/\/api\/suppliers/)),

@@ -1,13 +1,12 @@
 'use client'
 
-import { Download, Plus, Upload } from 'lucide-react'
 import dynamic from 'next/dynamic'
 import { useMemo, useRef, useState } from 'react'
-import { useListCounts } from '@/hooks/use-list-counts'
-import { reorderPointsApiPath } from '@/hooks/use-reorder-points'
+import { useReorderPointCounts } from '@/hooks/use-reorder-point-counts'
 import { useSuppliers } from '@/hooks/use-suppliers'
 import type { ReorderPointRow } from '@/schemas/reordering'
 import type { SupplierResponse } from '@/schemas/supplier'
+import { AddButton } from '../catalogue/add-button'
 import { type CatalogueView, queryParams } from '../catalogue/catalogue-view'
 import { FilterDrawer } from '../catalogue/filter-drawer'
 import { SearchBox } from '../catalogue/search-box'
@@ -15,7 +14,7 @@ import { SortSelect } from '../catalogue/sort-select'
 import { useCatalogueView } from '../catalogue/use-catalogue-view'
 import type { PartsListHandle } from '../grid/parts-list-grid'
 import { useCan } from '../layout/shop-context'
-import { Button, ButtonLink, buttonClass } from '../ui/button'
+import { Button } from '../ui/button'
 import { StateSentence } from '../ui/state-sentence'
 import { useMediaQuery } from '../ui/use-media-query'
 import { ChangeSelectedDialog } from './change-selected-dialog'
@@ -26,6 +25,7 @@ import { ReorderPointDialog } from './reorder-point-dialog'
 import { editedFields } from './reorder-point-fields'
 import { isListNarrowed, ReorderPointFilters, reorderPointFilterNames } from './reorder-point-filters'
 import { ReorderPointList, useReorderPointList } from './reorder-point-list'
+import { ReorderPointMenu } from './reorder-point-menu'
 import { ReorderPointsState } from './reorder-points-state'
 import { useReorderPointEditing } from './use-reorder-point-editing'
 
@@ -87,7 +87,8 @@ function WidePage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           onSearch={(q) => onViewChange({ q })}
           onLeaveDown={() => grid.current?.focusFirstRow()}
         />
-        <Actions view={view} onAdd={() => setOpen('add')} />
+        <ReorderPointMenu view={view} />
+        <AddButton one="reorder point" onAdd={() => setOpen('add')} />
       </div>
       <div className="flex flex-wrap items-start gap-x-4 gap-y-2 px-4 pb-3 lg:px-6">
         <ReorderPointFilters
@@ -150,8 +151,11 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
   return (
     <>
       <div className="flex flex-col gap-2 px-4 pt-3 pb-2">
-        <h1 className="text-2xl">Reorder points</h1>
-        <Actions view={view} onAdd={() => setEdited('new')} />
+        <div className="flex items-center gap-2">
+          <h1 className="mr-auto text-2xl">Reorder points</h1>
+          <AddButton one="reorder point" onAdd={() => setEdited('new')} />
+          <ReorderPointMenu view={view} isMarkAlone />
+        </div>
         <div className="flex items-center gap-2">
           <SearchBox value={view.q} label="Search reorder points" onSearch={(q) => onViewChange({ q })} />
           <FilterDrawer
@@ -209,46 +213,10 @@ const sortColumns = [
 ]
 
 function useCounts(view: CatalogueView, isWanted: boolean) {
-  return useListCounts(reorderPointsApiPath, queryParams({ ...view, sort: '' }).toString(), isWanted)
+  return useReorderPointCounts(queryParams({ ...view, sort: '' }).toString(), isWanted)
 }
 
 function totalText(total: number, view: CatalogueView): string {
   const found = isListNarrowed(view) ? 'found' : total === 1 ? 'reorder point' : 'reorder points'
   return `${total.toLocaleString('en')} ${found}`
-}
-
-function Actions({ view, onAdd }: { view: CatalogueView; onAdd: () => void }) {
-  const canKeep = useCan('keepCrib')
-  return (
-    <div className="flex flex-wrap items-center gap-2">
-      <ButtonLink href="/alerts" size="compact">
-        Low stock
-      </ButtonLink>
-      <ButtonLink href="/suppliers" size="compact">
-        Suppliers
-      </ButtonLink>
-      <a
-        href={`${reorderPointsApiPath}/export?${queryParams(view)}`}
-        download
-        className={buttonClass({ size: 'compact' })}
-        title="The rows found, as they are sorted, as a CSV file that can be imported again"
-      >
-        <Download aria-hidden="true" className="size-4.5" />
-        Export
-      </a>
-      {canKeep ? (
-        <>
-          <ButtonLink href="/imports/new?kind=reorderPoints" size="compact" prefetch={false}>
-            <Upload aria-hidden="true" className="size-4.5" />
-            Import
-          </ButtonLink>
-          <Button variant="primary" size="compact" onClick={onAdd}>
-            <Plus aria-hidden="true" className="size-4.5" />
-            Add
-            <span className="sr-only"> a reorder point</span>
-          </Button>
-        </>
-      ) : null}
-    </div>
-  )
 }
