@@ -69,6 +69,27 @@ export const geometryTables: Record<CatalogueKind, GeometryTable> = {
 
 type Values = Record<string, unknown>
 
+interface FieldColumn {
+  field: string
+  column: string
+  isEnum: boolean
+}
+
+const known = new WeakMap<GeometryTable, readonly FieldColumn[]>()
+
+/** The plain fields with their columns, worked out once: lists and imports ask for every row. */
+function fieldColumns(table: GeometryTable): readonly FieldColumn[] {
+  const columns =
+    known.get(table) ??
+    table.fields.map((field) => ({
+      field,
+      column: enumToDb(field),
+      isEnum: table.enums.includes(field),
+    }))
+  known.set(table, columns)
+  return columns
+}
+
 /** The columns of what was given; what is absent has none and so is left alone. */
 export function geometryToColumns(table: GeometryTable, given: Values): Values {
   const columns: Values = {}
@@ -93,9 +114,9 @@ function boreToColumns(bore: unknown): Values {
 
 export function geometryFromRow(table: GeometryTable, row: Values): Values {
   const geometry: Values = {}
-  for (const field of table.fields) {
-    const value = row[enumToDb(field)]
-    geometry[field] = table.enums.includes(field) && typeof value === 'string' ? enumFromDb(value) : value
+  for (const { field, column, isEnum } of fieldColumns(table)) {
+    const value = row[column]
+    geometry[field] = isEnum && typeof value === 'string' ? enumFromDb(value) : value
   }
   if (table.hasBore) {
     geometry.bore =
