@@ -186,6 +186,21 @@ describe('cutters', () => {
     ])
   })
 
+  it('it names the item that took in the one whose code a file still has', async () => {
+    const [kept] = await site.db('items').insert({ kind: 'cutter', code: 'CM-1' }).returning('id')
+    const [old] = await site
+      .db('items')
+      .insert({ kind: 'cutter', code: 'CM-2', archived_at: site.db.fn.now() })
+      .returning('id')
+    const { id: mergedBy } = await site.db('users').first('id')
+    await site.db('item_merges').insert({ item_id: old.id, kept_item_id: kept.id, merged_by: mergedBy })
+    const content = 'code,form,dc,apmx,oal,dmm\nCM-2,square,6,12,57,6\n'
+    const checked = await site.checked({ kind: 'cutters', content })
+    expect(checked.rejected.map(({ message }) => message)).toEqual([
+      'CM-2 was merged into CM-1. Use that code.',
+    ])
+  })
+
   it('it stops at rejects unless told to skip them, and leaves nothing half done', async () => {
     const file = cutterFile(
       'CI-1,Square,1/4,,3/4,2.5,1/4,3,Carbide,,,',

@@ -135,7 +135,7 @@ function takenOf(
   return codes.filter((code) => held.has(code.toLowerCase()))
 }
 
-const shownAtMost = 240
+const shownAtMost = 120
 
 function PatternPreview({ codes, taken }: { codes: string[]; taken: string[] }) {
   if (codes.length === 0) {
@@ -153,7 +153,7 @@ function PatternPreview({ codes, taken }: { codes: string[]; taken: string[] }) 
           change the pattern.
         </p>
       ) : null}
-      <ul className="border-hairline mt-1 flex max-h-48 flex-wrap gap-x-3 overflow-y-auto border p-2 text-sm">
+      <ul className="border-hairline mt-1 flex flex-wrap gap-x-3 border p-2 text-sm">
         {codes.slice(0, shownAtMost).map((code) => (
           <li key={code} className={isTaken.has(code) ? 'text-collision font-semibold line-through' : ''}>
             {code}

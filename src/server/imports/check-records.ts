@@ -49,6 +49,12 @@ export function keyOf(flat: FlatRecord): ItemKey {
   return { code: textOf(flat.code), maker: textOf(flat.maker), partNumber: textOf(flat.part_number) }
 }
 
+function archivedSentence(code: string | null, mergedIntoCode: string | null): string {
+  return mergedIntoCode
+    ? `${code} was merged into ${mergedIntoCode}. Use that code.`
+    : `${code} is archived. Restore it first, or use another code.`
+}
+
 /** The item a row means, or why that cannot be said. */
 export function matchedItem(
   key: ItemKey,
@@ -60,7 +66,7 @@ export function matchedItem(
   }
   if (matches.byCode) {
     return matches.byCode.isArchived
-      ? { field: 'code', message: `${key.code} is archived. Restore it first, or use another code.` }
+      ? { field: 'code', message: archivedSentence(key.code, matches.byCode.mergedIntoCode) }
       : { item: matches.byCode }
   }
   if (matches.byNumber.length > 1) {

@@ -14,6 +14,8 @@ export interface MatchedItem {
   kind: string
   version: number
   isArchived: boolean
+  /** The code of the item that took it in, where it was merged. */
+  mergedIntoCode: string | null
   isTrackedByPiece: boolean
   hasMovements: boolean
   /** The item by the columns of its tables, `segments` with it; empty for an item of another kind. */
@@ -51,7 +53,10 @@ export async function findImportMatches(
           where items.maker is not null and items.part_number is not null and items.archived_at is null
       )
       select found.place, found.is_by_code, items.id, items.kind, items.version, items.is_tracked_by_piece,
-        items.archived_at is not null as is_archived, ${kind ? geometrySql(kind) : movementsSql}
+        items.archived_at is not null as is_archived,
+        case when items.archived_at is not null then (
+          select kept.code from item_merges join items as kept on kept.id = item_merges.kept_item_id
+          where item_merges.item_id = items.id) end as merged_into_code, ${kind ? geometrySql(kind) : movementsSql}
       from found join items on items.id = found.id ${kind ? geometryJoin(kind) : ''}`,
     [texts(keys, 'code'), texts(keys, 'maker'), texts(keys, 'partNumber')],
   )
@@ -95,6 +100,7 @@ interface MatchRow {
   kind: string
   version: number
   is_archived: boolean
+  merged_into_code: string | null
   is_tracked_by_piece: boolean
   has_movements: boolean
   columns: Record<string, unknown> | null
@@ -106,6 +112,7 @@ function matchedItem(row: MatchRow): MatchedItem {
     kind: row.kind,
     version: row.version,
     isArchived: row.is_archived,
+    mergedIntoCode: row.merged_into_code,
     isTrackedByPiece: row.is_tracked_by_piece,
     hasMovements: row.has_movements,
     columns: row.columns ?? {},
