@@ -48,3 +48,30 @@ test('a block of 5,000 columns is refused in a sentence, and stays to be mended'
   expect(sent.status()).toBe(422)
   expect((await sent.json()).detail).toBe('This file has more than 200 columns.')
 })
+
+test('ten thousand rows are taken at once and shown by their first, quotes and all', async ({ page }) => {
+  const lines = Array.from({ length: 10_000 }, (_, row) => `X-${row}\tSquare\t6,35\t"1/2"" shank"`)
+  await paste(page, `Tool #\tType\tDia\tNotes\n${lines.join('\n')}`)
+  const dialog = page.getByRole('dialog')
+  await expect(dialog.getByText('10,000 rows, 4 columns.')).toBeVisible()
+  await expect(dialog.getByRole('row').nth(1).getByRole('cell')).toHaveText([
+    'X-0',
+    'Square',
+    '6,35',
+    '1/2" shank',
+  ])
+  await dialog.getByRole('button', { name: 'Paste other rows' }).click()
+  await expect(dialog.getByRole('textbox', { name: 'Rows' })).toHaveValue('')
+})
+
+test('a line of headings alone is refused at the rows', async ({ page }) => {
+  await chooseMore(page, 'Paste rows')
+  const dialog = page.getByRole('dialog')
+  const rows = dialog.getByRole('textbox', { name: 'Rows' })
+  await dialog.getByRole('button', { name: 'Check these rows' }).click()
+  await expect(rows).toHaveAccessibleDescription(/nothing here yet/)
+  await rows.fill('Code\tDia\n')
+  await expect(rows).toHaveAccessibleDescription(/only a line of headings/)
+  await rows.fill('Code\tDia\nA\t6\tmore\n')
+  await expect(dialog.getByText('1 row has more cells than there are headings')).toBeVisible()
+})

@@ -1,7 +1,7 @@
 'use client'
 
 import { useRouter } from 'next/navigation'
-import { type FormEvent, useState } from 'react'
+import { type ClipboardEvent, type FormEvent, useMemo, useState } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
@@ -12,6 +12,7 @@ import { createImport } from '@/hooks/use-import'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { hasLengths, type ImportKind } from '@/schemas/import-fields'
 import { pastedBlock, pastedFile } from './pasted-block'
+import { PastedSample } from './pasted-sample'
 
 export interface PasteRowsProps {
   kind: ImportKind
@@ -37,6 +38,9 @@ export default function PasteRows({ kind, many, firstText, onClose }: PasteRowsP
   )
 }
 
+/** More than this is shown by its first rows alone: nobody mends it by hand, and a field of it is slow. */
+const mostTyped = 100_000
+
 function PasteForm({
   kind,
   text,
@@ -51,8 +55,9 @@ function PasteForm({
   const [hasHeadings, setHasHeadings] = useState(true)
   const [isTried, setIsTried] = useState(false)
   const { fault, isBusy, attempt } = useAttempt()
-  const block = pastedBlock(text, hasHeadings)
+  const block = useMemo(() => pastedBlock(text, hasHeadings), [text, hasHeadings])
   const shownFault = isTried || block.columns > 0 ? block.fault : null
+  const isLong = text.length > mostTyped
 
   function handleSubmit(event: FormEvent) {
     event.preventDefault()
@@ -64,42 +69,58 @@ function PasteForm({
     })
   }
 
+  function handlePaste(event: ClipboardEvent) {
+    const pasted = event.clipboardData.getData('text/plain')
+    if (pasted.length <= mostTyped) return
+    event.preventDefault()
+    onChange(pasted)
+  }
+
   return (
     <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
-      <TextAreaField
-        label="Rows"
-        hint={
-          hasLengths(kind) ? `Bare numbers are taken as ${unit}, unless a heading says otherwise.` : undefined
-        }
-        rows={8}
-        wrap="off"
-        spellCheck={false}
-        value={text}
-        onChange={(event) => onChange(event.target.value)}
-        error={shownFault ?? undefined}
-      />
-      <label className="flex min-h-11 items-center gap-2.5">
-        <input
-          type="checkbox"
-          className="accent-accent size-5"
-          checked={hasHeadings}
-          onChange={(event) => setHasHeadings(event.target.checked)}
+      {isLong ? null : (
+        <TextAreaField
+          label="Rows"
+          hint={`Copy the rows in the spreadsheet and paste them here.${hasLengths(kind) ? ` Bare numbers are taken as ${unit}, unless a heading says otherwise.` : ''}`}
+          rows={5}
+          wrap="off"
+          spellCheck={false}
+          value={text}
+          onChange={(event) => onChange(event.target.value)}
+          onPaste={handlePaste}
+          error={shownFault ?? undefined}
         />
-        The first row holds the headings
-      </label>
-      <p className="text-ink-soft" role="status">
-        {block.columns > 0
-          ? `${block.rows.toLocaleString('en')} ${block.rows === 1 ? 'row' : 'rows'}, ${block.columns.toLocaleString('en')} ${block.columns === 1 ? 'column' : 'columns'}.`
-          : ''}
-      </p>
+      )}
+      {block.columns > 0 ? (
+        <>
+          <label className="flex min-h-11 items-center gap-2.5">
+            <input
+              type="checkbox"
+              className="accent-accent size-5"
+              checked={hasHeadings}
+              onChange={(event) => setHasHeadings(event.target.checked)}
+            />
+            The first row holds the headings
+          </label>
+          <PastedSample {...{ block, hasHeadings }} />
+        </>
+      ) : null}
+      {isLong && shownFault ? (
+        <Notice kind="collision" isAnnounced>
+          {shownFault}
+        </Notice>
+      ) : null}
       {fault ? (
         <Notice kind="collision" isAnnounced>
           {fieldFaults(fault).file ?? faultSentence(fault)}
         </Notice>
       ) : null}
-      <Button type="submit" variant="primary" disabled={isBusy}>
-        {isBusy ? 'Sending …' : 'Check these rows'}
-      </Button>
+      <div className="flex flex-wrap gap-3">
+        <Button type="submit" variant="primary" disabled={isBusy}>
+          {isBusy ? 'Sending …' : 'Check these rows'}
+        </Button>
+        {isLong ? <Button onClick={() => onChange('')}>Paste other rows</Button> : null}
+      </div>
     </form>
   )
 }

@@ -38,7 +38,7 @@ export function PrintedList<Row extends CatalogueRow>(props: PrintedListProps<Ro
   return (
     <section
       className="hidden print:block"
-      style={shown.length > uprightColumns ? { page: 'sideways' } : {}}
+      data-printed={shown.length > uprightColumns ? 'sideways' : 'upright'}
       aria-label={`${definition.title}, printed`}
     >
       <h1 className="text-xl">{definition.title}</h1>
