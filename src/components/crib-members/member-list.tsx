@@ -64,7 +64,7 @@ export function MemberList({ crib, onChoose }: MemberListProps) {
           >
             <input
               type="checkbox"
-              className="accent-accent size-5 shrink-0"
+              className="accent-accent size-6 shrink-0"
               checked={person.isMember}
               onChange={(event) => void handleChange(person, event.target.checked)}
             />
