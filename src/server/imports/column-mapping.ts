@@ -8,8 +8,8 @@ import {
 } from '@/schemas/import-mapping'
 import type { FieldProblem } from '@/schemas/problem'
 import type { CsvRecord } from './csv-reader'
-import { fieldNamed } from './field-names'
-import { headingName } from './heading-name'
+import { fieldNamed, fieldOfSymbol } from './field-names'
+import { type HeadingName, headingName } from './heading-name'
 
 export interface MappingSources {
   kind: ImportKind
@@ -92,7 +92,7 @@ function withTarget(heading: string, target: ColumnTarget, origin: 'set' | 'kept
 function guess(heading: string, { kind, currency }: MappingSources): ImportColumn {
   const name = headingName(heading)
   const symbol = name.inBrackets?.toLowerCase() ?? ''
-  const field = fieldNamed(kind, name.name) ?? fieldNamed(kind, symbol) ?? null
+  const field = fieldNamed(kind, name.name) ?? fieldNamed(kind, symbol) ?? fieldBySymbol(kind, name) ?? null
   const column: ImportColumn = {
     heading,
     samples: [],
@@ -111,6 +111,18 @@ function guess(heading: string, { kind, currency }: MappingSources): ImportColum
   }
   const unit = type && hasLengthUnit(type) ? name.unit : null
   return { ...column, field, unit, origin: 'known' }
+}
+
+/** What a symbol may stand beside without saying anything else. */
+const generalWords = new Set(['', 'diameter', 'length', 'radius', 'angle'])
+
+/** `Ø DC`, `Shank Ø DMM`, `OAL Length`: a symbol, as long as the words beside it say nothing else. */
+function fieldBySymbol(kind: ImportKind, { capitals }: HeadingName): string | undefined {
+  const fields = capitals.flatMap(({ word, rest }) => {
+    const field = fieldOfSymbol(kind, word)
+    return field && (generalWords.has(rest) || fieldNamed(kind, rest) === field) ? [field] : []
+  })
+  return new Set(fields).size === 1 ? fields[0] : undefined
 }
 
 /** One column a field: what was set wins over what was kept, and that over a guess; of equals the first. */

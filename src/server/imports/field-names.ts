@@ -23,7 +23,8 @@ const otherNames: Readonly<Record<string, string>> = {
     'tool form, end style, kind',
   cuttingDiameterMm:
     'cutting diameter, diameter, cutter diameter, mill diameter, drill diameter, tool ' +
-    'diameter, cut diameter, d, dc, size, flute diameter, drill size',
+    'diameter, cut diameter, d, d1, dc, size, flute diameter, drill size, cutting edge diameter, diameter cut, ' +
+    'diameter d, diameter d1',
   cornerRadiusMm:
     'corner radius, corner r, radius, cr, nose radius, edge radius, re, tip radius, end ' +
     'radius, bull radius',
@@ -45,7 +46,10 @@ const otherNames: Readonly<Record<string, string>> = {
     'reach length, reach, usable length, length below shank, lbs, effective reach, neck ' +
     'reach, length to shank, overall reach, relieved length',
   neckTransitionAngleDeg: 'neck transition angle, transition angle, transition, shank transition angle',
-  shankDiameterMm: 'shank diameter, shank, shank size, shaft diameter, shank d',
+  // d1 and d2 of a cutter are its cutting and its shank diameter in makers' tables (common practice); l1 and l2 are not
+  // here, since one table's overall length is another's length of cut.
+  shankDiameterMm:
+    'shank diameter, shank, shank size, shaft diameter, shank d, d2, diameter shank, shank diameter d2, diameter d2',
   overallLengthMm: 'overall length, oal, total length, length overall, full length',
   fluteCount:
     'flute count, flutes, number of flutes, flute number, teeth, z, number of teeth, fl, ' +
@@ -140,6 +144,11 @@ function namesOf(kind: ImportKind): Map<string, string> {
   }
   for (const [name, field] of Object.entries(ofKind[kind] ?? {})) names.set(plainHeading(name), field)
   return names
+}
+
+/** The field that has an ISO 13399 symbol, as it is written: in capitals. */
+export function fieldOfSymbol(kind: ImportKind, symbol: string): string | undefined {
+  return importFields[kind].find((field) => symbolsOf(field).includes(symbol.toLowerCase()))?.field
 }
 
 function symbolsOf(field: ImportField): string[] {

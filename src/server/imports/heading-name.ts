@@ -9,6 +9,8 @@ export interface HeadingName {
   currency: string | null
   /** What stands in brackets and is no unit: a symbol perhaps. */
   inBrackets: string | null
+  /** Words all in capitals outside the brackets, each with what the heading says without it: `DC` of `Ø DC` beside `diameter`. */
+  capitals: { word: string; rest: string }[]
 }
 
 const unitWords: Readonly<Record<string, LengthUnit>> = {
@@ -102,7 +104,7 @@ const brackets = /[([{]\s*([^)\]}]*?)\s*[)\]}]/g
  * `cuttingDiameterMm` is `cuttingdiameter` in mm.
  */
 export function headingName(heading: string): HeadingName {
-  const found: HeadingName = { name: '', unit: null, currency: null, inBrackets: null }
+  const found: HeadingName = { name: '', unit: null, currency: null, inBrackets: null, capitals: [] }
   const outside = heading.replace(brackets, (_, inner: string) => {
     readBracket(inner, found)
     return ' '
@@ -110,6 +112,12 @@ export function headingName(heading: string): HeadingName {
   const tokens = tokensOf(outside)
   readTail(tokens, found)
   found.name = plainName(tokens)
+  found.capitals = [...new Set(outside.match(/(?<![\p{L}\p{N}])[A-Z]{2,}(?![\p{L}\p{N}])/gu) ?? [])].map(
+    (word) => ({
+      word,
+      rest: plainName(tokens.filter((token) => token !== word.toLowerCase())),
+    }),
+  )
   return found
 }
 
@@ -135,7 +143,7 @@ function tokensOf(text: string): string[] {
   return text
     .replace(/([a-z])([A-Z])/g, '$1 $2')
     .toLowerCase()
-    .replace(/[øØ⌀∅]/g, ' ø ')
+    .replace(/[øØ⌀∅φ]/g, ' ø ')
     .replace(/#/g, ' number ')
     .replace(/\bp\/n\b|\bp-n\b/g, 'pn')
     .replace(/["″]/g, ' " ')
