@@ -49,10 +49,9 @@ function noteFirstRow(): void {
 
 async function firstRowMs(page: Page, url: string): Promise<number> {
   await page.goto(url)
-  const noted = await page.waitForFunction(
-    () => (window as typeof window & { firstRowMs?: number }).firstRowMs,
-  )
-  const time = await noted.jsonValue()
+  await page.locator('.ag-row .ag-cell[col-id="code"]', { hasText: /\w/ }).first().waitFor()
   await page.waitForLoadState('networkidle')
-  return Number(time)
+  const time = await page.evaluate(() => (window as typeof window & { firstRowMs?: number }).firstRowMs)
+  if (time === undefined) throw new Error(`${url} showed a row and noted no time.`)
+  return time
 }
