@@ -14,7 +14,7 @@ import type { CatalogueShapeProps } from './catalogue-shape'
 import type { ItemFormDialogProps } from './item-form-dialog'
 import { NarrowCatalogue } from './narrow-catalogue'
 import { useCatalogueView } from './use-catalogue-view'
-import { WideCatalogue } from './wide-catalogue'
+import { WideCatalogue, wideScreen } from './wide-catalogue'
 
 const ItemFormDialog = dynamic(() => import('./item-form-dialog').then((module) => module.ItemFormDialog), {
   ssr: false,
@@ -27,7 +27,7 @@ export function CataloguePage<Row extends CatalogueRow>({
   definition: CatalogueDefinition<Row>
 }) {
   const router = useRouter()
-  const isWide = useMediaQuery('(min-width: 48rem)')
+  const isWide = useMediaQuery(wideScreen)
   const canSeeCosts = useCan('seeCosts')
   const filterNames = useMemo(() => filterParamNames(definition.filters), [definition.filters])
   const columns = useMemo(() => definition.columns(canSeeCosts), [definition, canSeeCosts])

@@ -19,8 +19,15 @@ import { MakerList } from './maker-list'
 import { SearchBox } from './search-box'
 import { useGridEditing } from './use-grid-editing'
 
+/** Wide enough for a grid. */
+export const wideScreen = '(min-width: 48rem)'
+
+const loadGrid = () => import('./catalogue-grid')
+// Asked for while the page is still waking; should it not come, the page asks again and says so.
+if (typeof window !== 'undefined' && window.matchMedia(wideScreen).matches) loadGrid().catch(() => undefined)
+
 /** The grid's code comes only where a grid is shown: not on a phone, not on any other page. */
-const CatalogueGrid = dynamic(() => import('./catalogue-grid'), {
+const CatalogueGrid = dynamic(loadGrid, {
   ssr: false,
   loading: () => <StateSentence sentence="Loading the list …" />,
 }) as <Row extends CatalogueRow>(props: CatalogueGridProps<Row>) => ReactNode

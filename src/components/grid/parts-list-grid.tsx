@@ -146,7 +146,7 @@ export function PartsListGrid<Row extends { id: string }>(props: PartsListGridPr
         maxBlocksInCache={20}
         cacheOverflowSize={2}
         infiniteInitialRowCount={1}
-        blockLoadDebounceMillis={60}
+        blockLoadDebounceMillis={25}
         datasource={datasource}
         columnDefs={columnDefs}
         getRowId={rowId}
