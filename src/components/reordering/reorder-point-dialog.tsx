@@ -27,6 +27,8 @@ import {
 export interface ReorderPointDialogProps {
   /** Null adds one. */
   row: ReorderPointRow | null
+  /** The crib looked at, which a new one most likely is of. */
+  cribId?: string | undefined
   suppliers: readonly SupplierResponse[]
   onClose: () => void
   onSaved: () => void
@@ -36,7 +38,8 @@ export interface ReorderPointDialogProps {
 const emptyTexts: TypedTexts = { packSize: '1', minimumOrder: '1' }
 
 /** A reorder point as a form: a new one, or one that is there on a phone. What is refused stays as it was typed. */
-export function ReorderPointDialog({ row, suppliers, onClose, onSaved, onRemove }: ReorderPointDialogProps) {
+export function ReorderPointDialog(props: ReorderPointDialogProps) {
+  const { row, cribId, suppliers, onClose, onSaved, onRemove } = props
   const [base, setBase] = useState(row)
   const [texts, setTexts] = useState<TypedTexts>(row ? textsOf(row) : emptyTexts)
   const [unread, setUnread] = useState<TypedTexts>({})
@@ -85,7 +88,7 @@ export function ReorderPointDialog({ row, suppliers, onClose, onSaved, onRemove 
             {faultSentence(fault)}
           </Notice>
         ) : null}
-        {row ? null : <ItemAndCrib codeFault={codeFault} />}
+        {row ? null : <ItemAndCrib codeFault={codeFault} cribId={cribId} />}
         <div className="grid gap-4 sm:grid-cols-2">
           {editedFields.map((field) => (
             <PointField
@@ -147,7 +150,7 @@ function StaleNotice({ now, onTakeTheirs }: { now: ReorderPointRow; onTakeTheirs
   )
 }
 
-function ItemAndCrib({ codeFault }: { codeFault: string | undefined }) {
+function ItemAndCrib({ codeFault, cribId }: { codeFault: string | undefined; cribId: string | undefined }) {
   const { data: cribs } = useCribs()
   return (
     <div className="grid gap-4 sm:grid-cols-2">
@@ -156,6 +159,7 @@ function ItemAndCrib({ codeFault }: { codeFault: string | undefined }) {
         key={cribs ? 'cribs' : 'none'}
         label="Crib"
         name="cribId"
+        defaultValue={cribId}
         options={(cribs?.rows ?? []).map((crib) => ({
           value: crib.id,
           label: `${crib.code} · ${crib.name}`,

@@ -131,7 +131,13 @@ function WidePage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
         <RemoveSelectedDialog rows={editing.selected} onClose={close} onRemoved={reload} />
       ) : null}
       {open === 'add' ? (
-        <ReorderPointDialog row={null} suppliers={suppliers} onClose={close} onSaved={reload} />
+        <ReorderPointDialog
+          row={null}
+          cribId={view.filters.cribId}
+          suppliers={suppliers}
+          onClose={close}
+          onSaved={reload}
+        />
       ) : null}
     </>
   )
@@ -190,6 +196,7 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
       {edited ? (
         <ReorderPointDialog
           row={edited === 'new' ? null : edited}
+          cribId={view.filters.cribId}
           suppliers={suppliers}
           onClose={() => setEdited(null)}
           onSaved={reload}
