@@ -184,7 +184,7 @@ export function useGridEditing<Row extends CatalogueRow>(
         before: fieldValue(before[index] ?? row, field.path),
         after: fieldValue(row, field.path),
       }))
-      const name = `${field.label} of ${rows.length} ${definition.many}`
+      const name = `${field.label} of ${rows.length} ${rows.length === 1 ? definition.one : definition.many}`
       setSteps((past) => withStep(past, { field: field.path, name, rows }))
     } catch (error) {
       grid.current?.refresh()

@@ -1,0 +1,3 @@
+import { listStates, testListStates } from '../support/list-states'
+
+testListStates(listStates)

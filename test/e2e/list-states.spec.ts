@@ -1,0 +1,3 @@
+import { gridStates, listStates, testListStates } from '../support/list-states'
+
+testListStates([...listStates, ...gridStates])
