@@ -142,6 +142,8 @@ function PatternPreview({ codes, taken }: { codes: string[]; taken: string[] }) 
     return <p className="text-ink-soft">Type the first and the last code; what would be made shows here.</p>
   }
   const isTaken = new Set(taken)
+  // Those in the way are shown whatever is left out.
+  const shown = [...taken, ...codes.filter((code) => !isTaken.has(code))].slice(0, shownAtMost)
   return (
     <div aria-live="polite">
       <p className="font-semibold">
@@ -154,7 +156,7 @@ function PatternPreview({ codes, taken }: { codes: string[]; taken: string[] }) 
         </p>
       ) : null}
       <ul className="border-hairline mt-1 flex flex-wrap gap-x-3 border p-2 text-sm">
-        {codes.slice(0, shownAtMost).map((code) => (
+        {shown.map((code) => (
           <li key={code} className={isTaken.has(code) ? 'text-collision font-semibold line-through' : ''}>
             {code}
           </li>

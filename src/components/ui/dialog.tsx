@@ -2,7 +2,7 @@
 
 import { X } from 'lucide-react'
 import { Dialog as Primitive } from 'radix-ui'
-import type { ReactNode } from 'react'
+import { type ReactNode, useRef } from 'react'
 import { classNames } from './class-names'
 
 export interface DialogProps {
@@ -22,6 +22,22 @@ const shapes = {
   side: 'top-0 right-0 h-dvh w-[min(44rem,100vw)]',
 } as const
 
+/** What had the focus before: most dialogs are opened by state, so the primitive knows no trigger to go back to. */
+function useOpener() {
+  const opener = useRef<Element | null>(null)
+  return {
+    onOpenAutoFocus: () => {
+      opener.current = document.activeElement
+    },
+    onCloseAutoFocus: (event: Event) => {
+      event.preventDefault()
+      // What opened it may be gone by then, as a row that was merged or archived is.
+      const target = opener.current?.isConnected ? opener.current : document.getElementById('content')
+      if (target instanceof HTMLElement) target.focus()
+    },
+  }
+}
+
 export function Dialog({
   isOpen,
   onOpenChange,
@@ -30,6 +46,7 @@ export function Dialog({
   shape = 'centre',
   children,
 }: DialogProps) {
+  const opener = useOpener()
   return (
     <Primitive.Root open={isOpen} onOpenChange={onOpenChange}>
       <Primitive.Portal>
@@ -39,6 +56,7 @@ export function Dialog({
             'bg-sheet text-ink border-ink fixed z-50 flex flex-col overflow-y-auto border shadow-xl',
             shapes[shape],
           )}
+          {...opener}
           {...(description ? {} : { 'aria-describedby': undefined })}
         >
           <header className="bg-sheet border-hairline sticky top-0 z-10 flex items-start justify-between gap-4 border-b px-5 py-3">
