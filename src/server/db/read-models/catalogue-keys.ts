@@ -162,22 +162,28 @@ function whereFields(matching: Knex.QueryBuilder, table: GeometryTable, query: C
   for (const filter of [...geometryFilters(table), 'unitCost', 'unitCost.min', 'unitCost.max']) {
     const [field = '', bound] = filter.split('.')
     const column = field === 'unitCost' ? 'items.unit_cost_minor' : geometryColumn(table, field)
-    whereField(matching, column, bound, query[filter])
+    const value = query[filter]
+    if (Array.isArray(value)) whereOneOf(matching, column, isEnumField(table, field), value.map(String))
+    else if (typeof value === 'number') whereNumber(matching, column, bound, value)
   }
 }
 
-function whereField(
+function isEnumField(table: GeometryTable, field: string): boolean {
+  return field === 'boreKind' || table.enums.includes(field)
+}
+
+/** Enums are asked for as they stand: of a column itself the planner knows how many rows a value has, of `lower` nothing. */
+function whereOneOf(matching: Knex.QueryBuilder, column: string, isEnum: boolean, values: string[]): void {
+  if (isEnum) matching.whereRaw(`${column} = any(?)`, [values.map(enumToDb)])
+  else matching.whereRaw(`lower(${column}) = any(?)`, [values.map((value) => value.toLowerCase())])
+}
+
+function whereNumber(
   matching: Knex.QueryBuilder,
   column: string,
   bound: string | undefined,
-  value: unknown,
+  value: number,
 ): void {
-  if (Array.isArray(value)) {
-    const wanted = value.map((one) => enumToDb(String(one)).toLowerCase())
-    const plain = value.map((one) => String(one).toLowerCase())
-    matching.whereRaw(`lower(${column}) = any(?)`, [[...new Set([...wanted, ...plain])]])
-  }
-  if (typeof value !== 'number') return
   if (bound !== 'max') matching.whereRaw(`${column} >= ?::double precision`, [value - filterToleranceMm])
   if (bound !== 'min') matching.whereRaw(`${column} <= ?::double precision`, [value + filterToleranceMm])
 }
