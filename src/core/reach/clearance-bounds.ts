@@ -6,7 +6,30 @@ import type { Obstacle } from './types'
 const none = Number.NEGATIVE_INFINITY
 
 /** A line of the widened, lowered outline: `a` from the nose face up. */
-type LineBound = (a0: number, r0: number, a1: number, r1: number) => number
+export type LineBound = (a0: number, r0: number, a1: number, r1: number) => number
+
+/**
+ * What one line of the outline behind the nose asks of the stick-out, wall or hole, obstacles and floor together.
+ *
+ * Assumes the line widened and lowered by the clearance already. Of a whole outline the largest counts.
+ *
+ * Units      Millimetres.
+ * Result     A function of the line; -Infinity where any stick-out does.
+ *
+ * @example
+ * lineBoundAt(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter))(-0.5, 0, -0.5, 14.5) // => 25.5
+ */
+export function lineBoundAt(at: Placement): LineBound {
+  if (at.kind === 'hole') return (a0, r0, a1, r1) => holeBoundMm(at, a0, r0, a1, r1)
+  const edgeRadiusMm = topEdgeRadiusMm(at)
+  return (a0, r0, a1, r1) => {
+    let boundMm = wallBoundMm(at, edgeRadiusMm, a0, r0, a1, r1)
+    if (at.tiltDeg > 0) boundMm = Math.max(boundMm, floorLineBoundMm(at, a0, r0, a1, r1))
+    for (const obstacle of at.obstacles)
+      boundMm = Math.max(boundMm, obstacleBoundMm(at, obstacle, a0, r0, a1, r1))
+    return boundMm
+  }
+}
 
 /**
  * The stick-out that keeps every part behind the nose off the wall, or out of the hole, at the feature's depth.
@@ -55,9 +78,16 @@ export function obstaclesBoundMm(at: WallPlacement, holderParts: CheckPart[], cl
  */
 export function floorBoundMm(at: WallPlacement, holderParts: CheckPart[], clearanceMm: number): number {
   if (at.tiltDeg === 0) return none
-  const ofPoint = (a: number, r: number) =>
-    r === Number.POSITIVE_INFINITY ? none : at.pivotMm + (r * at.sinTilt - at.pivotMm) / at.cosTilt - a
-  return largestMm(holderParts, clearanceMm, (a0, r0, a1, r1) => Math.max(ofPoint(a0, r0), ofPoint(a1, r1)))
+  return largestMm(holderParts, clearanceMm, (a0, r0, a1, r1) => floorLineBoundMm(at, a0, r0, a1, r1))
+}
+
+function floorLineBoundMm(at: WallPlacement, a0: number, r0: number, a1: number, r1: number): number {
+  return Math.max(floorPointBoundMm(at, a0, r0), floorPointBoundMm(at, a1, r1))
+}
+
+function floorPointBoundMm(at: WallPlacement, a: number, r: number): number {
+  if (r === Number.POSITIVE_INFINITY) return none
+  return at.pivotMm + (r * at.sinTilt - at.pivotMm) / at.cosTilt - a
 }
 
 function largestMm(holderParts: CheckPart[], clearanceMm: number, ofLine: LineBound): number {

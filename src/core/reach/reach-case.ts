@@ -1,6 +1,7 @@
 import { notNegative, positive } from '@/core/outline/checked-number'
 import { type CutterDimensions, cutterDimensions } from '@/core/outline/cutter-dimensions'
 import { overlapToleranceMm } from '@/core/outline/types'
+import type { CutterGeometry } from '@/core/tooling'
 import { type CheckPart, checkPartsOfDimensions, holderCheckParts } from './check-parts'
 import { type CheckedFeature, checkedFeature } from './checked-feature'
 import { type LeastTouch, leastTouch } from './first-touches'
@@ -65,7 +66,8 @@ export function reachCase(request: ReachRequest): ReachCase {
     clearances,
     settings,
     cutterTouch: leastTouch(at, cutterParts, 0, clearances),
-    usableTipDepthMm: usableTipDepth(request, cutter, at),
+    usableTipDepthMm:
+      at.kind === 'wall' ? Number.POSITIVE_INFINITY : usableTipDepthMm(request.cutter, cutter, settings),
   }
 }
 
@@ -78,15 +80,24 @@ function checkedClearances({ clearances, settings }: ReachRequest): Clearances {
   }
 }
 
-/** A drill's flutes need room for the chips; a reach length says how deep any hole tool may go. */
-function usableTipDepth(
-  { cutter: given, settings }: ReachRequest,
+/**
+ * Depth of the tip at which a hole tool's flutes or reach length end.
+ *
+ * Assumes room for the chips in a drill's flutes; a reach length says how deep any hole tool may go.
+ *
+ * Units      Millimetres.
+ * Result     May be negative for flutes shorter than their chips need.
+ *
+ * @example
+ * usableTipDepthMm(drillCutter, cutterDimensions(drillCutter), defaultReachSettings) // => 31
+ */
+export function usableTipDepthMm(
+  given: CutterGeometry,
   cutter: CutterDimensions,
-  at: Placement,
+  { drillChipRoomDiameters }: ReachSettings,
 ): number {
-  if (at.kind === 'wall') return Number.POSITIVE_INFINITY
   if (given.reachLengthMm != null) return given.reachLengthMm
-  const chipRoomMm = cutter.form === 'drill' ? settings.drillChipRoomDiameters * 2 * cutter.radiusMm : 0
+  const chipRoomMm = cutter.form === 'drill' ? drillChipRoomDiameters * 2 * cutter.radiusMm : 0
   return cutter.lengthOfCutMm - chipRoomMm
 }
 

@@ -112,13 +112,29 @@ export function stickOutBounds(
 function fixedLowerBounds(
   cutter: CutterDimensions,
   { boreDepthMm, insertionMm }: CheckedClamping,
-  { fluteToGripMm }: ReachSettings,
+  settings: ReachSettings,
 ): Bound<LowerBound>[] {
   const bounds: Bound<LowerBound>[] = [{ by: 'bore', mm: cutter.overallLengthMm - boreDepthMm }]
-  if (cutter.neck) bounds.push({ by: 'neck', mm: cutter.neck.fullShankZMm + fluteToGripMm })
-  else bounds.push({ by: 'flutes', mm: cutter.fluteLengthMm + fluteToGripMm })
+  bounds.push(fullShankBound(cutter, settings))
   if (insertionMm !== null) bounds.push({ by: 'sideLock', mm: cutter.overallLengthMm - insertionMm })
   return bounds
+}
+
+/**
+ * The stick-out that leaves only full shank behind the nose.
+ *
+ * Units      Millimetres.
+ *
+ * @example
+ * fullShankBound(cutterDimensions(neckedCutter), defaultReachSettings) // => { by: 'neck', mm: 39.1875 }
+ */
+export function fullShankBound(
+  { neck, fluteLengthMm }: CutterDimensions,
+  { fluteToGripMm }: ReachSettings,
+): Bound<LowerBound> {
+  return neck
+    ? { by: 'neck', mm: neck.fullShankZMm + fluteToGripMm }
+    : { by: 'flutes', mm: fluteLengthMm + fluteToGripMm }
 }
 
 function upperBounds(cutter: CutterDimensions, clamping: CheckedClamping): Bound<UpperBound>[] {
