@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { colletListQuerySchema } from './collet'
 import { cutterListQuerySchema } from './cutter'
 import { extensionListQuerySchema } from './extension'
+import { fixtureListQuerySchema } from './fixture'
 import { holderListQuerySchema } from './holder'
 
 const paging = { limit: true, offset: true, cursor: true, sort: true } as const
@@ -12,6 +13,7 @@ export const countsQuerySchemas = {
   holder: holderListQuerySchema.omit(paging),
   collet: colletListQuerySchema.omit(paging),
   extension: extensionListQuerySchema.omit(paging),
+  fixture: fixtureListQuerySchema.omit(paging),
 }
 
 const choicesSchema = z.array(

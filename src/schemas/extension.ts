@@ -18,6 +18,7 @@ export const extensionSegmentSchema = z.object(segmentFields)
 const extensionFieldsSchema = z.object({
   ...itemFields,
   projectionMm: lengthMmSchema('Give the projection.'),
+  shankDiameterMm: lengthMmSchema().nullable().optional(),
   ...clampingFields,
   segments: segmentsSchema(extensionSegmentSchema),
 })
@@ -35,6 +36,8 @@ export const extensionResponseSchema = z.object({
   ...itemResponseFields,
   kind: z.literal('extension'),
   projectionMm: z.number(),
+  /** What the holder takes; where it is not entered, nothing checks that one does. */
+  shankDiameterMm: z.number().nullable(),
   ...clampingResponseFields,
   segments: z.array(extensionSegmentSchema),
 })
@@ -44,6 +47,7 @@ export const extensionListResponseSchema = listResponseSchema(extensionResponseS
 
 const extensionNumberFields = [
   'projectionMm',
+  'shankDiameterMm',
   'boreDiameterMm',
   'boreDepthMm',
   'minimumGripMm',

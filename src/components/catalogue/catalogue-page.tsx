@@ -129,7 +129,9 @@ function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>
           <PrintList {...{ definition, columns, shownIds, view }} />
           {mayKeep ? (
             <>
-              <PasteRows kind={importKindOf[definition.kind]} many={definition.many} />
+              {definition.kind === 'fixture' ? null : (
+                <PasteRows kind={importKindOf[definition.kind]} many={definition.many} />
+              )}
               <EditToggle isEditing={isEditing} onChange={setIsEditing} />
             </>
           ) : null}

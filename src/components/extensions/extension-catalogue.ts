@@ -28,6 +28,7 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
     }),
     boreDiameterColumn(),
     lengthColumn('projectionMm', 'E', 'Projection (E)'),
+    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter, which the holder takes'),
     lengthColumn('boreDepthMm', 'Bore depth', 'Bore depth', { width: 104 }),
     lengthColumn('minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)'),
     lengthColumn('gripStartMm', 'Grip start', 'Where gripping begins behind the nose face', {

@@ -1,6 +1,7 @@
 'use client'
 
 import { createContext, type ReactNode, useContext } from 'react'
+import type { CuttingSettings } from '@/core/cutting/cut-answer'
 import { can, type Permission, type Role } from '@/core/policies/permissions'
 import type { ReachSettings } from '@/core/reach/types'
 import type { LengthUnit } from '@/core/units/length-unit'
@@ -14,6 +15,7 @@ export interface Shop {
   decimalComma: boolean
   currency: string
   reachSettings: ReachSettings
+  cuttingSettings: CuttingSettings
 }
 
 const ShopContext = createContext<Shop | null>(null)

@@ -1,7 +1,7 @@
 import { isDeepStrictEqual } from 'node:util'
 import type { Knex } from 'knex'
 import type { z } from 'zod'
-import type { CatalogueKind } from '@/core/stock/kinds'
+import type { ToolingKind } from '@/core/stock/kinds'
 import { createColletRequestSchema } from '@/schemas/collet'
 import { createCutterRequestSchema } from '@/schemas/cutter'
 import { createExtensionRequestSchema } from '@/schemas/extension'
@@ -19,7 +19,7 @@ import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
 import type { FlatRecord } from './flat-values'
 import type { ImportRow, RowReader } from './row-reader'
 
-const requestSchemas: Readonly<Record<CatalogueKind, z.ZodType>> = {
+const requestSchemas: Readonly<Record<ToolingKind, z.ZodType>> = {
   cutter: createCutterRequestSchema,
   holder: createHolderRequestSchema,
   collet: createColletRequestSchema,
@@ -32,7 +32,7 @@ export const itemKinds = {
   holders: 'holder',
   collets: 'collet',
   extensions: 'extension',
-} as const satisfies Record<string, CatalogueKind>
+} as const satisfies Record<string, ToolingKind>
 
 /**
  * Holds the items of a file against the catalogue as `db` sees it: whom each row means, and whether what it gives makes
@@ -90,7 +90,7 @@ class ItemCheck {
   private readonly problems: RowProblem[]
 
   constructor(
-    private readonly kind: CatalogueKind,
+    private readonly kind: ToolingKind,
     private readonly rows: readonly ImportRow[],
     private readonly reader: RowReader,
     private readonly given: GivenRecord,
@@ -172,7 +172,7 @@ function fieldsOf(first: string, member: PropertyKey | undefined, reader: RowRea
 }
 
 /** As the form would send it. */
-function requestOf(kind: CatalogueKind, whole: FlatRecord): Record<string, unknown> {
+function requestOf(kind: ToolingKind, whole: FlatRecord): Record<string, unknown> {
   const geometry = geometryFromRow(geometryTables[kind], whole)
   if (whole.bore_kind === undefined) delete geometry.bore
   return {

@@ -17,6 +17,7 @@ const geometryChoices: Readonly<Record<CatalogueKind, 'form' | 'boreKind' | null
   holder: 'boreKind',
   collet: null,
   extension: 'boreKind',
+  fixture: null,
 }
 
 /** Makers worth offering; whoever looks for a rarer one types its name. */

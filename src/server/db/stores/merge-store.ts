@@ -1,5 +1,5 @@
 import type { Knex } from 'knex'
-import { type CatalogueKind, type Condition, catalogueKinds } from '@/core/stock/kinds'
+import { type CatalogueKind, type Condition, toolingKinds } from '@/core/stock/kinds'
 import type { ItemMerges } from '@/schemas/duplicate'
 
 export interface MergedItem {
@@ -17,7 +17,7 @@ export async function lockItemsForMerge(
 ): Promise<Map<string, MergedItem>> {
   const rows = await trx('items')
     .whereRaw('id = any(?::bigint[])', [[...ids]])
-    .whereIn('kind', [...catalogueKinds])
+    .whereIn('kind', [...toolingKinds])
     .orderBy('id')
     .forUpdate()
     .select('id', 'kind', 'code', 'is_tracked_by_piece', 'archived_at')
