@@ -11,6 +11,7 @@ export const ledgerErrorCodes = {
   pieceNotThere: 'LL015',
   stillInUse: 'LL016',
   reorderPointMoved: 'LL017',
+  assemblyRule: 'LL018',
 } as const
 
 interface DatabaseError {
