@@ -11,6 +11,7 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
   {
     label: 'Calculate',
     links: [
+      { href: '/search', label: 'Find a tool', permission: 'see' },
       { href: '/reach', label: 'Reach', permission: 'see' },
       { href: '/ball-speed', label: 'Ball-end speed', permission: 'see' },
       { href: '/starting-speeds', label: 'Speeds', permission: 'see' },
@@ -23,12 +24,14 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
       { href: '/holders', label: 'Holders', permission: 'see' },
       { href: '/collets', label: 'Collets', permission: 'see' },
       { href: '/extensions', label: 'Extensions', permission: 'see' },
+      { href: '/fixtures', label: 'Fixtures', permission: 'see' },
       { href: '/fits', label: 'Fits', permission: 'see' },
     ],
   },
   {
     label: 'Crib',
     links: [
+      { href: '/machines', label: 'Machines', permission: 'see' },
       { href: '/locations', label: 'Locations', permission: 'see' },
       { href: '/alerts', label: 'Low stock', permission: 'see' },
       { href: '/imports', label: 'Imports', permission: 'keepCrib' },

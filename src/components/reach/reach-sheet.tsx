@@ -1,9 +1,12 @@
 'use client'
 
+import { Search } from 'lucide-react'
+import Link from 'next/link'
 import { type Dispatch, type RefObject, useMemo, useState } from 'react'
 import type { ToolPart } from '@/core/outline/types'
 import { useShop } from '../layout/shop-context'
 import type { FieldErrors } from './compile-check'
+import { searchPath } from './feature-only'
 import { type DraftChange, isDraftEmpty, type ReachDraft } from './reach-draft'
 import { fieldText, type Reading } from './read-field'
 import { SectionDrawing } from './section-drawing'
@@ -45,6 +48,18 @@ export function ReachSheet(props: ReachSheetProps) {
     <div ref={sheetRef} className="border-ink bg-sheet min-w-0 scroll-mt-16 self-start border">
       <h1 className="sr-only">Reach check</h1>
       <VerdictLine {...verdict} />
+      {compiled.feature && answer?.verdict !== 'reaches' ? (
+        <p className="border-hairline border-b px-3 py-1 print:hidden">
+          <Link
+            href={searchPath(draft, reading)}
+            prefetch={false}
+            className="text-accent inline-flex min-h-9 items-center gap-2 font-semibold hover:underline pointer-coarse:min-h-11"
+          >
+            <Search aria-hidden="true" className="size-4.5" />
+            Find what in the crib reaches this
+          </Link>
+        </p>
+      ) : null}
       <div className="relative">
         <SheetToolbar view={view} onView={setView} isCutterAlone={scene?.heights.noseMm == null} />
         {scene ? (

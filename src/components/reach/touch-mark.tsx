@@ -27,10 +27,7 @@ export function TouchMark({ at, layout, text, tone, dropPx }: TouchMarkProps) {
         strokeWidth={lineWidths.thin}
         d={`M${point.x} ${point.y}L${shoulder.x} ${shoulder.y}H${shoulder.endX}`}
       />
-      <path
-        strokeWidth={2.6}
-        d={`M${point.x - arm} ${point.y - arm}l${2 * arm} ${2 * arm}M${point.x + arm} ${point.y - arm}l${-2 * arm} ${2 * arm}`}
-      />
+      <TouchCross at={at} layout={layout} tone={tone} />
       <text
         x={(shoulder.x + shoulder.endX) / 2}
         y={shoulder.y - 5}
@@ -45,6 +42,19 @@ export function TouchMark({ at, layout, text, tone, dropPx }: TouchMarkProps) {
         {text}
       </text>
     </g>
+  )
+}
+
+/** The cross alone, where there is no room for words. */
+export function TouchCross({ at, layout, tone }: Pick<TouchMarkProps, 'at' | 'layout' | 'tone'>) {
+  const point = onSheet(layout, at.uMm, at.hMm)
+  return (
+    <path
+      stroke={colours[tone]}
+      strokeWidth={2.6}
+      strokeLinecap="round"
+      d={`M${point.x - arm} ${point.y - arm}l${2 * arm} ${2 * arm}M${point.x + arm} ${point.y - arm}l${-2 * arm} ${2 * arm}`}
+    />
   )
 }
 
