@@ -264,6 +264,8 @@ export const assemblyResponseSchema = assemblyRowSchema.extend({
   createdAt: z.iso.datetime(),
   createdByName: z.string(),
   parts: z.array(partSchema),
+  /** Of the nut that holds the cutter, where the maker's figure is known. */
+  nutTorqueNm: z.number().nullable(),
   /** The sizes everything about it goes by. */
   tools: z.custom<AssemblyTools>(),
   checks: z.array(checkSchema),

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { distanceMmSchema, lengthMmSchema, lineSchema } from './fields'
+import { countSchema, distanceMmSchema, lengthMmSchema, lineSchema } from './fields'
 
 /** What takes a shank, in a holder as in an extension. */
 export const boreSchema = z.discriminatedUnion(
@@ -16,6 +16,8 @@ export const clampingFields = {
   boreDepthMm: lengthMmSchema().nullable().optional(),
   minimumGripMm: lengthMmSchema().nullable().optional(),
   gripStartMm: distanceMmSchema().nullable().optional(),
+  /** What the maker says the nut is tightened to. */
+  nutTorqueNm: countSchema(2000, 'Give whole newton metres.').nullable().optional(),
 }
 
 export const clampingResponseFields = {
@@ -23,6 +25,7 @@ export const clampingResponseFields = {
   boreDepthMm: z.number().nullable(),
   minimumGripMm: z.number().nullable(),
   gripStartMm: z.number().nullable(),
+  nutTorqueNm: z.number().nullable(),
 }
 
 export const segmentFields = {

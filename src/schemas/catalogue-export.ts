@@ -15,7 +15,7 @@ const itemColumns = [
   'description',
   'unitCost',
 ] as const
-const clampingColumns = ['boreDepthMm', 'minimumGripMm', 'gripStartMm'] as const
+const clampingColumns = ['boreDepthMm', 'minimumGripMm', 'gripStartMm', 'nutTorqueNm'] as const
 
 /** The columns a list can be exported with, in the order of the page's own. */
 export const exportColumnIds = {

@@ -52,6 +52,7 @@ const extensionNumberFields = [
   'boreDepthMm',
   'minimumGripMm',
   'gripStartMm',
+  'nutTorqueNm',
 ] as const
 
 export const extensionSortFields = [

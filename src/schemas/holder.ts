@@ -58,6 +58,7 @@ const holderNumberFields = [
   'boreDepthMm',
   'minimumGripMm',
   'gripStartMm',
+  'nutTorqueNm',
   'sideLockInsertionMm',
   'maximumRpm',
 ] as const

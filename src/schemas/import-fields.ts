@@ -60,6 +60,7 @@ const clampingFields: ImportField[] = [
   { field: 'boreDepthMm', label: 'Bore depth', type: 'length' },
   { field: 'minimumGripMm', label: 'Minimum grip', symbol: 'LSCN', type: 'length' },
   { field: 'gripStartMm', label: 'Grip starts behind the nose', type: 'distance' },
+  { field: 'nutTorqueNm', label: 'Nut torque, N·m', type: 'count' },
 ]
 
 const maximumRpm: ImportField = {

@@ -4,6 +4,7 @@ import { itemFilters } from '@/components/catalogue/catalogue-filter'
 import {
   boreDiameterColumn,
   codeColumn,
+  countColumn,
   itemColumns,
   lengthColumn,
   textColumn,
@@ -35,6 +36,7 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
       width: 100,
       isUsual: false,
     }),
+    countColumn('nutTorqueNm', 'N·m', 'Nut torque in N·m', { isUsual: false, width: 80 }),
     ...itemColumns<ExtensionResponse>(canSeeCosts),
   ],
   filters: [

@@ -15,7 +15,7 @@ export interface GeometryTable {
   segments: { name: string; fields: readonly string[] } | null
 }
 
-const clampingFields = ['boreDepthMm', 'minimumGripMm', 'gripStartMm']
+const clampingFields = ['boreDepthMm', 'minimumGripMm', 'gripStartMm', 'nutTorqueNm']
 const segmentFields = ['lengthMm', 'noseDiameterMm', 'spindleDiameterMm']
 
 export const geometryTables: Record<CatalogueKind, GeometryTable> = {

@@ -191,6 +191,7 @@ export interface ExtensionsRow {
   minimum_grip_mm: number | null
   grip_start_mm: number | null
   shank_diameter_mm: number | null
+  nut_torque_nm: number | null
 }
 
 export interface FixturesRow {
@@ -221,6 +222,7 @@ export interface HoldersRow {
   grip_start_mm: number | null
   side_lock_insertion_mm: number | null
   maximum_rpm: number | null
+  nut_torque_nm: number | null
 }
 
 export interface IdempotencyKeysRow {

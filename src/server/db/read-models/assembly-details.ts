@@ -81,6 +81,18 @@ function presenceOf(row: {
   return { held: row.piece_location_id === row.location_id ? 1 : 0, claimed: 1 }
 }
 
+/** What the nut that holds the cutter is tightened to: the extension's where there is one, else the holder's. */
+export async function findNutTorqueNm(db: Knex, assemblyId: string): Promise<number | null> {
+  const row = await db('assembly_parts as part')
+    .leftJoin('holders', 'holders.item_id', 'part.item_id')
+    .leftJoin('extensions', 'extensions.item_id', 'part.item_id')
+    .where('part.assembly_id', assemblyId)
+    .whereIn('part.kind', ['extension', 'holder'])
+    .orderBy('part.kind')
+    .first({ torque: db.raw('coalesce(extensions.nut_torque_nm, holders.nut_torque_nm)') })
+  return row?.torque ?? null
+}
+
 /** Where each of these items can be fetched: its bins, the fullest first, and its tagged pieces in bins. */
 export async function readPartSources(
   db: Knex,

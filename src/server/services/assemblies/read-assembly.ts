@@ -2,6 +2,7 @@ import { AppError } from '@/lib/app-error'
 import type { AssemblyResponse } from '@/schemas/assembly'
 import { type Database, db } from '../../db/connection'
 import {
+  findNutTorqueNm,
   readAssemblyChecks,
   readAssemblyFindings,
   readAssemblyParts,
@@ -26,6 +27,7 @@ export async function readAssembly(database: Database, id: string): Promise<Asse
   )
   return {
     ...row,
+    nutTorqueNm: await findNutTorqueNm(database, id),
     tools: toolsOf(parts),
     parts: parts.map((part) => ({
       ...part,
