@@ -32,6 +32,37 @@ export function lineBoundAt(at: Placement): LineBound {
 }
 
 /**
+ * The most any line behind the nose can ask of the stick-out: a face at the lowered nose itself, over the whole depth.
+ *
+ * Units      Millimetres.
+ * Result     Infinity with tilt, where a wide body asks for more the wider it is.
+ *
+ * @example
+ * mostBoundMm(placementOf({ kind: 'wall', depthMm: 25, obstacles: [{ setbackMm: 5, riseMm: 12 }] }, squareCutter), 0.5) // => 37.5
+ */
+export function mostBoundMm(at: Placement, clearanceMm: number): number {
+  if (at.kind === 'hole') return at.tipDepthMm + clearanceMm
+  if (at.tiltDeg > 0) return Number.POSITIVE_INFINITY
+  const riseMm = at.obstacles.reduce((most, { riseMm: rise }) => Math.max(most, rise), 0)
+  return riseMm + at.tipDepthMm + clearanceMm
+}
+
+/**
+ * Radius of the widened nose face from which on it asks for `mostBoundMm`, whatever stands behind it.
+ *
+ * Units      Millimetres.
+ * Result     Infinity with tilt or obstacles, where no radius says so.
+ *
+ * @example
+ * fullDepthRadiusMm(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter)).toFixed(4) // => '1.5875'
+ */
+export function fullDepthRadiusMm(at: Placement): number {
+  if (at.kind === 'hole') return at.roomRadiusMm + overlapToleranceMm
+  if (at.tiltDeg > 0 || at.obstacles.length > 0) return Number.POSITIVE_INFINITY
+  return topEdgeRadiusMm(at) + overlapToleranceMm
+}
+
+/**
  * The stick-out that keeps every part behind the nose off the wall, or out of the hole, at the feature's depth.
  *
  * Units      Millimetres.
@@ -154,19 +185,29 @@ function obstacleBoundMm(
 ): number {
   const clearRadiusMm = at.standOffMm + setbackMm
   if (Math.max(r0, r1) <= clearRadiusMm + overlapToleranceMm) return none
-  const backMm = (radiusMm: number) =>
-    at.tanDraft > 0 ? Math.min(at.tipDepthMm, (radiusMm - clearRadiusMm) / at.tanDraft) : at.tipDepthMm
-  const alongAt = (radiusMm: number) =>
-    r1 === Number.POSITIVE_INFINITY ? a0 : a0 + ((radiusMm - r0) / (r1 - r0)) * (a1 - a0)
-  const boundAt = (radiusMm: number, a: number) => riseMm + backMm(radiusMm) - a
   const meetRadiusMm = clearRadiusMm + at.tipDepthMm * at.tanDraft
-  let boundMm = Math.max(
-    r0 > clearRadiusMm ? boundAt(r0, a0) : boundAt(clearRadiusMm, alongAt(clearRadiusMm)),
-    r1 > clearRadiusMm ? boundAt(r1, a1) : boundAt(clearRadiusMm, alongAt(clearRadiusMm)),
+  const onEdgeMm =
+    obstacleBackMm(at, clearRadiusMm, clearRadiusMm) - alongLineMm(clearRadiusMm, a0, r0, a1, r1)
+  let heightMm = Math.max(
+    r0 > clearRadiusMm ? obstacleBackMm(at, clearRadiusMm, r0) - a0 : onEdgeMm,
+    r1 > clearRadiusMm ? obstacleBackMm(at, clearRadiusMm, r1) - a1 : onEdgeMm,
   )
   if (Math.min(r0, r1) < meetRadiusMm && Math.max(r0, r1) > meetRadiusMm)
-    boundMm = Math.max(boundMm, boundAt(meetRadiusMm, alongAt(meetRadiusMm)))
-  return boundMm
+    heightMm = Math.max(
+      heightMm,
+      obstacleBackMm(at, clearRadiusMm, meetRadiusMm) - alongLineMm(meetRadiusMm, a0, r0, a1, r1),
+    )
+  return riseMm + heightMm
+}
+
+/** How far below the top edge the tip may be when a point at this radius is at the obstacle's face. */
+function obstacleBackMm(at: WallPlacement, clearRadiusMm: number, radiusMm: number): number {
+  return at.tanDraft > 0 ? Math.min(at.tipDepthMm, (radiusMm - clearRadiusMm) / at.tanDraft) : at.tipDepthMm
+}
+
+/** Where along a line its radius is this. */
+function alongLineMm(radiusMm: number, a0: number, r0: number, a1: number, r1: number): number {
+  return r1 === Number.POSITIVE_INFINITY ? a0 : a0 + ((radiusMm - r0) / (r1 - r0)) * (a1 - a0)
 }
 
 function holeBoundMm(at: HolePlacement, a0: number, r0: number, a1: number, r1: number): number {

@@ -1,7 +1,7 @@
 import type { CheckLine, CheckPart } from '@/core/reach/check-parts'
-import { lineBoundAt } from '@/core/reach/clearance-bounds'
+import { fullDepthRadiusMm, lineBoundAt, mostBoundMm } from '@/core/reach/clearance-bounds'
 import type { Placement } from '@/core/reach/placement'
-import { type BeamPiece, complianceByOffset } from '@/core/stiffness/compliance'
+import { type BeamPiece, complianceByOffset, type OffsetCompliance } from '@/core/stiffness/compliance'
 
 /** What stands behind a nose: a holder with the spindle behind it, or an extension. Heights from its own nose. */
 export interface Body {
@@ -20,6 +20,7 @@ export interface BodyTable {
   /** A record's outline; -1 where the record is refused. */
   outlineOf: Int32Array
   outlineCount: number
+  noseRadiusMm: Float64Array
   /** Where an outline's lines begin; one more at the end. */
   lineStart: Int32Array
   z0: Float64Array
@@ -74,6 +75,7 @@ function packedOutlines(distinct: { body: Body; lines: CheckLine[] }[]): Omit<Bo
   const compliances = distinct.map(({ body }) => complianceByOffset(body.beam))
   return {
     outlineCount: distinct.length,
+    noseRadiusMm: Float64Array.from(distinct, (one) => one.lines[0]?.r1 ?? 0),
     lineStart,
     ...lines,
     lengthMm: Float64Array.from(distinct, ({ body }) => body.lengthMm),
@@ -138,6 +140,29 @@ export function leadingLines(parts: readonly CheckPart[]): CheckLine[] {
   return leading
 }
 
+/** A floor under the compliance of several bodies: each figure of `complianceByOffset` the least of any. */
+export type LeastCompliance = OffsetCompliance
+
+/**
+ * The floor under what some outlines add to the compliance.
+ *
+ * Result     Infinite without outlines.
+ *
+ * @example
+ * leastCompliance(packBodies([]), new Int32Array(0)).constant // => Infinity
+ */
+export function leastCompliance(bodies: BodyTable, outlines: Int32Array): LeastCompliance {
+  let constant = Number.POSITIVE_INFINITY
+  let linear = Number.POSITIVE_INFINITY
+  let quadratic = Number.POSITIVE_INFINITY
+  for (const outline of outlines) {
+    constant = Math.min(constant, bodies.constant[outline]!)
+    linear = Math.min(linear, bodies.linear[outline]!)
+    quadratic = Math.min(quadratic, bodies.quadratic[outline]!)
+  }
+  return { constant, linear, quadratic }
+}
+
 /**
  * The stick-out every outline asks for at one placement, into `bounds`.
  *
@@ -155,10 +180,16 @@ export function boundsAt(
   bounds: Float64Array,
 ): Float64Array {
   const ofLine = lineBoundAt(at)
+  const mostMm = mostBoundMm(at, clearanceMm)
   const { lineStart, z0, r0, z1, r1, isFromAxis } = bodies
+  const fullDepthMm = fullDepthRadiusMm(at) - clearanceMm
   for (let outline = 0; outline < bodies.outlineCount; outline++) {
+    if (bodies.noseRadiusMm[outline]! > fullDepthMm) {
+      bounds[outline] = mostMm
+      continue
+    }
     let boundMm = Number.NEGATIVE_INFINITY
-    for (let line = lineStart[outline]!; line < lineStart[outline + 1]!; line++) {
+    for (let line = lineStart[outline]!; line < lineStart[outline + 1]! && boundMm < mostMm; line++) {
       const startMm = isFromAxis[line] === 1 ? 0 : r0[line]! + clearanceMm
       const ofThis = ofLine(
         z0[line]! - clearanceMm,
@@ -170,7 +201,7 @@ export function boundsAt(
     }
     const ownMm = bodies.spindleRadiusMm[outline]!
     const outMm = ownMm > 0 ? (spindleRadiusMm ?? ownMm) : 0
-    if (outMm > 0) {
+    if (outMm > 0 && boundMm < mostMm) {
       const faceMm = bodies.lengthMm[outline]! - clearanceMm
       boundMm = Math.max(boundMm, ofLine(faceMm, 0, faceMm, outMm + clearanceMm))
     }

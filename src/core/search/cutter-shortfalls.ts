@@ -108,14 +108,14 @@ function scallopShortfallMm(
   return scallopHeightMm({ cuttingDiameterMm, cornerRadiusMm }, stepoverMm) - maximumHeightMm
 }
 
-/** As `leastTouch` of the whole cutter; only obstacles are met by the length of cut and by arcs. */
+/** As `leastTouch` of the whole cutter; only an obstacle is met by the length of cut and by arcs. */
 function cutterTouch(
   { cutters }: SearchTables,
   { clearances }: AskedSearch,
   at: Placement,
   row: number,
 ): LeastTouch {
-  if (at.kind === 'wall' && at.obstacles.length > 0)
+  if (at.kind === 'wall' && canMeetObstacle(at, cutters.widestMm[row]! + clearances.holderMm))
     return leastTouch(at, checkPartsOfDimensions(cutters.dimensions[row]!), 0, clearances)
   const { lineStart, z0, r0, z1, r1, isFromAxis, part } = cutters
   let tipDepthMm = Number.POSITIVE_INFINITY
@@ -136,6 +136,11 @@ function cutterTouch(
     part: least < 0 ? null : (toolParts[part[least]!] ?? null),
     tipDepthMm: Math.max(0, tipDepthMm),
   }
+}
+
+/** No pass brings the axis nearer to an obstacle's face than the one on the floor. */
+function canMeetObstacle({ obstacles, standOffMm }: WallPlacement, widestMm: number): boolean {
+  return obstacles.some(({ setbackMm }) => widestMm > standOffMm + setbackMm)
 }
 
 /** How deep the far side of a tilted cutter stands in the floor; below 0 clear of it. */

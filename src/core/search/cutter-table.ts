@@ -36,6 +36,8 @@ export interface CutterTable {
   fullShankMm: Float64Array
   /** Infinity for a cutter that is no hole tool. */
   usableTipDepthMm: Float64Array
+  /** The largest radius anywhere. */
+  widestMm: Float64Array
   /** Compliance of the cutter sticking out to `fullShankMm`, and what each further cubic millimetre adds. */
   compliance: Float64Array
   compliancePerCubicMm: Float64Array
@@ -75,6 +77,7 @@ export function packCutters(cutters: readonly AcceptedCutter[], settings: ReachS
     usableTipDepthMm: column(({ geometry, dimensions }) =>
       isHoleTool(dimensions) ? usableTipDepthMm(geometry, dimensions, settings) : Number.POSITIVE_INFINITY,
     ),
+    widestMm: column(({ dimensions }) => widestMm(dimensions)),
     compliance: column((cutter) => fullShankCompliance(cutter, settings)),
     compliancePerCubicMm: column((cutter) => shankCompliance(cutter, settings)),
     ...bodyLines(rows),
@@ -84,6 +87,11 @@ export function packCutters(cutters: readonly AcceptedCutter[], settings: ReachS
 function fullShankCompliance({ geometry, dimensions }: AcceptedCutter, settings: ReachSettings): number {
   const fullShankMm = fullShankBound(dimensions, settings).mm
   return tipComplianceUmPerN(cutterBeam(dimensions, geometry.substrate, fullShankMm, settings))
+}
+
+function widestMm(cutter: CutterDimensions): number {
+  const lines = checkPartsOfDimensions(cutter).flatMap((part) => part.lines)
+  return lines.reduce((most, { r0, r1 }) => Math.max(most, r0, r1), 0)
 }
 
 /** A cylinder from x₁ to x₂ adds (x₂³ − x₁³) of this. */

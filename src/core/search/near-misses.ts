@@ -6,7 +6,7 @@ import { clearanceLowerBounds } from '@/core/reach/stick-out-bounds'
 import type { LowerBound, ReachAnswer, ReachRequest, StickOutAnswer } from '@/core/reach/types'
 import type { AskedSearch } from './asked-search'
 import { assemblyRequest } from './assembly-request'
-import { type WalkedAssembly, type WalkFrom, walkAssemblies, walkedStickOutMm } from './assembly-walk'
+import { type WalkFrom, walkAssemblies, walkedStickOutMm } from './assembly-walk'
 import { reportShortfalls } from './cutter-shortfalls'
 import { compareParts, optionOf } from './rank-options'
 import type { SearchTables } from './search-tables'
@@ -61,34 +61,40 @@ export function foundMisses(
   })
 }
 
-interface Nearest {
-  option: SearchOption
+/** What the nearest is chosen by, ids aside. */
+interface Distance {
   shortfallMm: number
   ofStickOutMm: number
+  penalty: number
+  gaugeLengthMm: number
 }
 
 function nearestAssembly(from: WalkFrom, ownMm: number): SearchOption {
   const { tables, rule, row } = from
   const limit = stickOutLimit(rule, tables.cutters.diameterMm[row]!)
-  let nearest: Nearest | null = null
-  walkAssemblies(from, (assembly: WalkedAssembly) => {
-    const ofStickOutMm = stickOutShortfallMm(rule, limit, assembly)
-    const shortfallMm = Math.max(ownMm, ofStickOutMm)
-    if (nearest && shortfallMm > nearest.shortfallMm) return
-    const option = optionOf(tables, assembly, walkedStickOutMm(from, assembly), 0)
-    const candidate = { option, shortfallMm, ofStickOutMm }
-    if (!nearest || compareNearest(tables, candidate, nearest) < 0) nearest = candidate
+  let nearest: { option: SearchOption; distance: Distance } | null = null
+  const here: Distance = { shortfallMm: 0, ofStickOutMm: 0, penalty: 0, gaugeLengthMm: 0 }
+  walkAssemblies(from, (assembly) => {
+    const stickOutMm = walkedStickOutMm(from, assembly)
+    here.ofStickOutMm = stickOutShortfallMm(rule, limit, assembly)
+    here.shortfallMm = Math.max(ownMm, here.ofStickOutMm)
+    here.penalty = assembly.penalty
+    here.gaugeLengthMm = assembly.behindMm + stickOutMm
+    const order = nearest ? compareDistances(here, nearest.distance) : -1
+    if (order > 0) return
+    const option = optionOf(tables, assembly, stickOutMm, 0)
+    if (order < 0 || !nearest || compareParts(tables, option, nearest.option) < 0)
+      nearest = { option, distance: { ...here } }
   })
   return nearest!.option
 }
 
-function compareNearest(tables: SearchTables, a: Nearest, b: Nearest): number {
+function compareDistances(a: Distance, b: Distance): number {
   return (
     a.shortfallMm - b.shortfallMm ||
     a.ofStickOutMm - b.ofStickOutMm ||
-    a.option.penalty - b.option.penalty ||
-    a.option.gaugeLengthMm - b.option.gaugeLengthMm ||
-    compareParts(tables, a.option, b.option)
+    a.penalty - b.penalty ||
+    a.gaugeLengthMm - b.gaugeLengthMm
   )
 }
 

@@ -1,31 +1,11 @@
 import type { AskedSearch } from './asked-search'
-import type { BodyTable } from './body-table'
-import type { ClampTable } from './clamp-table'
+import { type BodyTable, type LeastCompliance, leastCompliance } from './body-table'
+import { type ClampTable, maskedClamps } from './clamp-table'
 import type { SearchTables } from './search-tables'
-
-/** A floor under the compliance of several bodies: each figure the least of any. */
-export interface LeastCompliance {
-  constant: number
-  linear: number
-  quadratic: number
-}
-
-/** Ways alike, of one outline and depths, taken together. */
-export interface ClampGroups {
-  count: number
-  outline: Int32Array
-  leastInMm: Float64Array
-  mostInMm: Float64Array
-  size: Int32Array
-}
 
 /** Ways to clamp a shank that the question lets be used. */
 export interface OfferedClamps extends ClampTable {
-  groups: ClampGroups
-  /** The most that goes into any of them. */
-  mostInAnyMm: number
   leastPenalty: number
-  least: LeastCompliance
 }
 
 /** The holders that take an extension, each with the collet that holds it, -1 where none is needed. */
@@ -78,64 +58,14 @@ function offeredClamps(
   { masks, penalties }: AskedSearch,
   table: 'holders' | 'extensions',
 ): OfferedClamps {
-  const kept: number[] = []
+  const offered = maskedClamps(clamps, bodies, masks[table], masks.collets)
   let leastPenalty = Number.POSITIVE_INFINITY
-  for (let clamp = 0; clamp < clamps.count; clamp++) {
-    const owner = clamps.owner[clamp]!
-    const collet = clamps.collet[clamp]!
-    if (masks[table][owner] === 0 || (collet >= 0 && masks.collets[collet] === 0)) continue
-    kept.push(clamp)
-    const penalty = penalties[table][owner]! + (collet >= 0 ? penalties.collets[collet]! : 0)
-    leastPenalty = Math.min(leastPenalty, penalty)
+  for (let clamp = 0; clamp < offered.count; clamp++) {
+    const collet = offered.collet[clamp]!
+    const penalty = penalties[table][offered.owner[clamp]!]! + (collet >= 0 ? penalties.collets[collet]! : 0)
+    if (penalty < leastPenalty) leastPenalty = penalty
   }
-  const offered: ClampTable = {
-    count: kept.length,
-    owner: Int32Array.from(kept, (clamp) => clamps.owner[clamp]!),
-    collet: Int32Array.from(kept, (clamp) => clamps.collet[clamp]!),
-    outline: Int32Array.from(kept, (clamp) => clamps.outline[clamp]!),
-    leastInMm: Float64Array.from(kept, (clamp) => clamps.leastInMm[clamp]!),
-    mostInMm: Float64Array.from(kept, (clamp) => clamps.mostInMm[clamp]!),
-  }
-  return {
-    ...offered,
-    groups: clampGroups(offered),
-    mostInAnyMm: offered.mostInMm.reduce((most, mm) => Math.max(most, mm), Number.NEGATIVE_INFINITY),
-    leastPenalty,
-    least: leastCompliance(bodies, offered.outline),
-  }
-}
-
-function clampGroups({ count, outline, leastInMm, mostInMm }: ClampTable): ClampGroups {
-  const starts: number[] = []
-  for (let clamp = 0; clamp < count; clamp++) {
-    const isAlike =
-      clamp > 0 &&
-      outline[clamp] === outline[clamp - 1] &&
-      leastInMm[clamp] === leastInMm[clamp - 1] &&
-      mostInMm[clamp] === mostInMm[clamp - 1]
-    if (!isAlike) starts.push(clamp)
-  }
-  return {
-    count: starts.length,
-    outline: Int32Array.from(starts, (clamp) => outline[clamp]!),
-    leastInMm: Float64Array.from(starts, (clamp) => leastInMm[clamp]!),
-    mostInMm: Float64Array.from(starts, (clamp) => mostInMm[clamp]!),
-    size: Int32Array.from(starts, (clamp, group) => (starts[group + 1] ?? count) - clamp),
-  }
-}
-
-function leastCompliance(bodies: BodyTable, outlines: Int32Array): LeastCompliance {
-  const least = {
-    constant: Number.POSITIVE_INFINITY,
-    linear: Number.POSITIVE_INFINITY,
-    quadratic: Number.POSITIVE_INFINITY,
-  }
-  for (const outline of outlines) {
-    least.constant = Math.min(least.constant, bodies.constant[outline]!)
-    least.linear = Math.min(least.linear, bodies.linear[outline]!)
-    least.quadratic = Math.min(least.quadratic, bodies.quadratic[outline]!)
-  }
-  return least
+  return { ...offered, leastPenalty }
 }
 
 /** Takers of an extension by the class of its shank; -1: of one whose shank is not known. */

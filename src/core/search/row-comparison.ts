@@ -1,5 +1,6 @@
 import type { AskedSearch } from './asked-search'
-import type { ClassOffer, LeastCompliance, Takers } from './offers'
+import type { LeastCompliance } from './body-table'
+import type { ClassOffer, Takers } from './offers'
 import type { PlacedBounds } from './placed-bounds'
 import type { SearchTables } from './search-tables'
 import {

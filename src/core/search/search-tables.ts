@@ -75,10 +75,8 @@ export function searchTables(tooling: CribTooling, settings: ReachSettings): Sea
     cutters: packCutters(acceptedCutters(tooling, dimensions, classes.classOf), settings),
     holders,
     extensions,
-    inHolders: classes.byHolder.map((ways) => packClamps(ways, holders.outlineOf, clampIn.holder)),
-    inExtensions: classes.byExtension.map((ways) =>
-      packClamps(ways, extensions.outlineOf, clampIn.extension),
-    ),
+    inHolders: classes.byHolder.map((ways) => packClamps(ways, holders, clampIn.holder)),
+    inExtensions: classes.byExtension.map((ways) => packClamps(ways, extensions, clampIn.extension)),
     holdingExtension: classes.byHolder,
     extensionClass: Int32Array.from(tooling.extensions, ({ shankDiameterMm }, index) =>
       shankDiameterMm === null ? -1 : (classes.classOf[tooling.cutters.length + index] ?? -1),
