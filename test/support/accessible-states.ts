@@ -1,6 +1,7 @@
 import type { Page } from '@playwright/test'
 import { expect } from '@playwright/test'
 import type { Role } from '@/core/policies/permissions'
+import type { MachineRows } from './machine-rows'
 import type { NeckedToolRows } from './shop-rows'
 
 /** A state of a page: where it is, who sees it, and what is done until it stands. */
@@ -50,13 +51,15 @@ export interface StateRows {
   rows: NeckedToolRows
   importId: string
   extensionId: string
+  machine: MachineRows
   /** The path of a one-time address that still opens. */
   invitation: string
 }
 
 /** Every page, with the dialogs it opens and the faults it shows. */
-export function pageStates({ rows, importId, extensionId, invitation }: StateRows): PageState[] {
+export function pageStates({ rows, importId, extensionId, machine, invitation }: StateRows): PageState[] {
   const cutter = `/cutters/${rows.cutterId}`
+  const onMachine = `/machines/${machine.machineId}`
   const state = (role: Role | null, path: string, name: string, reach: PageState['reach']) => ({
     role,
     path,
@@ -146,6 +149,20 @@ export function pageStates({ rows, importId, extensionId, invitation }: StateRow
     state('cribManager', `/holders/${rows.holderId}`, 'a holder', shows('What fits it')),
     state('cribManager', `/collets/${rows.colletId}`, 'a collet', shows('What fits it')),
     state('cribManager', `/extensions/${extensionId}`, 'an extension', shows('What fits it')),
+    state('cribManager', '/fixtures', 'fixtures', listRow),
+    state('cribManager', '/fixtures', 'fixtures, adding', refused('Add a fixture', 'Add the fixture')),
+    state('cribManager', '/machines', 'machines', shows(machine.code)),
+    state('cribManager', '/machines', 'machines, adding', refused('Add a machine', 'Save')),
+    state('cribManager', onMachine, 'a machine', shows('Takes gauge lengths from')),
+    state(
+      'cribManager',
+      `${onMachine}?holder=${machine.longHolder.id}&stickOutMm=40`,
+      'a machine, a tool too long',
+      shows('too long by 5 mm'),
+    ),
+    state('cribManager', onMachine, 'a machine, changed', opens('Change the machine')),
+    state('cribManager', onMachine, 'a set-up, adding', refused('Add a set-up', 'Save')),
+    state('cribManager', onMachine, 'a set-up, changed', opens('Change the set-up')),
     state('cribManager', '/locations', 'locations', shows('All that lies in it')),
     state('cribManager', '/locations', 'locations, a bin', opens('Bin A-1')),
     state('cribManager', '/locations', 'locations, adding', refused('Add a crib', 'Add')),

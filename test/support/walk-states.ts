@@ -6,6 +6,7 @@ import { signedInAs, uniqueCode } from './api'
 import { checkedImport } from './api-imports'
 import { siteDatabase } from './api-stock'
 import { signIn, test } from './browser'
+import { createMachineRows } from './machine-rows'
 import { createNeckedTool } from './shop-rows'
 
 /** One test for each role: every page that role works with, in every state, light and dark. */
@@ -24,6 +25,7 @@ export function testEveryState(extra: readonly PageState[]): void {
       rows,
       importId: id,
       extensionId: extensions[0]?.id ?? '',
+      machine: await createMachineRows(crib),
       invitation: await openInvitation(),
     }
     every = [...pageStates(shown), ...extra]

@@ -112,10 +112,9 @@ const setUps: SetUpPlan[] = [
   },
   {
     machine: 'M3',
-    name: 'Tall casting on the angle plate',
+    name: 'Tall casting on the table',
     note: 'Only stubby holders get over it.',
     heights: [330, 60, 25],
-    fixtures: [['F-ANGLE-200', 0]],
   },
   {
     machine: 'M3',

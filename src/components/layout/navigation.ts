@@ -31,6 +31,7 @@ export const navigationGroups: readonly { label: string; links: readonly Navigat
   {
     label: 'Crib',
     links: [
+      { href: '/assemblies', label: 'Assemblies', permission: 'see' },
       { href: '/machines', label: 'Machines', permission: 'see' },
       { href: '/locations', label: 'Locations', permission: 'see' },
       { href: '/alerts', label: 'Low stock', permission: 'see' },

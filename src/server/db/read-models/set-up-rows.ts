@@ -37,7 +37,7 @@ interface JoinedRow extends SetUpsRow {
   longest_tool_mm: number | null
 }
 
-/** By machine and name. */
+/** By machine and name; of all machines in use where none is named. */
 export async function readSetUps(
   db: Knex,
   which: { id?: string; machineId?: string | undefined },
@@ -55,8 +55,8 @@ export async function readSetUps(
     )
     .orderByRaw('lower(machines.code), machines.id, lower(set_ups.name), set_ups.id')
   if (which.id !== undefined) query.where('set_ups.id', which.id)
+  else if (which.machineId !== undefined) query.where('set_ups.machine_id', which.machineId)
   else query.whereNull('machines.archived_at')
-  if (which.machineId !== undefined) query.where('set_ups.machine_id', which.machineId)
   const rows: JoinedRow[] = await query
   const fixtures = await readFixtures(
     db,

@@ -1,5 +1,6 @@
 import { gaugeLengthFit, type MachineWindow } from '@/core/machine/machine-window'
 import { setUpWindow } from '@/core/machine/set-up-window'
+import { isSameTaper } from '@/core/machine/taper'
 import { overlapToleranceMm } from '@/core/outline/types'
 import type { Bore } from '@/core/tooling'
 import { AppError } from '@/lib/app-error'
@@ -57,14 +58,6 @@ async function fittingHolders(
     holderGaugeLengthMm,
     gaugeLengthMm: holderGaugeLengthMm + beforeHolderMm,
   }))
-}
-
-function isSameTaper(one: string, other: string): boolean {
-  return plainTaper(one) === plainTaper(other)
-}
-
-function plainTaper(taper: string): string {
-  return taper.replace(/[\s-]/g, '').toUpperCase()
 }
 
 /** What isn't there is said at the place it was named. */
