@@ -127,7 +127,8 @@ export interface RankedOption {
   missingParts: readonly string[]
   /** Minor units; null where a part has no cost, undefined where costs are not shown. */
   cost: number | null | undefined
-  builtAs: string | null
+  /** The assembly it stands ready as. */
+  builtAs: { number: number; place: string } | null
 }
 
 export interface RankingContext {
@@ -142,27 +143,28 @@ export interface RankingContext {
 
 /** Why an option stands where it stands. */
 export function rankSentence(option: RankedOption, context: RankingContext): string {
-  const { rankBy, first, reachable } = context
-  const isFirst = option === first
-  if (isFirst && reachable === 1) return `The only one that reaches.${stateWords(option, context)}`
-  switch (rankBy) {
+  switch (context.rankBy) {
     case 'stiffness':
-      return isFirst
-        ? `The stiffest of the ${counted(reachable)} that reach.`
-        : stiffnessWords(option, first, context.unit)
+      return placeWords(option, context)
     case 'stock':
-      return `${stockWords(option)} ${isFirst ? firstInStockWords(option) : stiffnessWords(option, first, context.unit)}`
+      return `${stockWords(option)} ${placeWords(option, context)}`
     case 'built':
-      return option.builtAs === null
-        ? `Not built yet. ${isFirst ? 'The stiffest that reaches.' : stiffnessWords(option, first, context.unit)}`
-        : `Built already, as assembly ${option.builtAs}.`
+      return `${builtWords(option)} ${placeWords(option, context)}`
     case 'cost':
       return costWords(option, context)
   }
 }
 
-function stateWords(option: RankedOption, { rankBy }: RankingContext): string {
-  return rankBy === 'stock' ? ` ${stockWords(option)}` : ''
+/** Its place by stiffness: of the first, among what it is first of. */
+function placeWords(option: RankedOption, { rankBy, first, reachable, unit }: RankingContext): string {
+  if (option !== first) return stiffnessWords(option, first, unit)
+  if (reachable === 1 && option.builtAs === null) return 'The only one that reaches.'
+  if (rankBy === 'stock')
+    return option.missingParts.length === 0
+      ? 'The stiffest of what can be built now.'
+      : 'Nothing that reaches is all in stock; least is missing here.'
+  if (rankBy === 'built' && option.builtAs !== null) return 'The stiffest of what does.'
+  return `The stiffest of the ${counted(reachable)} that reach.`
 }
 
 function stockWords({ missingParts }: RankedOption): string {
@@ -171,16 +173,17 @@ function stockWords({ missingParts }: RankedOption): string {
     : `Not in stock now: ${missingParts.join(', ')}.`
 }
 
-function firstInStockWords({ missingParts }: RankedOption): string {
-  return missingParts.length === 0
-    ? 'The stiffest of what can be built now.'
-    : 'Nothing that reaches is all in stock; least is missing here.'
+function builtWords({ builtAs }: RankedOption): string {
+  return builtAs === null ? 'Not built yet.' : `Stands ready as assembly ${builtAs.number}, ${builtAs.place}.`
 }
 
-function costWords(option: RankedOption, { first, reachable, currency, unit }: RankingContext): string {
-  if (option.cost == null)
-    return `What a part of it costs is not known. ${stiffnessWords(option, first, unit)}`
-  if (option === first) return `The least cost of the ${counted(reachable)} that reach.`
+function costWords(option: RankedOption, context: RankingContext): string {
+  const { first, reachable, currency, unit } = context
+  if (option.cost == null) return `What a part of it costs is not known. ${placeWords(option, context)}`
+  if (option === first)
+    return reachable === 1
+      ? 'The only one that reaches.'
+      : `The least cost of the ${counted(reachable)} that reach.`
   const moreMinor = option.cost - (first.cost ?? 0)
   const more =
     moreMinor === 0
@@ -193,7 +196,6 @@ const sameStiffness = 0.005
 const mostDifferences = 2
 
 function stiffnessWords(option: RankedOption, first: RankedOption, unit: LengthUnit): string {
-  if (option === first) return ''
   const times = option.complianceUmPerN / first.complianceUmPerN
   if (Math.abs(times - 1) < sameStiffness) return 'As stiff as the first.'
   if (times < 1) return `Bends ${decimalText(times, 2, 2)} times as much as the first: it is stiffer.`
@@ -224,28 +226,28 @@ function differences(option: RankedOption, first: RankedOption, unit: LengthUnit
 }
 
 const cutterReasons: Partial<Record<SortedOutReason, string>> = {
-  cutterForm: 'are of a form that does not make such a feature',
-  holeDiameter: 'are not of the hole’s diameter',
-  taperSteeperThanWall: 'taper more than the wall',
-  lengthOfCut: 'have too short a length of cut for the tip to meet the wall',
-  opening: 'are too wide for the opening',
-  cornerRadius: 'are too thick for the inside corner',
-  floorRadius: 'have too large a corner radius for the floor',
-  scallop: 'would leave too high a cusp',
-  cutterTouches: 'rub before the depth, by their own neck or shank',
-  usableLength: 'are too short in their usable length',
-  cutterInFloor: 'would stand in the floor, tilted like this',
-  shankNotHeld: 'have a shank that nothing offered holds',
+  cutterForm: 'of a form that makes no such feature',
+  holeDiameter: 'not of the hole’s diameter',
+  taperSteeperThanWall: 'with more taper than the wall',
+  lengthOfCut: 'with too short a length of cut for the tip to meet the wall',
+  opening: 'too wide for the opening',
+  cornerRadius: 'too thick for the inside corner',
+  floorRadius: 'with too large a corner radius for the floor',
+  scallop: 'leaving too high a cusp',
+  cutterTouches: 'stopped before the depth by their own neck or shank',
+  usableLength: 'too short in their usable length',
+  cutterInFloor: 'standing in the floor, tilted like this',
+  shankNotHeld: 'with a shank that nothing offered holds',
 }
 
-/** Why no cutter came to be built with anything, the commonest reason first; null where some did. */
+/** What kept cutters from being tried in anything, the commonest reason first; null where nothing did. */
 export function noCutterSentence(sortedOut: SortedOut): string | null {
   const reasons = (Object.keys(cutterReasons) as SortedOutReason[])
     .filter((reason) => sortedOut[reason] > 0)
     .toSorted((one, other) => sortedOut[other] - sortedOut[one])
   if (reasons.length === 0) return null
   const said = reasons.map((reason) => `${counted(sortedOut[reason])} ${cutterReasons[reason]}`)
-  return `Of the cutters looked at, ${said.join('; ')}.`
+  return `Of the cutters looked at: ${said.join('; ')}.`
 }
 
 function counted(count: number): string {

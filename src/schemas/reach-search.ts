@@ -7,6 +7,7 @@ import { extensionResponseSchema } from './extension'
 import { idSchema } from './fields'
 import { holderResponseSchema } from './holder'
 import { stockPlaceSchema } from './item'
+import { machineWindowRequestSchema } from './machine-window'
 import { clearancesSchema, featureSchema, optionalSizeSchema, reachResponseSchema, sizeSchema } from './reach'
 
 export const searchRankings = ['stiffness', 'stock', 'cost', 'built'] as const
@@ -32,6 +33,12 @@ const whereSchema = z.strictObject({
   cribId: idSchema.nullish(),
   /** Only what can be put together now: every part in a bin, not worn and not reserved. */
   inStockOnly: z.boolean('Only true or false.').nullish(),
+  /** Only holders of its taper, gauge lengths and widths it takes, and its spindle nose. */
+  machineId: idSchema.nullish(),
+  /** A set-up of the shop's, on its own machine: what its window takes. */
+  setUpId: idSchema.nullish(),
+  /** A set-up written out, as machine-window takes it. */
+  setup: machineWindowRequestSchema.nullish(),
   /** This cutter alone: what holds it, and how. */
   cutterId: idSchema.nullish(),
   forms: z.array(z.enum(cutterForms, 'This is no form of a cutter.')).max(cutterForms.length).nullish(),
@@ -135,8 +142,15 @@ export const searchOptionSchema = z.object({
   ...assemblyFields,
   /** Why it stands where it stands. */
   reason: z.string(),
-  /** The number of the assembly it is already built as. */
-  builtAs: z.string().nullable(),
+  /** The assembly it stands ready as; its stick-out is then the one it was built with. */
+  builtAs: z
+    .object({
+      id: z.string(),
+      number: z.number(),
+      /** In whose hands or in which machine it is. */
+      place: z.string(),
+    })
+    .nullable(),
 })
 export type SearchOptionResponse = z.infer<typeof searchOptionSchema>
 

@@ -7,23 +7,23 @@ import type { SearchedAssembly } from './listed-assembly'
 
 export interface AssemblyFiguresProps {
   assembly: SearchedAssembly
-  /** Of what does not reach nothing is to be set. */
-  reaches: boolean
+  /** Of what does not reach nothing is to be set, of what stands ready nothing any more. */
+  stickOutLabel: 'Stick-out to set' | 'Stick-out as built' | 'Stick-out as drawn'
   unit: LengthUnit
 }
 
 /** The stick-out to set, large enough to be read at arm's length, and the figures beside it. */
-export function AssemblyFigures({ assembly, reaches, unit }: AssemblyFiguresProps) {
+export function AssemblyFigures({ assembly, stickOutLabel, unit }: AssemblyFiguresProps) {
   const { stickOut, reach, stiffness, cost } = assembly
   return (
     <dl className="flex flex-wrap items-baseline gap-x-6 gap-y-1">
-      {reaches ? (
+      {stickOutLabel !== 'Stick-out as drawn' ? (
         <div>
-          <dt className="text-ink-soft text-sm">Stick-out to set</dt>
+          <dt className="text-ink-soft text-sm">{stickOutLabel}</dt>
           <dd className="text-2xl leading-tight font-semibold">{formatLength(stickOut.usedMm, unit)}</dd>
         </div>
       ) : (
-        <Figure label="Stick-out as drawn">{formatLength(stickOut.usedMm, unit)}</Figure>
+        <Figure label={stickOutLabel}>{formatLength(stickOut.usedMm, unit)}</Figure>
       )}
       <Figure label="Gauge length">{formatLength(reach.gaugeLengthMm, unit)}</Figure>
       <Figure label="Bends">

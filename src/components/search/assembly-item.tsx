@@ -6,6 +6,7 @@ import { useReading } from '../reach/use-reach-check'
 import { ButtonLink } from '../ui/button'
 import { AssemblyFigures } from './assembly-figures'
 import { FetchList } from './fetch-list'
+import { KeepAssembly } from './keep-assembly'
 import {
   type AssemblyListing,
   reachCheckPath,
@@ -49,7 +50,7 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
           {name}
         </h3>
         <p className="text-ink-soft text-[0.9375rem] max-sm:hidden">{itemSizes(cutter, unit)}</p>
-        <AssemblyFigures assembly={assembly} reaches={place !== null} unit={unit} />
+        <AssemblyFigures assembly={assembly} stickOutLabel={stickOutLabel(assembly, place)} unit={unit} />
         <div className="max-lg:hidden">{children}</div>
         <Cautions cautions={cautions} className="max-lg:hidden" />
       </div>
@@ -58,6 +59,7 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
         <div className="lg:hidden">{children}</div>
         <Cautions cautions={cautions} className="lg:hidden" />
         <div className="flex flex-wrap items-center gap-2">
+          {place === null ? null : <KeepAssembly assembly={assembly} listing={listing} />}
           <ButtonLink
             href={reachCheckPath(assembly, draft, reading)}
             prefetch={false}
@@ -81,6 +83,11 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
       </div>
     </li>
   )
+}
+
+function stickOutLabel(assembly: SearchedAssembly, place: number | null) {
+  if (place === null) return 'Stick-out as drawn'
+  return 'builtAs' in assembly && assembly.builtAs ? 'Stick-out as built' : 'Stick-out to set'
 }
 
 function Cautions({ cautions, className }: { cautions: readonly string[]; className: string }) {

@@ -1,7 +1,9 @@
 import type { Clearances, Feature } from '@/core/reach/types'
 import { decimalText } from '@/core/units/decimal-text'
 import { type LengthUnit, lengthDecimals } from '@/core/units/length-unit'
-import type { SearchNearMissResponse, SearchOptionResponse } from '@/schemas/reach-search'
+import type { KeptAssembly } from '@/hooks/use-keep-assembly'
+import { askedFeature } from '@/lib/asked-feature'
+import type { ReachSearchBody, SearchNearMissResponse, SearchOptionResponse } from '@/schemas/reach-search'
 import { draftQuery } from '../reach/reach-query'
 import type { Reading } from '../reach/read-field'
 import { type SectionScene, sectionScene } from '../reach/section-scene'
@@ -12,6 +14,7 @@ export type SearchedAssembly = SearchOptionResponse | SearchNearMissResponse
 /** What every line of the answer is shown with. */
 export interface AssemblyListing {
   feature: Feature
+  request: ReachSearchBody
   draft: SearchDraft
   unit: LengthUnit
   clearances: Clearances
@@ -74,4 +77,23 @@ export function reachCheckPath(assembly: SearchedAssembly, draft: SearchDraft, r
   }
   query.set('stickout', decimalText(stickOut.usedMm, 0, lengthDecimals))
   return `/reach?${query}`
+}
+
+/** What is kept of an option: its parts, its stick-out, and the feature that was asked of it. */
+export function keptAssembly(
+  assembly: SearchedAssembly,
+  { feature, request }: AssemblyListing,
+): KeptAssembly {
+  const { cutter, holder, collet, extension, extensionCollet, stickOut } = assembly
+  const named = (row: { id: string } | null) => (row ? { id: row.id } : null)
+  return {
+    feature: askedFeature(feature, request.purpose ?? null),
+    cutter: cutter.piece ? { pieceId: cutter.piece.id } : { id: cutter.id },
+    holder: { id: holder.id },
+    collet: named(collet),
+    extension: named(extension),
+    extensionCollet: named(extensionCollet),
+    stickOutMm: stickOut.usedMm,
+    clearances: request.clearances ?? null,
+  }
 }

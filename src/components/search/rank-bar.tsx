@@ -1,6 +1,7 @@
 'use client'
 
 import { useCribs } from '@/hooks/use-cribs'
+import { useMachines, useSetUps } from '@/hooks/use-machines'
 import type { SearchRanking } from '@/schemas/reach-search'
 import { useCan } from '../layout/shop-context'
 import { SelectField } from '../ui/select-field'
@@ -41,7 +42,8 @@ export function RankBar({ choices, onChoices }: RankBarProps) {
         ]}
         onChange={(event) => onChoices({ cribId: event.target.value || null })}
       />
-      <label className="col-span-2 flex min-h-10 items-center gap-2 pointer-coarse:min-h-11">
+      <MachineField choices={choices} onChoices={onChoices} />
+      <label className="flex min-h-10 items-center gap-2 pointer-coarse:min-h-11">
         <input
           type="checkbox"
           className="accent-accent size-5"
@@ -51,5 +53,36 @@ export function RankBar({ choices, onChoices }: RankBarProps) {
         Only what is in stock
       </label>
     </div>
+  )
+}
+
+/** A machine, or one of its set-ups: what its spindle takes, and what its window does. Nothing where there is none. */
+function MachineField({ choices, onChoices }: RankBarProps) {
+  const machines = useMachines()
+  const setUps = useSetUps('all')
+  if (machines.rows.length === 0) return null
+  const { machineId, setUpId } = choices
+  return (
+    <SelectField
+      label="Machine and set-up"
+      className="sm:w-64"
+      value={setUpId ? `setup:${setUpId}` : machineId ? `machine:${machineId}` : ''}
+      options={[
+        { value: '', label: 'Any machine' },
+        ...machines.rows.flatMap((machine) => [
+          { value: `machine:${machine.id}`, label: `${machine.code} · ${machine.name}` },
+          ...setUps.rows
+            .filter((setUp) => setUp.machineId === machine.id)
+            .map((setUp) => ({
+              value: `setup:${setUp.id}`,
+              label: `${machine.code} · set-up ${setUp.name}`,
+            })),
+        ]),
+      ]}
+      onChange={(event) => {
+        const [kind, id = null] = event.target.value.split(':')
+        onChoices({ machineId: kind === 'machine' ? id : null, setUpId: kind === 'setup' ? id : null })
+      }}
+    />
   )
 }

@@ -13,6 +13,7 @@ import { featureWords } from './feature-words'
 import { SearchForm } from './search-form'
 import {
   compileSearch,
+  noChoices,
   type SearchChoices,
   type SearchDraft,
   searchDraft,
@@ -97,14 +98,6 @@ export function SearchPage() {
       </div>
     </>
   )
-}
-
-const noChoices: SearchChoices = {
-  rankBy: 'stiffness',
-  cribId: null,
-  isInStockOnly: false,
-  forms: [],
-  substrates: [],
 }
 
 /** What stands against the question, beside the fields it is about: read here, or said by the server. */

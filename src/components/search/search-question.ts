@@ -31,6 +31,8 @@ export const searchTextNames = Object.keys(searchTexts) as SearchText[]
 export interface SearchChoices {
   rankBy: SearchRanking
   cribId: string | null
+  machineId: string | null
+  setUpId: string | null
   isInStockOnly: boolean
   forms: readonly CutterForm[]
   substrates: readonly Substrate[]
@@ -74,11 +76,17 @@ function typedText(name: SearchText, written: string | null, reading: Reading): 
 export function searchChoices(query: URLSearchParams): SearchChoices {
   return {
     rankBy: searchRankings.find((known) => known === query.get('rank')) ?? 'stiffness',
-    cribId: /^[1-9]\d{0,17}$/.test(query.get('crib') ?? '') ? query.get('crib') : null,
+    cribId: idOrNull(query.get('crib')),
+    machineId: idOrNull(query.get('machine')),
+    setUpId: idOrNull(query.get('setup')),
     isInStockOnly: query.get('stock') === 'yes',
     forms: listed(query.get('forms'), cutterForms),
     substrates: listed(query.get('material'), substrates),
   }
+}
+
+function idOrNull(text: string | null): string | null {
+  return text !== null && /^[1-9]\d{0,17}$/.test(text) ? text : null
 }
 
 function listed<Word extends string>(text: string | null, known: readonly Word[]): Word[] {
@@ -106,10 +114,23 @@ export function withChoices(asked: URLSearchParams, choices: SearchChoices): URL
   const set = (name: string, text: string | null) => (text ? query.set(name, text) : query.delete(name))
   set('rank', choices.rankBy === 'stiffness' ? null : choices.rankBy)
   set('crib', choices.cribId)
+  set('machine', choices.machineId)
+  set('setup', choices.setUpId)
   set('stock', choices.isInStockOnly ? 'yes' : null)
   set('forms', choices.forms.join(','))
   set('material', choices.substrates.join(','))
   return query
+}
+
+/** Nothing left out, the stiffest first. */
+export const noChoices: SearchChoices = {
+  rankBy: 'stiffness',
+  cribId: null,
+  machineId: null,
+  setUpId: null,
+  isInStockOnly: false,
+  forms: [],
+  substrates: [],
 }
 
 /** The request an address makes, or what is wrong with it, by the request's own names of the places. */
@@ -146,6 +167,8 @@ export function compileSearch(draft: SearchDraft, reading: Reading, settings: Re
       clearances: clearances.shankMm === null && clearances.holderMm === null ? null : clearances,
       where: {
         cribId: choices.cribId,
+        machineId: choices.machineId,
+        setUpId: choices.setUpId,
         cutterId,
         inStockOnly: choices.isInStockOnly,
         forms: choices.forms.length > 0 ? [...choices.forms] : null,

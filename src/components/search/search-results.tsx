@@ -19,7 +19,7 @@ import type { AssemblyListing } from './listed-assembly'
 import { NearMissItem } from './near-miss-item'
 import { OptionItem } from './option-item'
 import { RankBar } from './rank-bar'
-import type { SearchChoices, SearchDraft } from './search-question'
+import { noChoices, type SearchChoices, type SearchDraft } from './search-question'
 import { useIsSlow } from './use-is-slow'
 
 export interface SearchResultsProps {
@@ -95,6 +95,7 @@ function Answer({ answer, request, draft, onChoices }: AnswerProps) {
   if (!feature) return null
   const listing: AssemblyListing = {
     feature,
+    request,
     draft,
     unit,
     clearances: {
@@ -193,10 +194,7 @@ function WayOn({ code, onChoices }: { code: SearchNoteCode; onChoices: AnswerPro
       )
     case 'nothing-passes-filters':
       return (
-        <Button
-          className="mt-2"
-          onClick={() => onChoices({ cribId: null, isInStockOnly: false, forms: [], substrates: [] })}
-        >
+        <Button className="mt-2" onClick={() => onChoices(noChoices)}>
           Look through everything
         </Button>
       )

@@ -1,5 +1,5 @@
 import type { Feature } from '@/core/reach/types'
-import type { SearchAnswer, SearchChange } from '@/core/search/types'
+import type { SearchAnswer, SearchChange, SearchOption } from '@/core/search/types'
 import {
   changeSentence,
   nearMissSentence,
@@ -7,11 +7,13 @@ import {
   type RankingContext,
   rankSentence,
 } from '@/lib/search-sentences'
-import type {
-  SearchAnswerResponse,
-  SearchNearMissResponse,
-  SearchOptionResponse,
+import {
+  type SearchAnswerResponse,
+  type SearchNearMissResponse,
+  type SearchOptionResponse,
+  searchLimits,
 } from '@/schemas/reach-search'
+import type { BuiltOption } from './built-options'
 import {
   type ListedAssembly,
   type ListingContext,
@@ -23,12 +25,13 @@ import { searchNotes } from './search-notes'
 
 /** The answer of one feature as it is sent: every assembly with its rows, its check and its reason. */
 export function listedAnswer(
+  ready: readonly BuiltOption[],
   answer: SearchAnswer,
   feature: Feature,
   context: ListingContext,
 ): SearchAnswerResponse {
   return {
-    options: listedOptions(answer, feature, context),
+    options: listedOptions(ready, answer, feature, context),
     nearMisses: listedNearMisses(answer, feature, context),
     considered: answer.considered,
     reachable: answer.reachable,
@@ -36,17 +39,24 @@ export function listedAnswer(
   }
 }
 
-/** The options in their order, each with the reason it stands there. */
+/** The options in their order, what stands ready before the rest, each with the reason it stands there. */
 function listedOptions(
+  ready: readonly BuiltOption[],
   answer: SearchAnswer,
   feature: Feature,
   context: ListingContext,
 ): SearchOptionResponse[] {
-  const listed = answer.options.flatMap((option) => listedAssembly(option, feature, context) ?? [])
-  const ranked = listed.map(rankedOption)
+  const { rankBy, sentenceUnit } = context.body
+  const options: readonly (SearchOption & Partial<BuiltOption>)[] = [...ready, ...answer.options]
+  const listed = options
+    .flatMap((option) => {
+      const assembly = listedAssembly(option, feature, context)
+      return assembly ? [{ assembly, builtAs: option.built ? builtAs(option.built) : null }] : []
+    })
+    .slice(0, searchLimits(context.body).limit)
+  const ranked = listed.map(({ assembly, builtAs }) => rankedOption(assembly, builtAs))
   const [first] = ranked
   if (!first) return []
-  const { rankBy, sentenceUnit } = context.body
   const ranking: RankingContext = {
     rankBy,
     first,
@@ -55,14 +65,20 @@ function listedOptions(
     unit: sentenceUnit,
   }
   const stiffest = Math.min(...ranked.map(({ complianceUmPerN }) => complianceUmPerN))
-  return listed.map((assembly, index) => ({
+  return listed.map(({ assembly, builtAs }, index) => ({
     ...withRatio(assembly, stiffest),
+    // The same parts may stand ready, and be listed as what could be built anew.
+    key: builtAs === null ? assembly.key : `${assembly.key}.${builtAs.number}`,
     reason: rankSentence(ranked[index] ?? first, ranking),
-    builtAs: null,
+    builtAs,
   }))
 }
 
-function rankedOption(assembly: ListedAssembly): RankedOption {
+function builtAs({ id, number, place }: BuiltOption['built']): NonNullable<SearchOptionResponse['builtAs']> {
+  return { id, number, place }
+}
+
+function rankedOption(assembly: ListedAssembly, builtAs: SearchOptionResponse['builtAs']): RankedOption {
   const { cutter, stiffness, stickOut, reach, extension, cost } = assembly
   return {
     complianceUmPerN: stiffness.complianceUmPerN,
@@ -73,7 +89,7 @@ function rankedOption(assembly: ListedAssembly): RankedOption {
     hasExtension: extension !== null,
     missingParts: missingPartWords(assembly),
     cost: cost?.amount,
-    builtAs: null,
+    builtAs,
   }
 }
 

@@ -12,8 +12,9 @@ import type { ReachSearchRequest, SearchOptionResponse } from '@/schemas/reach-s
 import type { Actor } from '../../auth/actor'
 import type { PiecePlace } from '../../db/read-models/tooling-stock'
 import type { CribTables, CutterSource } from './crib-tables'
+import type { MachineLimits } from './machine-limits'
+import { asMounted } from './mounted-request'
 import type { PartRows } from './named-parts'
-import { askedFeature } from './search-question'
 
 type Feature = NonNullable<ReachSearchRequest['feature']>
 
@@ -24,7 +25,7 @@ export interface ListingContext {
   rows: PartRows
   piecePlaces: Map<string, PiecePlace>
   body: ReachSearchRequest
-  spindleNoseDiameterMm: number | null
+  limits: MachineLimits
   currency: string
 }
 
@@ -61,21 +62,9 @@ export function listedAssembly(
     (option.extensionIndex === null || extension != null) &&
     (option.extensionColletIndex === null || extensionCollet != null)
   if (!cutter || !holder || !isWhole) return null
-  const answer = reachAnswer({
-    feature: askedFeature(feature, body.purpose ?? null),
-    cutter,
-    holder: { ...holder, spindleNoseDiameterMm: context.spindleNoseDiameterMm },
-    collet: collet ?? null,
-    extension,
-    bore: (extension ?? holder).bore,
-    stickOutMm: option.stickOutMm,
-    clearances: {
-      ...(body.clearances?.shankMm == null ? {} : { shankMm: body.clearances.shankMm }),
-      ...(body.clearances?.holderMm == null ? {} : { holderMm: body.clearances.holderMm }),
-    },
-    sideLoadN: body.sideLoadN ?? null,
-    settings: crib.tables.settings,
-  })
+  const mounted = asMounted(option, feature, crib.tables, body, context.limits)
+  if (!mounted) return null
+  const answer = reachAnswer({ ...mounted, stickOutMm: option.stickOutMm })
   const parts = partsOf({ cutter, holder, collet, extension, extensionCollet })
   const isExtensionUnchecked =
     option.extensionIndex !== null && tooling.extensions[option.extensionIndex]?.shankDiameterMm == null

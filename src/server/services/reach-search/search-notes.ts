@@ -36,11 +36,11 @@ function nothingNotes({ considered, sortedOut, nearMisses }: SearchAnswer, { too
     return [{ code: 'nothing-passes-filters', text: `No ${what} passes what you filter by.` }]
   }
   const why = noCutterSentence(sortedOut)
-  if (considered === 0)
-    return [{ code: 'no-cutter-suits', text: `Nothing could be built for this. ${why ?? ''}`.trim() }]
-  const near =
-    nearMisses.length > 0 ? ' What comes nearest is listed below, with what stops it.' : ` ${why ?? ''}`
-  return [{ code: 'nothing-reaches', text: `Nothing the crib could build reaches this.${near}`.trim() }]
+  const near = nearMisses.length > 0 ? 'What comes nearest is listed below, with what stops it.' : null
+  const said = (first: string) => [first, why, near].filter((words) => words !== null).join(' ')
+  return considered === 0
+    ? [{ code: 'no-cutter-suits', text: said('Nothing could be built for this.') }]
+    : [{ code: 'nothing-reaches', text: said('Nothing the crib could build reaches this.') }]
 }
 
 const tableWords: Record<SearchTableName, [one: string, many: string]> = {

@@ -3,12 +3,6 @@ import type { SearchQuestion } from '@/core/search/types'
 import { type ReachSearchRequest, type SearchPurpose, searchLimits } from '@/schemas/reach-search'
 import type { SearchFilters } from './search-filters'
 
-/** A roughing cutter leaves inside corner and floor radius to the finishing one; depth and opening it needs. */
-export function askedFeature(feature: Feature, purpose: SearchPurpose | null): Feature {
-  if (purpose !== 'roughing' || feature.kind === 'hole') return feature
-  return { ...feature, insideCornerRadiusMm: null, floorRadiusMm: null }
-}
-
 /** What a roughing cutter leaves of a feature, in words; null where nothing was asked that it would leave. */
 export function leftToFinishing(feature: Feature, purpose: SearchPurpose | null): string | null {
   if (purpose !== 'roughing' || feature.kind === 'hole') return null
@@ -24,7 +18,7 @@ export function leftToFinishing(feature: Feature, purpose: SearchPurpose | null)
 export function searchQuestion(
   feature: Feature,
   body: ReachSearchRequest,
-  { masks, penalties }: Pick<SearchFilters, 'masks' | 'penalties'>,
+  { masks, penalties, limits }: Pick<SearchFilters, 'masks' | 'penalties' | 'limits'>,
 ): SearchQuestion {
   const { shankMm, holderMm } = body.clearances ?? {}
   return {
@@ -38,6 +32,8 @@ export function searchQuestion(
     masks,
     penalties,
     longestStickOutToDiameter: body.where?.longestStickOutToDiameter ?? null,
+    gaugeLengthMm: limits.gaugeLengthMm,
+    spindleNoseDiameterMm: limits.spindleNoseDiameterMm,
     perCutter: body.perCutter ?? null,
     ...searchLimits(body),
   }

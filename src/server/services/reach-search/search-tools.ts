@@ -1,14 +1,15 @@
 import { CoreInputError } from '@/core/core-input-error'
 import { can } from '@/core/policies/permissions'
-import type { Feature } from '@/core/reach/types'
 import { searchReach } from '@/core/search/search-reach'
 import type { AssemblyParts, SearchAnswer } from '@/core/search/types'
 import { AppError } from '@/lib/app-error'
 import type { ReachSearchRequest, SearchAnswerResponse } from '@/schemas/reach-search'
 import type { Actor } from '../../auth/actor'
 import { db } from '../../db/connection'
+import { readBuiltAssemblies } from '../../db/read-models/built-assemblies'
 import { readShopSettings } from '../../db/stores/shop-settings-store'
-import { type CribTables, cribTables } from './crib-tables'
+import { builtOptions } from './built-options'
+import { cribTables } from './crib-tables'
 import { inTurns } from './in-turns'
 import { listedAnswer } from './listed-answer'
 import { readPartRows } from './named-parts'
@@ -36,29 +37,26 @@ export async function searchTools(
   const crib = await cribTables()
   const filters = await searchFilters(crib, body)
   const features = body.features ?? (body.feature ? [body.feature] : [])
+  const built = body.rankBy === 'built' ? await readBuiltAssemblies(db()) : []
   const answered = await inTurns(features, signal, (feature, index) => ({
     feature,
-    answer: answerAt(featurePath(body, index), crib, feature, body, filters),
+    ready: refusedAt(featurePath(body, index), () => builtOptions(feature, crib, built, body, filters)),
+    answer: refusedAt(featurePath(body, index), () =>
+      searchReach(crib.tables, searchQuestion(feature, body, filters)),
+    ),
   }))
-  const answers = answered.map(({ answer }) => answer)
   const { currency } = await readShopSettings(db())
-  const rows = await readPartRows(actor, crib, answers.flatMap(namedAssemblies), body.where?.cribId ?? null)
-  const context = {
-    actor,
-    crib,
-    rows,
-    piecePlaces: filters.piecePlaces,
-    body,
-    spindleNoseDiameterMm: null,
-    currency,
-  }
-  const results = await inTurns(answered, signal, ({ answer, feature }) =>
-    listedAnswer(answer, feature, context),
+  const named = answered.flatMap(({ ready, answer }) => [...ready, ...namedAssemblies(answer)])
+  const rows = await readPartRows(actor, crib, named, body.where?.cribId ?? null)
+  const { piecePlaces, limits } = filters
+  const context = { actor, crib, rows, piecePlaces, limits, body, currency }
+  const results = await inTurns(answered, signal, ({ ready, answer, feature }) =>
+    listedAnswer(ready, answer, feature, context),
   )
   return {
     results,
-    considered: answers.reduce((sum, { considered }) => sum + considered, 0),
-    reachable: answers.reduce((sum, { reachable }) => sum + reachable, 0),
+    considered: results.reduce((sum, { considered }) => sum + considered, 0),
+    reachable: results.reduce((sum, { reachable }) => sum + reachable, 0),
     computedInMs: performance.now() - startedAt,
   }
 }
@@ -84,15 +82,9 @@ function featurePath(body: ReachSearchRequest, index: number): string {
 }
 
 /** What the core refuses of a feature is said at that feature. */
-function answerAt(
-  path: string,
-  { tables }: CribTables,
-  feature: Feature,
-  body: ReachSearchRequest,
-  filters: Parameters<typeof searchQuestion>[2],
-): SearchAnswer {
+function refusedAt<Answer>(path: string, compute: () => Answer): Answer {
   try {
-    return searchReach(tables, searchQuestion(feature, body, filters))
+    return compute()
   } catch (error) {
     if (!(error instanceof CoreInputError)) throw error
     const place = error.path.replace(/^feature/, path)
