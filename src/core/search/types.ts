@@ -139,8 +139,9 @@ export interface Shortfall {
 
 /** What would make a near miss reach, each tried by the reach check before it is said. */
 export type SearchChange =
-  /** Another holder or chuck of the crib, with an extension where the index says so, that the question left out. */
-  | { kind: 'holder' | 'extension'; option: SearchOption }
+  /** Another holder of the crib, without or with an extension, that the question's masks left out. */
+  | { kind: 'holder'; option: SearchOption }
+  | { kind: 'extension'; option: SearchOption }
   /** The same stick-out rules, set longer than the least: the assembly was too short for the machine. */
   | { kind: 'stickOut'; stickOutMm: number }
   /** A nut no wider than this, on the same chuck. */
