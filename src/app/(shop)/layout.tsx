@@ -23,6 +23,7 @@ export default async function ShopLayout({ children }: { children: ReactNode }) 
         decimalComma: settings.decimalComma,
         currency: settings.currency,
         reachSettings: settings.reach,
+        measuringToleranceMm: settings.measuringToleranceMm,
         cuttingSettings: settings.cutting,
       }}
     >

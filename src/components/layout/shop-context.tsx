@@ -15,6 +15,8 @@ export interface Shop {
   decimalComma: boolean
   currency: string
   reachSettings: ReachSettings
+  /** What a measured figure may differ from the calculated one. */
+  measuringToleranceMm: number
   cuttingSettings: CuttingSettings
 }
 

@@ -7,6 +7,7 @@ import type { ToolPart } from '@/core/outline/types'
 import { useShop } from '../layout/shop-context'
 import type { FieldErrors } from './compile-check'
 import { searchPath } from './feature-only'
+import { KeepCheck } from './keep-check'
 import { type DraftChange, isDraftEmpty, type ReachDraft } from './reach-draft'
 import { fieldText, type Reading } from './read-field'
 import { SectionDrawing } from './section-drawing'
@@ -59,6 +60,9 @@ export function ReachSheet(props: ReachSheetProps) {
             Find what in the crib reaches this
           </Link>
         </p>
+      ) : null}
+      {answer?.verdict === 'reaches' ? (
+        <KeepCheck draft={draft} compiled={compiled} stickOutMm={answer.stickOut.usedMm} />
       ) : null}
       <div className="relative">
         <SheetToolbar view={view} onView={setView} isCutterAlone={scene?.heights.noseMm == null} />
