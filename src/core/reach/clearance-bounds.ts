@@ -51,15 +51,22 @@ export function mostBoundMm(at: Placement, clearanceMm: number): number {
  * Radius of the widened nose face from which on it asks for `mostBoundMm`, whatever stands behind it.
  *
  * Units      Millimetres.
- * Result     Infinity with tilt or obstacles, where no radius says so.
+ * Result     Infinity with tilt, where no radius says so.
  *
  * @example
  * fullDepthRadiusMm(placementOf({ kind: 'wall', depthMm: 25 }, squareCutter)).toFixed(4) // => '1.5875'
  */
 export function fullDepthRadiusMm(at: Placement): number {
   if (at.kind === 'hole') return at.roomRadiusMm + overlapToleranceMm
-  if (at.tiltDeg > 0 || at.obstacles.length > 0) return Number.POSITIVE_INFINITY
-  return topEdgeRadiusMm(at) + overlapToleranceMm
+  if (at.tiltDeg > 0) return Number.POSITIVE_INFINITY
+  return topEdgeRadiusMm(at) + highestSetbackMm(at) + overlapToleranceMm
+}
+
+/** Of the highest obstacles the nearest; 0 where nothing stands above the top face. */
+function highestSetbackMm({ obstacles }: WallPlacement): number {
+  const highestMm = Math.max(0, ...obstacles.map(({ riseMm }) => riseMm))
+  if (highestMm === 0) return 0
+  return Math.min(...obstacles.filter(({ riseMm }) => riseMm === highestMm).map(({ setbackMm }) => setbackMm))
 }
 
 /**
