@@ -1,6 +1,7 @@
 import type { Knex } from 'knex'
 import { closeDb, db } from '@/server/db/connection'
 import { inTransaction } from '@/server/db/transaction'
+import { loadAssemblies } from './demo-shop/assemblies'
 import { loadCatalogue } from './demo-shop/catalogue'
 import { loadFixtures, loadSetUps } from './demo-shop/fixtures'
 import { loadPeople } from './demo-shop/people'
@@ -23,6 +24,7 @@ async function loadDemoShop(trx: Knex): Promise<string> {
   await loadSetUps(trx, await loadFixtures(trx, places, people))
   const plans = await loadReorderPoints(trx, items, places)
   const movements = await loadYear(trx, { people, places, items, plans })
+  await loadAssemblies(trx, items, people)
   await trx('shop_settings').where('id', 1).update({
     shop_name: 'Skerry Lane Machine Works',
     currency: 'EUR',

@@ -25,7 +25,7 @@ export function AssemblyChecks({ checks }: { checks: readonly AssemblyCheck[] })
               <div>
                 <p className="font-semibold">
                   {featureWords(check.feature, unit)}
-                  {check.holds ? '' : ': no longer holds'}
+                  {checkMark(check)}
                 </p>
                 <p>{check.answer ? verdictSentence(check.answer, check.feature, unit) : null}</p>
                 <p className="text-ink-soft text-sm">Worked out {formatInstant(check.checkedAt)}</p>
@@ -36,4 +36,9 @@ export function AssemblyChecks({ checks }: { checks: readonly AssemblyCheck[] })
       </ul>
     </ItemSection>
   )
+}
+
+function checkMark({ holds, answer }: AssemblyCheck): string {
+  if (holds) return ''
+  return answer?.verdict === 'reaches' ? ': holds as set, not as measured' : ': no longer holds'
 }

@@ -11,7 +11,7 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { placeWords } from './assembly-words'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { type AssemblyDialogProps, useDialogAct } from './use-dialog-act'
 
 interface PartChoice {
@@ -65,7 +65,7 @@ export function BreakDownDialog(props: AssemblyDialogProps) {
       title={`Break assembly ${assembly.number} down`}
       description="Every part goes back, all together."
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         {mayScrap ? null : (
           <Notice kind="plain">
             It is not in your hands: take it out first where a part is broken and goes to scrap.

@@ -10,7 +10,7 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { placeWords } from './assembly-words'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { MachineFields, type MachineSpotText, readSpot } from './machine-fields'
 import { type AssemblyDialogProps, useDialogAct } from './use-dialog-act'
 
@@ -88,7 +88,7 @@ export function BuildDialog(props: AssemblyDialogProps) {
       title={`Build assembly ${assembly.number}`}
       description={`Stick-out ${formatLength(assembly.stickOutMm, unit)}, gauge length ${formatLength(assembly.gaugeLengthMm, unit)}. All parts are issued together.`}
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         {parts.map(({ part, sources, source }, index) =>
           source === null ? (
             <Notice key={part.kind} kind="collision">

@@ -1,6 +1,10 @@
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 
+/** A form filled in at the machine: under a finger every field is as high as its buttons. */
+export const gloveFormClass =
+  'flex flex-col gap-4 pointer-coarse:[&_:is(input,select)]:min-h-16 pointer-coarse:[&_:is(input,select)]:text-lg'
+
 export interface DialogFootProps {
   label: string
   busyLabel: string

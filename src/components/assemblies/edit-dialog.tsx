@@ -10,7 +10,7 @@ import { useShop } from '../layout/shop-context'
 import { Dialog } from '../ui/dialog'
 import { LengthField } from '../ui/length-field'
 import { TextAreaField, TextField } from '../ui/text-field'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { OffsetFields, offsetTexts, readOffsets } from './offset-fields'
 import type { AssemblyDialogProps } from './use-dialog-act'
 
@@ -65,7 +65,7 @@ export function EditDialog({ assembly, onClose, onChanged }: AssemblyDialogProps
       onOpenChange={(isOpen) => (isOpen ? undefined : onClose())}
       title={`Change assembly ${assembly.number}`}
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         <TextField
           label="Name"
           value={name}

@@ -12,7 +12,7 @@ import { useCan, useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
 import { TextField } from '../ui/text-field'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { noOffsetTexts, OffsetFields, readOffsets } from './offset-fields'
 
 /** What reaches, by the ids of its parts. */
@@ -77,7 +77,7 @@ function KeepDialog({ option, onClose }: { option: KeptOption; onClose: () => vo
       title="Keep as assembly"
       description={`Set to ${formatLength(option.stickOutMm, unit)} of stick-out. It gets the next number, and is marked when a part of it changes so that it no longer holds.`}
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         <TextField
           label="Name"
           value={name}

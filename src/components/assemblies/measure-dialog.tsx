@@ -8,7 +8,7 @@ import { Dialog } from '../ui/dialog'
 import { LengthField } from '../ui/length-field'
 import { Notice } from '../ui/notice'
 import { difference } from './assembly-words'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { type AssemblyDialogProps, useDialogAct } from './use-dialog-act'
 
 /** What was read off the height gauge or the presetter, beside what was calculated, before it is kept. */
@@ -44,7 +44,7 @@ export function MeasureDialog(props: AssemblyDialogProps) {
       title={`Measure assembly ${assembly.number}`}
       description={`To expect: gauge length ${formatLength(assembly.gaugeLengthMm, unit)}, diameter ${formatLength(assembly.tools.cutter.cuttingDiameterMm, unit)}.`}
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         <LengthField
           label="Gauge length"
           value={length}

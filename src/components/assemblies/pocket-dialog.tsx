@@ -2,7 +2,7 @@
 
 import { type FormEvent, useState } from 'react'
 import { Dialog } from '../ui/dialog'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { MachineFields, type MachineSpotText, readSpot } from './machine-fields'
 import { OffsetFields, offsetTexts, readOffsets } from './offset-fields'
 import { type AssemblyDialogProps, useDialogAct } from './use-dialog-act'
@@ -42,7 +42,7 @@ export function PocketDialog(props: AssemblyDialogProps) {
       title={`Move assembly ${assembly.number}`}
       description="Its parts move with it in the books."
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         <MachineFields
           spot={spot}
           gaugeLengthMm={assembly.gaugeLengthMm}
@@ -51,7 +51,7 @@ export function PocketDialog(props: AssemblyDialogProps) {
         />
         <OffsetFields texts={offsets} errors={errors} onChange={setOffsets} />
         <DialogFoot
-          label={spot.machineId === '' ? 'Take it out' : 'Put it in'}
+          label={spot.machineId !== '' ? 'Put it in' : assembly.machine ? 'Take it out' : 'Take it in hand'}
           busyLabel="Moving …"
           isBusy={isBusy}
           failure={failure}

@@ -12,7 +12,7 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { difference } from './assembly-words'
-import { DialogFoot } from './dialog-foot'
+import { DialogFoot, gloveFormClass } from './dialog-foot'
 
 const columnLabels = [
   ['number', 'Assembly number'],
@@ -71,7 +71,7 @@ export function PresetterDialog({ onClose, onTaken }: { onClose: () => void; onT
       description="CSV with the headings Assembly, Gauge length and, where measured, Diameter."
       shape="side"
     >
-      <form noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+      <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
         <label className="flex flex-col gap-1 font-semibold">
           File
           <input
