@@ -43,6 +43,8 @@ const whereSchema = z.strictObject({
   cutterId: idSchema.nullish(),
   forms: z.array(z.enum(cutterForms, 'This is no form of a cutter.')).max(cutterForms.length).nullish(),
   substrates: z.array(z.enum(substrates, 'Only carbide or hss.')).max(substrates.length).nullish(),
+  /** A material of the shop's starting speeds: cutters it has one for in it, each with where to start. */
+  material: z.string('This is a text.').trim().min(1, 'Name a material.').max(200).nullish(),
   longestStickOutToDiameter: sizeSchema.positive('More than 0.').nullish(),
 })
 
@@ -134,6 +136,16 @@ const assemblyFields = {
   }),
   /** Of whole assemblies: as many as the part there is least of; and where every part lies. */
   stock: z.object({ onHand: z.number(), available: z.number(), locations: z.array(partPlaceSchema) }),
+  /** In the material named, at the full diameter; null where none was. */
+  speed: z
+    .object({
+      lowMPerMin: z.number(),
+      highMPerMin: z.number(),
+      lowRpm: z.number(),
+      highRpm: z.number(),
+      limited: z.enum(['no', 'high', 'all']),
+    })
+    .nullable(),
   /** Absent for those who see no costs; the amount is null where the cost of a part is not known. */
   cost: z.object({ amount: z.number().nullable(), currency: z.string() }).optional(),
 }

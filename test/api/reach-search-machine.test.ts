@@ -83,7 +83,9 @@ describe('a search for a machine', () => {
 
 describe('a search for a set-up', () => {
   it('offers what its window takes, by hand 130 to 145 of gauge length', async () => {
-    expect(optionsOf(await search({ setup: setUp() }))).toHaveLength(1)
+    const [option] = optionsOf(await search({ setup: setUp() }))
+    // 39.5 of 3.175 are 12.4 diameters.
+    expect(option?.cautions.join(' ')).toContain('12.4 × diameter')
     expect(optionsOf(await search({ setup: setUp({ highestMm: 435.5 }) }))).toHaveLength(1)
     expect(optionsOf(await search({ setup: setUp({ highestMm: 436 }) }))).toEqual([])
   })
@@ -122,6 +124,37 @@ describe('a search for a set-up', () => {
     const answer = await search(where)
     expect([answer.status, faultPaths(answer)]).toEqual([422, [path]])
     expect(answer.body.detail).toContain(words)
+  })
+})
+
+describe('a search in a material', () => {
+  it('says where to start, and leaves out tool materials the shop has no speed for in it', async () => {
+    const admin = await signedInAs('admin')
+    const material = uniqueCode('Alloy')
+    const row = { isoGroup: 'P', material, substrate: 'carbide', lowMPerMin: 50, highMPerMin: 100 }
+    expect((await admin.post('/api/starting-speeds', row)).status).toBe(201)
+    // The cutter's own material was never entered: it counts as carbide, as in its stiffness.
+    const [option] = optionsOf(await search({ material: material.toLowerCase() }))
+    // By hand: 1000·50/(π·3.175) = 5012.7 rpm.
+    expect(option?.speed).toMatchObject({ lowMPerMin: 50, highMPerMin: 100, limited: 'no' })
+    expect(option?.speed?.lowRpm).toBeCloseTo(5012.74, 1)
+    expect(optionsOf(await search({}))[0]?.speed).toBeNull()
+
+    const softer = uniqueCode('Alloy')
+    await admin.post('/api/starting-speeds', { ...row, material: softer, substrate: 'hss' })
+    expect(optionsOf(await search({ material: softer }))).toEqual([])
+    const unknown = await search({ material: uniqueCode('Alloy') })
+    expect([unknown.status, faultPaths(unknown)]).toEqual([422, ['where.material']])
+  })
+
+  it('holds the speed to the machine’s fastest', async () => {
+    const admin = await signedInAs('admin')
+    const material = uniqueCode('Alloy')
+    const row = { isoGroup: 'P', material, substrate: 'carbide', lowMPerMin: 50, highMPerMin: 300 }
+    await admin.post('/api/starting-speeds', row)
+    const { body: mill } = await crib.post('/api/machines', machine({ maximumRpm: 8000 }))
+    const [option] = optionsOf(await search({ material, machineId: mill.id }))
+    expect(option?.speed).toMatchObject({ highRpm: 8000, limited: 'high' })
   })
 })
 

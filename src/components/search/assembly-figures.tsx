@@ -3,6 +3,7 @@ import { decimalText } from '@/core/units/decimal-text'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { formatLength } from '@/lib/format-length'
 import { formatMoney } from '@/lib/format-money'
+import { formatRpm, formatSpeedRange } from '@/lib/format-speed'
 import type { SearchedAssembly } from './listed-assembly'
 
 export interface AssemblyFiguresProps {
@@ -14,7 +15,7 @@ export interface AssemblyFiguresProps {
 
 /** The stick-out to set, large enough to be read at arm's length, and the figures beside it. */
 export function AssemblyFigures({ assembly, stickOutLabel, unit }: AssemblyFiguresProps) {
-  const { stickOut, reach, stiffness, cost } = assembly
+  const { stickOut, reach, stiffness, speed, cost } = assembly
   return (
     <dl className="flex flex-wrap items-baseline gap-x-6 gap-y-1">
       {stickOutLabel !== 'Stick-out as drawn' ? (
@@ -36,6 +37,16 @@ export function AssemblyFigures({ assembly, stickOutLabel, unit }: AssemblyFigur
         ) : null}
       </Figure>
       <Figure label="Stick-out to diameter">{decimalText(stiffness.stickOutToDiameter, 1, 1)}</Figure>
+      {speed ? (
+        <Figure label="Speed to start from">
+          {formatRpm(speed.lowRpm)} to {formatRpm(speed.highRpm)}
+          <span className="text-ink-soft">
+            {' '}
+            · {formatSpeedRange(speed, unit)}
+            {speed.limited === 'no' ? '' : ', held to what cutter, holder or spindle allow'}
+          </span>
+        </Figure>
+      ) : null}
       {cost ? (
         <Figure label="Cost of its parts">
           {cost.amount === null ? 'not known' : formatMoney(cost.amount, cost.currency)}

@@ -1,7 +1,6 @@
 import type { Clearances, Feature } from '@/core/reach/types'
 import { decimalText } from '@/core/units/decimal-text'
 import { type LengthUnit, lengthDecimals } from '@/core/units/length-unit'
-import type { KeptAssembly } from '@/hooks/use-keep-assembly'
 import { askedFeature } from '@/lib/asked-feature'
 import type { ReachSearchBody, SearchNearMissResponse, SearchOptionResponse } from '@/schemas/reach-search'
 import { draftQuery } from '../reach/reach-query'
@@ -80,20 +79,20 @@ export function reachCheckPath(assembly: SearchedAssembly, draft: SearchDraft, r
 }
 
 /** What is kept of an option: its parts, its stick-out, and the feature that was asked of it. */
-export function keptAssembly(
-  assembly: SearchedAssembly,
-  { feature, request }: AssemblyListing,
-): KeptAssembly {
+export function keptOption(assembly: SearchedAssembly, { feature, request }: AssemblyListing) {
   const { cutter, holder, collet, extension, extensionCollet, stickOut } = assembly
-  const named = (row: { id: string } | null) => (row ? { id: row.id } : null)
+  const { shankMm, holderMm } = request.clearances ?? {}
+  const isOwnClearance = shankMm != null || holderMm != null
   return {
     feature: askedFeature(feature, request.purpose ?? null),
     cutter: cutter.piece ? { pieceId: cutter.piece.id } : { id: cutter.id },
     holder: { id: holder.id },
-    collet: named(collet),
-    extension: named(extension),
-    extensionCollet: named(extensionCollet),
+    collet: collet && { id: collet.id },
+    extension: extension && { id: extension.id },
+    extensionCollet: extensionCollet && { id: extensionCollet.id },
     stickOutMm: stickOut.usedMm,
-    clearances: request.clearances ?? null,
+    clearances: isOwnClearance
+      ? { ...(shankMm == null ? {} : { shankMm }), ...(holderMm == null ? {} : { holderMm }) }
+      : null,
   }
 }

@@ -6,6 +6,7 @@ import { flushSync } from 'react-dom'
 import type { ReachSettings } from '@/core/reach/types'
 import { type CutterForm, cutterForms, type Substrate, substrates } from '@/core/tooling'
 import { useReachItem } from '@/hooks/use-reach-items'
+import { useStartingSpeeds } from '@/hooks/use-starting-speeds'
 import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import type { SearchPurpose } from '@/schemas/reach-search'
 import type { FieldErrors } from '../reach/compile-check'
@@ -16,6 +17,7 @@ import type { Reading } from '../reach/read-field'
 import { Button } from '../ui/button'
 import { classNames } from '../ui/class-names'
 import { LengthField } from '../ui/length-field'
+import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
 import { compileSearch, type SearchDraft, type SearchText, searchTexts } from './search-question'
 
@@ -53,7 +55,8 @@ export function SearchForm({ draft: asked, reading, settings, refused, onAsk }: 
     event.preventDefault()
     const compiled = compileSearch(draft, reading, settings)
     if (compiled.state === 'asked') {
-      onAsk({ ...draft, choices: { ...asked.choices, forms: choices.forms, substrates: choices.substrates } })
+      const { forms, substrates, material } = choices
+      onAsk({ ...draft, choices: { ...asked.choices, forms, substrates, material } })
       return
     }
     const found = compiled.state === 'refused' ? compiled.errors : { 'feature.depthMm': 'Enter the depth.' }
@@ -106,8 +109,13 @@ export function SearchForm({ draft: asked, reading, settings, refused, onAsk }: 
         ) : null}
         <FieldsFold
           summary="What to look through"
-          isOpenAtFirst={choices.forms.length > 0 || choices.substrates.length > 0 || texts.ratio !== ''}
-          hasFault={errors[searchTexts.ratio.path] !== undefined}
+          isOpenAtFirst={
+            choices.forms.length > 0 ||
+            choices.substrates.length > 0 ||
+            choices.material !== null ||
+            texts.ratio !== ''
+          }
+          hasFault={['where.material', searchTexts.ratio.path].some((path) => errors[path] !== undefined)}
           className="flex flex-col gap-3"
         >
           <Checks
@@ -123,6 +131,11 @@ export function SearchForm({ draft: asked, reading, settings, refused, onAsk }: 
             names={substrateNames}
             chosen={choices.substrates}
             onChoose={(chosen: Substrate[]) => set({ choices: { ...choices, substrates: chosen } })}
+          />
+          <MaterialField
+            material={choices.material}
+            error={errors['where.material'] ?? null}
+            onChoose={(material) => set({ choices: { ...choices, material } })}
           />
           <TextField
             {...text('ratio')}
@@ -155,6 +168,30 @@ function OnlyCutter({ id, onForget }: { id: string; onForget: () => void }) {
         Any cutter
       </Button>
     </p>
+  )
+}
+
+/** What is cut: it says where to start, and which tool material the shop has a speed for in it. */
+function MaterialField({
+  material,
+  error,
+  onChoose,
+}: {
+  material: string | null
+  error: string | null
+  onChoose: (material: string | null) => void
+}) {
+  const { rows } = useStartingSpeeds()
+  const known = [...new Set([...rows.map((row) => row.material), ...(material ? [material] : [])])]
+  return (
+    <SelectField
+      label="Material to be cut"
+      value={material ?? ''}
+      error={error}
+      options={[{ value: '', label: 'Any' }, ...known.map((name) => ({ value: name, label: name }))]}
+      hint="Gives the shop’s starting speed; of cutters, those it has one for"
+      onChange={(event) => onChoose(event.target.value || null)}
+    />
   )
 }
 

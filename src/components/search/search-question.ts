@@ -36,6 +36,8 @@ export interface SearchChoices {
   isInStockOnly: boolean
   forms: readonly CutterForm[]
   substrates: readonly Substrate[]
+  /** A material of the shop's starting speeds. */
+  material: string | null
 }
 
 /** A search as the person has it. */
@@ -81,7 +83,8 @@ export function searchChoices(query: URLSearchParams): SearchChoices {
     setUpId: idOrNull(query.get('setup')),
     isInStockOnly: query.get('stock') === 'yes',
     forms: listed(query.get('forms'), cutterForms),
-    substrates: listed(query.get('material'), substrates),
+    substrates: listed(query.get('tool'), substrates),
+    material: query.get('material')?.slice(0, 200) || null,
   }
 }
 
@@ -118,7 +121,8 @@ export function withChoices(asked: URLSearchParams, choices: SearchChoices): URL
   set('setup', choices.setUpId)
   set('stock', choices.isInStockOnly ? 'yes' : null)
   set('forms', choices.forms.join(','))
-  set('material', choices.substrates.join(','))
+  set('tool', choices.substrates.join(','))
+  set('material', choices.material)
   return query
 }
 
@@ -131,6 +135,7 @@ export const noChoices: SearchChoices = {
   isInStockOnly: false,
   forms: [],
   substrates: [],
+  material: null,
 }
 
 /** The request an address makes, or what is wrong with it, by the request's own names of the places. */
@@ -173,6 +178,7 @@ export function compileSearch(draft: SearchDraft, reading: Reading, settings: Re
         inStockOnly: choices.isInStockOnly,
         forms: choices.forms.length > 0 ? [...choices.forms] : null,
         substrates: choices.substrates.length > 0 ? [...choices.substrates] : null,
+        material: choices.material,
         longestStickOutToDiameter: figures.get('ratio') ?? null,
       },
       rankBy: choices.rankBy,

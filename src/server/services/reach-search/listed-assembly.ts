@@ -1,9 +1,11 @@
+import { type StickOutBands, stickOutBand } from '@/core/cutting/stick-out-caution'
 import { can } from '@/core/policies/permissions'
 import { reachAnswer } from '@/core/reach/reach-answer'
 import type { ReachAnswer } from '@/core/reach/types'
 import type { SearchOption } from '@/core/search/types'
 import type { ToolingKind } from '@/core/stock/kinds'
 import type { CutterGeometry } from '@/core/tooling'
+import { bandSentence } from '@/lib/cut-sentences'
 import { messageKinds, messageSentence } from '@/lib/reach-sentences'
 import type { AssemblyNames } from '@/lib/search-sentences'
 import type { CatalogueTypes } from '@/schemas/catalogue'
@@ -13,6 +15,7 @@ import type { Actor } from '../../auth/actor'
 import type { PiecePlace } from '../../db/read-models/tooling-stock'
 import type { CribTables, CutterSource } from './crib-tables'
 import type { MachineLimits } from './machine-limits'
+import { type MaterialSpeeds, startingSpeed } from './material-speeds'
 import { asMounted } from './mounted-request'
 import type { PartRows } from './named-parts'
 
@@ -26,6 +29,8 @@ export interface ListingContext {
   piecePlaces: Map<string, PiecePlace>
   body: ReachSearchRequest
   limits: MachineLimits
+  speeds: MaterialSpeeds | null
+  cutting: StickOutBands
   currency: string
 }
 
@@ -78,11 +83,13 @@ export function listedAssembly(
     reach: saidAnswer(answer, body.sentenceUnit),
     cautions: [
       ...cautionsOf(answer, body.sentenceUnit),
+      ...bandCautions(answer, context.cutting),
       ...(isExtensionUnchecked ? [extensionCaution(extension?.code ?? '')] : []),
     ],
     stickOut: answer.stickOut,
     stiffness: { ...answer.stiffness, timesStiffest: null },
     stock: assemblyStock(parts),
+    speed: startingSpeed(cutter, context.speeds, [holder.maximumRpm, context.limits.maximumRpm]),
     ...(can(context.actor.role, 'seeCosts') ? { cost: costOf(parts, context.currency) } : {}),
   }
 }
@@ -182,6 +189,13 @@ function cautionsOf(answer: ReachAnswer, unit: ReachSearchRequest['sentenceUnit'
   return answer.messages
     .filter(({ code }) => messageKinds[code] === 'caution')
     .map((message) => messageSentence(message, unit))
+}
+
+/** How far it stands out for its diameter, where the shop takes care of that. */
+function bandCautions({ stiffness }: ReachAnswer, bands: StickOutBands): string[] {
+  const ratio = stiffness.stickOutToDiameter
+  const sentence = bandSentence(stickOutBand(ratio, bands), ratio, bands)
+  return sentence === null ? [] : [sentence]
 }
 
 function extensionCaution(code: string): string {

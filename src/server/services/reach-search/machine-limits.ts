@@ -13,6 +13,7 @@ export interface MachineLimits {
   taper: string | null
   spindleNoseDiameterMm: number | null
   widestToolMm: number | null
+  maximumRpm: number | null
   gaugeLengthMm: { shortestMm: number; longestMm: number } | null
 }
 
@@ -33,6 +34,7 @@ export async function machineLimits(body: ReachSearchRequest): Promise<MachineLi
     taper: machine?.taper ?? null,
     spindleNoseDiameterMm: machine?.spindleNoseDiameterMm ?? null,
     widestToolMm: machine?.widestToolMm ?? null,
+    maximumRpm: machine?.maximumRpm ?? null,
     gaugeLengthMm: gaugeLengths(machine, window),
   }
 }

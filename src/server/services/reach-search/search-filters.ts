@@ -11,6 +11,7 @@ import {
 } from '../../db/read-models/tooling-stock'
 import type { CribTables } from './crib-tables'
 import { type MachineLimits, machineLimits } from './machine-limits'
+import { type MaterialSpeeds, materialSpeeds, substrateOf } from './material-speeds'
 
 /** Ranks after every assembly whose parts all have a cost, however dear. */
 export const unknownCostPenalty = 1e13
@@ -23,6 +24,7 @@ export interface SearchFilters {
   /** What crib, machine and the question's own filters leave, whether it is in a bin now or not. */
   suits: Pick<Record<Table, Uint8Array>, 'cutters' | 'holders'>
   limits: MachineLimits
+  speeds: MaterialSpeeds | null
   piecePlaces: Map<string, PiecePlace>
 }
 
@@ -30,8 +32,9 @@ export interface SearchFilters {
 export async function searchFilters(crib: CribTables, body: ReachSearchRequest): Promise<SearchFilters> {
   const cribId = body.where?.cribId ?? null
   const pieceIds = crib.cutterSources.flatMap(({ piece }) => piece?.id ?? [])
-  const [limits, stock, piecePlaces, kept, costs] = await Promise.all([
+  const [limits, speeds, stock, piecePlaces, kept, costs] = await Promise.all([
     machineLimits(body),
+    materialSpeeds(body),
     readAvailability(db(), cribId),
     readPiecePlaces(db(), pieceIds, cribId),
     cribId === null ? null : readKeptItems(db(), cribId),
@@ -45,7 +48,8 @@ export async function searchFilters(crib: CribTables, body: ReachSearchRequest):
   const suits = {
     cutters: columnOf(
       tooling.cutters,
-      (index) => isKept('cutters', index) && isCutterSuited(crib, piecePlaces, body, limits, index),
+      (index) =>
+        isKept('cutters', index) && isCutterSuited(crib, piecePlaces, body, { limits, speeds }, index),
     ),
     holders: columnOf(
       tooling.holders,
@@ -67,6 +71,7 @@ export async function searchFilters(crib: CribTables, body: ReachSearchRequest):
         : {},
     suits,
     limits,
+    speeds,
     piecePlaces,
   }
 }
@@ -114,9 +119,10 @@ function isCutterSuited(
   { tables: { tooling }, cutterSources }: CribTables,
   piecePlaces: Map<string, PiecePlace>,
   { where }: ReachSearchRequest,
-  { widestToolMm }: MachineLimits,
+  { limits, speeds }: Pick<SearchFilters, 'limits' | 'speeds'>,
   index: number,
 ): boolean {
+  const { widestToolMm } = limits
   const geometry = tooling.cutters[index]?.geometry
   const piece = cutterSources[index]?.piece
   if (!geometry || (piece && piecePlaces.get(piece.id)?.isGone !== false)) return false
@@ -127,6 +133,7 @@ function isCutterSuited(
     (!substrates ||
       substrates.length === 0 ||
       (geometry.substrate != null && substrates.includes(geometry.substrate))) &&
+    (speeds === null || speeds.has(substrateOf(geometry))) &&
     (widestToolMm === null || geometry.cuttingDiameterMm <= widestToolMm)
   )
 }

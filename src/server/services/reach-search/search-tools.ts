@@ -45,11 +45,11 @@ export async function searchTools(
       searchReach(crib.tables, searchQuestion(feature, body, filters)),
     ),
   }))
-  const { currency } = await readShopSettings(db())
+  const { currency, cutting } = await readShopSettings(db())
   const named = answered.flatMap(({ ready, answer }) => [...ready, ...namedAssemblies(answer)])
   const rows = await readPartRows(actor, crib, named, body.where?.cribId ?? null)
-  const { piecePlaces, limits } = filters
-  const context = { actor, crib, rows, piecePlaces, limits, body, currency }
+  const { piecePlaces, limits, speeds } = filters
+  const context = { actor, crib, rows, piecePlaces, limits, speeds, body, currency, cutting }
   const results = await inTurns(answered, signal, ({ ready, answer, feature }) =>
     listedAnswer(ready, answer, feature, context),
   )
