@@ -1,6 +1,7 @@
 import type { Page } from '@playwright/test'
 import { expect } from '@playwright/test'
 import type { Role } from '@/core/policies/permissions'
+import type { ShownAssemblies } from './kept-assemblies'
 import type { MachineRows } from './machine-rows'
 import type { NeckedToolRows } from './shop-rows'
 
@@ -40,6 +41,14 @@ const refused = (open: string | RegExp, send: string) => async (page: Page) => {
   await expect(page.getByRole('dialog').locator('[aria-invalid="true"]').first()).toBeVisible()
 }
 
+/** Opens a dialog and types into a field what cannot be read. */
+const refusedAfter = (open: string, field: string, text: string) => async (page: Page) => {
+  await opens(open)(page)
+  const typed = page.getByRole('dialog').getByLabel(field)
+  await typed.fill(text)
+  await expect(typed).toHaveAttribute('aria-invalid', 'true')
+}
+
 const withoutServer = (pattern: RegExp) => async (page: Page) => {
   await page.route(pattern, (route) => route.abort())
   await page.reload()
@@ -52,14 +61,24 @@ export interface StateRows {
   importId: string
   extensionId: string
   machine: MachineRows
+  assemblies: ShownAssemblies
   /** The path of a one-time address that still opens. */
   invitation: string
 }
 
 /** Every page, with the dialogs it opens and the faults it shows. */
-export function pageStates({ rows, importId, extensionId, machine, invitation }: StateRows): PageState[] {
+export function pageStates({
+  rows,
+  importId,
+  extensionId,
+  machine,
+  assemblies,
+  invitation,
+}: StateRows): PageState[] {
   const cutter = `/cutters/${rows.cutterId}`
   const onMachine = `/machines/${machine.machineId}`
+  const planned = `/assemblies/${assemblies.plannedId}`
+  const marked = `/assemblies/${assemblies.markedId}`
   const state = (role: Role | null, path: string, name: string, reach: PageState['reach']) => ({
     role,
     path,
@@ -109,10 +128,42 @@ export function pageStates({ rows, importId, extensionId, machine, invitation }:
     }),
     state(
       'machinist',
+      '/search',
+      'finding a tool, nothing asked',
+      shows('The crib is searched for everything'),
+    ),
+    state(
+      'machinist',
+      '/search?depth=25&opening=20&corner=3&for=finishing&stepover=0.3&cusp=0.01',
+      'what reaches and what falls short',
+      async (page) => {
+        await shows(/assemblies reach/)(page)
+        await heading('Falls short')(page)
+      },
+    ),
+    state('cribManager', '/search?depth=25&rank=cost', 'what reaches, by its cost', shows('Cost of its parts')),
+    state('machinist', '/search', 'finding a tool, refused', async (page) => {
+      await page.getByRole('button', { name: 'Find', exact: true }).click()
+      await shows('Enter the depth.')(page)
+    }),
+    state('machinist', '/search?depth=25', 'finding a tool, failed', withoutServer(/\/api\/reach\/search/)),
+    state(
+      'machinist',
       '/ball-speed?cuttingDiameterMm=6&depthOfCutMm=0.3&tiltDeg=0&spindleRpm=20000&stepoverMm=0.3',
       'ball-end speed',
       shows('The dead tip is in the cut and rubs'),
     ),
+    state('machinist', '/assemblies', 'assemblies', shows('Deep pocket')),
+    state('machinist', '/assemblies?q=zzzzzzzzzz', 'assemblies, none found', shows('No assembly matches')),
+    state('machinist', '/assemblies', 'assemblies, failed', withoutServer(/\/api\/assemblies\?/)),
+    state('machinist', '/assemblies', 'assemblies, a presetter’s file', opens('Presetter file')),
+    state('machinist', planned, 'an assembly, planned', shows('Stick-out to set')),
+    state('machinist', planned, 'an assembly, building', opens('Build')),
+    state('machinist', planned, 'an assembly, changing', refusedAfter('Change', 'Stick-out', 'a bit')),
+    state('cribManager', marked, 'an assembly that no longer holds', shows('don’t run it as it was noted')),
+    state('cribManager', marked, 'an assembly, measuring', refusedAfter('Measure', 'Gauge length', 'long')),
+    state('cribManager', marked, 'an assembly, moving', opens('Move')),
+    state('cribManager', marked, 'an assembly, breaking down', opens('Break down')),
     state('machinist', '/not-allowed', 'not allowed', (page) =>
       expect(page.getByRole('main')).toContainText(/\w/),
     ),

@@ -76,3 +76,21 @@ export async function untilRechecked(db: Knex, assemblyId: string): Promise<void
   }
   throw new Error('The worker did not look at the assembly within twenty seconds.')
 }
+
+export interface ShownAssemblies {
+  plannedId: string
+  /** Built, and measured so short that what it was kept for fails. */
+  markedId: string
+}
+
+/** One that is planned and one that is marked, both of these parts. */
+export async function createShownAssemblies(crib: ApiClient, rows: AssemblyRows): Promise<ShownAssemblies> {
+  const planned = await keepAssembly(crib, rows, { name: 'Deep pocket' })
+  const built = await buildAssembly(crib, rows, (await keepAssembly(crib, rows)).body)
+  const marked = await crib.post(`/api/assemblies/${built.body.id}/measure`, {
+    version: built.body.version,
+    gaugeLengthMm: 139,
+  })
+  if (marked.body.isMarked !== true) throw new Error(`It is not marked: ${JSON.stringify(marked.body)}`)
+  return { plannedId: planned.body.id, markedId: marked.body.id }
+}

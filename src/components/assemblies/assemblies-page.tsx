@@ -4,7 +4,7 @@ import { FileUp } from 'lucide-react'
 import { usePathname, useRouter, useSearchParams } from 'next/navigation'
 import { useState } from 'react'
 import { useAssemblies } from '@/hooks/use-assemblies'
-import { useMachineChoices } from '@/hooks/use-machine-choices'
+import { useMachines } from '@/hooks/use-machines'
 import { assemblyStateNames } from '@/lib/assembly-sentences'
 import { faultSentence } from '@/lib/field-faults'
 import { PageHeading } from '../layout/page-heading'
@@ -126,7 +126,7 @@ function Filters({
   filters: FilterValues
   onChange: (filters: FilterValues) => void
 }) {
-  const { machines } = useMachineChoices()
+  const { rows: machines } = useMachines()
   const [text, setText] = useState(filters.q ?? '')
   const change = (changed: FilterValues) => onChange({ ...filters, ...changed })
   const where = filters.machineId ?? (filters.inMachine ? 'machines' : (filters.state ?? ''))

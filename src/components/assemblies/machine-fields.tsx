@@ -1,7 +1,7 @@
 'use client'
 
 import { parseCount } from '@/core/units/parse-count'
-import { useMachineChoices } from '@/hooks/use-machine-choices'
+import { useMachines } from '@/hooks/use-machines'
 import { formatLength } from '@/lib/format-length'
 import { useShop } from '../layout/shop-context'
 import { Notice } from '../ui/notice'
@@ -23,7 +23,7 @@ export interface MachineFieldsProps {
 /** Where it goes: into one's hands, or to a machine and a pocket of it. */
 export function MachineFields({ spot, gaugeLengthMm, errors, onChange }: MachineFieldsProps) {
   const { unit } = useShop()
-  const { machines } = useMachineChoices()
+  const { rows: machines } = useMachines()
   const chosen = machines.find(({ id }) => id === spot.machineId)
   const longestMm = chosen?.longestToolMm ?? null
   return (

@@ -7,6 +7,7 @@ import { callApi } from '@/lib/api-client'
 import { faultSentence } from '@/lib/field-faults'
 import type { MachineResponse } from '@/schemas/machine'
 import type { SetUpResponse } from '@/schemas/set-up'
+import { MachineAssemblies } from '../assemblies/machine-assemblies'
 import { PageHeading } from '../layout/page-heading'
 import { useCan } from '../layout/shop-context'
 import { Button } from '../ui/button'
@@ -107,6 +108,7 @@ export function MachinePage({ firstMachine, firstSetUps }: MachinePageProps) {
             ) : null}
           </StateSentence>
         )}
+        <MachineAssemblies machineId={machine.id} />
         <MachineFacts machine={machine} />
       </div>
       {edited === 'machine' ? (
