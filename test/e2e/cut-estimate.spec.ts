@@ -25,7 +25,8 @@ test('a cut is estimated beside the reach check, with the spindle it is asked of
 
   await signIn(page, 'machinist')
   await page.goto(`/reach?cutter=${cutterId}&holder=${holder.body.id}&depth=20`)
-  const cut = page.getByRole('region', { name: 'A cut with it, estimated' })
+  const cut = page.getByRole('region', { name: /^A cut with it, estimated/ })
+  await cut.getByRole('button', { name: /^A cut with it, estimated/ }).click()
   await cut.getByLabel('Material cut').selectOption({ label: 'Carbon steel from 0.25 % C, annealed, 190 HB' })
   await expect(cut.getByRole('button', { name: /Medium carbon steel.*140 to 250 m\/min/ })).toBeVisible()
   await cut.getByLabel('Cutting speed').fill('180')

@@ -1,5 +1,7 @@
 'use client'
 
+import { ChevronDown } from 'lucide-react'
+import { useState } from 'react'
 import { useCutQuestion } from '@/hooks/use-cut-question'
 import { type CutAssembly, cutEstimate } from '@/lib/cut-estimate'
 import { useShop } from '../layout/shop-context'
@@ -7,21 +9,42 @@ import { Notice } from '../ui/notice'
 import { CutFigures } from './cut-figures'
 import { CutQuestion } from './cut-question'
 
-/** What a cut asks of one assembly: load and deflection, speed and feed, power and torque. */
+/** What a cut asks of one assembly: load and deflection, speed and feed, power and torque. Closed until it is wanted. */
 export function CutSection({ assembly }: { assembly: CutAssembly }) {
+  const [isOpen, setIsOpen] = useState(false)
+  return (
+    <section aria-labelledby="cut-section" className="flex flex-col gap-4 print:hidden">
+      <h2 id="cut-section" className="text-lg">
+        <button
+          type="button"
+          aria-expanded={isOpen}
+          aria-controls="cut-estimate"
+          className="hover:bg-accent-wash text-accent flex min-h-11 w-full items-center justify-between gap-3 rounded-[3px] text-left"
+          onClick={() => setIsOpen(!isOpen)}
+        >
+          <span>
+            A cut with it, estimated
+            <span className="text-ink-soft block text-sm font-normal">
+              Load and deflection, speed and feed, and whether the spindle drives it
+            </span>
+          </span>
+          <ChevronDown
+            aria-hidden="true"
+            className={`size-5 shrink-0 transition-transform ${isOpen ? 'rotate-180' : ''}`}
+          />
+        </button>
+      </h2>
+      <div id="cut-estimate">{isOpen ? <CutEstimate assembly={assembly} /> : null}</div>
+    </section>
+  )
+}
+
+function CutEstimate({ assembly }: { assembly: CutAssembly }) {
   const { unit, decimalComma, cuttingSettings } = useShop()
   const question = useCutQuestion({ unit, decimalComma })
   const estimate = question.input ? cutEstimate(assembly, question.input, cuttingSettings) : null
   return (
-    <section aria-labelledby="cut-section" className="flex flex-col gap-4 print:hidden">
-      <div>
-        <h2 id="cut-section" className="text-lg">
-          A cut with it, estimated
-        </h2>
-        <p className="text-ink-soft text-sm">
-          Load and deflection, speed and feed, and whether the spindle drives it. Milling and drilling.
-        </p>
-      </div>
+    <div className="flex flex-col gap-4">
       <CutQuestion
         question={question}
         substrate={assembly.cutter.substrate ?? null}
@@ -44,6 +67,6 @@ export function CutSection({ assembly }: { assembly: CutAssembly }) {
         An estimate to choose by, no setting to run by: the tool maker’s speeds and feeds, the holder’s limit
         and the shop’s rules go first. Closed guard, eye protection.
       </Notice>
-    </section>
+    </div>
   )
 }
