@@ -36,6 +36,7 @@ export const bench = {
     return [
       ...memoryFigures,
       ...benchFeatures.flatMap((named) => featureFigures(tables, crib, named)),
+      windowFigure(tables),
       fortyFigure(tables),
       ...growthFigures(),
     ]
@@ -151,6 +152,22 @@ function takersOf({ tooling, holders, extensionClass, holdingExtension }: Search
       ? tooling.holders.map((_, index) => index)
       : [...new Set((holdingExtension[ofClass] ?? []).map(({ owner }) => owner))]
   return Int32Array.from(owners, (owner) => holders.outlineOf[owner]!)
+}
+
+/** A machine chosen: every assembly's own gauge length counts. */
+function windowFigure(tables: SearchTables): Figure {
+  const [{ name, feature }] = benchFeatures as [NamedFeature]
+  const gaugeLengthMm = { shortestMm: 120, longestMm: 220 }
+  const inWindow = () =>
+    searchReach(tables, { feature, gaugeLengthMm, limit: 50, perCutter: 3, nearMissLimit: 20 })
+  for (let at = 0; at < warmUps; at++) inWindow()
+  return {
+    name: `${name}, one feature in a machine's window`,
+    value: middle(Array.from({ length: samples }, () => processorSeconds(inWindow))),
+    unit: 's',
+    limit: { atMost: oneLimitSeconds },
+    samples,
+  }
 }
 
 function fortyFigure(tables: SearchTables): Figure {

@@ -124,13 +124,17 @@ function packTakers(
     const ofCollet = collet >= 0 ? penalties.collets[collet]! : 0
     leastPenalty = Math.min(leastPenalty, penalties.holders[holder]! + ofCollet)
   }
-  const outline = Int32Array.from(sizes.keys())
+  // Those that will ask alike side by side: of one length, the slimmest nose first.
+  const outline = Int32Array.from(sizes.keys()).sort(
+    (a, b) =>
+      holders.lengthMm[a]! - holders.lengthMm[b]! || holders.noseRadiusMm[a]! - holders.noseRadiusMm[b]!,
+  )
   return {
     count: collets.size,
     holder: Int32Array.from(collets.keys()),
     collet: Int32Array.from(collets.values()),
     outline,
-    outlineSize: Int32Array.from(sizes.values()),
+    outlineSize: Int32Array.from(outline, (one) => sizes.get(one) ?? 0),
     leastPenalty,
     least: leastCompliance(holders, outline),
   }

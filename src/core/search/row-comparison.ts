@@ -19,9 +19,14 @@ export interface RankFloor {
   complianceUmPerN: number
 }
 
-interface AskRange {
+/** What the takers of an extension ask at one placement; neighbours that ask alike and are of one length together. */
+interface TakerAsks {
   leastMm: number
   mostMm: number
+  count: number
+  askMm: Float64Array
+  lengthMm: Float64Array
+  size: Int32Array
 }
 
 /**
@@ -37,9 +42,9 @@ export class RowComparison {
   /** What each group of direct clamps asks, and the least of them. */
   private asks = new Float64Array(0)
   private leastAskMm = 0
-  /** What the takers of each extension ask at these bounds: the least and the most of any. */
-  private takersAsk = new Map<Takers, AskRange>()
-  private takerAsks: AskRange[] = []
+  /** Of each kind of extension, and of each of the offer's, at these bounds. */
+  private takersAsk = new Map<Takers, TakerAsks>()
+  private takerAsks: TakerAsks[] = []
   private row = 0
   private limit: StickOutLimit = { longestMm: 0, longestLowerMm: 0 }
 
@@ -67,17 +72,12 @@ export class RowComparison {
     }
   }
 
-  private askOf(takers: Takers, { holders }: PlacedBounds): AskRange {
+  private askOf(takers: Takers, bounds: PlacedBounds): TakerAsks {
     const known = this.takersAsk.get(takers)
     if (known) return known
-    const range = { leastMm: Number.POSITIVE_INFINITY, mostMm: Number.NEGATIVE_INFINITY }
-    for (const outline of takers.outline) {
-      const askMm = holders[outline]!
-      if (askMm < range.leastMm) range.leastMm = askMm
-      if (askMm > range.mostMm) range.mostMm = askMm
-    }
-    this.takersAsk.set(takers, range)
-    return range
+    const asks = takerAsks(takers, bounds.holders, this.tables.holders.lengthMm)
+    this.takersAsk.set(takers, asks)
+    return asks
   }
 
   /** Assemblies of the cutter without an extension that reach. */
@@ -114,8 +114,8 @@ export class RowComparison {
 
   private countStacks(clamp: number): number {
     const { takers, extended } = this.offer!
-    const { extensions, holders } = this.tables
-    const { count, outline, outlineSize } = takers[clamp]!
+    const { extensions } = this.tables
+    const { count } = takers[clamp]!
     const ofExtension = extended.outline[clamp]!
     const projectionMm = extensions.lengthMm[ofExtension]!
     const upperMm = this.upperIn(clamp)
@@ -126,17 +126,17 @@ export class RowComparison {
     if (lowestMm > largestMm || ask.leastMm - projectionMm > largestMm) return 0
     if (!window && ask.mostMm - projectionMm <= largestMm) return count
     let reaching = 0
-    for (let one = 0; one < outline.length; one++) {
-      const askMm = this.bounds!.holders[outline[one]!]! - projectionMm
+    for (let one = 0; one < ask.count; one++) {
+      const askMm = ask.askMm[one]! - projectionMm
       if (askMm > largestMm) continue
       if (window) {
         const stickOutMm = chosenStickOutMm(Math.max(lowestMm, askMm), upperMm, this.rule.stepMm)
-        const behindMm = holders.lengthMm[outline[one]!]! + projectionMm
+        const behindMm = ask.lengthMm[one]! + projectionMm
         if (outsideWindowMm(window, behindMm + stickOutMm) > 0) continue
       }
-      reaching += outlineSize[one]!
+      reaching += ask.size[one]!
     }
-    this.pairs += outline.length
+    this.pairs += ask.count
     return reaching
   }
 
@@ -162,26 +162,24 @@ export class RowComparison {
   }
 
   private leastStackShortfallMm(clamp: number): number {
-    const { takers, extended } = this.offer!
-    const { outline } = takers[clamp]!
+    const { extended } = this.offer!
     const projectionMm = this.tables.extensions.lengthMm[extended.outline[clamp]!]!
     const upperMm = this.upperIn(clamp)
     const lowestMm = this.lowestIn(clamp)
-    if (!this.rule.window) {
-      // Without a window a holder that asks for less is never further off.
-      const lowerMm = Math.max(lowestMm, this.takerAsks[clamp]!.leastMm - projectionMm)
-      return stickOutShortfallMm(this.rule, this.limit, { lowerMm, upperMm, behindMm: 0 })
-    }
+    const ask = this.takerAsks[clamp]!
+    // Without a window a holder that asks for less is never further off.
+    const count = this.rule.window ? ask.count : Math.min(1, ask.count)
     let leastMm = Number.POSITIVE_INFINITY
-    for (let one = 0; one < outline.length; one++) {
+    for (let one = 0; one < count; one++) {
+      const askMm = this.rule.window ? ask.askMm[one]! : ask.leastMm
       const shortMm = stickOutShortfallMm(this.rule, this.limit, {
-        lowerMm: Math.max(lowestMm, this.bounds!.holders[outline[one]!]! - projectionMm),
+        lowerMm: Math.max(lowestMm, askMm - projectionMm),
         upperMm,
-        behindMm: this.tables.holders.lengthMm[outline[one]!]! + projectionMm,
+        behindMm: ask.lengthMm[one]! + projectionMm,
       })
       leastMm = Math.min(leastMm, shortMm)
     }
-    this.pairs += outline.length
+    this.pairs += count
     return leastMm
   }
 
@@ -241,6 +239,28 @@ export class RowComparison {
     const { cutters } = this.tables
     return Math.max(cutters.fullShankMm[this.row]!, cutters.overallMm[this.row]! - mostInAnyMm)
   }
+}
+
+function takerAsks({ outline, outlineSize }: Takers, bounds: Float64Array, lengths: Float64Array): TakerAsks {
+  const askMm = new Float64Array(outline.length)
+  const lengthMm = new Float64Array(outline.length)
+  const size = new Int32Array(outline.length)
+  let last = -1
+  let leastMm = Number.POSITIVE_INFINITY
+  let mostMm = Number.NEGATIVE_INFINITY
+  for (let one = 0; one < outline.length; one++) {
+    const ask = bounds[outline[one]!]!
+    const length = lengths[outline[one]!]!
+    if (last < 0 || ask !== askMm[last] || length !== lengthMm[last]) {
+      last++
+      askMm[last] = ask
+      lengthMm[last] = length
+      if (ask < leastMm) leastMm = ask
+      if (ask > mostMm) mostMm = ask
+    }
+    size[last] = size[last]! + outlineSize[one]!
+  }
+  return { leastMm, mostMm, count: last + 1, askMm, lengthMm, size }
 }
 
 /**
