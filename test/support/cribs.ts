@@ -125,6 +125,17 @@ function named<Kind extends object>(kind: string, records: Kind[]): (Kind & { id
   return records.map((record, index) => ({ ...record, id: `${kind}${(index * 7) % 10}-${index}` }))
 }
 
+/** The first holder once more with another spindle behind it: another outline that mostly asks the same. */
+function withTwin(holders: Omit<SearchHolder, 'id'>[]): Omit<SearchHolder, 'id'>[] {
+  return [
+    ...holders,
+    ...holders.slice(0, 1).map(({ geometry, ...rest }) => ({
+      ...rest,
+      geometry: { ...geometry, spindleNoseDiameterMm: geometry.spindleNoseDiameterMm ? null : 95 },
+    })),
+  ]
+}
+
 /** A crib, often with the very same record twice. */
 export function crib(kind: SearchedKind, draftDeg: number, most = 5): fc.Arbitrary<CribTooling> {
   const list = <Kind extends object>(arbitrary: fc.Arbitrary<Kind>, longest: number, shortest = 0) =>
@@ -140,7 +151,7 @@ export function crib(kind: SearchedKind, draftDeg: number, most = 5): fc.Arbitra
         cutter(kind, draftDeg).map((geometry) => ({ geometry })),
         most,
       ),
-      holders: list(holder, most + 1, most - 2),
+      holders: list(holder, most + 1, most - 2).map(withTwin),
       collets: list(collet, most + 2, most - 2),
       extensions: list(extension, 2),
     })
