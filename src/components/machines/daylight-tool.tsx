@@ -12,6 +12,7 @@ interface ToolProps extends DaylightPartProps {
 }
 
 const headPx = 40
+const labelPx = 18
 /** Where the nose is not known it is drawn as wide as this, in mm. */
 const noseSignMm = 80
 
@@ -21,6 +22,9 @@ export function GaugeLines({ scene, layout }: DaylightPartProps) {
   const half = ((scene.spindleNoseDiameterMm ?? noseSignMm) / 2) * pxPerMm
   const top = yOf(scene.gaugeLineToTableMm)
   const bottom = yOf(lowestGaugeLineMm)
+  const retractY = yOf(layout.retractMm)
+  // The two names stand apart where the two lines hardly do.
+  const isBelow = bottom >= retractY && bottom - retractY < labelPx
   return (
     <>
       <path
@@ -39,7 +43,7 @@ export function GaugeLines({ scene, layout }: DaylightPartProps) {
             strokeWidth={lineWidths.thin}
             strokeDasharray={chainDashes}
           />
-          <DraftingText x={left - 10} y={bottom - 5} anchor="start" text="Z down" />
+          <DraftingText x={left - 10} y={isBelow ? bottom + 13 : bottom - 5} anchor="start" text="Z down" />
         </>
       ) : null}
       <ChainLine
@@ -55,8 +59,10 @@ export function GaugeLines({ scene, layout }: DaylightPartProps) {
 }
 
 export function RetractPlane({ layout }: DaylightPartProps) {
-  const { left, right, yOf, retractMm } = layout
+  const { left, right, yOf, retractMm, lowestGaugeLineMm } = layout
   const y = yOf(retractMm)
+  const down = yOf(lowestGaugeLineMm)
+  const isBelow = y > down && y - down < labelPx
   return (
     <>
       <path
@@ -65,7 +71,7 @@ export function RetractPlane({ layout }: DaylightPartProps) {
         strokeWidth={lineWidths.thin * 1.3}
         strokeDasharray={hiddenDashes}
       />
-      <DraftingText x={left - 10} y={y - 5} anchor="start" text="Retract" />
+      <DraftingText x={left - 10} y={isBelow ? y + 13 : y - 5} anchor="start" text="Retract" />
     </>
   )
 }
