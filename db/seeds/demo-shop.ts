@@ -1,7 +1,9 @@
 import type { Knex } from 'knex'
 import { closeDb, db } from '@/server/db/connection'
 import { inTransaction } from '@/server/db/transaction'
+import { loadAssemblies } from './demo-shop/assemblies'
 import { loadCatalogue } from './demo-shop/catalogue'
+import { loadFixtures, loadSetUps } from './demo-shop/fixtures'
 import { loadPeople } from './demo-shop/people'
 import { loadPlaces } from './demo-shop/places'
 import { loadReorderPoints } from './demo-shop/reorder-points'
@@ -19,8 +21,10 @@ async function loadDemoShop(trx: Knex): Promise<string> {
   const places = await loadPlaces(trx)
   const people = await loadPeople(trx, places)
   const items = await loadCatalogue(trx)
+  await loadSetUps(trx, await loadFixtures(trx, places, people))
   const plans = await loadReorderPoints(trx, items, places)
   const movements = await loadYear(trx, { people, places, items, plans })
+  await loadAssemblies(trx, items, people)
   await trx('shop_settings').where('id', 1).update({
     shop_name: 'Skerry Lane Machine Works',
     currency: 'EUR',

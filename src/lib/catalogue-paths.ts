@@ -6,6 +6,7 @@ export const cataloguePaths: Readonly<Record<CatalogueKind, string>> = {
   holder: '/holders',
   collet: '/collets',
   extension: '/extensions',
+  fixture: '/fixtures',
 }
 
 export function itemPagePath(kind: CatalogueKind, id: string): string {

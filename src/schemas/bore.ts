@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { distanceMmSchema, lengthMmSchema, lineSchema } from './fields'
+import { countSchema, distanceMmSchema, lengthMmSchema, lineSchema } from './fields'
 import { setFilter, valuesFilter } from './paging'
 
 /** What takes a shank, in a holder as in an extension. */
@@ -17,6 +17,8 @@ export const clampingFields = {
   boreDepthMm: lengthMmSchema().nullable().optional(),
   minimumGripMm: lengthMmSchema().nullable().optional(),
   gripStartMm: distanceMmSchema().nullable().optional(),
+  /** What the maker says the nut is tightened to. */
+  nutTorqueNm: countSchema(2000, 'Give whole newton metres.').nullable().optional(),
 }
 
 export const clampingResponseFields = {
@@ -24,6 +26,7 @@ export const clampingResponseFields = {
   boreDepthMm: z.number().nullable(),
   minimumGripMm: z.number().nullable(),
   gripStartMm: z.number().nullable(),
+  nutTorqueNm: z.number().nullable(),
 }
 
 export const segmentFields = {
@@ -43,6 +46,12 @@ export function segmentsSchema<Segment extends z.ZodType>(segment: Segment) {
 export const boreKinds = ['collet', 'fixed'] as const
 
 /** What a list of holders or extensions is sorted and filtered by of their bores. */
-export const boreNumberFields = ['boreDiameterMm', 'boreDepthMm', 'minimumGripMm', 'gripStartMm'] as const
+export const boreNumberFields = [
+  'boreDiameterMm',
+  'boreDepthMm',
+  'minimumGripMm',
+  'gripStartMm',
+  'nutTorqueNm',
+] as const
 export const boreWordFields = ['series', 'boreKind'] as const
 export const boreFilterFields = { series: valuesFilter, boreKind: setFilter(boreKinds) }

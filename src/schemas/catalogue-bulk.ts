@@ -3,6 +3,7 @@ import { colletResponseSchema, updateColletRequestSchema } from './collet'
 import { cutterResponseSchema, updateCutterRequestSchema } from './cutter'
 import { extensionResponseSchema, updateExtensionRequestSchema } from './extension'
 import { idSchema } from './fields'
+import { fixtureResponseSchema, updateFixtureRequestSchema } from './fixture'
 import { holderResponseSchema, updateHolderRequestSchema } from './holder'
 
 /** Rows one request changes at most: what one block of a list holds. */
@@ -27,6 +28,7 @@ export const bulkRequestSchemas = {
   holder: bulkSchema(updateHolderRequestSchema.extend({ id: idSchema })),
   collet: bulkSchema(updateColletRequestSchema.extend({ id: idSchema })),
   extension: bulkSchema(updateExtensionRequestSchema.extend({ id: idSchema })),
+  fixture: bulkSchema(updateFixtureRequestSchema.extend({ id: idSchema })),
 }
 
 function rowsSchema<Row extends z.ZodType>(row: Row) {
@@ -39,4 +41,5 @@ export const bulkResponseSchemas = {
   holder: rowsSchema(holderResponseSchema),
   collet: rowsSchema(colletResponseSchema),
   extension: rowsSchema(extensionResponseSchema),
+  fixture: rowsSchema(fixtureResponseSchema),
 }

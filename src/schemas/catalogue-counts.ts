@@ -3,6 +3,7 @@ import type { CatalogueKind } from '@/core/stock/kinds'
 import { colletListQuerySchema } from './collet'
 import { cutterListQuerySchema } from './cutter'
 import { extensionListQuerySchema } from './extension'
+import { fixtureListQuerySchema } from './fixture'
 import { holderListQuerySchema } from './holder'
 
 const itemFacets = ['maker', 'condition', 'locationId', 'stockState', 'cribId'] as const
@@ -22,6 +23,7 @@ export const facetNames = {
   holder: ['boreKind', 'taper', 'series', 'gaugeLengthMm', 'boreDiameterMm', ...itemFacets],
   collet: ['series', 'minimumMm', 'maximumMm', ...itemFacets],
   extension: ['boreKind', 'series', 'projectionMm', 'boreDiameterMm', ...itemFacets],
+  fixture: ['heightMm', ...itemFacets],
 } as const satisfies Record<CatalogueKind, readonly string[]>
 
 const paging = { limit: true, offset: true, cursor: true, sort: true } as const
@@ -32,6 +34,7 @@ export const catalogueFilterSchemas = {
   holder: holderListQuerySchema.omit(paging),
   collet: colletListQuerySchema.omit(paging),
   extension: extensionListQuerySchema.omit(paging),
+  fixture: fixtureListQuerySchema.omit(paging),
 }
 
 /** Asked as the list is, for the facets named; each costs a pass over what is found, so none is counted unasked. */
@@ -40,6 +43,7 @@ export const countsQuerySchemas = {
   holder: catalogueFilterSchemas.holder.extend({ of: askedFacets(facetNames.holder) }),
   collet: catalogueFilterSchemas.collet.extend({ of: askedFacets(facetNames.collet) }),
   extension: catalogueFilterSchemas.extension.extend({ of: askedFacets(facetNames.extension) }),
+  fixture: catalogueFilterSchemas.fixture.extend({ of: askedFacets(facetNames.fixture) }),
 }
 
 function askedFacets<const Name extends string>(names: readonly Name[]) {

@@ -3,6 +3,7 @@ import type { CatalogueKind } from '@/core/stock/kinds'
 import { colletListQuerySchema } from './collet'
 import { cutterListQuerySchema } from './cutter'
 import { extensionListQuerySchema } from './extension'
+import { fixtureListQuerySchema } from './fixture'
 import { holderListQuerySchema } from './holder'
 
 const itemColumns = [
@@ -14,7 +15,7 @@ const itemColumns = [
   'description',
   'unitCost',
 ] as const
-const clampingColumns = ['boreDepthMm', 'minimumGripMm', 'gripStartMm'] as const
+const clampingColumns = ['boreDepthMm', 'minimumGripMm', 'gripStartMm', 'nutTorqueNm'] as const
 
 /** The columns a list can be exported with, in the order of the page's own. */
 export const exportColumnIds = {
@@ -58,9 +59,11 @@ export const exportColumnIds = {
     'series',
     'boreDiameterMm',
     'projectionMm',
+    'shankDiameterMm',
     ...clampingColumns,
     ...itemColumns,
   ],
+  fixture: ['code', 'heightMm', ...itemColumns],
 } as const satisfies Record<CatalogueKind, readonly string[]>
 
 /** `columns=code,maker`: those of the list, in their order; all of them where none is named. */
@@ -83,5 +86,6 @@ export const exportQuerySchemas = {
   extension: extensionListQuerySchema
     .omit(paging)
     .extend({ columns: columnsSchema(exportColumnIds.extension) }),
+  fixture: fixtureListQuerySchema.omit(paging).extend({ columns: columnsSchema(exportColumnIds.fixture) }),
 }
 export type ExportQuery = z.output<(typeof exportQuerySchemas)[CatalogueKind]>

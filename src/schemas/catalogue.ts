@@ -22,6 +22,12 @@ import type {
   UpdateExtensionRequest,
 } from './extension'
 import type {
+  CreateFixtureRequest,
+  FixtureResponse,
+  fixtureListQuerySchema,
+  UpdateFixtureRequest,
+} from './fixture'
+import type {
   CreateHolderRequest,
   HolderResponse,
   holderListQuerySchema,
@@ -54,6 +60,12 @@ export interface CatalogueTypes {
     row: ExtensionResponse
     query: z.output<typeof extensionListQuerySchema>
   }
+  fixture: {
+    create: CreateFixtureRequest
+    update: UpdateFixtureRequest
+    row: FixtureResponse
+    query: z.output<typeof fixtureListQuerySchema>
+  }
 }
 
 type ProblemsOf = { [Kind in CatalogueKind]: (item: CatalogueTypes[Kind]['create']) => GeometryProblem[] }
@@ -64,4 +76,6 @@ export const geometryProblemsOf: ProblemsOf = {
   holder: holderProblems,
   collet: colletProblems,
   extension: extensionProblems,
+  /** Its height has its range and no other rule. */
+  fixture: () => [],
 }

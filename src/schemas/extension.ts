@@ -24,6 +24,7 @@ export const extensionSegmentSchema = z.object(segmentFields)
 const extensionFieldsSchema = z.object({
   ...itemFields,
   projectionMm: lengthMmSchema('Give the projection.'),
+  shankDiameterMm: lengthMmSchema().nullable().optional(),
   ...clampingFields,
   segments: segmentsSchema(extensionSegmentSchema),
 })
@@ -41,6 +42,8 @@ export const extensionResponseSchema = z.object({
   ...itemResponseFields,
   kind: z.literal('extension'),
   projectionMm: z.number(),
+  /** What the holder takes; where it is not entered, nothing checks that one does. */
+  shankDiameterMm: z.number().nullable(),
   ...clampingResponseFields,
   segments: z.array(extensionSegmentSchema),
 })
@@ -48,7 +51,7 @@ export type ExtensionResponse = z.infer<typeof extensionResponseSchema>
 
 export const extensionListResponseSchema = listResponseSchema(extensionResponseSchema)
 
-const extensionNumberFields = ['projectionMm', ...boreNumberFields] as const
+const extensionNumberFields = ['projectionMm', 'shankDiameterMm', ...boreNumberFields] as const
 
 export const extensionSortFields = [...itemSortFields, ...boreWordFields, ...extensionNumberFields] as const
 

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { catalogueKinds } from '@/core/stock/kinds'
+import { catalogueKinds, toolingKinds } from '@/core/stock/kinds'
 import { cutterResponseSchema } from './cutter'
 import { distanceMmSchema, lengthMmSchema } from './fields'
 import { listQuerySchema, listResponseSchema, setFilter } from './paging'
@@ -25,7 +25,7 @@ export type FitsItem = z.infer<typeof fitsItemSchema>
 
 export const fitsListResponseSchema = listResponseSchema(fitsItemSchema)
 
-export const fitsListQuerySchema = listQuerySchema({ kind: setFilter(catalogueKinds) })
+export const fitsListQuerySchema = listQuerySchema({ kind: setFilter(toolingKinds) })
 
 /** A length in an address: plain decimal millimetres. */
 function lengthTextSchema(length: z.ZodType<number, number>) {
@@ -38,7 +38,7 @@ function lengthTextSchema(length: z.ZodType<number, number>) {
 
 /** What is asked about without an item: a shank, a fixed bore, or a series of collets. */
 export const fitsQuerySchema = listQuerySchema({
-  kind: setFilter(catalogueKinds),
+  kind: setFilter(toolingKinds),
   shankDiameterMm: lengthTextSchema(lengthMmSchema()).optional(),
   boreDiameterMm: lengthTextSchema(lengthMmSchema()).optional(),
   series: z.string().trim().min(1, 'Name the series, such as ER20.').max(100).optional(),

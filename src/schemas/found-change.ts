@@ -4,6 +4,7 @@ import { catalogueFilterSchemas } from './catalogue-counts'
 import { updateColletRequestSchema } from './collet'
 import { updateCutterRequestSchema } from './cutter'
 import { updateExtensionRequestSchema } from './extension'
+import { updateFixtureRequestSchema } from './fixture'
 import { updateHolderRequestSchema } from './holder'
 
 /** An item's own code is no value for many; a bore and an outline are more than one field. */
@@ -20,6 +21,7 @@ const changeSchemas = {
   extension: updateExtensionRequestSchema
     .omit({ ...notOfMany, bore: true, segments: true })
     .refine(oneField, 'Change exactly one field.'),
+  fixture: updateFixtureRequestSchema.omit(notOfMany).refine(oneField, 'Change exactly one field.'),
 }
 
 function rehearsalSchema<Filters extends z.ZodType, Change extends z.ZodType>(
@@ -35,6 +37,7 @@ export const foundRehearsalRequestSchemas = {
   holder: rehearsalSchema(catalogueFilterSchemas.holder, changeSchemas.holder),
   collet: rehearsalSchema(catalogueFilterSchemas.collet, changeSchemas.collet),
   extension: rehearsalSchema(catalogueFilterSchemas.extension, changeSchemas.extension),
+  fixture: rehearsalSchema(catalogueFilterSchemas.fixture, changeSchemas.fixture),
 }
 
 /** What the rehearsal answered, sent back: only the rows it was about, as they were, are changed. */
@@ -48,6 +51,7 @@ export const foundChangeRequestSchemas = {
   holder: foundRehearsalRequestSchemas.holder.extend(seen),
   collet: foundRehearsalRequestSchemas.collet.extend(seen),
   extension: foundRehearsalRequestSchemas.extension.extend(seen),
+  fixture: foundRehearsalRequestSchemas.fixture.extend(seen),
 }
 
 export interface FoundRehearsalRequest {

@@ -1,12 +1,12 @@
-import type { CatalogueKind } from '@/core/stock/kinds'
+import type { CatalogueKind, ToolingKind } from '@/core/stock/kinds'
 
 /** What a file may bring, kind by kind: the fields a column can be given to, in the order they are offered. */
 
 export const importKinds = ['cutters', 'holders', 'collets', 'extensions', 'stock', 'reorderPoints'] as const
 export type ImportKind = (typeof importKinds)[number]
 
-/** What brings items of each kind. */
-export const importKindOf: Readonly<Record<CatalogueKind, ImportKind>> = {
+/** What brings items of each kind; fixtures are entered by hand. */
+export const importKindOf: Readonly<Record<ToolingKind, ImportKind>> = {
   cutter: 'cutters',
   holder: 'holders',
   collet: 'collets',
@@ -61,6 +61,7 @@ const clampingFields: ImportField[] = [
   { field: 'boreDepthMm', label: 'Bore depth', type: 'length' },
   { field: 'minimumGripMm', label: 'Minimum grip', symbol: 'LSCN', type: 'length' },
   { field: 'gripStartMm', label: 'Grip starts behind the nose', type: 'distance' },
+  { field: 'nutTorqueNm', label: 'Nut torque, N·m', type: 'count' },
 ]
 
 const maximumRpm: ImportField = {
@@ -135,6 +136,7 @@ export const importFields: Readonly<Record<ImportKind, readonly ImportField[]>> 
   extensions: [
     ...itemFields,
     { field: 'projectionMm', label: 'Projection from the holder’s nose', type: 'length' },
+    { field: 'shankDiameterMm', label: 'Shank diameter', symbol: 'DMM, DCONMS', type: 'diameter' },
     ...clampingFields,
     ...segmentFields,
     ...shapeFields,
@@ -171,6 +173,18 @@ const byName = new Map(
 /** The field of that name, or undefined where the kind has none. */
 export function importField(kind: ImportKind, name: string): ImportField | undefined {
   return byName.get(kind)?.get(name)
+}
+
+const fixtureFields: readonly ImportField[] = [
+  ...itemFields,
+  { field: 'heightMm', label: 'Height above what it stands on', type: 'length' },
+]
+
+/** The field an exported column of a kind is written as, or undefined for what no file brings in. */
+export function exportField(kind: CatalogueKind, name: string): ImportField | undefined {
+  return kind === 'fixture'
+    ? fixtureFields.find(({ field }) => field === name)
+    : importField(importKindOf[kind], name)
 }
 
 /** Whether a cell of this type is in the unit of its column. */

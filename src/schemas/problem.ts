@@ -19,6 +19,8 @@ export const problemStatus = {
   'email-taken': 409,
   'still-in-use': 409,
   'already-reversed': 409,
+  'wrong-state': 409,
+  'assembly-does-not-hold': 409,
   'import-not-ready': 409,
   'import-already-committed': 409,
   'setup-done': 409,
@@ -29,6 +31,8 @@ export const problemStatus = {
   'import-has-rejects': 422,
   'link-expired': 422,
   'too-many-tries': 429,
+  /** Nobody waits for this answer any more; only the log sees it. */
+  'search-cancelled': 499,
   'internal-error': 500,
   'database-unreachable': 503,
 } as const

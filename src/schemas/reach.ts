@@ -9,11 +9,11 @@ import { plainMessage } from './plain-message'
  * Shapes alone: what a size may be is the core's to say, and its refusal answers 422 with the place. A member nobody
  * knows is a wrong shape, because a misspelt dimension that is left out changes the answer without a word.
  */
-const sizeSchema = z
+export const sizeSchema = z
   .number('Give a number.')
   .max(100_000, 'More than 100 m or 100,000: check the unit.')
   .refine((size) => size === 0 || Math.abs(size) >= 1e-9, 'Smaller than anything that can be made.')
-const optionalSizeSchema = sizeSchema.nullish()
+export const optionalSizeSchema = sizeSchema.nullish()
 
 const obstacleSchema = z.strictObject({ setbackMm: sizeSchema, riseMm: sizeSchema })
 
@@ -36,7 +36,7 @@ const holeFeatureSchema = z.strictObject({
   breakThroughMm: optionalSizeSchema,
 })
 
-const featureSchema = z.discriminatedUnion('kind', [wallFeatureSchema, holeFeatureSchema])
+export const featureSchema = z.discriminatedUnion('kind', [wallFeatureSchema, holeFeatureSchema])
 
 const cutterGeometrySchema = z.strictObject({
   form: z.enum(cutterForms),
@@ -113,6 +113,11 @@ function named<Geometry extends z.ZodType, Reference extends z.ZodType>(
   })
 }
 
+export const clearancesSchema = z.strictObject({
+  shankMm: optionalSizeSchema,
+  holderMm: optionalSizeSchema,
+})
+
 export const reachRequestSchema = z.strictObject({
   feature: featureSchema,
   cutter: named<typeof cutterGeometrySchema, typeof itemReferenceSchema | typeof pieceReferenceSchema>(
@@ -123,7 +128,7 @@ export const reachRequestSchema = z.strictObject({
   collet: named(colletGeometrySchema, { id: itemReferenceSchema }).nullish(),
   extension: named(extensionGeometrySchema, { id: itemReferenceSchema }).nullish(),
   stickOutMm: optionalSizeSchema,
-  clearances: z.strictObject({ shankMm: optionalSizeSchema, holderMm: optionalSizeSchema }).nullish(),
+  clearances: clearancesSchema.nullish(),
   sideLoadN: optionalSizeSchema,
 })
 export type ReachRequestBody = z.output<typeof reachRequestSchema>

@@ -22,6 +22,13 @@ export const reachSettingsSchema = z.object({
   steelModulusGpa: positive(1000),
 })
 
+/** What estimates of cutting are worked out with, and how a long stick-out is spoken of. Plain ratios. */
+export const cuttingSettingsSchema = z.object({
+  radialForceShare: notNegative(2),
+  stickOutCautionRatio: positive(100),
+  stickOutLimitRatio: positive(100),
+})
+
 export const shopSettingsSchema = z.object({
   shopName: z.string().trim().min(1, 'The shop needs a name.').max(200),
   currency: z
@@ -32,11 +39,16 @@ export const shopSettingsSchema = z.object({
   lengthUnit: z.enum(lengthUnits),
   decimalComma: z.boolean(),
   reach: reachSettingsSchema,
+  cutting: cuttingSettingsSchema,
+  /** How far a measured gauge length or diameter may be from the calculated one. */
+  measuringToleranceMm: notNegative(5),
 })
 
-export const updateShopSettingsRequestSchema = shopSettingsSchema
-  .partial()
-  .extend({ version: z.number().int(), reach: reachSettingsSchema.partial().optional() })
+export const updateShopSettingsRequestSchema = shopSettingsSchema.partial().extend({
+  version: z.number().int(),
+  reach: reachSettingsSchema.partial().optional(),
+  cutting: cuttingSettingsSchema.partial().optional(),
+})
 export type UpdateShopSettingsRequest = z.output<typeof updateShopSettingsRequestSchema>
 
 /** The name is empty until the shop is set up. */

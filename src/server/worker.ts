@@ -2,6 +2,7 @@ import { closeDb } from './db/connection'
 import { handleJobs } from './jobs/handlers'
 import { startBoss } from './jobs/queue'
 import { log } from './log'
+import { recheckDueAssemblies } from './services/assemblies/recheck-due-assemblies'
 import { resumeImports, tidyImports } from './services/imports/resume-imports'
 import { openMailWay } from './services/mail/open-mail-way'
 import { sendDueMail } from './services/mail/send-due-mail'
@@ -9,6 +10,7 @@ import { sendDueMail } from './services/mail/send-due-mail'
 const resumeEveryMs = 5_000
 const tidyEveryMs = 3600_000
 const mailEveryMs = 1000
+const recheckEveryMs = 1000
 
 /** Runs `work` now and again, one run at a time; a failure is logged and the next run tries again. */
 function repeat(name: string, everyMs: number, work: () => Promise<void>): void {
@@ -27,6 +29,7 @@ const boss = await startBoss({ supervise: true })
 await handleJobs(boss)
 repeat('resuming imports', resumeEveryMs, resumeImports)
 repeat('tidying imports', tidyEveryMs, tidyImports)
+repeat('rechecking assemblies', recheckEveryMs, recheckDueAssemblies)
 const mailWay = await openMailWay()
 repeat('sending mail', mailEveryMs, () => sendDueMail(mailWay))
 log.info('worker ready')

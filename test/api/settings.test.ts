@@ -10,6 +10,10 @@ describe('the shop’s settings', () => {
       shankClearanceMm: expect.any(Number),
       holderClearanceMm: expect.any(Number),
     })
+    expect(before).toMatchObject({
+      cutting: { radialForceShare: 0.4, stickOutCautionRatio: 4, stickOutLimitRatio: 8 },
+      measuringToleranceMm: 0.05,
+    })
     const changed = await admin.patch('/api/settings', { version: before.version, shopName: before.shopName })
     expect(changed.status).toBe(200)
     expect(changed.body).toEqual(before)
@@ -19,6 +23,10 @@ describe('the shop’s settings', () => {
     [{ reach: { shankClearanceMm: -0.1 } }, 'reach.shankClearanceMm', 422],
     [{ reach: { stickOutStepMm: 0 } }, 'reach.stickOutStepMm', 422],
     [{ reach: { fluteStiffnessRatio: 1.2 } }, 'reach.fluteStiffnessRatio', 422],
+    [{ cutting: { radialForceShare: -0.1 } }, 'cutting.radialForceShare', 422],
+    [{ cutting: { stickOutCautionRatio: 9 } }, 'cutting.stickOutLimitRatio', 422],
+    [{ cutting: { stickOutCautionRatio: 0 } }, 'cutting.stickOutCautionRatio', 422],
+    [{ measuringToleranceMm: -1 }, 'measuringToleranceMm', 422],
     [{ reach: { holderClearanceMm: 'wide' } }, 'reach.holderClearanceMm', 400],
     [{ currency: 'euros' }, 'currency', 400],
     [{ lengthUnit: 'furlong' }, 'lengthUnit', 400],

@@ -35,6 +35,11 @@ test('a pocket leads to its cutters and on to the reach check', async ({ page })
   await page.getByRole('link', { name: `Check the reach of ${code}` }).click()
   await expect(page).toHaveURL(/\/reach\?.*cutter=\d+/)
   await expect(page.getByText(code).first()).toBeVisible()
+  await expect(page.getByRole('textbox', { name: /^Depth/ })).toHaveValue('40')
+  await page.goBack()
+  await page.getByRole('link', { name: /^Find a tool for this pocket/ }).click()
+  await expect(page).toHaveURL(/\/search\?depth=40&corner=46\.605$/)
+  await expect(page.getByText(/assemblies/).first()).toBeVisible()
 })
 
 test('a shank leads to what holds it, and the address keeps the question', async ({ page }) => {

@@ -24,14 +24,15 @@ describe('collets and extensions', () => {
 
   it('it takes extensions', async () => {
     const content = [
-      'Code,Projection,Bore dia,Bore depth,Min grip,Nose diameter,Nose length,Body diameter,Body length',
-      'E-1,120,6,36,20,10,40,16,80',
+      'Code,Projection,Shank diameter,Bore dia,Bore depth,Min grip,Nose diameter,Nose length,Body diameter,Body length',
+      'E-1,120,20,6,36,20,10,40,16,80',
     ].join('\n')
     expect(await site.committed({ kind: 'extensions', content })).toMatchObject({
       added: 1,
       rejectedCount: 0,
     })
     expect(await site.db('extension_segments').count()).toEqual([{ count: '2' }])
+    expect(await site.db('extensions').pluck('shank_diameter_mm')).toEqual([20])
     expect(await site.checked({ kind: 'extensions', content })).toMatchObject({ unchanged: 1, changed: 0 })
   })
 })

@@ -2,6 +2,8 @@ import type { Page } from '@playwright/test'
 import { expect } from '@playwright/test'
 import type { Role } from '@/core/policies/permissions'
 import { chooseMore } from './browser'
+import type { ShownAssemblies } from './kept-assemblies'
+import type { MachineRows } from './machine-rows'
 import type { NeckedToolRows } from './shop-rows'
 
 /** A state of a page: where it is, who sees it, and what is done until it stands. */
@@ -41,6 +43,14 @@ export const refused = (open: string | RegExp, send: string) => async (page: Pag
   await expect(page.getByRole('dialog').locator('[aria-invalid="true"]').first()).toBeVisible()
 }
 
+/** Opens a dialog and types into a field what cannot be read. */
+const refusedAfter = (open: string, field: string, text: string) => async (page: Page) => {
+  await opens(open)(page)
+  const typed = page.getByRole('dialog').getByLabel(field)
+  await typed.fill(text)
+  await expect(typed).toHaveAttribute('aria-invalid', 'true')
+}
+
 export const withoutServer = (pattern: RegExp) => async (page: Page) => {
   await page.route(pattern, (route) => route.abort())
   await page.reload()
@@ -52,13 +62,25 @@ export interface StateRows {
   rows: NeckedToolRows
   importId: string
   extensionId: string
+  machine: MachineRows
+  assemblies: ShownAssemblies
   /** The path of a one-time address that still opens. */
   invitation: string
 }
 
 /** Every page, with the dialogs it opens and the faults it shows. */
-export function pageStates({ rows, importId, extensionId, invitation }: StateRows): PageState[] {
+export function pageStates({
+  rows,
+  importId,
+  extensionId,
+  machine,
+  assemblies,
+  invitation,
+}: StateRows): PageState[] {
   const cutter = `/cutters/${rows.cutterId}`
+  const onMachine = `/machines/${machine.machineId}`
+  const planned = `/assemblies/${assemblies.plannedId}`
+  const marked = `/assemblies/${assemblies.markedId}`
   const state = (role: Role | null, path: string, name: string, reach: PageState['reach']) => ({
     role,
     path,
@@ -108,10 +130,47 @@ export function pageStates({ rows, importId, extensionId, invitation }: StateRow
     }),
     state(
       'machinist',
+      '/search',
+      'finding a tool, nothing asked',
+      shows('The crib is searched for everything'),
+    ),
+    state(
+      'machinist',
+      '/search?depth=25&opening=20&corner=3&for=finishing&stepover=0.3&cusp=0.01',
+      'what reaches and what falls short',
+      async (page) => {
+        await shows(/assemblies reach/)(page)
+        await heading('Falls short')(page)
+      },
+    ),
+    state(
+      'cribManager',
+      '/search?depth=25&rank=cost',
+      'what reaches, by its cost',
+      shows('Cost of its parts'),
+    ),
+    state('machinist', '/search', 'finding a tool, refused', async (page) => {
+      await page.getByRole('button', { name: 'Find', exact: true }).click()
+      await shows('Enter the depth.')(page)
+    }),
+    state('machinist', '/search?depth=25', 'finding a tool, failed', withoutServer(/\/api\/reach\/search/)),
+    state(
+      'machinist',
       '/ball-speed?cuttingDiameterMm=6&depthOfCutMm=0.3&tiltDeg=0&spindleRpm=20000&stepoverMm=0.3',
       'ball-end speed',
       shows('The dead tip is in the cut and rubs'),
     ),
+    state('machinist', '/assemblies', 'assemblies', shows('Deep pocket')),
+    state('machinist', '/assemblies?q=zzzzzzzzzz', 'assemblies, none found', shows('No assembly matches')),
+    state('machinist', '/assemblies', 'assemblies, failed', withoutServer(/\/api\/assemblies\?/)),
+    state('machinist', '/assemblies', 'assemblies, a presetter’s file', opens('Presetter file')),
+    state('machinist', planned, 'an assembly, planned', shows('Stick-out to set')),
+    state('machinist', planned, 'an assembly, building', opens('Build')),
+    state('machinist', planned, 'an assembly, changing', refusedAfter('Change', 'Stick-out', 'a bit')),
+    state('cribManager', marked, 'an assembly that no longer holds', shows('don’t run it as it was noted')),
+    state('cribManager', marked, 'an assembly, measuring', refusedAfter('Measure', 'Gauge length', 'long')),
+    state('cribManager', marked, 'an assembly, moving', opens('Move')),
+    state('cribManager', marked, 'an assembly, breaking down', opens('Break down')),
     state('machinist', '/not-allowed', 'not allowed', (page) =>
       expect(page.getByRole('main')).toContainText(/\w/),
     ),
@@ -148,6 +207,20 @@ export function pageStates({ rows, importId, extensionId, invitation }: StateRow
     state('cribManager', `/holders/${rows.holderId}`, 'a holder', shows('What fits it')),
     state('cribManager', `/collets/${rows.colletId}`, 'a collet', shows('What fits it')),
     state('cribManager', `/extensions/${extensionId}`, 'an extension', shows('What fits it')),
+    state('cribManager', '/fixtures', 'fixtures', listRow),
+    state('cribManager', '/fixtures', 'fixtures, adding', refused('Add a fixture', 'Add the fixture')),
+    state('cribManager', '/machines', 'machines', shows(machine.code)),
+    state('cribManager', '/machines', 'machines, adding', refused('Add a machine', 'Save')),
+    state('cribManager', onMachine, 'a machine', shows('Takes gauge lengths from')),
+    state(
+      'cribManager',
+      `${onMachine}?holder=${machine.longHolder.id}&stickOutMm=40`,
+      'a machine, a tool too long',
+      shows('too long by 5 mm'),
+    ),
+    state('cribManager', onMachine, 'a machine, changed', opens('Change the machine')),
+    state('cribManager', onMachine, 'a set-up, adding', refused('Add a set-up', 'Save')),
+    state('cribManager', onMachine, 'a set-up, changed', opens('Change the set-up')),
     state('cribManager', '/locations', 'locations', shows('All that lies in it')),
     state('cribManager', '/locations', 'locations, a bin', opens('Bin A-1')),
     state('cribManager', '/locations', 'locations, adding', refused('Add a crib', 'Add')),

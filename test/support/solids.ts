@@ -189,12 +189,22 @@ export function clampingRange({ cutter, holder, extension, collet }: ReachReques
   toMm: number
 } {
   const owner = extension ?? holder
-  const gripMm = owner.minimumGripMm ?? collet?.minimumGripMm ?? (2 / 3) * (collet?.lengthMm ?? 0)
   const fullShankMm = shankFromMm(cutter) + 1
+  const insertionMm = extension ? null : (holder.sideLockInsertionMm ?? null)
+  const gripMm = gripLengthMm(owner.minimumGripMm ?? null, collet)
+  const flatMm = insertionMm === null ? [] : [cutter.overallLengthMm - insertionMm]
+  const heldMm = gripMm === null ? [] : [cutter.overallLengthMm - gripMm - (owner.gripStartMm ?? 0)]
   return {
-    fromMm: Math.max(cutter.overallLengthMm - (owner.boreDepthMm ?? 0), fullShankMm),
-    toMm: cutter.overallLengthMm - gripMm - (owner.gripStartMm ?? 0),
+    fromMm: Math.max(cutter.overallLengthMm - (owner.boreDepthMm ?? 0), fullShankMm, ...flatMm),
+    toMm: Math.min(...heldMm, ...flatMm),
   }
+}
+
+/** The longer where both name one; a collet that names none is two thirds of its length. */
+function gripLengthMm(ofOwnerMm: number | null, collet: ReachRequest['collet']): number | null {
+  const named = [ofOwnerMm, collet?.minimumGripMm ?? null].filter((mm) => mm !== null)
+  if (named.length > 0) return Math.max(...named)
+  return collet?.lengthMm == null ? null : (2 / 3) * collet.lengthMm
 }
 
 export function drillsHole({ feature, cutter }: ReachRequest): boolean {

@@ -6,8 +6,9 @@ import { signedInAs, uniqueCode } from './api'
 import { checkedImport } from './api-imports'
 import { siteDatabase } from './api-stock'
 import { signIn, test } from './browser'
+import { createAssemblyRows, createShownAssemblies } from './kept-assemblies'
+import { createMachineRows } from './machine-rows'
 import { createReorderingRows, reorderingStates } from './reordering-states'
-import { createNeckedTool } from './shop-rows'
 
 /** One test for each role: every page that role works with, in every state, light and dark. */
 export function testEveryState(extra: readonly PageState[]): void {
@@ -17,7 +18,7 @@ export function testEveryState(extra: readonly PageState[]): void {
   test.beforeAll(async () => {
     db = siteDatabase()
     const crib = await signedInAs('cribManager')
-    const rows = await createNeckedTool(db, crib)
+    const rows = await createAssemblyRows(db, crib)
     const list = `Tool #,Type,Dia,LOC,OAL,Shank Dia,Shelf\n${uniqueCode('A')},Square,1/2,1,3,1/2,top\n${uniqueCode('B')},Square,1/2,1,long,1/2,top\n`
     const { id } = await checkedImport(crib, { kind: 'cutters', unit: 'in' }, list)
     const { rows: extensions } = (await crib.get('/api/extensions?limit=1')).body
@@ -25,6 +26,8 @@ export function testEveryState(extra: readonly PageState[]): void {
       rows,
       importId: id,
       extensionId: extensions[0]?.id ?? '',
+      machine: await createMachineRows(crib),
+      assemblies: await createShownAssemblies(crib, rows),
       invitation: await openInvitation(),
     }
     every = [...pageStates(shown), ...reorderingStates(await createReorderingRows(db, crib)), ...extra]

@@ -48,7 +48,7 @@ export interface ExtensionPlan {
   maker: string
   description: string
   unitCostMinor: number
-  geometry: BorePlan & { projection_mm: number }
+  geometry: BorePlan & { projection_mm: number; shank_diameter_mm: number }
   segments: Segment[]
 }
 
@@ -264,6 +264,7 @@ export function extensionPlans(): ExtensionPlan[] {
     unitCostMinor: 6900 + projection * 25,
     geometry: {
       projection_mm: projection,
+      shank_diameter_mm: name === 'ER11' ? 16 : 20,
       bore_kind: 'collet',
       bore_series: name,
       bore_diameter_mm: null,

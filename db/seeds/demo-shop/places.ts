@@ -1,4 +1,5 @@
 import type { Knex } from 'knex'
+import { loadMachines } from './machines'
 
 export interface Bin {
   id: string
@@ -34,13 +35,7 @@ export async function loadPlaces(trx: Knex): Promise<Places> {
       { code: 'EAST', name: 'East cell crib', time_zone: 'Europe/Dublin' },
     ])
     .returning('id')
-  const machines = await trx('locations')
-    .insert([
-      { kind: 'machine', code: 'M1', name: 'Five-axis mill, BT30' },
-      { kind: 'machine', code: 'M2', name: 'Vertical mill, CAT40' },
-      { kind: 'machine', code: 'M3', name: 'Vertical mill, BT30' },
-    ])
-    .returning('id')
+  const machineIds = await loadMachines(trx)
   const [inTransit] = await trx('locations')
     .insert({ kind: 'in_transit', code: 'TRANSIT-1', name: 'Main crib to east cell' })
     .returning('id')
@@ -51,7 +46,7 @@ export async function loadPlaces(trx: Knex): Promise<Places> {
     eastCribId: east.id,
     mainBins: await loadCabinets(trx, main.id, mainCabinets),
     eastBins: await loadCabinets(trx, east.id, eastCabinets),
-    machineIds: machines.map((row: { id: string }) => row.id),
+    machineIds,
     inTransitId: inTransit.id,
     supplierId: outside.find((row: { kind: string }) => row.kind === 'supplier').id,
     scrapId: outside.find((row: { kind: string }) => row.kind === 'scrap').id,

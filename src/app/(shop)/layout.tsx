@@ -26,6 +26,8 @@ export default async function ShopLayout({ children }: { children: ReactNode }) 
         currency: settings.currency,
         reachSettings: settings.reach,
         isFirstDay: can(actor.role, 'keepCrib') && (await isFirstDayOpen()),
+        measuringToleranceMm: settings.measuringToleranceMm,
+        cuttingSettings: settings.cutting,
       }}
     >
       <a

@@ -44,6 +44,16 @@ export function CatalogueState<Row extends CatalogueRow>(props: CatalogueStatePr
     )
   if (!mayKeep)
     return <StateSentence sentence={`There are no ${definition.many} yet. The crib manager adds them.`} />
+  if (definition.kind === 'fixture')
+    return (
+      <StateSentence
+        sentence={`There are no ${definition.many} yet. Enter what stands on the machines: vises, plates, collet blocks.`}
+      >
+        <Button variant="primary" onClick={onAdd}>
+          Add a {definition.one}
+        </Button>
+      </StateSentence>
+    )
   return (
     <StateSentence
       sentence={`There are no ${definition.many} yet. Bring them in from a file, or add the first by hand.`}

@@ -64,4 +64,11 @@ export const boreFields: readonly ItemField[] = [
     allowZero: true,
     hint: 'Behind the nose face; empty is 0.',
   },
+  {
+    path: 'nutTorqueNm',
+    label: 'Nut torque in N·m',
+    kind: 'count',
+    isShown: (values) => !isFixedBore(values),
+    hint: 'As the maker says. It stands on the set-up sheet; empty says nothing.',
+  },
 ]

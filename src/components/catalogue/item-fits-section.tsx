@@ -4,7 +4,7 @@ import Link from 'next/link'
 import { useState } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
-import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
+import { type CatalogueKind, type ToolingKind, toolingKinds } from '@/core/stock/kinds'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { itemFitsUrl, useFits } from '@/hooks/use-fits'
 import { itemPagePath } from '@/lib/catalogue-paths'
@@ -14,7 +14,7 @@ import { cellClass, ItemSection } from './item-section'
 import { SectionState } from './section-state'
 import { StockWord } from './stock-word'
 
-const kindTitles: Readonly<Record<CatalogueKind, string>> = {
+const kindTitles: Readonly<Record<ToolingKind, string>> = {
   cutter: 'Cutters',
   holder: 'Holders',
   collet: 'Collets',
@@ -29,7 +29,7 @@ export function ItemFitsSection({ itemId, kind }: { itemId: string; kind: Catalo
   return (
     <ItemSection title="What fits it">
       <div className="grid gap-x-8 gap-y-5 pt-3 md:grid-cols-2 xl:grid-cols-3">
-        {catalogueKinds
+        {toolingKinds
           .filter((candidate) => candidate !== kind || kind === 'extension')
           .map((candidate) => (
             <FitsList key={candidate} url={itemFitsUrl(itemId)} kind={candidate} />
@@ -40,7 +40,7 @@ export function ItemFitsSection({ itemId, kind }: { itemId: string; kind: Catalo
 }
 
 /** What of one kind fits what `url` asks about, with how it fits and what is on hand. */
-export function FitsList({ url, kind }: { url: string; kind: CatalogueKind }) {
+export function FitsList({ url, kind }: { url: string; kind: ToolingKind }) {
   const [isAll, setIsAll] = useState(false)
   const fits = useFits(url, kind, isAll ? asManyAsAnswered : firstFew)
   const title = kindTitles[kind]

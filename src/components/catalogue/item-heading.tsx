@@ -42,10 +42,12 @@ export function ItemHeading<Row extends CatalogueRow>({
         {source ? <p className="text-ink-soft text-[0.9375rem]">{source}</p> : null}
       </div>
       <div className="flex flex-wrap gap-2 print:hidden">
-        <ButtonLink variant="primary" size="compact" href={`/reach?${row.kind}=${row.id}`} prefetch={false}>
-          <Ruler aria-hidden="true" className="size-4.5" />
-          Check reach
-        </ButtonLink>
+        {row.kind === 'fixture' ? null : (
+          <ButtonLink variant="primary" size="compact" href={`/reach?${row.kind}=${row.id}`} prefetch={false}>
+            <Ruler aria-hidden="true" className="size-4.5" />
+            Check reach
+          </ButtonLink>
+        )}
         {mayMove ? (
           <>
             <Button size="compact" onClick={() => onAct('issue')}>

@@ -44,7 +44,7 @@ export function ItemPage<Row extends CatalogueRow>({ definition, first, extra }:
         <ItemStockSection row={row} />
       </div>
       {extra?.(row)}
-      <ItemFitsSection itemId={row.id} kind={row.kind} />
+      {row.kind === 'fixture' ? null : <ItemFitsSection itemId={row.id} kind={row.kind} />}
       <ItemMovementsSection itemId={row.id} />
       {act === 'edit' ? (
         <ItemFormDialog definition={definition} row={row} isOpen onClose={close} onSaved={close} />

@@ -22,6 +22,8 @@ export type ListAct = 'columns' | 'views' | 'paste' | 'changeSelected' | 'change
 export interface ListMenuProps {
   many: string
   isNarrowed: boolean
+  /** Rows of it come in by file, or pasted. */
+  isImported: boolean
   exportHref: string
   onAct: (act: ListAct) => void
   onPrint: () => void
@@ -34,7 +36,7 @@ export interface ListMenuProps {
 
 /** Everything one may do with a list, but for the one thing done most. */
 export function ListMenu(props: ListMenuProps) {
-  const { many, isNarrowed, exportHref, onAct, onPrint, onEdit, isMarkAlone, triggerRef } = props
+  const { many, isNarrowed, isImported, exportHref, onAct, onPrint, onEdit, isMarkAlone, triggerRef } = props
   const mayKeep = useCan('keepCrib')
   return (
     <Menu
@@ -77,20 +79,24 @@ export function ListMenu(props: ListMenuProps) {
           <MenuItem Mark={ListChecks} onChoose={() => onAct('changeFound')}>
             Change all {isNarrowed ? 'found' : many}
           </MenuItem>
-          <MenuRule />
-          <MenuItem Mark={ClipboardPaste} onChoose={() => onAct('paste')}>
-            Paste rows
-          </MenuItem>
-          <MenuLink
-            Mark={Upload}
-            link={(content) => (
-              <Link href="/imports" prefetch={false}>
-                {content}
-              </Link>
-            )}
-          >
-            Import a file
-          </MenuLink>
+          {isImported ? (
+            <>
+              <MenuRule />
+              <MenuItem Mark={ClipboardPaste} onChoose={() => onAct('paste')}>
+                Paste rows
+              </MenuItem>
+              <MenuLink
+                Mark={Upload}
+                link={(content) => (
+                  <Link href="/imports" prefetch={false}>
+                    {content}
+                  </Link>
+                )}
+              >
+                Import a file
+              </MenuLink>
+            </>
+          ) : null}
         </>
       ) : null}
     </Menu>

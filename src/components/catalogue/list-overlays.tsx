@@ -81,7 +81,7 @@ export function ListOverlays<Row extends CatalogueRow>(props: ListOverlaysProps<
     )
   if (act === 'views')
     return <SavedViews {...{ definition, columns, view, onViewChange }} onClose={handleClose} />
-  if (act === 'paste')
+  if (act === 'paste' && definition.kind !== 'fixture')
     return (
       <PasteRows
         kind={importKindOf[definition.kind]}

@@ -28,6 +28,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           <AddButton one={definition.one} onAdd={props.onAdd} />
           <ListMenu
             many={definition.many}
+            isImported={definition.kind !== 'fixture'}
             isNarrowed={isNarrowed(view)}
             exportHref={exportPath(definition.kind, view, shownIds)}
             onAct={setAct}

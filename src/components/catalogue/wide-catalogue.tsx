@@ -59,6 +59,7 @@ export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapePro
         />
         <ListMenu
           many={definition.many}
+          isImported={definition.kind !== 'fixture'}
           isNarrowed={narrowed}
           exportHref={exportPath(definition.kind, view, shownIds)}
           onAct={setAct}

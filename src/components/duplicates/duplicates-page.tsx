@@ -2,7 +2,7 @@
 
 import { usePathname, useSearchParams } from 'next/navigation'
 import { useState } from 'react'
-import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
+import { type ToolingKind, toolingKinds } from '@/core/stock/kinds'
 import { useDuplicates } from '@/hooks/use-duplicates'
 import { PageHeading } from '../layout/page-heading'
 import { Button } from '../ui/button'
@@ -11,7 +11,7 @@ import { StateSentence } from '../ui/state-sentence'
 import { DuplicateGroup } from './duplicate-group'
 import { MergeDialog, type MergePair } from './merge-dialog'
 
-const kindNames: Readonly<Record<CatalogueKind, string>> = {
+const kindNames: Readonly<Record<ToolingKind, string>> = {
   cutter: 'Cutters',
   holder: 'Holders',
   collet: 'Collets',
@@ -22,7 +22,7 @@ const kindNames: Readonly<Record<CatalogueKind, string>> = {
 export function DuplicatesPage() {
   const params = useSearchParams()
   const pathname = usePathname()
-  const kind = catalogueKinds.find((candidate) => candidate === params.get('kind')) ?? 'cutter'
+  const kind = toolingKinds.find((candidate) => candidate === params.get('kind')) ?? 'cutter'
   const { data, error, refresh } = useDuplicates(kind)
   const [pair, setPair] = useState<MergePair | null>(null)
   const many = kindNames[kind].toLowerCase()
@@ -40,7 +40,7 @@ export function DuplicatesPage() {
           onChange={(event) =>
             window.history.replaceState(null, '', `${pathname}?kind=${event.target.value}`)
           }
-          options={catalogueKinds.map((value) => ({ value, label: kindNames[value] }))}
+          options={toolingKinds.map((value) => ({ value, label: kindNames[value] }))}
         />
         {error ? (
           <StateSentence sentence={`The ${many} could not be compared. ${error.message}`}>

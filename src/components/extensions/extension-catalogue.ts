@@ -8,7 +8,7 @@ import {
 import { boreWords } from '@/components/catalogue/bore-words'
 import type { CatalogueDefinition } from '@/components/catalogue/catalogue-definition'
 import { itemFilters } from '@/components/catalogue/catalogue-filter'
-import { codeColumn, itemColumns, lengthColumn } from '@/components/catalogue/columns'
+import { codeColumn, countColumn, itemColumns, lengthColumn } from '@/components/catalogue/columns'
 import { formatLength } from '@/lib/format-length'
 import type { ExtensionResponse } from '@/schemas/extension'
 import { extensionForm } from './extension-form'
@@ -22,9 +22,11 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
     codeColumn(),
     ...boreColumns(),
     lengthColumn('projectionMm', 'E', 'Projection (E)'),
+    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter, which the holder takes'),
     ...clampingLengths.map(([field, heading, name, look]) =>
       lengthColumn<ExtensionResponse>(field, heading, name, look),
     ),
+    countColumn('nutTorqueNm', 'N·m', 'Nut torque in N·m', { isUsual: false, width: 80 }),
     ...itemColumns<ExtensionResponse>(canSeeCosts),
   ],
   filters: [

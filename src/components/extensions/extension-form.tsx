@@ -26,6 +26,13 @@ export const extensionForm: ItemFormDefinition<ExtensionResponse> = {
           isRequired: true,
           hint: "From the holder's nose face to the extension's own.",
         },
+        {
+          path: 'shankDiameterMm',
+          label: 'Shank diameter',
+          symbol: 'DMM',
+          kind: 'length',
+          hint: 'What the holder takes. Blank: it is offered in any holder, and nothing checks that it fits.',
+        },
       ],
     },
     { title: 'Bore', fields: boreFields },

@@ -1,4 +1,4 @@
-import type { CatalogueKind } from '@/core/stock/kinds'
+import type { ToolingKind } from '@/core/stock/kinds'
 
 interface QuestionField {
   /** As the API and the address bar have it. */
@@ -14,7 +14,7 @@ export interface FitsQuestion {
   label: string
   fields: readonly QuestionField[]
   /** What may fit, in the order it is looked for. */
-  kinds: readonly CatalogueKind[]
+  kinds: readonly ToolingKind[]
 }
 
 const pocket: FitsQuestion = {

@@ -51,6 +51,15 @@ export function PocketResults({ query }: { query: string }) {
           {asked.has('floorRadiusMm') ? ', no rounder than the floor' : ''}.
         </span>
       </p>
+      <p>
+        <Link
+          href={searchPath(asked)}
+          prefetch={false}
+          className="text-accent inline-flex items-center font-semibold hover:underline pointer-coarse:min-h-11"
+        >
+          Find a tool for this pocket, with what holds it and its stick-out
+        </Link>
+      </p>
       <Notice kind="caution">
         This looks at the cutter alone, on a straight upright wall: length of cut, or a neck that keeps the
         shop’s clearance. It does not know the holder, the stick-out, draft, clamps or the machine. Tapered
@@ -99,12 +108,32 @@ function listQuery(asked: URLSearchParams): string {
   return query.toString()
 }
 
-function reachQuery(cutterId: string, asked: URLSearchParams): string {
-  const query = new URLSearchParams({ cutter: cutterId })
-  for (const [name, value] of asked) {
-    if (name !== 'inStock') query.set(name, value)
-  }
-  return query.toString()
+/** What the pocket's figures are called in the address of a reach check, and of a search of the crib. */
+const featureNames = [
+  ['depthMm', 'depth'],
+  ['insideCornerRadiusMm', 'corner'],
+  ['floorRadiusMm', 'floor'],
+] as const
+
+function featureQuery(asked: URLSearchParams): URLSearchParams {
+  return new URLSearchParams(
+    featureNames.flatMap(([name, written]) => {
+      const value = asked.get(name)
+      return value === null ? [] : [[written, value]]
+    }),
+  )
+}
+
+function searchPath(asked: URLSearchParams): string {
+  const query = featureQuery(asked)
+  if (asked.get('inStock') === 'yes') query.set('stock', 'yes')
+  return `/search?${query}`
+}
+
+function reachPath(cutterId: string, asked: URLSearchParams): string {
+  const query = featureQuery(asked)
+  query.set('cutter', cutterId)
+  return `/reach?${query}`
 }
 
 function CutterTable({ rows, asked }: { rows: FittingCutter[]; asked: URLSearchParams }) {
@@ -174,7 +203,7 @@ function CutterTable({ rows, asked }: { rows: FittingCutter[]; asked: URLSearchP
               </td>
               <td className={`${cell} text-right`}>
                 <Link
-                  href={`/reach?${reachQuery(row.id, asked)}`}
+                  href={reachPath(row.id, asked)}
                   prefetch={false}
                   aria-label={`Check the reach of ${row.code}`}
                   className="text-accent inline-flex items-center font-semibold whitespace-nowrap hover:underline pointer-coarse:min-h-11"

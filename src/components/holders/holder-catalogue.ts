@@ -32,6 +32,7 @@ export const holderCatalogue: CatalogueDefinition<HolderResponse> = {
     ...clampingLengths.map(([field, heading, name, look]) =>
       lengthColumn<HolderResponse>(field, heading, name, look),
     ),
+    countColumn('nutTorqueNm', 'N·m', 'Nut torque in N·m', { isUsual: false, width: 80 }),
     lengthColumn('sideLockInsertionMm', 'Side-lock', 'Side-lock insertion', { width: 96, isUsual: false }),
     countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', { isUsual: false, width: 90 }),
     ...itemColumns<HolderResponse>(canSeeCosts),

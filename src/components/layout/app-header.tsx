@@ -1,6 +1,6 @@
 'use client'
 
-import { LogOut, Menu } from 'lucide-react'
+import { CircleUserRound, LogOut, Menu } from 'lucide-react'
 import Link from 'next/link'
 import { usePathname } from 'next/navigation'
 import { useState } from 'react'
@@ -32,7 +32,7 @@ export function AppHeader() {
   const groups = useGroups()
   return (
     <header className="bg-sheet border-ink sticky top-0 z-30 border-b print:hidden">
-      <div className="flex h-14 items-center gap-4 px-4 min-[84rem]:h-12">
+      <div className="flex h-14 items-center gap-4 px-4 min-[90rem]:h-12 min-[90rem]:gap-2 min-[112rem]:gap-4">
         <Link
           href="/reach"
           aria-label="Leadline, to the reach check"
@@ -40,7 +40,7 @@ export function AppHeader() {
         >
           <Wordmark />
         </Link>
-        <nav aria-label="Main" className="hidden h-full min-w-0 flex-1 min-[84rem]:flex">
+        <nav aria-label="Main" className="hidden h-full min-w-0 flex-1 min-[90rem]:flex">
           {groups.map((group) => (
             <ul
               key={group.label}
@@ -53,7 +53,7 @@ export function AppHeader() {
                     href={link.href}
                     aria-current={isCurrent(pathname, link.href) ? 'page' : undefined}
                     className={classNames(
-                      'hover:bg-accent-wash flex h-full items-center border-b-[3px] px-1.5 2xl:px-2.5 pt-[3px] text-[0.9375rem] whitespace-nowrap',
+                      'hover:bg-accent-wash flex h-full items-center border-b-[3px] px-[0.3125rem] min-[112rem]:px-2.5 pt-[3px] text-sm whitespace-nowrap min-[112rem]:text-[0.9375rem]',
                       isCurrent(pathname, link.href)
                         ? 'border-accent text-ink font-semibold'
                         : 'text-ink border-transparent',
@@ -70,7 +70,7 @@ export function AppHeader() {
         <div className="ml-auto flex items-center gap-2">
           <LowStockCount />
           <UnitSwitch />
-          <span className="hidden items-center gap-1 min-[84rem]:flex">
+          <span className="hidden items-center gap-1 min-[90rem]:flex">
             <AccountLink />
             <SignOutButton className="px-2!" label={<LogOut aria-hidden="true" className="size-5" />} />
           </span>
@@ -88,7 +88,8 @@ function AccountLink() {
       href="/account"
       className="hover:bg-accent-wash flex min-h-9 max-w-44 items-center rounded-[3px] px-2 text-[0.9375rem]"
     >
-      <span className="truncate">{actor.name}</span>
+      <CircleUserRound aria-hidden="true" className="size-5 min-[112rem]:hidden" />
+      <span className="truncate max-[112rem]:sr-only">{actor.name}</span>
     </Link>
   )
 }
@@ -97,7 +98,7 @@ function PhoneMenu({ groups, pathname }: { groups: ReturnType<typeof useGroups>;
   const [isOpen, setIsOpen] = useState(false)
   const { actor, shopName } = useShop()
   return (
-    <span className="min-[84rem]:hidden">
+    <span className="min-[90rem]:hidden">
       <button
         type="button"
         className="hover:bg-accent-wash -mr-2 grid size-11 place-items-center rounded-[3px]"

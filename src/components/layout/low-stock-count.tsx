@@ -12,7 +12,7 @@ export function LowStockCount() {
   return (
     <Link
       href="/alerts"
-      className="text-caution hover:bg-accent-wash inline-flex min-h-11 items-center gap-1.5 rounded-[3px] px-2 text-[0.9375rem] font-semibold whitespace-nowrap min-[84rem]:hidden"
+      className="text-caution hover:bg-accent-wash inline-flex min-h-11 items-center gap-1.5 rounded-[3px] px-2 text-[0.9375rem] font-semibold whitespace-nowrap min-[90rem]:hidden"
     >
       <TriangleAlert aria-hidden="true" className="size-4" />
       {count} low

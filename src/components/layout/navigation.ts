@@ -22,6 +22,7 @@ export const navigationGroups: readonly NavigationGroup[] = [
   {
     label: 'Calculate',
     links: [
+      { href: '/search', label: 'Find a tool', permission: 'see' },
       { href: '/reach', label: 'Reach', permission: 'see' },
       { href: '/ball-speed', label: 'Ball-end speed', permission: 'see' },
       { href: '/starting-speeds', label: 'Speeds', permission: 'see' },
@@ -34,12 +35,15 @@ export const navigationGroups: readonly NavigationGroup[] = [
       { href: '/holders', label: 'Holders', permission: 'see' },
       { href: '/collets', label: 'Collets', permission: 'see' },
       { href: '/extensions', label: 'Extensions', permission: 'see' },
+      { href: '/fixtures', label: 'Fixtures', permission: 'see' },
       { href: '/fits', label: 'Fits', permission: 'see' },
     ],
   },
   {
     label: 'Crib',
     links: [
+      { href: '/assemblies', label: 'Assemblies', permission: 'see' },
+      { href: '/machines', label: 'Machines', permission: 'see' },
       { href: '/locations', label: 'Locations', permission: 'see' },
       { href: '/alerts', label: 'Low stock', permission: 'see' },
       { href: '/imports', label: 'Imports', permission: 'keepCrib' },

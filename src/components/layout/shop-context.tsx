@@ -1,6 +1,7 @@
 'use client'
 
 import { createContext, type ReactNode, useContext } from 'react'
+import type { CuttingSettings } from '@/core/cutting/cut-answer'
 import { can, type Permission, type Role } from '@/core/policies/permissions'
 import type { ReachSettings } from '@/core/reach/types'
 import type { LengthUnit } from '@/core/units/length-unit'
@@ -16,6 +17,9 @@ export interface Shop {
   reachSettings: ReachSettings
   /** The shop still lacks something it begins with, and this person may bring it. */
   isFirstDay: boolean
+  /** What a measured figure may differ from the calculated one. */
+  measuringToleranceMm: number
+  cuttingSettings: CuttingSettings
 }
 
 const ShopContext = createContext<Shop | null>(null)

@@ -36,6 +36,7 @@ const chuck: HolderResponse = {
   boreDepthMm: 60,
   minimumGripMm: 20,
   gripStartMm: null,
+  nutTorqueNm: null,
   sideLockInsertionMm: null,
   maximumRpm: null,
   segments: [{ part: 'nut', lengthMm: 18, noseDiameterMm: 28, spindleDiameterMm: 28 }],

@@ -3,6 +3,7 @@
 import { useState } from 'react'
 import type { ToolPart } from '@/core/outline/types'
 import type { LengthUnit } from '@/core/units/length-unit'
+import { CutSection } from '../cutting/cut-section'
 import type { CheckResult } from './compile-check'
 import { FirstTouchTable } from './first-touch-table'
 import { PrintedInputs, type PrintedInputsProps } from './printed-inputs'
@@ -46,6 +47,19 @@ export function ReachResults(props: ReachResultsProps) {
             />
           </div>
           <ReachMessages messages={answered.answer.messages} unit={unit} />
+          <CutSection
+            assembly={{
+              // What was picked from the crib knows its flutes and speeds; what was typed by hand does not.
+              cutter: {
+                ...answered.request.cutter,
+                fluteCount: rows.cutter?.fluteCount ?? null,
+                maximumRpm: rows.cutter?.maximumRpm ?? null,
+              },
+              holderMaximumRpm: rows.holder?.maximumRpm ?? null,
+              complianceUmPerN: answered.answer.stiffness.complianceUmPerN,
+              stickOutToDiameter: answered.answer.stiffness.stickOutToDiameter,
+            }}
+          />
         </>
       ) : null}
       <PrintedInputs draft={draft} rows={rows} reading={reading} />

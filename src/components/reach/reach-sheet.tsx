@@ -1,9 +1,13 @@
 'use client'
 
+import { Search } from 'lucide-react'
+import Link from 'next/link'
 import { type Dispatch, type RefObject, useMemo, useState } from 'react'
 import type { ToolPart } from '@/core/outline/types'
 import { useShop } from '../layout/shop-context'
 import type { FieldErrors } from './compile-check'
+import { searchPath } from './feature-only'
+import { KeepCheck } from './keep-check'
 import { type DraftChange, isDraftEmpty, type ReachDraft } from './reach-draft'
 import { fieldText, type Reading } from './read-field'
 import { SectionDrawing } from './section-drawing'
@@ -45,6 +49,21 @@ export function ReachSheet(props: ReachSheetProps) {
     <div ref={sheetRef} className="border-ink bg-sheet min-w-0 scroll-mt-16 self-start border">
       <h1 className="sr-only">Reach check</h1>
       <VerdictLine {...verdict} />
+      {compiled.feature && answer?.verdict !== 'reaches' ? (
+        <p className="border-hairline border-b px-3 py-1 print:hidden">
+          <Link
+            href={searchPath(draft, reading)}
+            prefetch={false}
+            className="text-accent inline-flex min-h-9 items-center gap-2 font-semibold hover:underline pointer-coarse:min-h-11"
+          >
+            <Search aria-hidden="true" className="size-4.5" />
+            Find what in the crib reaches this
+          </Link>
+        </p>
+      ) : null}
+      {answer?.verdict === 'reaches' ? (
+        <KeepCheck draft={draft} compiled={compiled} stickOutMm={answer.stickOut.usedMm} />
+      ) : null}
       <div className="relative">
         <SheetToolbar view={view} onView={setView} isCutterAlone={scene?.heights.noseMm == null} />
         {scene ? (

@@ -211,7 +211,11 @@ export const ToolDimensions = memo(function ToolDimensions({
   scene,
   layout,
   unit,
-}: Omit<SectionDimensionsProps, 'reachMm'>) {
+  isStickOutOutside = false,
+}: Omit<SectionDimensionsProps, 'reachMm'> & {
+  /** The stick-out stands outside the chuck too: where the whole is drawn, its figure would lie on the nut. */
+  isStickOutOutside?: boolean
+}) {
   const { noseMm, overallMm, gaugeLineMm } = scene.heights
   const said = (mm: number) => formatLength(mm, unit, { withUnit: false })
   // Figures are read from below or from the right: past a lean they are turned about to stay so.
@@ -220,6 +224,8 @@ export const ToolDimensions = memo(function ToolDimensions({
   const cutterEdge = -Math.max(scene.cutter.radiusMm, scene.cutter.shankRadiusMm) * layout.pxPerMm
   const outside = edge - firstLine
   const turnY = onSheet(layout, layout.turn.uMm, layout.turn.hMm).y
+  const stickOutLine = isStickOutOutside ? outside - dimensionSpacing : cutterEdge - firstLine
+  const gaugeLine = outside - (isStickOutOutside ? 2 : 1) * dimensionSpacing
   const place = (zMm: number, x: number) => ({ x: turn * x, y: turn * toolY(layout, zMm) })
   const dimension = (fromMm: number, toMm: number, line: number, symbol: string) => {
     const from = place(fromMm, fromMm === 0 ? cutterEdge : edge)
@@ -241,11 +247,11 @@ export const ToolDimensions = memo(function ToolDimensions({
         dimension(0, overallMm, cutterEdge - firstLine, 'OAL')
       ) : (
         <>
-          {dimension(0, noseMm, cutterEdge - firstLine, 'stick-out')}
+          {dimension(0, noseMm, stickOutLine, 'stick-out')}
           {overallMm > noseMm ? dimension(noseMm, overallMm, outside, 'grip') : null}
         </>
       )}
-      {gaugeLineMm === null ? null : dimension(0, gaugeLineMm, outside - dimensionSpacing, 'gauge length')}
+      {gaugeLineMm === null ? null : dimension(0, gaugeLineMm, gaugeLine, 'gauge length')}
     </g>
   )
 })

@@ -22,6 +22,7 @@ import { sectionSentence } from './section-sentence'
 import { SectionTool } from './section-tool'
 import { TouchMark } from './touch-mark'
 import { limitPoint, touchPoint } from './touch-point'
+import { touchingParts } from './touching-parts'
 import { useIsMounted } from './use-is-mounted'
 
 export interface SectionDrawingProps extends SectionChanges {
@@ -66,7 +67,7 @@ export function SectionDrawing(props: SectionDrawingProps) {
         className="block h-auto w-full print:mx-auto print:max-h-[100mm]"
       >
         <SectionPatterns layout={layout} />
-        <g clipPath="url(#reach-section-sheet)">
+        <g clipPath={`url(#${layout.name}-section-sheet)`}>
           <SectionPart scene={scene} layout={layout} />
           <SectionTool scene={scene} layout={layout} highlighted={highlighted} />
           {answer && answer.verdict !== 'reaches' ? (
@@ -142,13 +143,4 @@ function limitText(
 /** Something is in the way at this depth; an impossible check may have other reasons. */
 function isCollision({ shortfallMm, limitedBy }: ReachAnswer): boolean {
   return limitedBy === 'floor' || shortfallMm > overlapToleranceMm
-}
-
-/** The parts that touch before the depth asked for is reached. */
-function touchingParts(scene: SectionScene, { firstTouch }: ReachAnswer): ToolPart[] {
-  const { at } = scene
-  const askedMm = topFaceMm(at) - (at.kind === 'wall' ? at.leadMm : 0)
-  return firstTouch
-    .filter(({ depthMm }) => depthMm !== null && depthMm < askedMm - overlapToleranceMm)
-    .map(({ part }) => part)
 }

@@ -19,6 +19,8 @@ export interface SectionFrame {
 }
 
 export interface SectionLayout extends SectionFrame {
+  /** What its patterns and clips are called by: every drawing of a page has its own. */
+  name: string
   sheet: Sheet
   /** Height above the tip at which the drawing of the tool ends. */
   cutZMm: number
@@ -37,6 +39,9 @@ const narrowMargins = { left: 66, right: 70, top: 34, bottom: 74 }
 /** A phone's sheet ends in a line of words: what touches first. */
 const captionPx = 28
 const narrowSheetWidth = 560
+/** A small drawing beside a line of a list: no figures, so no room for them. */
+const smallMargins = { left: 6, right: 6, top: 8, bottom: 18 }
+const smallSheetWidth = 220
 
 /** A phone's width: figures stand closer and words are fewer. */
 export function isNarrow(sheet: Pick<Sheet, 'width'>): boolean {
@@ -51,19 +56,26 @@ const slabPx = 44
 const leaningRoom = 1.25
 const spindleStubShare = 0.04
 
-/** Where everything goes on a sheet of this size; `held` keeps the frame of before. */
+function marginsOf(sheet: Sheet): typeof wideMargins {
+  if (sheet.width < smallSheetWidth) return smallMargins
+  return isNarrow(sheet) ? narrowMargins : wideMargins
+}
+
+/** Where everything goes on a sheet of this size; `held` keeps the frame of before, or that of another drawing. */
 export function sectionLayout(
   scene: SectionScene,
   view: SectionView,
   sheet: Sheet,
   held: SectionFrame | null,
+  name = 'reach',
 ): SectionLayout {
-  const margins = isNarrow(sheet) ? narrowMargins : wideMargins
+  const margins = marginsOf(sheet)
   const cutZMm = cutHeightMm(scene, view)
   const extent = extentOf(scene, cutZMm)
   const frame = held ?? fittedFrame(extent, sheet, margins)
   return {
     ...frame,
+    name,
     sheet,
     cutZMm,
     left: 12,
@@ -74,6 +86,38 @@ export function sectionLayout(
     ),
     turn: turnOf(scene),
     toolRadiusMm: extent.toolRadiusMm,
+  }
+}
+
+/** Frames for several scenes side by side, each on a sheet of this size: one scale for all, their floors on one line. */
+export function sharedFrames(
+  scenes: readonly SectionScene[],
+  view: SectionView,
+  sheet: Sheet,
+): SectionFrame[] {
+  const margins = marginsOf(sheet)
+  const extents = scenes.map((scene) => extentOf(scene, cutHeightMm(scene, view)))
+  const room = roomOf(sheet, margins)
+  const [hMin, hMax] = [
+    Math.min(...extents.map((extent) => extent.hMin)),
+    Math.max(...extents.map((extent) => extent.hMax)),
+  ]
+  const widestMm = Math.max(...extents.map(({ uMin, uMax }) => uMax - uMin))
+  const pxPerMm = preferredScale(Math.min(room.width / widestMm, room.height / (hMax - hMin)))
+  const spareHeight = room.height - (hMax - hMin) * pxPerMm
+  return extents.map(({ uMin, uMax }) => ({
+    pxPerMm,
+    foot: {
+      x: margins.left + (room.width - (uMax - uMin) * pxPerMm) / 2 - uMin * pxPerMm,
+      y: sheet.height - margins.bottom - spareHeight / 2 + hMin * pxPerMm,
+    },
+  }))
+}
+
+function roomOf(sheet: Sheet, margins: typeof wideMargins): Sheet {
+  return {
+    width: sheet.width - margins.left - margins.right,
+    height: sheet.height - margins.top - margins.bottom,
   }
 }
 
@@ -173,10 +217,7 @@ function preferredScale(most: number): number {
 }
 
 function fittedFrame(extent: Extent, sheet: Sheet, margins: typeof wideMargins): SectionFrame {
-  const room = {
-    width: sheet.width - margins.left - margins.right,
-    height: sheet.height - margins.top - margins.bottom,
-  }
+  const room = roomOf(sheet, margins)
   const size = { widthMm: extent.uMax - extent.uMin, heightMm: extent.hMax - extent.hMin }
   const pxPerMm = preferredScale(Math.min(room.width / size.widthMm, room.height / size.heightMm))
   const spare = {

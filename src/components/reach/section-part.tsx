@@ -15,15 +15,15 @@ export interface SectionPartProps {
 
 /** What is cut through is hatched; two solids that touch the two ways. */
 export function SectionPatterns({ layout }: Pick<SectionPartProps, 'layout'>) {
-  const { sheet } = layout
+  const { name, sheet } = layout
   return (
     <defs>
-      <HatchPattern id="reach-hatch-part" />
-      <HatchPattern id="reach-hatch-obstacle" isMirrored />
-      <clipPath id="reach-section-sheet">
+      <HatchPattern id={`${name}-hatch-part`} />
+      <HatchPattern id={`${name}-hatch-obstacle`} isMirrored />
+      <clipPath id={`${name}-section-sheet`}>
         <rect x={0} y={0} width={sheet.width} height={sheet.height} />
       </clipPath>
-      <clipPath id="reach-section-cut">
+      <clipPath id={`${name}-section-cut`}>
         <rect x={-4000} y={-(layout.cutZMm - layout.turn.zMm) * layout.pxPerMm} width={8000} height={8000} />
       </clipPath>
     </defs>
@@ -35,10 +35,10 @@ export const SectionPart = memo(function SectionPart({ scene, layout }: SectionP
   return (
     <g strokeLinejoin="round">
       {obstaclePaths(scene, layout).map((obstacle) => (
-        <Solid key={obstacle.area} solid={obstacle} hatch="reach-hatch-obstacle" />
+        <Solid key={obstacle.area} solid={obstacle} hatch={`${layout.name}-hatch-obstacle`} />
       ))}
       {materialPaths(scene, layout).map((material) => (
-        <Solid key={material.area} solid={material} hatch="reach-hatch-part" />
+        <Solid key={material.area} solid={material} hatch={`${layout.name}-hatch-part`} />
       ))}
     </g>
   )
@@ -69,15 +69,15 @@ export const SectionCollision = memo(function SectionCollision({
   const solids = [...materialPaths(scene, layout), ...obstaclePaths(scene, layout)]
   return (
     <g>
-      <clipPath id="reach-collision">
+      <clipPath id={`${layout.name}-collision`}>
         {solids.map(({ area }) => (
           <path key={area} d={area} />
         ))}
       </clipPath>
-      <g clipPath="url(#reach-collision)">
+      <g clipPath={`url(#${layout.name}-collision)`}>
         <g
           transform={toolTransform(layout)}
-          clipPath="url(#reach-section-cut)"
+          clipPath={`url(#${layout.name}-section-cut)`}
           fill="var(--collision)"
           fillOpacity={0.5}
           stroke="var(--collision)"

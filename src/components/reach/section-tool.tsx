@@ -89,7 +89,7 @@ function Envelope({ scene, layout }: Omit<SectionToolProps, 'highlighted'>) {
   )
   return (
     <g
-      clipPath="url(#reach-section-cut)"
+      clipPath={`url(#${layout.name}-section-cut)`}
       stroke="var(--ink-soft)"
       strokeWidth={lineWidths.thin}
       strokeDasharray={hiddenDashes}

@@ -46,6 +46,11 @@ export function TouchMark({ at, layout, text, tone, dropPx }: TouchMarkProps) {
   )
 }
 
+/** The cross alone, where there is no room for words. */
+export function TouchCross({ at, layout, tone }: Pick<TouchMarkProps, 'at' | 'layout' | 'tone'>) {
+  return <Cross at={onSheet(layout, at.uMm, at.hMm)} armPx={arm} tone={tone} />
+}
+
 function Cross({ at: { x, y }, armPx, tone }: { at: Point; armPx: number; tone: TouchTone }) {
   const [out, across] = [armPx, 2 * armPx]
   return (

@@ -17,18 +17,20 @@ import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
 import { useAttempt } from '../ui/use-attempt'
-import { numberSettings, type ReachSettingName } from './number-settings'
+import { settingGroups, settingsBody, settingValue } from './number-settings'
 
-type Texts = Record<ReachSettingName, string>
+type Texts = Record<string, string>
+
+const numberSettings = settingGroups.flatMap(({ settings }) => settings)
 
 function textsOf(settings: ShopSettingsResponse, unit: 'mm' | 'in', decimalComma: boolean): Texts {
   return Object.fromEntries(
-    numberSettings.map(({ name, kind }) => {
-      const value = settings.reach[name]
+    numberSettings.map(({ path, kind }) => {
+      const value = settingValue(settings, path)
       const text = kind === 'length' ? lengthInputText(value, unit, { decimalComma }) : String(value)
-      return [name, kind === 'length' || !decimalComma ? text : text.replace('.', ',')]
+      return [path, kind === 'length' || !decimalComma ? text : text.replace('.', ',')]
     }),
-  ) as Texts
+  )
 }
 
 /** The shop's name, unit and money, and the figures every reach is worked out with. */
@@ -39,15 +41,16 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
   const { fault, isBusy, attempt } = useAttempt()
   const faults = fieldFaults(fault)
 
-  const parsed = numberSettings.map(({ name, kind }) => {
+  const parsed = numberSettings.map(({ path, kind }) => {
+    const text = texts[path] ?? ''
     const read =
       kind === 'length'
-        ? parseLength(texts[name], { unit, decimalComma, allowZero: true })
-        : parseDecimal(texts[name], { decimalComma })
-    if (!read.ok) return { name, value: null, message: read.message }
-    return { name, value: 'mm' in read ? read.mm : read.value, message: null }
+        ? parseLength(text, { unit, decimalComma, allowZero: true })
+        : parseDecimal(text, { decimalComma })
+    if (!read.ok) return { path, value: null, message: read.message }
+    return { path, value: 'mm' in read ? read.mm : read.value, message: null }
   })
-  const unreadable = Object.fromEntries(parsed.map(({ name, message }) => [name, message]))
+  const unreadable = Object.fromEntries(parsed.map(({ path, message }) => [path, message]))
 
   function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
@@ -61,7 +64,7 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
           currency: values.get('currency'),
           lengthUnit: values.get('lengthUnit'),
           decimalComma: values.get('decimalComma') === 'yes',
-          reach: Object.fromEntries(parsed.map(({ name, value }) => [name, value])),
+          ...settingsBody(parsed),
         },
       })
       toast.success('Saved. Every check from now on uses these.')
@@ -125,35 +128,37 @@ export function SettingsPage({ settings }: { settings: ShopSettingsResponse }) {
             ]}
           />
         </fieldset>
-        <fieldset className="grid items-start gap-4 sm:grid-cols-2">
-          <legend className="border-ink mb-3 w-full border-b pb-1 text-lg font-semibold">Reach</legend>
-          {numberSettings.map(({ name, kind, label, hint }) => {
-            const common = {
-              label,
-              hint,
-              value: texts[name],
-              error: faults[`reach.${name}`] ?? unreadable[name],
-              isRequired: true,
-            }
-            const setText = (text: string) => setTexts((held) => ({ ...held, [name]: text }))
-            return kind === 'length' ? (
-              <LengthField
-                key={name}
-                {...common}
-                unit={unit}
-                decimalComma={decimalComma}
-                onTextChange={setText}
-              />
-            ) : (
-              <TextField
-                key={name}
-                {...common}
-                inputMode="decimal"
-                onChange={(event) => setText(event.target.value)}
-              />
-            )
-          })}
-        </fieldset>
+        {settingGroups.map(({ title, settings: figures }) => (
+          <fieldset key={title} className="grid items-start gap-4 sm:grid-cols-2">
+            <legend className="border-ink mb-3 w-full border-b pb-1 text-lg font-semibold">{title}</legend>
+            {figures.map(({ path, kind, label, hint }) => {
+              const common = {
+                label,
+                hint,
+                value: texts[path] ?? '',
+                error: faults[path] ?? unreadable[path],
+                isRequired: true,
+              }
+              const setText = (text: string) => setTexts((held) => ({ ...held, [path]: text }))
+              return kind === 'length' ? (
+                <LengthField
+                  key={path}
+                  {...common}
+                  unit={unit}
+                  decimalComma={decimalComma}
+                  onTextChange={setText}
+                />
+              ) : (
+                <TextField
+                  key={path}
+                  {...common}
+                  inputMode="decimal"
+                  onChange={(event) => setText(event.target.value)}
+                />
+              )
+            })}
+          </fieldset>
+        ))}
         <Notice kind="caution">
           A smaller clearance lets more tools through and forgives less. These figures stand behind every
           verdict in the shop.

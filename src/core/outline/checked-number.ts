@@ -67,6 +67,20 @@ export function notNegativeOr<Fallback>(
   return value == null ? fallback : notNegative(value, path, name)
 }
 
+/**
+ * A finite number where one was given, of either sign, else the fallback.
+ *
+ * Units      Whatever the caller's are.
+ * Result     The number, or the fallback where it was null or absent.
+ * Errors     CoreInputError `not-finite` at `path`.
+ *
+ * @example
+ * finiteOr(-2, 0, 'rotaryStock.offsetXMm', 'The offset') // => -2
+ */
+export function finiteOr(value: Given, fallback: number, path: string, name: string): number {
+  return value == null ? fallback : finite(value, path, name)
+}
+
 function finite(value: Given, path: string, name: string): number {
   if (value == null) throw new CoreInputError('not-given', path, `${name} is needed.`)
   if (!Number.isFinite(value)) throw new CoreInputError('not-finite', path, `${name} must be a number.`)

@@ -5,6 +5,7 @@ import { can, permissionTable, roles } from './permissions'
 const expected = {
   see: [true, true, true, true],
   move: [true, false, true, true],
+  plan: [true, true, true, true],
   keepCrib: [false, false, true, true],
   seeCosts: [false, true, true, true],
   administer: [false, false, false, true],

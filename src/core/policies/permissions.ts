@@ -8,6 +8,8 @@ export const permissionTable = {
   see: ['machinist', 'estimator', 'cribManager', 'admin'],
   /** Issue, return, report broken from one's own hands, reverse one's own of the same day. */
   move: ['machinist', 'cribManager', 'admin'],
+  /** Keep an assembly, change and archive one that is only planned. */
+  plan: ['machinist', 'estimator', 'cribManager', 'admin'],
   /** Items, imports, locations, relocations, transfers, regrind, counts, reorder points, orders, any reversal. */
   keepCrib: ['cribManager', 'admin'],
   /** Costs, and what is ranked or exported by them. */

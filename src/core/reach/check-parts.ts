@@ -72,7 +72,7 @@ export function holderCheckParts(
   holder: HolderGeometry,
   extension: ExtensionGeometry | null | undefined,
 ): CheckPart[] {
-  const parts = (extension ? extensionOutline(extension) : []).map((part) => checkPart(part, 'holder', 0))
+  const parts = extension ? extensionCheckParts(extension) : []
   for (const outline of holderOutline(holder)) {
     const next = checkPart(outline, 'holder', extension?.projectionMm ?? 0)
     const same = parts.find(({ part }) => part === next.part)
@@ -80,6 +80,19 @@ export function holderCheckParts(
     else parts.push(next)
   }
   return parts
+}
+
+/**
+ * An extension's part ready to be checked; heights from its own nose.
+ *
+ * Units      Millimetres.
+ * Errors     As `extensionOutline`.
+ *
+ * @example
+ * extensionCheckParts({ projectionMm: 60, segments: [{ lengthMm: 60, noseDiameterMm: 16, spindleDiameterMm: 20 }] }).length // => 1
+ */
+export function extensionCheckParts(extension: ExtensionGeometry): CheckPart[] {
+  return extensionOutline(extension).map((part) => checkPart(part, 'holder', 0))
 }
 
 function checkPart({ part, segments }: OutlinePart, clearance: ClearanceKind, byMm: number): CheckPart {

@@ -1,7 +1,7 @@
 import { CoreInputError } from '@/core/core-input-error'
 import { notNegative, notNegativeOr, positive, positiveOrNull } from '@/core/outline/checked-number'
 import type { CutterDimensions } from '@/core/outline/cutter-dimensions'
-import { holeToolForms } from '@/core/tooling'
+import { type CutterForm, holeToolForms } from '@/core/tooling'
 import type { Feature, HoleFeature, Obstacle, WallFeature } from './types'
 
 export interface CheckedWall {
@@ -31,37 +31,123 @@ export type CheckedFeature = CheckedWall | CheckedHole
 
 const draftLimitDeg = 60
 
+/** A feature checked by itself: what a tool that goes round asks, and what one that makes its own hole does. */
+export interface CheckedDemand {
+  /** The wall, or the wall a hole is for a tool that circles in it. */
+  wall: CheckedWall
+  /** null for a wall: no hole tool cuts it. */
+  hole: CheckedHole | null
+}
+
 /**
- * The feature with gaps filled, what can't be refused, and a hole that is circled turned into its wall.
+ * A feature with gaps filled and what can't be refused, before any cutter is known.
+ *
+ * Units      Millimetres and degrees.
+ * Errors     CoreInputError `not-given`, `not-finite`, `not-positive`, `negative`, `draft-out-of-range`,
+ *            `tilt-out-of-range`, `tilt-with-closed-wall`.
+ *
+ * @example
+ * checkedDemand({ kind: 'hole', depthMm: 20, diameterMm: 6 }).wall.openingWidthMm // => 6
+ */
+export function checkedDemand(feature: Feature): CheckedDemand {
+  if (feature.kind === 'wall') return { wall: checkedWall(feature), hole: null }
+  const hole = checkedHole(feature)
+  return { wall: circledWall(hole), hole }
+}
+
+/** Why a cutter is not asked at all about a feature; an edge or the check itself makes an error of it. */
+export interface FormRefusal {
+  code: 'chamfer-not-checked' | 'hole-tool-on-wall' | 'tilt-without-spherical-tip' | 'tilt-out-of-range'
+  path: string
+  message: string
+}
+
+/**
+ * Why the form of a cutter can't be asked about a feature: a chamfer, a hole tool on a wall, a tip that may not tilt.
+ *
+ * Result     null where it can.
+ *
+ * @example
+ * formRefusal(checkedDemand({ kind: 'wall', depthMm: 5 }), cutterDimensions(drillCutter)).code // => 'hole-tool-on-wall'
+ */
+export function formRefusal({ wall, hole }: CheckedDemand, cutter: CutterDimensions): FormRefusal | null {
+  if (cutter.form === 'chamfer') return chamferRefusal
+  if (isHoleTool(cutter)) return hole ? null : holeToolRefusal
+  if (wall.tiltDeg === 0) return null
+  if (!cutter.hasSphericalTip) return tipRefusal
+  return cutter.taperHalfAngleDeg + wall.tiltDeg > 90 ? taperRefusal : null
+}
+
+const tiltPath = 'feature.tiltDeg'
+const chamferRefusal: FormRefusal = {
+  code: 'chamfer-not-checked',
+  path: 'cutter.form',
+  message: 'Reach is not worked out for a chamfer tool.',
+}
+const holeToolRefusal: FormRefusal = {
+  code: 'hole-tool-on-wall',
+  path: 'cutter.form',
+  message: 'A drill, reamer or tap can’t cut a wall.',
+}
+/** Only a ball turns about its own centre. */
+const tipRefusal: FormRefusal = {
+  code: 'tilt-without-spherical-tip',
+  path: tiltPath,
+  message: 'Only a tool with a ball tip may be tilted.',
+}
+const taperRefusal: FormRefusal = {
+  code: 'tilt-out-of-range',
+  path: tiltPath,
+  message: 'Taper and tilt together must not pass 90°.',
+}
+
+/**
+ * Whether a cutter makes its own hole on its axis.
+ *
+ * @example
+ * isHoleTool(drillCutter) // => true
+ */
+export function isHoleTool({ form }: { form: CutterForm }): boolean {
+  return (holeToolForms as readonly CutterForm[]).includes(form)
+}
+
+/**
+ * The feature as it is to one cutter: gaps filled, what can't be refused, a hole that is circled turned into its wall.
  *
  * Units      Millimetres and degrees.
  * Result     A hole only for a hole tool; any other form gets a straight wall in an opening of the hole's diameter.
- * Errors     CoreInputError `not-given`, `not-finite`, `not-positive`, `negative`, `draft-out-of-range`,
- *            `tilt-out-of-range`, `tilt-without-spherical-tip`, `tilt-with-closed-wall`, `chamfer-not-checked`,
- *            `hole-tool-on-wall`.
+ * Errors     CoreInputError as `checkedDemand`, and the codes of `formRefusal`.
  *
  * @example
  * checkedFeature({ kind: 'wall', depthMm: 5, tiltDeg: 10 }, cutterDimensions(squareCutter)) // => throws tilt-without-spherical-tip
  */
 export function checkedFeature(feature: Feature, cutter: CutterDimensions): CheckedFeature {
-  if (cutter.form === 'chamfer')
-    throw new CoreInputError(
-      'chamfer-not-checked',
-      'cutter.form',
-      'Reach is not worked out for a chamfer tool.',
-    )
-  const isHoleTool = (holeToolForms as readonly string[]).includes(cutter.form)
-  if (feature.kind === 'hole') return checkedHole(feature, isHoleTool)
-  if (isHoleTool)
-    throw new CoreInputError('hole-tool-on-wall', 'cutter.form', 'A drill, reamer or tap can’t cut a wall.')
-  return checkedWall(feature, cutter)
+  const demand = checkedDemand(feature)
+  const refusal = formRefusal(demand, cutter)
+  if (refusal) throw new CoreInputError(refusal.code, refusal.path, refusal.message)
+  return featureFor(demand, cutter)
 }
 
-function checkedHole(hole: HoleFeature, isHoleTool: boolean): CheckedFeature {
-  const depthMm = positive(hole.depthMm, 'feature.depthMm', 'The depth')
-  const diameterMm = positive(hole.diameterMm, 'feature.diameterMm', 'The hole diameter')
-  const breakThroughMm = notNegativeOr(hole.breakThroughMm, 0, 'feature.breakThroughMm', 'The break-through')
-  if (isHoleTool) return { kind: 'hole', depthMm, diameterMm, breakThroughMm }
+/**
+ * What of a checked feature a cutter is asked that its form does not refuse.
+ *
+ * @example
+ * featureFor(checkedDemand({ kind: 'hole', depthMm: 20, diameterMm: 6 }), cutterDimensions(squareCutter)).kind // => 'wall'
+ */
+export function featureFor({ wall, hole }: CheckedDemand, cutter: CutterDimensions): CheckedFeature {
+  return hole && isHoleTool(cutter) ? hole : wall
+}
+
+function checkedHole(hole: HoleFeature): CheckedHole {
+  return {
+    kind: 'hole',
+    depthMm: positive(hole.depthMm, 'feature.depthMm', 'The depth'),
+    diameterMm: positive(hole.diameterMm, 'feature.diameterMm', 'The hole diameter'),
+    breakThroughMm: notNegativeOr(hole.breakThroughMm, 0, 'feature.breakThroughMm', 'The break-through'),
+  }
+}
+
+function circledWall({ depthMm, diameterMm, breakThroughMm }: CheckedHole): CheckedWall {
   return {
     kind: 'wall',
     depthMm,
@@ -77,7 +163,7 @@ function checkedHole(hole: HoleFeature, isHoleTool: boolean): CheckedFeature {
   }
 }
 
-function checkedWall(wall: WallFeature, cutter: CutterDimensions): CheckedWall {
+function checkedWall(wall: WallFeature): CheckedWall {
   const checked: CheckedWall = {
     kind: 'wall',
     depthMm: positive(wall.depthMm, 'feature.depthMm', 'The depth'),
@@ -98,7 +184,7 @@ function checkedWall(wall: WallFeature, cutter: CutterDimensions): CheckedWall {
   }
   if (checked.draftDeg >= draftLimitDeg)
     throw new CoreInputError('draft-out-of-range', 'feature.draftDeg', 'The draft must be below 60°.')
-  if (checked.tiltDeg > 0) refuseTilt(checked, cutter)
+  if (checked.tiltDeg > 0) refuseTilt(checked)
   return checked
 }
 
@@ -110,19 +196,14 @@ function checkedObstacle({ setbackMm, riseMm }: Obstacle, index: number): Obstac
   }
 }
 
-/** The far wall, the corner's side wall or an obstacle would decide; and only a ball turns about its own centre. */
-function refuseTilt(wall: CheckedWall, cutter: CutterDimensions): void {
-  const path = 'feature.tiltDeg'
-  if (!cutter.hasSphericalTip)
-    throw new CoreInputError('tilt-without-spherical-tip', path, 'Only a tool with a ball tip may be tilted.')
+/** The far wall, the corner's side wall or an obstacle would decide. */
+function refuseTilt(wall: CheckedWall): void {
   if (wall.obstacles.length > 0 || wall.openingWidthMm !== null || wall.insideCornerRadiusMm !== null)
     throw new CoreInputError(
       'tilt-with-closed-wall',
-      path,
+      tiltPath,
       'A tilted tool is checked only on an open wall, without obstacles, opening width or inside corner.',
     )
   if (wall.draftDeg + wall.tiltDeg >= 90)
-    throw new CoreInputError('tilt-out-of-range', path, 'Draft and tilt together must be below 90°.')
-  if (cutter.taperHalfAngleDeg + wall.tiltDeg > 90)
-    throw new CoreInputError('tilt-out-of-range', path, 'Taper and tilt together must not pass 90°.')
+    throw new CoreInputError('tilt-out-of-range', tiltPath, 'Draft and tilt together must be below 90°.')
 }

@@ -141,10 +141,23 @@ export function partInFloor(
 ): ToolPart | null {
   if (at.kind === 'hole' || at.tiltDeg === 0) return null
   const isInFloor = (z: number, r: number) =>
-    at.pivotMm + (z - at.pivotMm) * at.cosTilt - (r + clearances.shankMm) * at.sinTilt < -overlapToleranceMm
+    farSideHeightMm(at, z, r + clearances.shankMm) < -overlapToleranceMm
   const found = cutterParts.find(
     ({ clearance, lines }) =>
       clearance === 'cutter' && lines.some(({ z0, r0, z1, r1 }) => isInFloor(z0, r0) || isInFloor(z1, r1)),
   )
   return found?.part ?? null
+}
+
+/**
+ * How high above the floor the far side of a tilted tool stands, at one point of its outline.
+ *
+ * Units      Millimetres; the radius widened by the clearance already.
+ * Result     Below 0 in the floor.
+ *
+ * @example
+ * farSideHeightMm({ ...placementOf({ kind: 'wall', depthMm: 25, tiltDeg: 30 }, ballCutter), cosTilt: 1, sinTilt: 0.5 }, 20, 14) // => 13
+ */
+export function farSideHeightMm(at: WallPlacement, zMm: number, radiusMm: number): number {
+  return at.pivotMm + (zMm - at.pivotMm) * at.cosTilt - radiusMm * at.sinTilt
 }

@@ -22,9 +22,7 @@ export function fitMessages(
   at: Placement,
   settings: ReachSettings,
 ): ReachMessage[] {
-  if (feature.kind === 'wall' && at.kind === 'wall')
-    return [...openingMessages(feature, cutter, at), ...wallFormMessages(cutter, at)]
-  if (feature.kind === 'wall') return []
+  if (feature.kind === 'wall') return at.kind === 'wall' ? wallFitMessages(feature, cutter, at) : []
   const offMm = Math.abs(feature.diameterMm - 2 * cutter.radiusMm)
   if (offMm <= settings.holeToleranceMm + overlapToleranceMm) return []
   return [
@@ -39,7 +37,8 @@ export function fitMessages(
   ]
 }
 
-function openingMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {
+/** One list from first to last: a search asks this of every cutter of a crib. */
+function wallFitMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {
   const messages: ReachMessage[] = []
   const { openingWidthMm, insideCornerRadiusMm, floorRadiusMm } = wall
   const neededMm = 2 * at.standOffMm
@@ -63,6 +62,7 @@ function openingMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPl
         shortfallMm: cutter.cornerRadiusMm - floorRadiusMm,
       },
     })
+  addFormMessages(messages, cutter, at)
   return messages
 }
 
@@ -73,8 +73,7 @@ function tooNarrow(widthMm: number, neededMm: number, isHole: boolean): ReachMes
     : { code: 'opening-too-narrow', values: { openingWidthMm: widthMm, ...needed } }
 }
 
-function wallFormMessages(cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {
-  const messages: ReachMessage[] = []
+function addFormMessages(messages: ReachMessage[], cutter: CutterDimensions, at: WallPlacement): void {
   if (isTaperTooSteep(cutter, at))
     messages.push({
       code: 'taper-steeper-than-wall',
@@ -90,7 +89,6 @@ function wallFormMessages(cutter: CutterDimensions, at: WallPlacement): ReachMes
       code: 'length-of-cut-below-contact',
       values: { lengthOfCutMm: cutter.lengthOfCutMm, contactHeightMm },
     })
-  return messages
 }
 
 /**
@@ -109,7 +107,10 @@ function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): boolean {
  * cutsNothing(cutterDimensions({ ...ballCutter, lengthOfCutMm: 2 }), placementOf({ kind: 'wall', depthMm: 5 }, ballCutter)) // => true
  */
 export function cutsNothing(cutter: CutterDimensions, at: Placement): boolean {
-  return at.kind === 'wall' && wallFormMessages(cutter, at).length > 0
+  if (at.kind === 'hole') return false
+  const messages: ReachMessage[] = []
+  addFormMessages(messages, cutter, at)
+  return messages.length > 0
 }
 
 /**

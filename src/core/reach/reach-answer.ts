@@ -46,11 +46,7 @@ export function reachAnswer(request: ReachRequest): ReachAnswer {
   refuseBadSettings(request.settings)
   const reach = reachCase(request)
   const holding = holdingOf(request)
-  const refusals = [
-    ...fitMessages(reach.feature, reach.cutter, reach.at, reach.settings),
-    ...obstacleMessages(reach),
-    ...holding.refusals,
-  ]
+  const refusals = [...featureRefusals(reach), ...holding.refusals]
   const range = stickOutRange(reach, refusals.length === 0)
   const usedMm = request.stickOutMm ?? range.requiredMm ?? range.upper.mm
   refusals.push(...crossedMessages(range))
@@ -121,6 +117,27 @@ function stiffnessAt(request: ReachRequest, { cutter }: ReachCase, usedMm: numbe
     stickOutToDiameter: usedMm / (2 * cutter.radiusMm),
     deflectionUm: sideLoadN == null ? null : sideLoadN * complianceUmPerN,
   }
+}
+
+/** Why the feature does not take the tool at any stick-out. */
+function featureRefusals(reach: ReachCase): ReachMessage[] {
+  const { feature, cutter, at, settings } = reach
+  return [...fitMessages(feature, cutter, at, settings), ...obstacleMessages(reach)]
+}
+
+/**
+ * The stick-out a prepared assembly requires in its feature, and nothing else of its answer.
+ *
+ * Assumes something holds the shank.
+ *
+ * Units      Millimetres.
+ * Result     As the answer's `stickOut.requiredMm`; null where no stick-out does.
+ *
+ * @example
+ * requiredStickOutMm(reachCase(reachRequest({}))) // => 14
+ */
+export function requiredStickOutMm(reach: ReachCase): number | null {
+  return stickOutRange(reach, featureRefusals(reach).length === 0).requiredMm
 }
 
 /** The length of cut may not strike what stands on the part on its way to the depth. */

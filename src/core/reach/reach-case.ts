@@ -1,6 +1,7 @@
 import { notNegative, positive } from '@/core/outline/checked-number'
 import { type CutterDimensions, cutterDimensions } from '@/core/outline/cutter-dimensions'
 import { overlapToleranceMm } from '@/core/outline/types'
+import type { CutterGeometry } from '@/core/tooling'
 import { type CheckPart, checkPartsOfDimensions, holderCheckParts } from './check-parts'
 import { type CheckedFeature, checkedFeature } from './checked-feature'
 import { type LeastTouch, leastTouch } from './first-touches'
@@ -15,16 +16,22 @@ import {
   type ReachSettings,
 } from './types'
 
-/** A request with everything checked and every outline ready. */
-export interface ReachCase {
+/** What of a request no feature changes. */
+export interface PreparedAssembly {
   cutter: CutterDimensions
-  feature: CheckedFeature
-  at: Placement
   cutterParts: CheckPart[]
   holderParts: CheckPart[]
   clamping: CheckedClamping
   clearances: Clearances
   settings: ReachSettings
+  /** Where a hole tool's flutes or reach length end; of no meaning for any other. */
+  usableLengthMm: number
+}
+
+/** A request with everything checked and every outline ready. */
+export interface ReachCase extends PreparedAssembly {
+  feature: CheckedFeature
+  at: Placement
   /** First touch of the cutter's own parts: the same at every stick-out. */
   cutterTouch: LeastTouch
   /** Depth of the tip at which a hole tool's flutes or reach length end; Infinity for any other. */
@@ -50,26 +57,55 @@ export function reachCase(request: ReachRequest): ReachCase {
   const { settings } = request
   const cutter = cutterDimensions(request.cutter)
   const feature = checkedFeature(request.feature, cutter)
-  const at = placement(feature, cutter)
   const clearances = checkedClearances(request)
   const cutterParts = checkPartsOfDimensions(cutter)
   if (request.stickOutMm != null) positive(request.stickOutMm, 'stickOutMm', 'The stick-out')
   if (request.sideLoadN != null) notNegative(request.sideLoadN, 'sideLoadN', 'The side load')
-  return {
+  const assembly = {
     cutter,
-    feature,
-    at,
+    usableLengthMm: usableTipDepthMm(request.cutter, cutter, settings),
     cutterParts,
     holderParts: holderCheckParts(request.holder, request.extension),
     clamping: checkedClamping(request.holder, request.extension, request.collet),
     clearances,
     settings,
+  }
+  return caseInFeature(assembly, feature)
+}
+
+/**
+ * A prepared assembly in a feature, its own or another.
+ *
+ * Units      Millimetres and degrees.
+ *
+ * @example
+ * caseInFeature(reachCase(reachRequest({})), checkedFeature({ kind: 'wall', depthMm: 3 }, cutterDimensions(squareCutter))).at.tipDepthMm // => 3
+ */
+export function caseInFeature(assembly: PreparedAssembly, feature: CheckedFeature): ReachCase {
+  const { cutter, cutterParts, clearances, usableLengthMm } = assembly
+  const at = placement(feature, cutter)
+  return {
+    ...assembly,
+    feature,
+    at,
     cutterTouch: leastTouch(at, cutterParts, 0, clearances),
-    usableTipDepthMm: usableTipDepth(request, cutter, at),
+    usableTipDepthMm: at.kind === 'wall' ? Number.POSITIVE_INFINITY : usableLengthMm,
   }
 }
 
-function checkedClearances({ clearances, settings }: ReachRequest): Clearances {
+/**
+ * The clearances asked for, the shop's where none are given.
+ *
+ * Units      Millimetres.
+ * Errors     CoreInputError `not-given`, `not-finite`, `negative` at `clearances.…`.
+ *
+ * @example
+ * checkedClearances({ clearances: { holderMm: 1 }, settings: defaultReachSettings }) // => { shankMm: 0.025, holderMm: 1 }
+ */
+export function checkedClearances({
+  clearances,
+  settings,
+}: Pick<ReachRequest, 'clearances' | 'settings'>): Clearances {
   const shankMm = clearances?.shankMm ?? settings.shankClearanceMm
   const holderMm = clearances?.holderMm ?? settings.holderClearanceMm
   return {
@@ -78,15 +114,24 @@ function checkedClearances({ clearances, settings }: ReachRequest): Clearances {
   }
 }
 
-/** A drill's flutes need room for the chips; a reach length says how deep any hole tool may go. */
-function usableTipDepth(
-  { cutter: given, settings }: ReachRequest,
+/**
+ * Depth of the tip at which a hole tool's flutes or reach length end.
+ *
+ * Assumes room for the chips in a drill's flutes; a reach length says how deep any hole tool may go.
+ *
+ * Units      Millimetres.
+ * Result     May be negative for flutes shorter than their chips need.
+ *
+ * @example
+ * usableTipDepthMm(drillCutter, cutterDimensions(drillCutter), defaultReachSettings) // => 31
+ */
+export function usableTipDepthMm(
+  given: CutterGeometry,
   cutter: CutterDimensions,
-  at: Placement,
+  { drillChipRoomDiameters }: ReachSettings,
 ): number {
-  if (at.kind === 'wall') return Number.POSITIVE_INFINITY
   if (given.reachLengthMm != null) return given.reachLengthMm
-  const chipRoomMm = cutter.form === 'drill' ? settings.drillChipRoomDiameters * 2 * cutter.radiusMm : 0
+  const chipRoomMm = cutter.form === 'drill' ? drillChipRoomDiameters * 2 * cutter.radiusMm : 0
   return cutter.lengthOfCutMm - chipRoomMm
 }
 

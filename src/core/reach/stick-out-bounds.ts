@@ -1,7 +1,7 @@
 import { CoreInputError } from '@/core/core-input-error'
 import { notNegative, notNegativeOr, positiveOrNull } from '@/core/outline/checked-number'
 import type { CutterDimensions } from '@/core/outline/cutter-dimensions'
-import type { ColletGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
+import type { Clamping, ColletGeometry, ExtensionGeometry, HolderGeometry } from '@/core/tooling'
 import type { LowerBound, UpperBound } from './bound-names'
 import type { CheckPart } from './check-parts'
 import { clearanceBoundMm, floorBoundMm, obstaclesBoundMm } from './clearance-bounds'
@@ -50,14 +50,30 @@ export function checkedClamping(
   extension: ExtensionGeometry | null | undefined,
   collet: ColletGeometry | null | undefined,
 ): CheckedClamping {
-  const owner = extension ? 'extension' : 'holder'
-  const clamping = extension ?? holder
+  return extension
+    ? clampingOf('extension', extension, null, collet)
+    : clampingOf('holder', holder, holder.sideLockInsertionMm, collet)
+}
+
+/**
+ * As `checkedClamping`, from the one that clamps alone.
+ *
+ * Units      Millimetres.
+ * Errors     As `checkedClamping`.
+ *
+ * @example
+ * clampingOf('extension', { boreDepthMm: 30, minimumGripMm: 12 }, null, null).insertionMm // => null
+ */
+export function clampingOf(
+  owner: 'holder' | 'extension',
+  clamping: Clamping,
+  sideLockInsertionMm: number | null | undefined,
+  collet: ColletGeometry | null | undefined,
+): CheckedClamping {
   const boreDepthMm = positiveOrNull(clamping.boreDepthMm, `${owner}.boreDepthMm`, 'The bore depth')
   if (boreDepthMm === null)
     throw new CoreInputError('bore-depth-missing', `${owner}.boreDepthMm`, 'The bore depth is needed.')
-  const insertionMm = extension
-    ? null
-    : positiveOrNull(holder.sideLockInsertionMm, 'holder.sideLockInsertionMm', 'The insertion')
+  const insertionMm = positiveOrNull(sideLockInsertionMm, 'holder.sideLockInsertionMm', 'The insertion')
   const gripMm = gripOf(
     notNegativeOr(clamping.minimumGripMm, null, `${owner}.minimumGripMm`, 'The grip'),
     collet,
@@ -112,13 +128,29 @@ export function stickOutBounds(
 function fixedLowerBounds(
   cutter: CutterDimensions,
   { boreDepthMm, insertionMm }: CheckedClamping,
-  { fluteToGripMm }: ReachSettings,
+  settings: ReachSettings,
 ): Bound<LowerBound>[] {
   const bounds: Bound<LowerBound>[] = [{ by: 'bore', mm: cutter.overallLengthMm - boreDepthMm }]
-  if (cutter.neck) bounds.push({ by: 'neck', mm: cutter.neck.fullShankZMm + fluteToGripMm })
-  else bounds.push({ by: 'flutes', mm: cutter.fluteLengthMm + fluteToGripMm })
+  bounds.push(fullShankBound(cutter, settings))
   if (insertionMm !== null) bounds.push({ by: 'sideLock', mm: cutter.overallLengthMm - insertionMm })
   return bounds
+}
+
+/**
+ * The stick-out that leaves only full shank behind the nose.
+ *
+ * Units      Millimetres.
+ *
+ * @example
+ * fullShankBound(cutterDimensions(neckedCutter), defaultReachSettings) // => { by: 'neck', mm: 39.1875 }
+ */
+export function fullShankBound(
+  { neck, fluteLengthMm }: CutterDimensions,
+  { fluteToGripMm }: ReachSettings,
+): Bound<LowerBound> {
+  return neck
+    ? { by: 'neck', mm: neck.fullShankZMm + fluteToGripMm }
+    : { by: 'flutes', mm: fluteLengthMm + fluteToGripMm }
 }
 
 function upperBounds(cutter: CutterDimensions, clamping: CheckedClamping): Bound<UpperBound>[] {

@@ -36,14 +36,46 @@ export interface StiffnessSettings {
  * tipComplianceUmPerN([{ fromMm: 0, toMm: 40, fromDiameterMm: 10, toDiameterMm: 10, modulusGpa: 600 }]).toFixed(5) // => '0.07243'
  */
 export function tipComplianceUmPerN(pieces: BeamPiece[]): number {
-  let sum = 0
+  return complianceByOffset(pieces).constant
+}
+
+/** Compliance at a tip that is `offset` further away than the pieces say: constant + offset·linear + offset²·quadratic. */
+export interface OffsetCompliance {
+  constant: number
+  linear: number
+  quadratic: number
+}
+
+/**
+ * How much pieces of a cantilever add to the compliance of a tip that is moved away from them.
+ *
+ * Assumes what `tipComplianceUmPerN` assumes; its formula written out for u = (x + offset)/d.
+ *
+ * Units      Millimetres, gigapascals; micrometres per newton, per newton and millimetre, per newton and square millimetre.
+ * Result     0 or more each; without pieces nothing.
+ * Errors     None; a diameter of 0 gives Infinity.
+ * Source     As `tipComplianceUmPerN`.
+ *
+ * @example
+ * complianceByOffset([{ fromMm: 0, toMm: 10, fromDiameterMm: 10, toDiameterMm: 10, modulusGpa: 210 }]).linear.toFixed(9) // => '0.000970087'
+ */
+export function complianceByOffset(pieces: BeamPiece[]): OffsetCompliance {
+  let constant = 0
+  let linear = 0
+  let quadratic = 0
   for (const { fromMm, toMm, fromDiameterMm, toDiameterMm, modulusGpa } of pieces) {
     const u1 = fromMm / fromDiameterMm
     const u2 = toMm / toDiameterMm
-    sum +=
-      ((toMm - fromMm) * (u1 * u1 + u1 * u2 + u2 * u2)) / (3 * fromDiameterMm * toDiameterMm * modulusGpa)
+    const v1 = 1 / fromDiameterMm
+    const v2 = 1 / toDiameterMm
+    const lengthMm = toMm - fromMm
+    const under = 3 * fromDiameterMm * toDiameterMm * modulusGpa
+    constant += (lengthMm * (u1 * u1 + u1 * u2 + u2 * u2)) / under
+    linear += (lengthMm * (2 * u1 * v1 + u1 * v2 + u2 * v1 + 2 * u2 * v2)) / under
+    quadratic += (lengthMm * (v1 * v1 + v1 * v2 + v2 * v2)) / under
   }
-  return (64 / Math.PI) * sum
+  const scale = 64 / Math.PI
+  return { constant: scale * constant, linear: scale * linear, quadratic: scale * quadratic }
 }
 
 /**
@@ -68,22 +100,65 @@ export function assemblyComplianceUmPerN(
   stickOutMm: number,
   settings: StiffnessSettings,
 ): number {
-  const steel = settings.steelModulusGpa
   const holderNoseMm = stickOutMm + (extension?.projectionMm ?? 0)
   return tipComplianceUmPerN([
     ...cutterBeam(cutter, substrate, stickOutMm, settings),
-    ...(extension ? outlineBeam(extensionOutline(extension), stickOutMm, steel, 1) : []),
-    ...outlineBeam(holderOutline(holder), holderNoseMm, steel, 1),
+    ...(extension ? extensionBeam(extension, stickOutMm, settings) : []),
+    ...holderBeam(holder, holderNoseMm, settings),
   ])
 }
 
-function cutterBeam(
+/**
+ * A holder as a beam of solid steel.
+ *
+ * Units      Millimetres, gigapascals; `noseMm` is its nose's distance from the tip.
+ * Errors     As `holderOutline`.
+ *
+ * @example
+ * holderBeam(handHolder, 40, defaultReachSettings)[0].toMm // => 58
+ */
+export function holderBeam(
+  holder: HolderGeometry,
+  noseMm: number,
+  { steelModulusGpa }: StiffnessSettings,
+): BeamPiece[] {
+  return outlineBeam(holderOutline(holder), noseMm, steelModulusGpa, 1)
+}
+
+/**
+ * An extension as a beam of solid steel.
+ *
+ * Units      Millimetres, gigapascals; `noseMm` is its nose's distance from the tip.
+ * Errors     As `extensionOutline`.
+ *
+ * @example
+ * extensionBeam({ projectionMm: 60, segments: [{ lengthMm: 60, noseDiameterMm: 16, spindleDiameterMm: 20 }] }, 40, defaultReachSettings)[0].fromMm // => 40
+ */
+export function extensionBeam(
+  extension: ExtensionGeometry,
+  noseMm: number,
+  { steelModulusGpa }: StiffnessSettings,
+): BeamPiece[] {
+  return outlineBeam(extensionOutline(extension), noseMm, steelModulusGpa, 1)
+}
+
+/**
+ * What of a cutter sticks out, as a beam.
+ *
+ * Assumes what `assemblyComplianceUmPerN` assumes.
+ *
+ * Units      Millimetres, gigapascals.
+ *
+ * @example
+ * cutterBeam(cutterDimensions(ballCutter), 'carbide', 40, defaultReachSettings).at(-1).toMm // => 40
+ */
+export function cutterBeam(
   cutter: CutterDimensions,
   substrate: Substrate | null | undefined,
   stickOutMm: number,
   settings: StiffnessSettings,
 ): BeamPiece[] {
-  const modulusGpa = substrate === 'hss' ? settings.steelModulusGpa : settings.carbideModulusGpa
+  const modulusGpa = cutterModulusGpa(substrate, settings)
   const parts = outlineOfDimensions(cutter).map(({ part, segments }) => ({
     part,
     segments: strokesBetween(segments, 0, stickOutMm),
@@ -98,6 +173,21 @@ function cutterBeam(
       1,
     ),
   ]
+}
+
+/**
+ * What a cutter is made of, as its modulus; carbide where it is not known.
+ *
+ * Units      Gigapascals.
+ *
+ * @example
+ * cutterModulusGpa('hss', defaultReachSettings) // => 210
+ */
+export function cutterModulusGpa(
+  substrate: Substrate | null | undefined,
+  { carbideModulusGpa, steelModulusGpa }: StiffnessSettings,
+): number {
+  return substrate === 'hss' ? steelModulusGpa : carbideModulusGpa
 }
 
 /** Where the ball, corner, point or chamfer ends and the plain form begins. */

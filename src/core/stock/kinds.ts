@@ -31,5 +31,14 @@ export const movementKinds = [
 export type MovementKind = (typeof movementKinds)[number]
 
 /** Kinds of item that carry geometry and have a page and a route of their own. */
-export const catalogueKinds = ['cutter', 'holder', 'collet', 'extension'] as const
+export const catalogueKinds = ['cutter', 'holder', 'collet', 'extension', 'fixture'] as const
 export type CatalogueKind = (typeof catalogueKinds)[number]
+
+/** Those of them that an assembly in a spindle is made of. */
+export const toolingKinds = [
+  'cutter',
+  'holder',
+  'collet',
+  'extension',
+] as const satisfies readonly CatalogueKind[]
+export type ToolingKind = (typeof toolingKinds)[number]

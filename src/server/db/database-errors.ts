@@ -12,6 +12,7 @@ export const ledgerErrorCodes = {
   stillInUse: 'LL016',
   reorderPointMoved: 'LL017',
   halfMerge: 'LL018',
+  assemblyRule: 'LL019',
 } as const
 
 interface DatabaseError {

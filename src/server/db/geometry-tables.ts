@@ -15,7 +15,7 @@ export interface GeometryTable {
   segments: { name: string; fields: readonly string[] } | null
 }
 
-const clampingFields = ['boreDepthMm', 'minimumGripMm', 'gripStartMm']
+const clampingFields = ['boreDepthMm', 'minimumGripMm', 'gripStartMm', 'nutTorqueNm']
 const segmentFields = ['lengthMm', 'noseDiameterMm', 'spindleDiameterMm']
 
 export const geometryTables: Record<CatalogueKind, GeometryTable> = {
@@ -60,11 +60,12 @@ export const geometryTables: Record<CatalogueKind, GeometryTable> = {
   },
   extension: {
     name: 'extensions',
-    fields: ['projectionMm', ...clampingFields],
+    fields: ['projectionMm', 'shankDiameterMm', ...clampingFields],
     enums: [],
     hasBore: true,
     segments: { name: 'extension_segments', fields: segmentFields },
   },
+  fixture: { name: 'fixtures', fields: ['heightMm'], enums: [], hasBore: false, segments: null },
 }
 
 type Values = Record<string, unknown>

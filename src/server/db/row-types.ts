@@ -14,6 +14,88 @@ export interface AlertsRow {
   closed_position: number | null
 }
 
+export interface AssembliesRow {
+  id: string
+  number: number
+  name: string
+  note: string
+  cutter_kind: string
+  holder_kind: string
+  stick_out_mm: number
+  gauge_length_mm: number
+  tool_number: number | null
+  length_offset_number: number | null
+  diameter_offset_number: number | null
+  machine_id: string | null
+  pocket: number | null
+  state: string
+  stick_out_set_at: Date
+  built_at: Date | null
+  broken_down_at: Date | null
+  created_by: string
+  version: number
+  archived_at: Date | null
+  created_at: Date
+  updated_at: Date
+}
+
+export interface AssemblyChecksRow {
+  id: string
+  assembly_id: string
+  feature: unknown
+  clearances: unknown
+  kept_answer: unknown
+  answer: unknown
+  holds: boolean
+  checked_at: Date
+  created_by: string
+  created_at: Date
+}
+
+export interface AssemblyFindingsRow {
+  id: string
+  assembly_id: string
+  key: string
+  code: string
+  check_id: string | null
+  is_fault: boolean
+  detail: unknown
+  movement_id: string | null
+  found_at: Date
+  resolved_at: Date | null
+}
+
+export interface AssemblyMeasurementsRow {
+  id: string
+  assembly_id: string
+  gauge_length_mm: number
+  diameter_mm: number | null
+  expected_gauge_length_mm: number
+  expected_diameter_mm: number
+  source: string
+  actor_id: string
+  measured_at: Date
+}
+
+export interface AssemblyPartsRow {
+  assembly_id: string
+  kind: string
+  item_id: string
+  item_kind: string
+  piece_id: string | null
+  geometry: unknown
+  home_location_id: string | null
+  location_id: string | null
+  condition: string | null
+}
+
+export interface AssemblyRechecksRow {
+  id: string
+  assembly_id: string
+  movement_id: string | null
+  requested_at: Date
+}
+
 export interface AuditEntriesRow {
   id: string
   actor_id: string | null
@@ -108,6 +190,14 @@ export interface ExtensionsRow {
   bore_depth_mm: number | null
   minimum_grip_mm: number | null
   grip_start_mm: number | null
+  shank_diameter_mm: number | null
+  nut_torque_nm: number | null
+}
+
+export interface FixturesRow {
+  item_id: string
+  item_kind: string
+  height_mm: number
 }
 
 export interface FoundChangeRowsRow {
@@ -149,6 +239,7 @@ export interface HoldersRow {
   grip_start_mm: number | null
   side_lock_insertion_mm: number | null
   maximum_rpm: number | null
+  nut_torque_nm: number | null
 }
 
 export interface IdempotencyKeysRow {
@@ -253,6 +344,38 @@ export interface LocationsRow {
   updated_at: Date
 }
 
+export interface MachineSpindlePointsRow {
+  machine_id: string
+  rpm: number
+  power_kw: number | null
+  torque_nm: number | null
+}
+
+export interface MachinesRow {
+  id: string
+  code: string
+  name: string
+  location_id: string
+  taper: string
+  gauge_line_to_table_mm: number
+  x_travel_mm: number | null
+  y_travel_mm: number | null
+  z_travel_mm: number
+  spindle_nose_diameter_mm: number | null
+  longest_tool_mm: number | null
+  widest_tool_mm: number | null
+  heaviest_tool_kg: number | null
+  pocket_count: number | null
+  minimum_rpm: number | null
+  maximum_rpm: number
+  efficiency: number
+  note: string
+  version: number
+  archived_at: Date | null
+  created_at: Date
+  updated_at: Date
+}
+
 export interface MovementsRow {
   id: string
   kind: string
@@ -348,6 +471,35 @@ export interface SessionsRow {
   ended_at: Date | null
 }
 
+export interface SetUpFixturesRow {
+  set_up_id: string
+  position: number
+  item_id: string
+  item_kind: string
+  base_mm: number
+}
+
+export interface SetUpsRow {
+  id: string
+  machine_id: string
+  name: string
+  highest_mm: number
+  lowest_tip_mm: number
+  retract_clearance_mm: number
+  stock_width_mm: number | null
+  stock_height_mm: number | null
+  stock_offset_x_mm: number | null
+  stock_offset_y_mm: number | null
+  axis_height_mm: number | null
+  chuck_radius_mm: number | null
+  part_diameter_mm: number | null
+  centring_error_mm: number | null
+  note: string
+  version: number
+  created_at: Date
+  updated_at: Date
+}
+
 export interface ShopSettingsRow {
   id: number
   shop_name: string
@@ -368,6 +520,10 @@ export interface ShopSettingsRow {
   version: number
   created_at: Date
   updated_at: Date
+  radial_force_share: number
+  stick_out_caution_ratio: number
+  stick_out_limit_ratio: number
+  measuring_tolerance_mm: number
 }
 
 export interface SignInAttemptsRow {
@@ -441,6 +597,12 @@ export interface UsersRow {
 
 export interface Tables {
   alerts: AlertsRow
+  assemblies: AssembliesRow
+  assembly_checks: AssemblyChecksRow
+  assembly_findings: AssemblyFindingsRow
+  assembly_measurements: AssemblyMeasurementsRow
+  assembly_parts: AssemblyPartsRow
+  assembly_rechecks: AssemblyRechecksRow
   audit_entries: AuditEntriesRow
   balances: BalancesRow
   caught_mails: CaughtMailsRow
@@ -450,6 +612,7 @@ export interface Tables {
   cutters: CuttersRow
   extension_segments: ExtensionSegmentsRow
   extensions: ExtensionsRow
+  fixtures: FixturesRow
   found_change_rows: FoundChangeRowsRow
   found_changes: FoundChangesRow
   holder_segments: HolderSegmentsRow
@@ -461,6 +624,8 @@ export interface Tables {
   item_merges: ItemMergesRow
   items: ItemsRow
   locations: LocationsRow
+  machine_spindle_points: MachineSpindlePointsRow
+  machines: MachinesRow
   movements: MovementsRow
   outbox: OutboxRow
   pieces: PiecesRow
@@ -468,6 +633,8 @@ export interface Tables {
   saved_views: SavedViewsRow
   search_words: SearchWordsRow
   sessions: SessionsRow
+  set_up_fixtures: SetUpFixturesRow
+  set_ups: SetUpsRow
   shop_settings: ShopSettingsRow
   sign_in_attempts: SignInAttemptsRow
   starting_speeds: StartingSpeedsRow

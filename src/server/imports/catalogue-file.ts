@@ -4,7 +4,7 @@ import { type LengthUnit, lengthDecimals, mmPerInch } from '@/core/units/length-
 import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { currencyDecimals } from '@/lib/format-money'
 import type { CatalogueTypes } from '@/schemas/catalogue'
-import { hasLengthUnit, importField, importKindOf } from '@/schemas/import-fields'
+import { exportField, hasLengthUnit } from '@/schemas/import-fields'
 import { csvLine, guardedText, utf8Mark } from './csv-line'
 
 /** How figures are written: as the import of this shop reads them. */
@@ -53,7 +53,7 @@ export class CatalogueFile {
 
   private field(column: string) {
     const isBoreSeries = column === 'series' && (this.kind === 'holder' || this.kind === 'extension')
-    return importField(importKindOf[this.kind], isBoreSeries ? 'boreSeries' : column)
+    return exportField(this.kind, isBoreSeries ? 'boreSeries' : column)
   }
 
   private readonly heading = (column: string): string => {

@@ -1,6 +1,6 @@
 import { isDeepStrictEqual } from 'node:util'
 import type { Knex } from 'knex'
-import type { CatalogueKind } from '@/core/stock/kinds'
+import type { ToolingKind } from '@/core/stock/kinds'
 import { createItemSchemas } from '@/schemas/create-item'
 import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
 import { geometryFromRow, geometryTables } from '../db/geometry-tables'
@@ -21,7 +21,7 @@ export const itemKinds = {
   holders: 'holder',
   collets: 'collet',
   extensions: 'extension',
-} as const satisfies Record<string, CatalogueKind>
+} as const satisfies Record<string, ToolingKind>
 
 /**
  * Holds the items of a file against the catalogue as `db` sees it: whom each row means, and whether what it gives makes
@@ -84,7 +84,7 @@ class ItemCheck {
   private readonly problems: RowProblem[]
 
   constructor(
-    private readonly kind: CatalogueKind,
+    private readonly kind: ToolingKind,
     private readonly rows: readonly ImportRow[],
     private readonly reader: RowReader,
     private readonly given: GivenRecord,
@@ -166,7 +166,7 @@ function fieldsOf(first: string, member: PropertyKey | undefined, reader: RowRea
 }
 
 /** As the form would send it. */
-function requestOf(kind: CatalogueKind, whole: FlatRecord): Record<string, unknown> {
+function requestOf(kind: ToolingKind, whole: FlatRecord): Record<string, unknown> {
   const geometry = geometryFromRow(geometryTables[kind], whole)
   if (whole.bore_kind === undefined) delete geometry.bore
   return {

@@ -72,6 +72,10 @@ describe('headings by name', () => {
       'fluteCount',
     ])
     expect(fieldsOf('cutters', ['DCONMS', 'RPMX'])).toEqual(['shankDiameterMm', 'maximumRpm'])
+    expect(fieldsOf('extensions', ['Shank diameter', 'Bore diameter'])).toEqual([
+      'shankDiameterMm',
+      'boreDiameterMm',
+    ])
   })
 
   it('it tells the segments of an outline from a shape in one row', () => {

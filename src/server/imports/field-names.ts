@@ -70,6 +70,7 @@ const otherNames: Readonly<Record<string, string>> = {
   minimumGripMm:
     'minimum grip, min grip, grip length, grip, minimum clamping length, clamping length ' +
     'minimum, minimum insertion, clamping length, min clamp length, grip minimum',
+  nutTorqueNm: 'nut torque, nut torque nm, torque, tightening torque, clamping torque',
   gripStartMm: 'grip start, grip starts, grip offset, grip begins',
   sideLockInsertionMm: 'side lock insertion, sidelock insertion, set screw depth, flat position, side lock',
   segmentPart: 'part, segment part, nut or holder, segment type, section type',

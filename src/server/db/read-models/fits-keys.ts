@@ -1,6 +1,6 @@
 import type { Knex } from 'knex'
 import { fixedBoreToleranceMm } from '@/core/holding/holds'
-import type { CatalogueKind } from '@/core/stock/kinds'
+import type { ToolingKind } from '@/core/stock/kinds'
 import type { Bore } from '@/core/tooling'
 import type { PageQuery } from '@/schemas/paging'
 import { type KeyPage, readKeyPage } from '../key-page'
@@ -35,7 +35,7 @@ interface Condition {
   values: (string | number)[]
 }
 
-type Conditions = Partial<Record<CatalogueKind, Condition>>
+type Conditions = Partial<Record<ToolingKind, Condition>>
 
 /** Under what condition the items of each kind fit; a kind that is not named never does. */
 async function conditionsFor(db: Knex, fitting: Fitting): Promise<Conditions> {
@@ -110,7 +110,7 @@ async function readShankRanges(
   return ranges
 }
 
-const geometryTable: Record<CatalogueKind, string> = {
+const geometryTable: Record<ToolingKind, string> = {
   cutter: 'cutters',
   holder: 'holders',
   collet: 'collets',
@@ -121,9 +121,9 @@ const geometryTable: Record<CatalogueKind, string> = {
 export async function readFitsKeys(
   db: Knex,
   fitting: Fitting,
-  query: PageQuery & { kind?: CatalogueKind[] | undefined },
+  query: PageQuery & { kind?: ToolingKind[] | undefined },
 ): Promise<KeyPage> {
-  const conditions = Object.entries(await conditionsFor(db, fitting)) as [CatalogueKind, Condition][]
+  const conditions = Object.entries(await conditionsFor(db, fitting)) as [ToolingKind, Condition][]
   const matching = db('items')
     .whereNull('items.archived_at')
     .where((any) => {

@@ -1,11 +1,17 @@
 import type { Knex } from 'knex'
-import { type CatalogueKind, type Condition, catalogueKinds, type ShopLocationKind } from '@/core/stock/kinds'
+import {
+  type CatalogueKind,
+  type Condition,
+  type ShopLocationKind,
+  type ToolingKind,
+  toolingKinds,
+} from '@/core/stock/kinds'
 import type { ItemMerges } from '@/schemas/duplicate'
 import { enumFromDb } from '../enum-case'
 
 export interface MergedItem {
   id: string
-  kind: CatalogueKind
+  kind: ToolingKind
   code: string
   isTrackedByPiece: boolean
   isArchived: boolean
@@ -27,14 +33,14 @@ export async function findItemsOfMerge(
 ): Promise<Map<string, MergedItem>> {
   const rows = await db('items')
     .whereRaw('id = any(?::bigint[])', [[...ids]])
-    .whereIn('kind', [...catalogueKinds])
+    .whereIn('kind', [...toolingKinds])
     .select('id', 'kind', 'code', 'is_tracked_by_piece', 'archived_at')
   return new Map(
     rows.map((row) => [
       row.id,
       {
         id: row.id,
-        kind: row.kind as CatalogueKind,
+        kind: row.kind as ToolingKind,
         code: row.code,
         isTrackedByPiece: row.is_tracked_by_piece,
         isArchived: row.archived_at !== null,

@@ -18,22 +18,29 @@ export interface NewMovement {
 
 /** Posts a movement; balances, levels and pieces follow by trigger, which refuses what cannot be. */
 export async function createMovement(trx: Knex, movement: NewMovement): Promise<string> {
-  const [row] = await trx('movements')
-    .insert({
-      kind: enumToDb(movement.kind),
-      item_id: movement.itemId,
-      piece_id: movement.pieceId,
-      quantity: movement.quantity,
-      from_location_id: movement.fromLocationId,
-      from_condition: movement.fromCondition,
-      to_location_id: movement.toLocationId,
-      to_condition: movement.toCondition,
-      note: movement.note,
-      actor_id: movement.actorId,
-      reverses_id: movement.reversesId,
-    })
-    .returning('id')
+  const [row] = await trx('movements').insert(movementColumns(movement)).returning('id')
   return row.id
+}
+
+/** Posts several by one statement, which takes its locks in one order; all of them or none. */
+export async function createMovements(trx: Knex, movements: readonly NewMovement[]): Promise<void> {
+  if (movements.length > 0) await trx('movements').insert(movements.map(movementColumns))
+}
+
+function movementColumns(movement: NewMovement): Record<string, unknown> {
+  return {
+    kind: enumToDb(movement.kind),
+    item_id: movement.itemId,
+    piece_id: movement.pieceId,
+    quantity: movement.quantity,
+    from_location_id: movement.fromLocationId,
+    from_condition: movement.fromCondition,
+    to_location_id: movement.toLocationId,
+    to_condition: movement.toCondition,
+    note: movement.note,
+    actor_id: movement.actorId,
+    reverses_id: movement.reversesId,
+  }
 }
 
 export interface MovementRecord extends NewMovement {

@@ -1,4 +1,5 @@
 import type { Knex } from 'knex'
+import type { CuttingSettings } from '@/core/cutting/cut-answer'
 import type { ReachSettings } from '@/core/reach/types'
 import type { LengthUnit } from '@/core/units/length-unit'
 
@@ -9,6 +10,9 @@ export interface ShopSettings {
   lengthUnit: LengthUnit
   decimalComma: boolean
   reach: ReachSettings
+  cutting: CuttingSettings
+  /** How far a measured gauge length or diameter may be from the calculated one. */
+  measuringToleranceMm: number
   version: number
 }
 
@@ -32,6 +36,12 @@ export async function readShopSettings(db: Knex): Promise<ShopSettings> {
       carbideModulusGpa: row.carbide_modulus_gpa,
       steelModulusGpa: row.steel_modulus_gpa,
     },
+    cutting: {
+      radialForceShare: row.radial_force_share,
+      stickOutCautionRatio: row.stick_out_caution_ratio,
+      stickOutLimitRatio: row.stick_out_limit_ratio,
+    },
+    measuringToleranceMm: row.measuring_tolerance_mm,
   }
 }
 
@@ -41,10 +51,12 @@ export interface ShopSettingsChange {
   lengthUnit?: LengthUnit | undefined
   decimalComma?: boolean | undefined
   reach?: { [Name in keyof ReachSettings]?: ReachSettings[Name] | undefined } | undefined
+  cutting?: { [Name in keyof CuttingSettings]?: CuttingSettings[Name] | undefined } | undefined
+  measuringToleranceMm?: number | undefined
 }
 
 function columnsOf(change: ShopSettingsChange): Record<string, unknown> {
-  const { reach = {} } = change
+  const { reach = {}, cutting = {} } = change
   const columns = {
     shop_name: change.shopName,
     currency: change.currency,
@@ -59,6 +71,10 @@ function columnsOf(change: ShopSettingsChange): Record<string, unknown> {
     flute_stiffness_ratio: reach.fluteStiffnessRatio,
     carbide_modulus_gpa: reach.carbideModulusGpa,
     steel_modulus_gpa: reach.steelModulusGpa,
+    radial_force_share: cutting.radialForceShare,
+    stick_out_caution_ratio: cutting.stickOutCautionRatio,
+    stick_out_limit_ratio: cutting.stickOutLimitRatio,
+    measuring_tolerance_mm: change.measuringToleranceMm,
   }
   return Object.fromEntries(Object.entries(columns).filter(([, value]) => value !== undefined))
 }

@@ -6,4 +6,5 @@ export const kindWords: Record<CatalogueKind, { one: string; many: string }> = {
   holder: { one: 'holder', many: 'holders' },
   collet: { one: 'collet', many: 'collets' },
   extension: { one: 'extension', many: 'extensions' },
+  fixture: { one: 'fixture', many: 'fixtures' },
 }

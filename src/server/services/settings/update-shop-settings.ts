@@ -17,6 +17,7 @@ export async function updateShopSettings(
   return inTransaction(db(), async (trx) => {
     const before = await readShopSettings(trx)
     const { version, ...change } = request
+    refuseCrossedBands({ ...before.cutting, ...change.cutting })
     if (!(await writeShopSettings(trx, version, change))) {
       throw new AppError('stale-version', 'Someone changed the settings meanwhile.', {
         extra: { current: before },
@@ -33,4 +34,15 @@ export async function updateShopSettings(
     })
     return after
   })
+}
+
+/** The caution comes before the limit. */
+function refuseCrossedBands(cutting: {
+  stickOutCautionRatio?: number | undefined
+  stickOutLimitRatio?: number | undefined
+}): void {
+  const { stickOutCautionRatio = 0, stickOutLimitRatio = Number.POSITIVE_INFINITY } = cutting
+  if (stickOutCautionRatio <= stickOutLimitRatio) return
+  const message = 'The limit is below where care begins.'
+  throw new AppError('impossible', message, { errors: [{ path: 'cutting.stickOutLimitRatio', message }] })
 }

@@ -1,0 +1,36 @@
+'use client'
+
+import { useCallback, useRef } from 'react'
+import useSWR from 'swr'
+import { callApi } from '@/lib/api-client'
+import type { ReachSearchBody, ReachSearchResponse } from '@/schemas/reach-search'
+
+export const searchUrl = '/api/reach/search'
+
+/** The crib searched for one feature; nothing is asked while there is no request. A new search stops the one before. */
+export function useToolSearch(request: ReachSearchBody | null) {
+  const running = useRef<AbortController | null>(null)
+  const { data, error, isValidating, mutate } = useSWR<ReachSearchResponse, Error>(
+    request === null ? null : [searchUrl, JSON.stringify(request)],
+    ([url, body]: [string, string]) => {
+      running.current?.abort()
+      const controller = new AbortController()
+      running.current = controller
+      return callApi<ReachSearchResponse>('POST', url, {
+        body: JSON.parse(body),
+        signal: controller.signal,
+      })
+    },
+    { revalidateOnFocus: false, revalidateIfStale: true, shouldRetryOnError: false },
+  )
+  const cancel = useCallback(() => running.current?.abort(), [])
+  const isCancelled = error instanceof DOMException && error.name === 'AbortError'
+  return {
+    answer: data ?? null,
+    error: isCancelled ? undefined : error,
+    isCancelled: isCancelled && !isValidating,
+    isSearching: isValidating,
+    cancel,
+    retry: () => mutate(),
+  }
+}
