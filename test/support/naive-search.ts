@@ -169,8 +169,8 @@ function naiveShortfallMm(request: ReachRequest, answer: ReachAnswer, question: 
   for (const { code, values } of answer.messages) {
     if (code === 'taper-steeper-than-wall' || code === 'hole-diameter-mismatch')
       return Number.POSITIVE_INFINITY
-    if (code === 'opening-too-narrow' || code === 'corner-too-tight' || code === 'floor-radius-too-small')
-      short.push(values.shortfallMm)
+    if (code === 'opening-too-narrow' || code === 'hole-too-narrow') short.push(values.shortfallMm)
+    if (code === 'corner-too-tight' || code === 'floor-radius-too-small') short.push(values.shortfallMm)
     if (code === 'length-of-cut-below-contact')
       short.push(Math.max(tolerance, values.contactHeightMm - values.lengthOfCutMm))
     if (code === 'flutes-strike-obstacle') short.push(askedMm - values.depthMm)

@@ -7,6 +7,21 @@ import type { ReachSettings } from './types'
 
 const angleToleranceDeg = 1e-9
 
+/** Any of these refuses the cutter; a search tells each of them by name, so none may be added unseen. */
+export type FitMessage = Extract<
+  ReachMessage,
+  {
+    code:
+      | 'hole-diameter-mismatch'
+      | 'hole-too-narrow'
+      | 'opening-too-narrow'
+      | 'corner-too-tight'
+      | 'floor-radius-too-small'
+      | 'taper-steeper-than-wall'
+      | 'length-of-cut-below-contact'
+  }
+>
+
 /**
  * Why this feature does not take this cutter at any stick-out; empty where it does.
  *
@@ -21,7 +36,7 @@ export function fitMessages(
   cutter: CutterDimensions,
   at: Placement,
   settings: ReachSettings,
-): ReachMessage[] {
+): FitMessage[] {
   if (feature.kind === 'wall') return at.kind === 'wall' ? wallFitMessages(feature, cutter, at) : []
   const offMm = Math.abs(feature.diameterMm - 2 * cutter.radiusMm)
   if (offMm <= settings.holeToleranceMm + overlapToleranceMm) return []
@@ -38,8 +53,8 @@ export function fitMessages(
 }
 
 /** One list from first to last: a search asks this of every cutter of a crib. */
-function wallFitMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPlacement): ReachMessage[] {
-  const messages: ReachMessage[] = []
+function wallFitMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPlacement): FitMessage[] {
+  const messages: FitMessage[] = []
   const { openingWidthMm, insideCornerRadiusMm, floorRadiusMm } = wall
   const neededMm = 2 * at.standOffMm
   if (openingWidthMm !== null && openingWidthMm < neededMm - overlapToleranceMm)
@@ -66,14 +81,14 @@ function wallFitMessages(wall: CheckedWall, cutter: CutterDimensions, at: WallPl
   return messages
 }
 
-function tooNarrow(widthMm: number, neededMm: number, isHole: boolean): ReachMessage {
+function tooNarrow(widthMm: number, neededMm: number, isHole: boolean): FitMessage {
   const needed = { neededMm, shortfallMm: neededMm - widthMm }
   return isHole
     ? { code: 'hole-too-narrow', values: { holeDiameterMm: widthMm, ...needed } }
     : { code: 'opening-too-narrow', values: { openingWidthMm: widthMm, ...needed } }
 }
 
-function addFormMessages(messages: ReachMessage[], cutter: CutterDimensions, at: WallPlacement): void {
+function addFormMessages(messages: FitMessage[], cutter: CutterDimensions, at: WallPlacement): void {
   if (isTaperTooSteep(cutter, at))
     messages.push({
       code: 'taper-steeper-than-wall',
@@ -108,7 +123,7 @@ function isTaperTooSteep(cutter: CutterDimensions, at: WallPlacement): boolean {
  */
 export function cutsNothing(cutter: CutterDimensions, at: Placement): boolean {
   if (at.kind === 'hole') return false
-  const messages: ReachMessage[] = []
+  const messages: FitMessage[] = []
   addFormMessages(messages, cutter, at)
   return messages.length > 0
 }

@@ -4,8 +4,7 @@ import { overlapToleranceMm, toolParts } from '@/core/outline/types'
 import { checkPartsOfDimensions } from '@/core/reach/check-parts'
 import { featureFor, formRefusal } from '@/core/reach/checked-feature'
 import { farSideHeightMm, type LeastTouch, leastTouch } from '@/core/reach/first-touches'
-import { fitMessages } from '@/core/reach/fit-messages'
-import type { ReachMessage } from '@/core/reach/message-codes'
+import { type FitMessage, fitMessages } from '@/core/reach/fit-messages'
 import { type Placement, placement, type WallPlacement } from '@/core/reach/placement'
 import { holeTouchMm, wallTouchMm } from '@/core/reach/touch-depth'
 import type { AskedSearch } from './asked-search'
@@ -52,8 +51,7 @@ export function reportShortfalls(
   }
   const messages = fitMessages(featureFor(asked.demand, cutter), cutter, at, settings)
   for (const message of messages) {
-    const short = fitShortfall(message)
-    if (short) report(...short)
+    report(...fitShortfall(message))
   }
   if (asked.scallop && at.kind === 'wall') {
     const shortfallMm = scallopShortfallMm(cutter, asked.scallop)
@@ -76,9 +74,10 @@ function depthShortfallMm({ tipDepthMm, leadMm }: Placement, reachedMm: number):
   return tipDepthMm - leadMm - Math.max(0, reachedMm - leadMm)
 }
 
-function fitShortfall({ code, values }: ReachMessage): Parameters<ReportShortfall> | null {
+function fitShortfall({ code, values }: FitMessage): Parameters<ReportShortfall> {
   switch (code) {
     case 'opening-too-narrow':
+    case 'hole-too-narrow':
       return ['opening', 'opening', values.shortfallMm]
     case 'corner-too-tight':
       return ['cornerRadius', 'cornerRadius', values.shortfallMm]
@@ -92,8 +91,6 @@ function fitShortfall({ code, values }: ReachMessage): Parameters<ReportShortfal
       return ['taperSteeperThanWall', null, 0]
     case 'hole-diameter-mismatch':
       return ['holeDiameter', null, 0]
-    default:
-      return null
   }
 }
 
