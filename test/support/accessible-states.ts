@@ -141,7 +141,12 @@ export function pageStates({
         await heading('Falls short')(page)
       },
     ),
-    state('cribManager', '/search?depth=25&rank=cost', 'what reaches, by its cost', shows('Cost of its parts')),
+    state(
+      'cribManager',
+      '/search?depth=25&rank=cost',
+      'what reaches, by its cost',
+      shows('Cost of its parts'),
+    ),
     state('machinist', '/search', 'finding a tool, refused', async (page) => {
       await page.getByRole('button', { name: 'Find', exact: true }).click()
       await shows('Enter the depth.')(page)
