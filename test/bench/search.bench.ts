@@ -90,7 +90,8 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
     throw new Error(`The bare loop finds ${counted} that reach, the search ${answer.reachable}.`)
   const direct = bare().pairs
   const library = libraryTime(tables, crib, survivors, depthMm, tanDraft, librarySample)
-  const inLibrary = (library.seconds / library.pairs) * direct
+  const all = direct + stacks.pairs
+  const inLibrary = (library.seconds / library.pairs) * all
   return [
     {
       name: `${name}, one feature`,
@@ -98,7 +99,7 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
       unit: 's',
       limit: { atMost: oneLimitSeconds },
       samples,
-      note: `${survivors.length} cutters survive, ${direct} pairs with what holds them, ${direct + stacks.pairs} with every holder behind an extension; ${answer.comparedPairs} compared one by one, ${answer.reachable} reach`,
+      note: `${survivors.length} cutters survive, ${direct} pairs with what holds them, ${all} with every holder behind an extension; ${answer.comparedPairs} compared one by one, ${answer.reachable} reach`,
     },
     {
       name: `${name}, against a bare loop over those pairs`,
@@ -123,7 +124,7 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
       limit: { atLeast: libraryRatioLimit },
       sides: { ours: seconds, other: inLibrary, unit: 's' },
       samples: librarySample,
-      note: `one cut a pair without extensions' holders, scaled from ${librarySample} to ${direct}; ${library.meeting} meet`,
+      note: `one cut a pair, scaled from ${librarySample} to ${all}; ${library.meeting} of the sample meet`,
     },
   ]
 }
