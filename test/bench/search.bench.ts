@@ -5,7 +5,7 @@ import { defaultReachSettings, type Feature, type WallFeature } from '@/core/rea
 import { searchReach } from '@/core/search/search-reach'
 import { type SearchTables, searchTables } from '@/core/search/search-tables'
 import type { SearchAnswer } from '@/core/search/types'
-import { cribOfSize, fullSize } from '../support/crib-of-size'
+import { type CribSize, cribOfSize, fullSize } from '../support/crib-of-size'
 import { type BareCrib, bareCrib, bareDirect, bareStacks } from './search/bare-loop'
 import { benchFeatures, fortyFeatures, type NamedFeature } from './search/features'
 import { type Figure, middle, processorSeconds } from './search/figures'
@@ -188,19 +188,12 @@ function fortyFigure(tables: SearchTables): Figure {
 
 /** With everything that holds, and more and more cutters: from the smallest to the largest no more than the crib grows. */
 function growthFigures(): Figure[] {
-  return benchFeatures.map(({ name, feature }) => {
-    const seconds = sizes.map((cutters) => {
-      const tables = searchTables(cribOfSize({ ...fullSize, cutters }), defaultReachSettings)
-      const times: number[] = []
-      for (let at = -warmUps; at < samples; at++) {
-        const time = processorSeconds(() => ask(tables, feature))
-        if (at >= 0) times.push(time)
-      }
-      return middle(times)
-    })
+  const bySize = sizes.map((cutters) => featureSeconds({ ...fullSize, cutters }))
+  const growth = (sizes.at(-1) ?? 1) / (sizes[0] ?? 1)
+  return benchFeatures.map(({ name }, of) => {
+    const seconds = bySize.map((ofSize) => ofSize[of] ?? Number.NaN)
     const [smallest = 1] = seconds
     const largest = seconds.at(-1) ?? 1
-    const growth = (sizes.at(-1) ?? 1) / (sizes[0] ?? 1)
     return {
       name: `${name}, growth from ${sizes[0]} to ${sizes.at(-1)} cutters`,
       value: largest / smallest,
@@ -210,5 +203,14 @@ function growthFigures(): Figure[] {
       samples,
       note: sizes.map((size, at) => `${size}: ${((seconds[at] ?? 0) * 1000).toFixed(0)} ms`).join(', '),
     }
+  })
+}
+
+/** Of every feature in turn, in a crib of this size. */
+function featureSeconds(size: CribSize): number[] {
+  const tables = searchTables(cribOfSize(size), defaultReachSettings)
+  return benchFeatures.map(({ feature }) => {
+    for (let at = 0; at < warmUps; at++) ask(tables, feature)
+    return middle(Array.from({ length: samples }, () => processorSeconds(() => ask(tables, feature))))
   })
 }
