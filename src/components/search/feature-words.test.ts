@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest'
-import { featureWords } from './feature-words'
+import { featureWords, filterWords } from './feature-words'
+import { noChoices } from './search-question'
 
 test('it says what was asked for in one line, every limit of it', () => {
   const wall = {
@@ -21,5 +22,19 @@ test('it leaves out what was not asked, and speaks in the reader’s unit', () =
   expect(featureWords({ kind: 'wall', depthMm: 25.4 }, null, 'in')).toBe('Wall 1.000 in deep')
   expect(featureWords({ kind: 'hole', diameterMm: 6.5, depthMm: 20 }, 'roughing', 'mm')).toBe(
     'Hole 6.5 mm, 20 mm deep, to rough',
+  )
+})
+
+test('it says what is looked through only where that is not everything', () => {
+  const texts = { stepover: '', cusp: '', ratio: '' }
+  expect(filterWords({ choices: noChoices, texts })).toBeNull()
+  const choices = {
+    ...noChoices,
+    material: 'Grey iron',
+    forms: ['ball' as const],
+    substrates: ['hss' as const],
+  }
+  expect(filterWords({ choices, texts: { ...texts, ratio: '6' } })).toBe(
+    'in Grey iron; only ball end mill; only of HSS; at most 6 × DC out',
   )
 })
