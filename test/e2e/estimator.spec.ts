@@ -46,6 +46,7 @@ test('what an estimator may not do is refused whatever the page offers', async (
     await expect(page, path).toHaveURL('/not-allowed')
   }
   await expect(page.getByRole('navigation', { name: 'Main' }).getByRole('link')).toHaveText([
+    'Find a tool',
     'Reach',
     'Ball-end speed',
     'Speeds',
@@ -53,7 +54,10 @@ test('what an estimator may not do is refused whatever the page offers', async (
     'Holders',
     'Collets',
     'Extensions',
+    'Fixtures',
     'Fits',
+    'Assemblies',
+    'Machines',
     'Locations',
     'Low stock',
   ])
