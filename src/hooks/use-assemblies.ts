@@ -71,6 +71,17 @@ export function useChangeAssembly() {
     callApi('PATCH', `/api/assemblies/${assembly.id}`, { body: { version: assembly.version, ...change } })
 }
 
+/** Keeps another feature with an assembly that is there already. */
+export function useAddAssemblyCheck() {
+  return (
+    assembly: Pick<AssemblyRow, 'id' | 'version'>,
+    check: { feature: object; clearances: object | null },
+  ): Promise<AssemblyResponse> =>
+    callApi('POST', `/api/assemblies/${assembly.id}/checks`, {
+      body: { version: assembly.version, ...check },
+    })
+}
+
 export function useArchiveAssembly() {
   return (assembly: Pick<AssemblyResponse, 'id' | 'version'>): Promise<AssemblyResponse> =>
     callApi('DELETE', `/api/assemblies/${assembly.id}?version=${assembly.version}`)

@@ -1,6 +1,12 @@
 import { describe, expect, it } from 'vitest'
 import { machineWindow } from '@/core/machine/machine-window'
-import { centringSentence, fitSentence, machineRefusals, windowSentences } from './machine-sentences'
+import {
+  centringSentence,
+  fitSentence,
+  machineRefusals,
+  noseSentence,
+  windowSentences,
+} from './machine-sentences'
 
 const first = {
   gaugeLineToTableMm: 600,
@@ -49,6 +55,13 @@ describe('what a set-up takes, in words', () => {
     )
     expect(fitSentence({ verdict: 'tooLong', byMm: 12.7 }, 101.6, 'in')).toContain('too long by 0.500 in')
     expect(fitSentence({ verdict: 'tooShort', byMm: 3 }, 80, 'mm')).toContain('too short by 3 mm')
+  })
+
+  it('it says where the spindle’s nose comes down to what stands there, at the very clearance not', () => {
+    const heights = { lowestTipMm: 50, highestMm: 110, retractClearanceMm: 20 }
+    expect(noseSentence(heights, 80, 'mm')).toBeNull()
+    expect(noseSentence(heights, 79.9, 'mm')).toContain('19.9 mm above the highest thing')
+    expect(noseSentence(heights, 45, 'mm')).toContain('15 mm below the top of the highest thing')
   })
 
   it('it says where the taper or the width is wrong, at the very width not', () => {

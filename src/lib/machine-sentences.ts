@@ -66,6 +66,27 @@ export function fitSentence(fit: GaugeLengthFit, gaugeLengthMm: number, unit: Le
   }
 }
 
+/**
+ * How near the spindle's own nose comes to the highest thing with the tip as low as it goes; null where it keeps the
+ * retract clearance. Whether it strikes depends on where that thing stands, which only a person sees.
+ *
+ * @example
+ * noseSentence({ lowestTipMm: 50, highestMm: 110, retractClearanceMm: 20 }, 65, 'mm') // => 'With the tip at its lowest the spindle nose is 5 mm above the highest thing: see that it clears what stands beside the cut.'
+ */
+export function noseSentence(
+  heights: { lowestTipMm: number; highestMm: number; retractClearanceMm: number },
+  gaugeLengthMm: number,
+  unit: LengthUnit,
+): string | null {
+  const aboveMm = heights.lowestTipMm + gaugeLengthMm - heights.highestMm
+  if (aboveMm >= heights.retractClearanceMm - overlapToleranceMm) return null
+  const where =
+    aboveMm < 0
+      ? `${formatLength(-aboveMm, unit)} below the top of the highest thing`
+      : `${formatLength(aboveMm, unit)} above the highest thing`
+  return `With the tip at its lowest the spindle nose is ${where}: see that it clears what stands beside the cut.`
+}
+
 /** What else keeps an assembly out of a machine's spindle or changer, beside its length; empty where nothing known does. */
 export function machineRefusals(
   machine: { taper: string; widestToolMm: number | null },

@@ -63,11 +63,11 @@ describe('what would help', () => {
 
   test('it names the holder it would reach in, and the extension between', () => {
     expect(changeSentence({ kind: 'holder', option }, { ...names, holder: 'H-12' }, 'mm')).toBe(
-      'Reaches in H-12 with C-6 at 38.5 mm stick-out.',
+      'Reaches in H-12 with C-6 at 38.5 mm stick-out; the filters leave that out.',
     )
     const extended = { holder: 'H-12', collet: null, extension: 'X-3' }
     expect(changeSentence({ kind: 'extension', option }, extended, 'mm')).toBe(
-      'Reaches in X-3 in H-12 at 38.5 mm stick-out.',
+      'Reaches in X-3 in H-12 at 38.5 mm stick-out; the filters leave that out.',
     )
   })
 

@@ -101,7 +101,7 @@ export function changeSentence(change: SearchChange, names: AssemblyNames | null
   switch (change.kind) {
     case 'holder':
     case 'extension':
-      return `Reaches in ${names ? holdingWords(names) : 'another holder'} at ${size(change.option.stickOutMm)} stick-out.`
+      return `Reaches in ${names ? holdingWords(names) : 'another holder'} at ${size(change.option.stickOutMm)} stick-out; the filters leave that out.`
     case 'stickOut':
       return `Reaches with ${size(change.stickOutMm)} of stick-out, which the machine asks for.`
     case 'nut':

@@ -120,6 +120,14 @@ export const breakDownAssemblyRequestSchema = z.strictObject({
 })
 export type BreakDownAssemblyRequest = z.output<typeof breakDownAssemblyRequestSchema>
 
+/** Another feature the assembly is good for, as it is set. */
+export const addAssemblyCheckRequestSchema = z.strictObject({
+  version: versionSchema,
+  feature: reachRequestSchema.shape.feature,
+  clearances: reachRequestSchema.shape.clearances,
+})
+export type AddAssemblyCheckRequest = z.output<typeof addAssemblyCheckRequestSchema>
+
 export const versionOnlyRequestSchema = z.strictObject({ version: versionSchema })
 
 const booleanFilter = z.enum(['true', 'false'], 'Only true or false.').transform((text) => text === 'true')

@@ -43,7 +43,7 @@ const whereSchema = z.strictObject({
   cutterId: idSchema.nullish(),
   forms: z.array(z.enum(cutterForms, 'This is no form of a cutter.')).max(cutterForms.length).nullish(),
   substrates: z.array(z.enum(substrates, 'Only carbide or hss.')).max(substrates.length).nullish(),
-  /** A material of the shop's starting speeds: cutters it has one for in it, each with where to start. */
+  /** A material of the shop's starting speeds: each option then says where to start. It leaves nothing out. */
   material: z.string('This is a text.').trim().min(1, 'Name a material.').max(200).nullish(),
   longestStickOutToDiameter: sizeSchema.positive('More than 0.').nullish(),
 })
@@ -136,7 +136,7 @@ const assemblyFields = {
   }),
   /** Of whole assemblies: as many as the part there is least of; and where every part lies. */
   stock: z.object({ onHand: z.number(), available: z.number(), locations: z.array(partPlaceSchema) }),
-  /** In the material named, at the full diameter; null where none was. */
+  /** In the material named, at the full diameter; null where none was, or the shop has no speed for this tool in it. */
   speed: z
     .object({
       lowMPerMin: z.number(),

@@ -107,6 +107,22 @@ describe('an option that is kept', () => {
     expect(tools).toMatchObject({ cutter: { cuttingDiameterMm: 3.1 } })
   })
 
+  it('is kept for another feature it is good for as it is set, and for none it is not', async () => {
+    const assembly = await kept()
+    const add = (depthMm: number) =>
+      machinist.post(`/api/assemblies/${assembly.id}/checks`, {
+        version: assembly.version,
+        feature: { kind: 'wall', depthMm },
+      })
+    const added = await add(30)
+    expect(added.status).toBe(201)
+    expect(added.body).toMatchObject({ checks: [{ holds: true }, { holds: true, feature: { depthMm: 30 } }] })
+    const short = await add(39)
+    expect([short.status, faultPaths(short)]).toEqual([422, ['feature']])
+    const change = { version: assembly.version, stickOutMm: 39.2 }
+    expect((await machinist.patch(`/api/assemblies/${assembly.id}`, change)).status).toBe(200)
+  })
+
   it('is changed by its version, and never to a stick-out that fails its check', async () => {
     const assembly = await kept()
     const path = `/api/assemblies/${assembly.id}`

@@ -175,6 +175,48 @@ describe('what a crib could build', () => {
   })
 })
 
+describe('an extension', () => {
+  const extension = (change: object = {}) => ({
+    code: uniqueCode('EXT'),
+    projectionMm: 60,
+    bore: { kind: 'fixed', diameterMm: 3.175 },
+    boreDepthMm: 40,
+    minimumGripMm: 15,
+    segments: [{ lengthMm: 60, noseDiameterMm: 10, spindleDiameterMm: 16 }],
+    ...change,
+  })
+
+  it('comes with the collet that holds its own shank, or says that what holds it is not checked', async () => {
+    // A crib apart, so that what the rest of this file asks has no extension.
+    const own = await createNeckedTool(db, crib)
+    const { binId } = own.shelf
+    const collet = { code: uniqueCode('CO'), series: 'ER16', minimumMm: 9, maximumMm: 10, lengthMm: 27.5 }
+    const { body: wide } = await crib.post('/api/collets', collet)
+    const { body: held } = await crib.post('/api/extensions', extension({ shankDiameterMm: 10 }))
+    const { body: loose } = await crib.post('/api/extensions', extension())
+    for (const itemId of [own.holderId, wide.id, held.id, loose.id])
+      await putOnShelf(db, crib, { itemId, binId, quantity: 1 })
+    const where = { cribId: own.shelf.cribId }
+    const options = optionsOf(await search(crib, { feature: wall(25), limit: 100 }, where))
+    const through = (id: string) => options.filter((option) => option.extension?.id === id)
+    const [checked] = through(held.id)
+    expect(checked).toMatchObject({
+      collet: null,
+      extensionCollet: { id: wide.id },
+      // By hand: 100 of the chuck, 60 of the extension, 39.5 of stick-out.
+      reach: { verdict: 'reaches', gaugeLengthMm: 199.5 },
+      stickOut: { usedMm: 39.5 },
+    })
+    expect(checked?.cautions.join(' ')).not.toContain('not checked')
+    expect(checked?.stock.locations.map(({ itemId }) => itemId)).toContain(wide.id)
+    const [unchecked] = through(loose.id)
+    expect(unchecked).toMatchObject({ extensionCollet: null, reach: { gaugeLengthMm: 199.5 } })
+    expect(unchecked?.cautions).toContain(
+      `The shank of ${loose.code} is not in the catalogue: what holds the extension is not checked.`,
+    )
+  })
+})
+
 describe('a tagged piece with measures of its own', () => {
   it('is a cutter of its own beside the item, with its place; scrapped it is none', async () => {
     const code = uniqueCode('TAGGED')

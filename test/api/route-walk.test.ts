@@ -155,6 +155,7 @@ const walk: Record<string, Allowed> = {
   'POST /api/assemblies/[id]/pocket': movers,
   'POST /api/assemblies/[id]/break-down': movers,
   'POST /api/assemblies/[id]/take-over': signedIn,
+  'POST /api/assemblies/[id]/checks': signedIn,
   'POST /api/ball-speed': signedIn,
   'POST /api/machine-window': signedIn,
 

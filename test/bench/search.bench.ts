@@ -5,8 +5,8 @@ import { defaultReachSettings, type Feature, type WallFeature } from '@/core/rea
 import { searchReach } from '@/core/search/search-reach'
 import { type SearchTables, searchTables } from '@/core/search/search-tables'
 import type { SearchAnswer } from '@/core/search/types'
+import { type CribSize, cribOfSize, fullSize } from '../support/crib-of-size'
 import { type BareCrib, bareCrib, bareDirect, bareStacks } from './search/bare-loop'
-import { cribOfSize, fullSize } from './search/crib-of-size'
 import { benchFeatures, fortyFeatures, type NamedFeature } from './search/features'
 import { type Figure, middle, processorSeconds } from './search/figures'
 import { libraryTime } from './search/polygon-pairs'
@@ -90,7 +90,8 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
     throw new Error(`The bare loop finds ${counted} that reach, the search ${answer.reachable}.`)
   const direct = bare().pairs
   const library = libraryTime(tables, crib, survivors, depthMm, tanDraft, librarySample)
-  const inLibrary = (library.seconds / library.pairs) * direct
+  const all = direct + stacks.pairs
+  const inLibrary = (library.seconds / library.pairs) * all
   return [
     {
       name: `${name}, one feature`,
@@ -98,7 +99,7 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
       unit: 's',
       limit: { atMost: oneLimitSeconds },
       samples,
-      note: `${survivors.length} cutters survive, ${direct} pairs with what holds them, ${direct + stacks.pairs} with every holder behind an extension; ${answer.comparedPairs} compared one by one, ${answer.reachable} reach`,
+      note: `${survivors.length} cutters survive, ${direct} pairs with what holds them, ${all} with every holder behind an extension; ${answer.comparedPairs} compared one by one, ${answer.reachable} reach`,
     },
     {
       name: `${name}, against a bare loop over those pairs`,
@@ -123,7 +124,7 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
       limit: { atLeast: libraryRatioLimit },
       sides: { ours: seconds, other: inLibrary, unit: 's' },
       samples: librarySample,
-      note: `one cut a pair without extensions' holders, scaled from ${librarySample} to ${direct}; ${library.meeting} meet`,
+      note: `one cut a pair, scaled from ${librarySample} to ${all}; ${library.meeting} of the sample meet`,
     },
   ]
 }
@@ -187,19 +188,12 @@ function fortyFigure(tables: SearchTables): Figure {
 
 /** With everything that holds, and more and more cutters: from the smallest to the largest no more than the crib grows. */
 function growthFigures(): Figure[] {
-  return benchFeatures.map(({ name, feature }) => {
-    const seconds = sizes.map((cutters) => {
-      const tables = searchTables(cribOfSize({ ...fullSize, cutters }), defaultReachSettings)
-      const times: number[] = []
-      for (let at = -warmUps; at < samples; at++) {
-        const time = processorSeconds(() => ask(tables, feature))
-        if (at >= 0) times.push(time)
-      }
-      return middle(times)
-    })
+  const bySize = sizes.map((cutters) => featureSeconds({ ...fullSize, cutters }))
+  const growth = (sizes.at(-1) ?? 1) / (sizes[0] ?? 1)
+  return benchFeatures.map(({ name }, of) => {
+    const seconds = bySize.map((ofSize) => ofSize[of] ?? Number.NaN)
     const [smallest = 1] = seconds
     const largest = seconds.at(-1) ?? 1
-    const growth = (sizes.at(-1) ?? 1) / (sizes[0] ?? 1)
     return {
       name: `${name}, growth from ${sizes[0]} to ${sizes.at(-1)} cutters`,
       value: largest / smallest,
@@ -209,5 +203,14 @@ function growthFigures(): Figure[] {
       samples,
       note: sizes.map((size, at) => `${size}: ${((seconds[at] ?? 0) * 1000).toFixed(0)} ms`).join(', '),
     }
+  })
+}
+
+/** Of every feature in turn, in a crib of this size. */
+function featureSeconds(size: CribSize): number[] {
+  const tables = searchTables(cribOfSize(size), defaultReachSettings)
+  return benchFeatures.map(({ feature }) => {
+    for (let at = 0; at < warmUps; at++) ask(tables, feature)
+    return middle(Array.from({ length: samples }, () => processorSeconds(() => ask(tables, feature))))
   })
 }

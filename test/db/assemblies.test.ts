@@ -230,6 +230,9 @@ describe('another look', () => {
     const back = (itemId: string) => ({ kind: 'return', itemId, from: books.personId, to: books.binId })
     await post(db, books, back(assembly.holderId), back(assembly.colletId), back(assembly.cutterId))
     expect(await takeRechecks(db, assembly.id)).toBe(1)
+    const again = (itemId: string) => ({ kind: 'issue', itemId, from: books.binId, to: books.personId })
+    await post(db, books, again(assembly.holderId), again(assembly.colletId), again(assembly.cutterId))
+    expect(await takeRechecks(db, assembly.id)).toBe(1)
   })
 
   test('it is asked for of everything by a clearance of the shop, and of nothing by its name', async () => {

@@ -3,6 +3,7 @@ import { fileURLToPath } from 'node:url'
 import type { Knex } from 'knex'
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest'
 import { ledgerFaults } from '@/server/db/ledger-faults'
+import { createAssemblyRecord, putTogether } from '../support/assembly-records'
 import { type Books, createBooks, createItem, post, receive } from '../support/books'
 import { createTestDatabase, type TestDatabase } from '../support/database'
 
@@ -143,6 +144,29 @@ describe('the check of the ledger', () => {
       }),
     )
     expect(faults.some((fault) => fault.endsWith(`is no mirror of ${issue}, which it reverses`))).toBe(true)
+  })
+
+  test('it finds an assembly whose part is gone and that nobody is told of', async () => {
+    const { db } = database
+    const assembly = await createAssemblyRecord(db, books)
+    await putTogether(db, books, assembly)
+    const { holderId: itemId } = assembly
+    await post(db, books, { kind: 'return', itemId, from: books.personId, to: books.binId })
+    expect((await ledgerFaults(db)).faults).toEqual([])
+    const { code } = await db('items').where('id', itemId).first('code')
+    const unasked = await faultsAfter((trx) => trx('assembly_rechecks').delete())
+    expect(unasked.some((fault) => fault.includes(`its ${code} is gone from`))).toBe(true)
+    const told = await faultsAfter(async (trx) => {
+      await trx('assembly_rechecks').delete()
+      await trx('assembly_findings').insert({
+        assembly_id: assembly.id,
+        key: 'gone:holder',
+        code: 'part_gone',
+        is_fault: true,
+        detail: '{}',
+      })
+    })
+    expect(told).toEqual([])
   })
 
   test('it answers by its exit and says what is off', async () => {

@@ -166,6 +166,21 @@ for (const [paper, width, height] of [
   })
 }
 
+test('another feature is kept with the assembly that is there already', async ({ page }) => {
+  const { body: kept } = await keepAssembly(crib, rows, { name: 'Deep pocket' })
+  await signIn(page, 'machinist')
+  await page.goto(`${reachQuery().replace('depth=25', 'depth=30')}&stickout=39.5`)
+  await page.getByRole('button', { name: 'Keep as assembly' }).click()
+  const dialog = page.getByRole('dialog')
+  await dialog.getByLabel('Keep it', { exact: true }).selectOption({
+    label: `With assembly ${kept.number}, Deep pocket`,
+  })
+  await dialog.getByRole('button', { name: 'Keep it' }).click()
+  const checks = page.getByRole('region', { name: 'Kept for' })
+  await expect(checks).toContainText('Wall 25 mm deep')
+  await expect(checks).toContainText('Wall 30 mm deep')
+})
+
 test('nothing is kept of figures that are typed over the catalogue', async ({ page }) => {
   await signIn(page, 'machinist')
   await page.goto(`${reachQuery()}&c.OAL=80`)

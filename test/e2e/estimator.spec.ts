@@ -48,6 +48,7 @@ test('what an estimator may not do is refused whatever the page offers', async (
     await expect(page, path).toHaveURL('/not-allowed')
   }
   await expect(page.getByRole('navigation', { name: 'Main' }).getByRole('link')).toHaveText([
+    'Find a tool',
     'Reach',
     'Ball-end speed',
     'Speeds',
@@ -55,7 +56,10 @@ test('what an estimator may not do is refused whatever the page offers', async (
     'Holders',
     'Collets',
     'Extensions',
+    'Fixtures',
     'Fits',
+    'Assemblies',
+    'Machines',
     'Locations',
     'Low stock',
   ])

@@ -79,3 +79,46 @@ test('a rotary stock that strikes the table is said and drawn', async ({ page })
   )
   expect(await sidewaysOverrunPx(page)).toBe(0)
 })
+
+test('the list of machines says that it failed and that it is empty, and goes on', async ({ page }) => {
+  const { code } = await createMachineRows(await signedInAs('cribManager'))
+  await signIn(page, 'cribManager')
+  await page.route(/\/api\/machines$/, (route) => route.abort())
+  await page.goto('/machines')
+  await expect(page.getByText('Leadline cannot be reached. Check the network and try again.')).toBeVisible()
+  await expectAccessible(page, 'machines, failed')
+  await page.unroute(/\/api\/machines$/)
+  await page.getByRole('button', { name: 'Try again' }).click()
+  await expect(page.getByText('Leadline cannot be reached')).toHaveCount(0)
+  await expect(page.getByRole('link', { name: new RegExp(code) })).toBeVisible()
+
+  await page.route(/\/api\/machines$/, (route) => route.fulfill({ json: { rows: [] } }))
+  await page.reload()
+  await expect(page.getByText('No machine is entered yet.')).toBeVisible()
+  await expectAccessible(page, 'machines, none')
+  await page.getByRole('button', { name: 'Add the first machine' }).click()
+  await expect(page.getByRole('dialog', { name: 'Add a machine' })).toBeVisible()
+})
+
+test('a set-up whose heights no longer make a window says so and is changed', async ({ page }) => {
+  const crib = await signedInAs('cribManager')
+  const { machineId } = await createMachineRows(crib)
+  const vise = await crib.post('/api/fixtures', { code: uniqueCode('VISE'), heightMm: 90 })
+  const name = uniqueCode('Low')
+  await crib.post('/api/set-ups', {
+    ...{ machineId, name, highestMm: 0, lowestTipMm: 60, retractClearanceMm: 25 },
+    fixtures: [{ itemId: vise.body.id, baseMm: 0 }],
+  })
+  await crib.patch(`/api/fixtures/${vise.body.id}`, { version: 1, heightMm: 30 })
+  await signIn(page, 'cribManager')
+  await page.goto(`/machines/${machineId}`)
+  await page.getByRole('button', { name: new RegExp(`${name} Heights that cannot be`) }).click()
+  await expect(
+    page.getByText('The lowest tip position is above the highest thing in the set-up.'),
+  ).toBeVisible()
+  await page.getByRole('button', { name: 'Change the set-up' }).click()
+  const dialog = page.getByRole('dialog')
+  await dialog.getByRole('textbox', { name: 'Lowest tip position above the table' }).fill('20')
+  await dialog.getByRole('button', { name: 'Save' }).click()
+  await expect(page.getByTestId('verdict')).toContainText('Takes gauge lengths from 130 mm to 545 mm.')
+})

@@ -1,7 +1,7 @@
 import type { Page } from '@playwright/test'
 import type { Knex } from 'knex'
 import { expectAccessible } from '../support/accessibility'
-import { signedInAs } from '../support/api'
+import { signedInAs, uniqueCode } from '../support/api'
 import { siteDatabase } from '../support/api-stock'
 import { expect, signIn, test } from '../support/browser'
 import { createSearchCrib, type SearchCrib } from '../support/search-crib'
@@ -85,6 +85,44 @@ test('two stand side by side in one drawing, with their figures', async ({ page 
   await expectAccessible(page, 'two assemblies side by side')
   await compared.getByRole('button', { name: 'Close' }).click()
   await expect(compared).toBeHidden()
+})
+
+test('what reaches is kept as an assembly, with the stick-out it was found at', async ({ page }) => {
+  const { necked } = rows
+  await signIn(page, 'machinist')
+  await page.goto(`/search?depth=25&${asked()}`)
+  await optionOf(page, necked.cutterCode)
+    .getByRole('button', { name: /^Keep / })
+    .click()
+  await page.getByRole('dialog').getByLabel('Name').fill('Slot of the bracket')
+  await page.getByRole('dialog').getByRole('button', { name: 'Keep it' }).click()
+  await expect(page).toHaveURL(/\/assemblies\/\d+$/)
+  await expect(page.getByText('39.5 mm').first()).toBeVisible()
+  await expect(page.getByText(necked.cutterCode).first()).toBeVisible()
+})
+
+test('a machine’s taper and its set-up’s window leave what goes in', async ({ page }) => {
+  const crib = await signedInAs('cribManager')
+  const taper = uniqueCode('BT')
+  const machine = { code: uniqueCode('M'), name: 'Vertical mill', taper, gaugeLineToTableMm: 600 }
+  const made = await crib.post('/api/machines', { ...machine, zTravelMm: 450, maximumRpm: 12_000 })
+  // Over 436 with 25 to spare a tool may be 139 long; what reaches is 139.5 and more.
+  const heights = { highestMm: 436, lowestTipMm: 20, retractClearanceMm: 25 }
+  const setUp = await crib.post('/api/set-ups', { machineId: made.body.id, name: 'Tall vise', ...heights })
+  expect(setUp.status).toBe(201)
+  await signIn(page, 'machinist')
+  await page.goto(`/search?depth=25&${asked()}`)
+  const choice = page.getByRole('combobox', { name: 'Machine and set-up' })
+  await choice.selectOption(`machine:${made.body.id}`)
+  await expect(page.getByText('No holder passes what you filter by.')).toBeVisible()
+  await crib.patch(`/api/holders/${rows.necked.holderId}`, { version: 1, taper })
+  await page.reload()
+  await expect(optionOf(page, rows.thickCode)).toContainText('Stick-out to set')
+  await choice.selectOption(`setup:${setUp.body.id}`)
+  await expect(page).toHaveURL(/setup=\d+/)
+  await expect(page.getByRole('region', { name: 'Falls short' })).toContainText(
+    'outside what the machine takes',
+  )
 })
 
 test('costs are ranked by and seen only by those who may', async ({ page, elsewhere }) => {

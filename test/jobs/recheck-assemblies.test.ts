@@ -1,6 +1,7 @@
+import { type ChildProcess, spawn } from 'node:child_process'
 import { randomUUID } from 'node:crypto'
 import type { Knex } from 'knex'
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import type { Role } from '@/core/policies/permissions'
 import type { AssemblyResponse } from '@/schemas/assembly'
 import { type Books, createBooks, post } from '../support/books'
@@ -230,5 +231,55 @@ describe('the worker', () => {
     await new Promise((resolve) => setTimeout(resolve, 200))
     await changing.commit()
     expect(await keeping).toBeInstanceOf(Error)
+  })
+})
+
+describe('the process of the worker', () => {
+  let worker: ChildProcess | undefined
+
+  const start = () =>
+    spawn(process.execPath, ['--conditions=react-server', '--import', 'tsx', 'src/server/worker.ts'], {
+      env: { ...process.env, SMTP_URL: '', MAIL_FROM: '' },
+      stdio: 'ignore',
+    })
+  const killed = async () => {
+    const running = worker
+    worker = undefined
+    if (!running || running.exitCode !== null || running.signalCode !== null) return
+    const gone = new Promise((resolve) => running.once('exit', resolve))
+    running.kill('SIGKILL')
+    await gone
+  }
+  afterEach(killed)
+
+  async function until(condition: () => Promise<boolean>, what: string): Promise<void> {
+    const end = Date.now() + 40_000
+    while (!(await condition())) {
+      if (Date.now() > end) throw new Error(`waited in vain: ${what}`)
+      await new Promise((resolve) => setTimeout(resolve, 100))
+    }
+  }
+
+  /** Some transaction waits for a lock: the worker has begun and cannot end. */
+  const isHeldUp = async () => {
+    const { rows } = await db.raw(
+      "select 1 from pg_stat_activity where datname = current_database() and wait_event_type = 'Lock'",
+    )
+    return rows.length > 0
+  }
+
+  it('is killed in the middle of a look, and the next one looks from the start', async () => {
+    const holding = await db.transaction()
+    await holding('assembly_checks').where('assembly_id', assembly.id).forUpdate().select('id')
+    await shortenNeck()
+    worker = start()
+    await until(isHeldUp, 'the worker is in the middle of it')
+    await killed()
+    await holding.rollback()
+    expect(await findings()).toEqual([])
+    expect(await due()).toHaveLength(1)
+    worker = start()
+    await until(async () => (await due()).length === 0, 'the assembly is looked at')
+    expect(await now()).toMatchObject({ isMarked: true, checks: [{ holds: false }] })
   })
 })

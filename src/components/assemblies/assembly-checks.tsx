@@ -2,11 +2,11 @@
 
 import { CircleCheck, CircleX } from 'lucide-react'
 import { featureWords } from '@/lib/assembly-sentences'
-import { formatInstant } from '@/lib/format-instant'
 import { verdictSentence } from '@/lib/reach-sentences'
 import type { AssemblyCheck } from '@/schemas/assembly'
 import { ItemSection } from '../catalogue/item-section'
 import { useShop } from '../layout/shop-context'
+import { Instant } from './instant'
 
 /** What it was kept for, and whether it still does it. */
 export function AssemblyChecks({ checks }: { checks: readonly AssemblyCheck[] }) {
@@ -28,7 +28,9 @@ export function AssemblyChecks({ checks }: { checks: readonly AssemblyCheck[] })
                   {checkMark(check)}
                 </p>
                 <p>{check.answer ? verdictSentence(check.answer, check.feature, unit) : null}</p>
-                <p className="text-ink-soft text-sm">Worked out {formatInstant(check.checkedAt)}</p>
+                <p className="text-ink-soft text-sm">
+                  Worked out <Instant at={check.checkedAt} />
+                </p>
               </div>
             </li>
           )

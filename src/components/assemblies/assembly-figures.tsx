@@ -2,11 +2,11 @@
 
 import { CircleX } from 'lucide-react'
 import type { ReactNode } from 'react'
-import { formatInstant } from '@/lib/format-instant'
 import { formatLength } from '@/lib/format-length'
 import type { AssemblyResponse } from '@/schemas/assembly'
 import { useShop } from '../layout/shop-context'
 import { difference, type MeasuredDifference } from './assembly-words'
+import { Instant } from './instant'
 
 /** What is set and what is to be expected, large enough to read at the machine; measured against calculated. */
 export function AssemblyFigures({ assembly }: { assembly: AssemblyResponse }) {
@@ -41,7 +41,7 @@ export function AssemblyFigures({ assembly }: { assembly: AssemblyResponse }) {
               name="Measured by"
               value={measurement.source === 'presetter' ? 'Presetter' : measurement.actorName}
             >
-              {formatInstant(measurement.measuredAt)}
+              <Instant at={measurement.measuredAt} />
             </Figure>
           </>
         ) : (

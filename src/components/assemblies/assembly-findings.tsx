@@ -6,12 +6,12 @@ import { toast } from 'sonner'
 import { useActOnAssembly } from '@/hooks/use-assemblies'
 import { findingSentence } from '@/lib/assembly-sentences'
 import { faultSentence } from '@/lib/field-faults'
-import { formatInstant } from '@/lib/format-instant'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
 import type { AssemblyFinding, AssemblyResponse } from '@/schemas/assembly'
 import { useCan, useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
+import { Instant } from './instant'
 
 export interface AssemblyFindingsProps {
   assembly: AssemblyResponse
@@ -67,17 +67,28 @@ function FindingList({ findings, className }: { findings: readonly AssemblyFindi
       {findings.map((finding) => (
         <li key={finding.id}>
           <span className={className}>{findingSentence(finding.detail, unit)}</span>{' '}
-          <span className="text-ink-soft text-sm">{causeWords(finding)}</span>
+          <span className="text-ink-soft text-sm">
+            <Cause finding={finding} />
+          </span>
         </li>
       ))}
     </ul>
   )
 }
 
-function causeWords({ movement, foundAt }: AssemblyFinding): string {
-  if (!movement) return `Found ${formatInstant(foundAt)}.`
+function Cause({ finding: { movement, foundAt } }: { finding: AssemblyFinding }) {
+  if (!movement)
+    return (
+      <>
+        Found <Instant at={foundAt} />.
+      </>
+    )
   const to = movement.kind === 'scrap' ? 'to scrap' : `to ${movement.toName}`
-  return `${movement.actorName} moved ${movement.quantity} ${to}, ${formatInstant(movement.occurredAt)}.`
+  return (
+    <>
+      {movement.actorName} moved {movement.quantity} {to}, <Instant at={movement.occurredAt} />.
+    </>
+  )
 }
 
 /** Sizes can be taken over; a part that is gone asks for hands. */

@@ -1,11 +1,11 @@
 'use client'
 
-import { formatInstant } from '@/lib/format-instant'
 import { formatLength } from '@/lib/format-length'
 import type { AssemblyResponse } from '@/schemas/assembly'
 import { cellClass, headingCellClass, ItemSection } from '../catalogue/item-section'
 import { useShop } from '../layout/shop-context'
 import { difference } from './assembly-words'
+import { Instant } from './instant'
 
 /** Every measurement there was, each against what was calculated then. */
 export function AssemblyMeasurements({ assembly }: { assembly: AssemblyResponse }) {
@@ -41,7 +41,7 @@ export function AssemblyMeasurements({ assembly }: { assembly: AssemblyResponse 
               return (
                 <tr key={measured.id} className="border-hairline border-b align-baseline">
                   <th scope="row" className={`${cellClass} text-left font-normal`}>
-                    {formatInstant(measured.measuredAt)}
+                    <Instant at={measured.measuredAt} />
                     <span className="text-ink-soft block text-sm">
                       {measured.actorName}, {measured.source === 'presetter' ? 'presetter' : 'by hand'}
                       {measured.isCurrent ? '' : ', before it was built or set as now'}

@@ -1,7 +1,7 @@
 import { isOverTolerance } from '@/core/assemblies/assembly-figures'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { differenceWords } from '@/lib/assembly-sentences'
-import type { AssemblyMeasurement, AssemblyPart, AssemblyPlace, AssemblyRow } from '@/schemas/assembly'
+import type { AssemblyPart, AssemblyPlace, AssemblyRow } from '@/schemas/assembly'
 import { conditionNames } from '../catalogue/stock-words'
 
 /** Where something is: a bin by its crib and code, a machine by its code, anything else by its name. */
@@ -34,17 +34,7 @@ export interface MeasuredDifference {
   isOver: boolean
 }
 
-/** A measured gauge length against the one to expect now. */
-export function gaugeDifference(
-  measurement: AssemblyMeasurement,
-  gaugeLengthMm: number,
-  toleranceMm: number,
-  unit: LengthUnit,
-): MeasuredDifference {
-  return difference(measurement.gaugeLengthMm, gaugeLengthMm, toleranceMm, unit)
-}
-
-/** The same of any measured figure. */
+/** A measured figure against the calculated one. */
 export function difference(
   measuredMm: number,
   calculatedMm: number,

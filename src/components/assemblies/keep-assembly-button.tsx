@@ -5,12 +5,15 @@ import { useRouter } from 'next/navigation'
 import { type FormEvent, useState } from 'react'
 import { toast } from 'sonner'
 import type { Clearances, Feature } from '@/core/reach/types'
+import { useAddAssemblyCheck, useAssemblies } from '@/hooks/use-assemblies'
 import { useKeepAssembly } from '@/hooks/use-keep-assembly'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { formatLength } from '@/lib/format-length'
+import type { AssemblyRow } from '@/schemas/assembly'
 import { useCan, useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
+import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
 import { DialogFoot, gloveFormClass } from './dialog-foot'
 import { noOffsetTexts, OffsetFields, readOffsets } from './offset-fields'
@@ -45,12 +48,16 @@ export function KeepAssemblyButton({ option, label }: { option: KeptOption; labe
 function KeepDialog({ option, onClose }: { option: KeptOption; onClose: () => void }) {
   const router = useRouter()
   const keepAssembly = useKeepAssembly()
+  const addCheck = useAddAssemblyCheck()
   const { unit } = useShop()
+  const alike = useAlike(option)
+  const [withId, setWithId] = useState('')
   const [name, setName] = useState('')
   const [offsets, setOffsets] = useState(noOffsetTexts)
   const [errors, setErrors] = useState<Record<string, string>>({})
   const [failure, setFailure] = useState<string | null>(null)
   const [isBusy, setIsBusy] = useState(false)
+  const existing = alike.find(({ id }) => id === withId) ?? null
 
   async function handleSubmit(event: FormEvent) {
     event.preventDefault()
@@ -60,8 +67,11 @@ function KeepDialog({ option, onClose }: { option: KeptOption; onClose: () => vo
     setFailure(null)
     setIsBusy(true)
     try {
-      const kept = await keepAssembly({ ...option, name, ...numbers.value })
-      toast.success(`Kept as assembly ${kept.number}.`)
+      const { feature, clearances } = option
+      const kept = existing
+        ? await addCheck(existing, { feature, clearances })
+        : await keepAssembly({ ...option, name, ...numbers.value })
+      toast.success(existing ? `Kept with assembly ${kept.number}.` : `Kept as assembly ${kept.number}.`)
       router.push(`/assemblies/${kept.id}`)
     } catch (error) {
       setErrors(fieldFaults(error))
@@ -75,18 +85,37 @@ function KeepDialog({ option, onClose }: { option: KeptOption; onClose: () => vo
       isOpen
       onOpenChange={(isOpen) => (isOpen ? undefined : onClose())}
       title="Keep as assembly"
-      description={`Set to ${formatLength(option.stickOutMm, unit)} of stick-out. It gets the next number, and is marked when a part of it changes so that it no longer holds.`}
+      description={`Set to ${formatLength(option.stickOutMm, unit)} of stick-out. It is marked when a part of it changes so that it no longer holds.`}
     >
       <form noValidate onSubmit={handleSubmit} className={gloveFormClass}>
-        <TextField
-          label="Name"
-          value={name}
-          maxLength={200}
-          onChange={(event) => setName(event.target.value)}
-          hint="What it is for, such as the pocket or the job"
-          error={errors.name}
-        />
-        <OffsetFields texts={offsets} errors={errors} onChange={setOffsets} />
+        {alike.length > 0 ? (
+          <SelectField
+            label="Keep it"
+            value={withId}
+            onChange={(event) => setWithId(event.target.value)}
+            options={[
+              { value: '', label: 'As a new assembly' },
+              ...alike.map(({ id, number, name: called }) => ({
+                value: id,
+                label: `With assembly ${number}${called ? `, ${called}` : ''}`,
+              })),
+            ]}
+            hint="The same parts at the same stick-out are kept already: one assembly may be for several features."
+          />
+        ) : null}
+        {existing ? null : (
+          <>
+            <TextField
+              label="Name"
+              value={name}
+              maxLength={200}
+              onChange={(event) => setName(event.target.value)}
+              hint="What it is for, such as the pocket or the job"
+              error={errors.name}
+            />
+            <OffsetFields texts={offsets} errors={errors} onChange={setOffsets} />
+          </>
+        )}
         <DialogFoot
           label="Keep it"
           busyLabel="Keeping …"
@@ -96,5 +125,22 @@ function KeepDialog({ option, onClose }: { option: KeptOption; onClose: () => vo
         />
       </form>
     </Dialog>
+  )
+}
+
+const sameMm = 1e-9
+
+/** Assemblies of the very same parts at the same stick-out. */
+function useAlike({ cutter, holder, collet, extension, stickOutMm }: KeptOption): readonly AssemblyRow[] {
+  const { rows } = useAssemblies({ itemId: holder.id })
+  if (!('id' in cutter)) return []
+  const wanted = [cutter, collet, extension, holder].flatMap((part) => part?.id ?? []).sort()
+  return (rows ?? []).filter(
+    (row) =>
+      Math.abs(row.stickOutMm - stickOutMm) <= sameMm &&
+      row.parts
+        .map(({ itemId }) => itemId)
+        .sort()
+        .join() === wanted.join(),
   )
 }

@@ -8,6 +8,7 @@ import {
   centringSentence,
   fitSentence,
   machineRefusals,
+  noseSentence,
   strikeSentence,
   windowSentences,
 } from '@/lib/machine-sentences'
@@ -67,6 +68,10 @@ export function SetUpSheet({ machine, setUp, onEdit }: SetUpSheetProps) {
         )
       : []),
   ]
+  const nose =
+    tool?.fit.verdict === 'fits'
+      ? noseSentence({ ...setUp, highestMm: window.highestMm }, tool.gaugeLengthMm, unit)
+      : null
   const [first = '', ...others] = tool ? [] : windowSentences(window, unit)
 
   function handleStickOut(typed: string) {
@@ -79,8 +84,16 @@ export function SetUpSheet({ machine, setUp, onEdit }: SetUpSheetProps) {
     <div className="flex min-w-0 flex-col gap-4">
       {tool ? (
         <VerdictLine
-          tone={tool.fit.verdict === 'fits' && against.length === 0 ? 'holds' : 'collision'}
-          sentence={[...against, fitSentence(tool.fit, tool.gaugeLengthMm, unit)].join(' ')}
+          tone={
+            tool.fit.verdict !== 'fits' || against.length > 0
+              ? 'collision'
+              : nose === null
+                ? 'holds'
+                : 'caution'
+          }
+          sentence={[...against, fitSentence(tool.fit, tool.gaugeLengthMm, unit), nose ?? '']
+            .join(' ')
+            .trim()}
         />
       ) : (
         <VerdictLine tone={window.possible ? 'plain' : 'collision'} sentence={first} />

@@ -10,11 +10,13 @@ export interface AssemblyFiguresProps {
   assembly: SearchedAssembly
   /** Of what does not reach nothing is to be set, of what stands ready nothing any more. */
   stickOutLabel: 'Stick-out to set' | 'Stick-out as built' | 'Stick-out as drawn'
+  /** What is cut, where it was chosen. */
+  material: string | null
   unit: LengthUnit
 }
 
 /** The stick-out to set, large enough to be read at arm's length, and the figures beside it. */
-export function AssemblyFigures({ assembly, stickOutLabel, unit }: AssemblyFiguresProps) {
+export function AssemblyFigures({ assembly, stickOutLabel, material, unit }: AssemblyFiguresProps) {
   const { stickOut, reach, stiffness, speed, cost } = assembly
   return (
     <dl className="flex flex-wrap items-baseline gap-x-6 gap-y-1">
@@ -46,6 +48,8 @@ export function AssemblyFigures({ assembly, stickOutLabel, unit }: AssemblyFigur
             {speed.limited === 'no' ? '' : ', held to what cutter, holder or spindle allow'}
           </span>
         </Figure>
+      ) : material !== null ? (
+        <Figure label="Speed to start from">none of the shop’s for this tool in {material}</Figure>
       ) : null}
       {cost ? (
         <Figure label="Cost of its parts">

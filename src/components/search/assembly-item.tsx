@@ -50,7 +50,12 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
           {name}
         </h3>
         <p className="text-ink-soft text-[0.9375rem] max-sm:hidden">{itemSizes(cutter, unit)}</p>
-        <AssemblyFigures assembly={assembly} stickOutLabel={stickOutLabel(assembly, place)} unit={unit} />
+        <AssemblyFigures
+          assembly={assembly}
+          stickOutLabel={stickOutLabel(assembly, place)}
+          material={draft.choices.material}
+          unit={unit}
+        />
         <div className="max-lg:hidden">{children}</div>
         <Cautions cautions={cautions} className="max-lg:hidden" />
       </div>

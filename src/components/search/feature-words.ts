@@ -1,8 +1,10 @@
 import type { Feature } from '@/core/reach/types'
 import type { LengthUnit } from '@/core/units/length-unit'
+import { cutterFormNames, substrateNames } from '@/lib/cutter-words'
 import { formatAngle } from '@/lib/format-angle'
 import { formatLength } from '@/lib/format-length'
 import type { SearchPurpose } from '@/schemas/reach-search'
+import type { SearchDraft } from './search-question'
 
 /** What was asked for, in one line: it stands where the fields were once the answer is there. */
 export function featureWords(feature: Feature, purpose: SearchPurpose | null, unit: LengthUnit): string {
@@ -11,6 +13,21 @@ export function featureWords(feature: Feature, purpose: SearchPurpose | null, un
   return [...words, purpose === 'roughing' ? 'to rough' : purpose === 'finishing' ? 'to finish' : null]
     .filter((word) => word !== null)
     .join(', ')
+}
+
+/** What else was chosen: the material, and what of the crib is looked through; null where nothing was. */
+export function filterWords({ choices, texts }: Pick<SearchDraft, 'choices' | 'texts'>): string | null {
+  const words = [
+    choices.material === null ? null : `in ${choices.material}`,
+    choices.forms.length === 0
+      ? null
+      : `only ${choices.forms.map((form) => cutterFormNames[form].toLowerCase()).join(', ')}`,
+    choices.substrates.length === 0
+      ? null
+      : `only of ${choices.substrates.map((substrate) => substrateNames[substrate]).join(', ')}`,
+    texts.ratio.trim() === '' ? null : `at most ${texts.ratio.trim()} × DC out`,
+  ].filter((word) => word !== null)
+  return words.length === 0 ? null : words.join('; ')
 }
 
 type Size = (mm: number) => string

@@ -171,7 +171,7 @@ function OnlyCutter({ id, onForget }: { id: string; onForget: () => void }) {
   )
 }
 
-/** What is cut: it says where to start, and which tool material the shop has a speed for in it. */
+/** What is cut: it says where to start. Which cutters suit it the catalogue does not know. */
 function MaterialField({
   material,
   error,
@@ -189,7 +189,7 @@ function MaterialField({
       value={material ?? ''}
       error={error}
       options={[{ value: '', label: 'Any' }, ...known.map((name) => ({ value: name, label: name }))]}
-      hint="Gives the shop’s starting speed; of cutters, those it has one for"
+      hint="Each cutter then says where to start; none is left out"
       onChange={(event) => onChoose(event.target.value || null)}
     />
   )

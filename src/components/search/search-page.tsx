@@ -9,7 +9,7 @@ import type { FieldErrors } from '../reach/compile-check'
 import { useReading } from '../reach/use-reach-check'
 import { Button } from '../ui/button'
 import { classNames } from '../ui/class-names'
-import { featureWords } from './feature-words'
+import { featureWords, filterWords } from './feature-words'
 import { SearchForm } from './search-form'
 import {
   compileSearch,
@@ -74,6 +74,7 @@ export function SearchPage() {
           {request?.feature && !isFormOpen ? (
             <AskedLine
               words={featureWords(request.feature, draft.purpose, reading.unit)}
+              filters={filterWords(draft)}
               onChange={() => setIsFormOpen(true)}
             />
           ) : null}
@@ -108,10 +109,21 @@ function refusedFields(local: FieldErrors | null, error: Error | undefined): Fie
 }
 
 /** On a phone the fields make way for the answer: what was asked stays in sight, a thumb away from being changed. */
-function AskedLine({ words, onChange }: { words: string; onChange: () => void }) {
+function AskedLine({
+  words,
+  filters,
+  onChange,
+}: {
+  words: string
+  filters: string | null
+  onChange: () => void
+}) {
   return (
     <div className="border-ink bg-sheet flex items-center gap-3 border py-1 pr-1 pl-3 lg:hidden">
-      <p className="min-w-0 flex-1 font-semibold">{words}</p>
+      <p className="min-w-0 flex-1 font-semibold">
+        {words}
+        {filters === null ? null : <span className="block font-normal">{filters}</span>}
+      </p>
       <Button size="counter" variant="quiet" className="px-4!" onClick={onChange}>
         Change
       </Button>

@@ -126,17 +126,17 @@ export function withChoices(asked: URLSearchParams, choices: SearchChoices): URL
   return query
 }
 
-/** Nothing left out, the stiffest first. */
-export const noChoices: SearchChoices = {
-  rankBy: 'stiffness',
+/** What leaves something of the crib out; the material says only where to start. */
+export const noFilters = {
   cribId: null,
   machineId: null,
   setUpId: null,
   isInStockOnly: false,
   forms: [],
   substrates: [],
-  material: null,
-}
+} as const satisfies Partial<SearchChoices>
+
+export const noChoices: SearchChoices = { ...noFilters, rankBy: 'stiffness', material: null }
 
 /** The request an address makes, or what is wrong with it, by the request's own names of the places. */
 export type CompiledSearch =

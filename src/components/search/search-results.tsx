@@ -10,7 +10,6 @@ import type {
 } from '@/schemas/reach-search'
 import { useShop } from '../layout/shop-context'
 import { ReachCautions } from '../reach/reach-cautions'
-import { listWords } from '../reach/start-sheet'
 import { Button, ButtonLink } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { StateSentence } from '../ui/state-sentence'
@@ -19,7 +18,7 @@ import type { AssemblyListing } from './listed-assembly'
 import { NearMissItem } from './near-miss-item'
 import { OptionItem } from './option-item'
 import { RankBar } from './rank-bar'
-import { noChoices, type SearchChoices, type SearchDraft } from './search-question'
+import { noFilters, type SearchChoices, type SearchDraft } from './search-question'
 import { useIsSlow } from './use-is-slow'
 
 export interface SearchResultsProps {
@@ -119,7 +118,7 @@ function Answer({ answer, request, draft, onChoices }: AnswerProps) {
           </span>
         ) : null}
       </p>
-      <Notes answer={answer} onChoices={onChoices} />
+      <Notes answer={answer} isFiltered={isFiltered(draft)} onChoices={onChoices} />
       {isComparing && compared.length > 1 ? (
         <CompareSection assemblies={compared} listing={listing} onClose={() => setIsComparing(false)} />
       ) : null}
@@ -174,16 +173,32 @@ const noteKinds: Record<SearchNoteCode, 'plain' | 'caution'> = {
 }
 
 /** What is to be known of the answer as a whole, with the way on where there is one. */
-function Notes({ answer, onChoices }: Pick<AnswerProps, 'answer' | 'onChoices'>) {
+function Notes({ answer, isFiltered, onChoices }: WayOnProps & Pick<AnswerProps, 'answer'>) {
   return answer.notes.map(({ code, text }) => (
     <Notice key={code} kind={noteKinds[code]}>
       <p>{text}</p>
-      <WayOn code={code} onChoices={onChoices} />
+      <WayOn code={code} isFiltered={isFiltered} onChoices={onChoices} />
     </Notice>
   ))
 }
 
-function WayOn({ code, onChoices }: { code: SearchNoteCode; onChoices: AnswerProps['onChoices'] }) {
+interface WayOnProps extends Pick<AnswerProps, 'onChoices'> {
+  /** Something of the crib was left out by a choice. */
+  isFiltered: boolean
+}
+
+function isFiltered({ choices }: SearchDraft): boolean {
+  const { cribId, machineId, setUpId, isInStockOnly, forms, substrates } = choices
+  const named = [cribId, machineId, setUpId].some((choice) => choice !== null)
+  return named || isInStockOnly || forms.length > 0 || substrates.length > 0
+}
+
+function WayOn({ code, isFiltered, onChoices }: WayOnProps & { code: SearchNoteCode }) {
+  const everything = (
+    <Button className="mt-2 max-lg:min-h-16" onClick={() => onChoices(noFilters)}>
+      Look through everything
+    </Button>
+  )
   switch (code) {
     case 'crib-empty':
       return (
@@ -193,18 +208,17 @@ function WayOn({ code, onChoices }: { code: SearchNoteCode; onChoices: AnswerPro
         </p>
       )
     case 'nothing-passes-filters':
-      return (
-        <Button className="mt-2" onClick={() => onChoices(noChoices)}>
-          Look through everything
-        </Button>
-      )
+      return everything
     case 'no-cutter-suits':
     case 'nothing-reaches':
       return (
-        <p>
-          Loosen {listWords(['the corner', 'the floor', 'the opening'])}, rough and finish apart, or{' '}
-          {'give the wall some draft'}.
-        </p>
+        <>
+          <p>
+            A wider corner, floor or opening, roughing and finishing apart, or some draft on the wall may
+            help.
+          </p>
+          {isFiltered ? everything : null}
+        </>
       )
     default:
       return null

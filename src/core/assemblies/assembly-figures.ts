@@ -4,6 +4,9 @@ import type { AssemblyTools, KeptCheck, OffsetName } from './types'
 /**
  * Gauge line to tip of an assembly at a stick-out: holder's A, extension's E and the stick-out.
  *
+ * Units      Millimetres.
+ * Source     reach.md, section 1: A + E + S.
+ *
  * @example
  * assemblyGaugeLengthMm({ holder: { gaugeLengthMm: 100 }, extension: null }, 39.5) // => 139.5
  */
@@ -20,6 +23,9 @@ export function assemblyGaugeLengthMm(
 /**
  * The stick-out an assembly really has, from the gauge length measured on it.
  *
+ * Units      Millimetres.
+ * Result     Not above 0 where the length is that of holder and extension alone, or less: nothing would stand out.
+ *
  * @example
  * measuredStickOutMm({ holder: { gaugeLengthMm: 100 }, extension: { projectionMm: 80 } }, 219) // => 39
  */
@@ -30,7 +36,14 @@ export function measuredStickOutMm(
   return gaugeLengthMm - assemblyGaugeLengthMm(tools, 0)
 }
 
-/** The reach request a kept check stands for, with these sizes. */
+/**
+ * The reach request a kept check stands for, with these sizes.
+ *
+ * Assumes the spindle's width is not known, the cautious reading, whatever machine the assembly stands in.
+ *
+ * Shapes     A stick-out of null asks for the one that is required; clearances of null are the shop's own.
+ * Units      Millimetres.
+ */
 export function reachRequestOf(
   tools: AssemblyTools,
   check: { feature: Feature; clearances: KeptCheck['clearances'] },
@@ -51,7 +64,11 @@ export function reachRequestOf(
   }
 }
 
-/** What a control holds of an assembly: its length, its diameter and the radius of its corner. */
+/**
+ * What a control holds of an assembly: its length, its diameter and the radius of its corner.
+ *
+ * Units      Millimetres; a ball's corner radius is half its diameter, a square end's 0.
+ */
 export function offsetsOf(tools: AssemblyTools, stickOutMm: number): Record<OffsetName, number> {
   const { cutter } = tools
   return {

@@ -54,6 +54,7 @@ export interface Recheck {
  * Assumes the stick-out stays what it was set to. A gauge length measured beyond the shop's tolerance speaks of the
  * assembly as it really stands, so every check is asked at that stick-out too.
  *
+ * Units      Millimetres.
  * Result     Findings, each with a key of its own; changed sizes alone are no fault. Every check has an outcome.
  * Errors     None: sizes that can't be are the finding `checkImpossible`.
  * Source     reach.md, by `reachAnswer`; what is a fault is this project's decision.

@@ -71,33 +71,6 @@ export function millingForce(
 }
 
 /**
- * Power of a milling cut by the volume it takes: Pc = ap·ae·vf·kc/(60·10⁶·η).
- *
- * Units      Millimetres, mm/min, N/mm²; kilowatts. Efficiency 0 to 1; 1 gives the power at the cutter.
- * Errors     CoreInputError `not-given`, `not-finite`, `not-positive`.
- * Source     A maker's printed example, 1.68 kW: test/reference/cutting/cutting-force.md, section 3.
- * Tolerance  To the digits printed.
- *
- * @example
- * millingPowerKw({ depthOfCutMm: 2, stepoverMm: 80, feedMmPerMin: 280, specificForceNPerMm2: 1800, efficiency: 0.8 }).toFixed(2) // => '1.68'
- */
-export function millingPowerKw(cut: {
-  depthOfCutMm: number
-  stepoverMm: number
-  feedMmPerMin: number
-  specificForceNPerMm2: number
-  efficiency: number
-}): number {
-  return (
-    (positive(cut.depthOfCutMm, 'depthOfCutMm', 'The depth of cut') *
-      positive(cut.stepoverMm, 'stepoverMm', 'The stepover') *
-      positive(cut.feedMmPerMin, 'feedMmPerMin', 'The feed') *
-      positive(cut.specificForceNPerMm2, 'specificForceNPerMm2', 'The specific cutting force')) /
-    (60e6 * positive(cut.efficiency, 'efficiency', 'The efficiency'))
-  )
-}
-
-/**
  * Power at a torque and a spindle speed: P = M·n/9549.3.
  *
  * Units      Newton metres and revolutions a minute in, kilowatts out.

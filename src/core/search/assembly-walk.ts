@@ -38,6 +38,9 @@ export type WantsStack = (assembly: WalkedAssembly, takers: Takers, lowestMm: nu
  * Assumes the visitor keeps no hold of the assembly: it is the same object every time.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * walkAssemblies({ tables: { cutters: { overallMm: [80], fullShankMm: [13], index: [0] } }, asked: { penalties: { cutters: [0] } }, row: 0, offer: { direct: { count: 0 }, extended: { count: 0 } } }, () => {}) // => undefined
  */
 export function walkAssemblies(
   from: WalkFrom,
@@ -134,6 +137,9 @@ function colletPenalty(penalties: Float64Array, collet: number): number {
  * The stick-out of an assembly on a walk: as `chosenStickOutMm`.
  *
  * Units      Millimetres.
+ *
+ * @example
+ * walkedStickOutMm({ rule: { stepMm: 0.5 } }, { lowerMm: 25.2, upperMm: 40 }) // => 25.5
  */
 export function walkedStickOutMm({ rule }: WalkFrom, { lowerMm, upperMm }: WalkedAssembly): number {
   return chosenStickOutMm(lowerMm, upperMm, rule.stepMm)
@@ -143,6 +149,9 @@ export function walkedStickOutMm({ rule }: WalkFrom, { lowerMm, upperMm }: Walke
  * Compliance of an assembly on a walk at a stick-out.
  *
  * Units      Millimetres; micrometres per newton.
+ *
+ * @example
+ * walkedCompliance({ tables: { cutters: { fullShankMm: [10], compliance: [1], compliancePerCubicMm: [0.001] }, holders: { outlineOf: [0], constant: [2], linear: [0.1], quadratic: [0] } } }, { row: 0, holder: 0, extension: -1 }, 20) // => 12
  */
 export function walkedCompliance(
   { tables }: WalkFrom,

@@ -2,6 +2,13 @@
  * The least so many of any number of items, by an order in which no two are alike.
  *
  * A heap with the greatest on top, so that an item that can't enter costs one comparison.
+ *
+ * @example
+ * (() => {
+ *   const list = new BestList(2, (a, b) => a - b)
+ *   for (const item of [3, 1, 2]) list.offer(item)
+ *   return list.sorted()
+ * })() // => [1, 2]
  */
 export class BestList<Item> {
   private readonly heap: Item[] = []

@@ -21,6 +21,8 @@ export interface BodyTable {
   outlineOf: Int32Array
   outlineCount: number
   noseRadiusMm: Float64Array
+  /** The least of `noseRadiusMm`; Infinity without outlines. */
+  slimmestNoseMm: number
   /** Where an outline's lines begin; one more at the end. */
   lineStart: Int32Array
   z0: Float64Array
@@ -72,10 +74,12 @@ function bodyKey({ lengthMm, spindleRadiusMm, beam }: Body, lines: CheckLine[]):
 function packedOutlines(distinct: { body: Body; lines: CheckLine[] }[]): Omit<BodyTable, 'outlineOf'> {
   const lineStart = lineStarts(distinct.map(({ lines }) => lines))
   const lines = packLines(distinct.flatMap((one) => one.lines))
+  const noseRadiusMm = Float64Array.from(distinct, (one) => one.lines[0]?.r1 ?? 0)
   const compliances = distinct.map(({ body }) => complianceByOffset(body.beam))
   return {
     outlineCount: distinct.length,
-    noseRadiusMm: Float64Array.from(distinct, (one) => one.lines[0]?.r1 ?? 0),
+    noseRadiusMm,
+    slimmestNoseMm: noseRadiusMm.reduce((least, mm) => Math.min(least, mm), Number.POSITIVE_INFINITY),
     lineStart,
     ...lines,
     lengthMm: Float64Array.from(distinct, ({ body }) => body.lengthMm),
@@ -183,6 +187,7 @@ export function boundsAt(
   const mostMm = mostBoundMm(at, clearanceMm)
   const { lineStart, z0, r0, z1, r1, isFromAxis } = bodies
   const fullDepthMm = fullDepthRadiusMm(at) - clearanceMm
+  if (bodies.slimmestNoseMm > fullDepthMm) return bounds.fill(mostMm)
   for (let outline = 0; outline < bodies.outlineCount; outline++) {
     if (bodies.noseRadiusMm[outline]! > fullDepthMm) {
       bounds[outline] = mostMm

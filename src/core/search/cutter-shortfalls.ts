@@ -35,6 +35,15 @@ export function tipPlacements(
  * Units      Millimetres.
  * Result     Nothing is told of a cutter that can be asked in an assembly.
  * Tolerance  1e-9 mm, as the reach check's.
+ *
+ * @example
+ * (() => {
+ *   const tables = searchTables({ cutters: [{ id: 'a', geometry: squareCutter }], holders: [], collets: [], extensions: [] }, defaultReachSettings)
+ *   const asked = askedSearch(tables, { feature: { kind: 'wall', depthMm: 20 }, limit: 1, nearMissLimit: 1 })
+ *   const told = []
+ *   reportShortfalls(tables, asked, tipPlacements(tables, asked)[0], 0, (_, by, mm) => told.push(by, mm.toFixed(1)))
+ *   return told
+ * })() // => ['shank', '7.3']
  */
 export function reportShortfalls(
   tables: SearchTables,

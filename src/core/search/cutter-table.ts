@@ -67,7 +67,8 @@ export function packCutters(cutters: readonly AcceptedCutter[], settings: ReachS
   return {
     count: rows.length,
     index: Int32Array.from(rows, ({ index }) => index),
-    dimensions: rows.map(({ dimensions }) => dimensions),
+    // Copied in the order they are read in: the search goes through all of them, one after another.
+    dimensions: rows.map(({ dimensions }) => ({ ...dimensions })),
     tipOf,
     tips,
     shankClass: Int32Array.from(rows, ({ shankClass }) => shankClass),

@@ -35,35 +35,39 @@ export function tipBounds(tables: SearchTables, asked: AskedSearch): TipBounds {
   const placements = tipPlacements(tables, asked)
   const firstAlike = firstsAlike(placements)
   const kept = new Map<number, PlacedBounds>()
-  const { clearances, spindleRadiusMm } = asked
   const of = (tip: number): PlacedBounds => {
     const first = firstAlike[tip]!
     const known = kept.get(first)
     if (known) return known
-    const at = placements[first]!
-    const { holders, extensions } = tables
-    const bounds = {
-      holders: boundsAt(
-        holders,
-        at,
-        clearances.holderMm,
-        spindleRadiusMm,
-        new Float64Array(holders.outlineCount),
-      ),
-      extensions: boundsAt(
-        extensions,
-        at,
-        clearances.holderMm,
-        null,
-        new Float64Array(extensions.outlineCount),
-      ),
-    }
-    const oldest = kept.keys().next()
-    if (kept.size >= keptPlacements && !oldest.done) kept.delete(oldest.value)
+    const bounds = boundsOf(tables, asked, placements[first]!, roomFor(tables, kept))
     kept.set(first, bounds)
     return bounds
   }
   return { placements, of }
+}
+
+/** Columns to fill: new ones, or those of the bounds kept longest, which are given up. */
+function roomFor({ holders, extensions }: SearchTables, kept: Map<number, PlacedBounds>): PlacedBounds {
+  const oldest = kept.entries().next()
+  if (kept.size < keptPlacements || oldest.done)
+    return {
+      holders: new Float64Array(holders.outlineCount),
+      extensions: new Float64Array(extensions.outlineCount),
+    }
+  const [first, { holders: ofHolders, extensions: ofExtensions }] = oldest.value
+  kept.delete(first)
+  return { holders: ofHolders, extensions: ofExtensions }
+}
+
+function boundsOf(
+  { holders, extensions }: SearchTables,
+  { clearances: { holderMm }, spindleRadiusMm }: AskedSearch,
+  at: Placement,
+  room: PlacedBounds,
+): PlacedBounds {
+  boundsAt(holders, at, holderMm, spindleRadiusMm, room.holders)
+  boundsAt(extensions, at, holderMm, null, room.extensions)
+  return room
 }
 
 /** For every tip the first of the run of tips before it that stand as it does. */

@@ -106,6 +106,9 @@ function offerOptions(
  * An assembly on a walk as an option.
  *
  * Units      Millimetres; micrometres per newton.
+ *
+ * @example
+ * optionOf({ cutters: { index: [4] } }, { row: 0, holder: 2, collet: -1, behindMm: 100 }, 30, 1.5).gaugeLengthMm // => 130
  */
 export function optionOf(
   { cutters }: SearchTables,
@@ -142,6 +145,9 @@ export function compareOptions(tables: SearchTables, a: SearchOption, b: SearchO
  * The order of assemblies by the ids of cutter, holder, collet, extension; none before any.
  *
  * Result     0 only for the same assembly.
+ *
+ * @example
+ * compareParts({ idOrder: { cutters: [1, 0], holders: [0] } }, { cutterIndex: 0, holderIndex: 0 }, { cutterIndex: 1, holderIndex: 0 }) // => 1
  */
 export function compareParts({ idOrder }: SearchTables, a: AssemblyParts, b: AssemblyParts): number {
   const place = (order: Int32Array, index: number | null) => (index === null ? -1 : order[index]!)

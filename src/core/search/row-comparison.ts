@@ -269,6 +269,9 @@ function takerAsks({ outline, outlineSize }: Takers, bounds: Float64Array, lengt
  * Assumes the stick-out leaves only full shank behind the nose.
  *
  * Units      Millimetres; micrometres per newton.
+ *
+ * @example
+ * cutterCompliance({ cutters: { fullShankMm: [10], compliance: [1], compliancePerCubicMm: [0.001] } }, 0, 20) // => 8
  */
 export function cutterCompliance({ cutters }: SearchTables, row: number, stickOutMm: number): number {
   const fullShankMm = cutters.fullShankMm[row]!

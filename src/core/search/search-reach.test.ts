@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { defaultReachSettings } from '@/core/reach/types'
+import { defaultReachSettings, type Feature } from '@/core/reach/types'
+import { cribOfSize } from '../../../test/support/crib-of-size'
 import { type SearchCase, type SearchedKind, searchCase } from '../../../test/support/cribs'
 import { type NaiveAssembly, naiveSearch, setStickOutMm } from '../../../test/support/naive-search'
 import { assemblyRequest } from './assembly-request'
@@ -83,6 +84,26 @@ function expectMisses(
     expect(request).toEqual(naive.request)
   }
 }
+
+describe('in a shop’s crib', () => {
+  const tooling = cribOfSize({ cutters: 120, holders: 30, extensions: 4 })
+  const features: Feature[] = [
+    { kind: 'wall', depthMm: 6 },
+    { kind: 'wall', depthMm: 45, draftDeg: 1.5, openingWidthMm: 40 },
+    { kind: 'wall', depthMm: 25, draftDeg: 3, obstacles: [{ setbackMm: 6, riseMm: 20 }] },
+    { kind: 'wall', depthMm: 35, draftDeg: 4, tiltDeg: 18 },
+    { kind: 'hole', depthMm: 25, diameterMm: 20, breakThroughMm: 1 },
+  ]
+
+  it.each(features)(
+    'it finds what every assembly asked one by one finds: $kind, $depthMm deep',
+    (feature) => {
+      const answer = expectAsNaive({ tooling, question: { feature, limit: 100_000, nearMissLimit: 1000 } })
+      expect(answer.options.length).toBe(answer.reachable)
+      expect(answer.reachable).toBeGreaterThan(100)
+    },
+  )
+})
 
 describe('on random cribs', () => {
   const limits = fc.record({

@@ -32,8 +32,9 @@ export function stickOutLimit(
 ): StickOutLimit {
   if (longestToDiameter === null)
     return { longestMm: Number.POSITIVE_INFINITY, longestLowerMm: Number.POSITIVE_INFINITY }
-  const longestMm = longestToDiameter * diameterMm + overlapToleranceMm
-  return { longestMm, longestLowerMm: (Math.floor(longestMm / stepMm) + 1e-9) * stepMm }
+  const longestMm = longestToDiameter * diameterMm
+  const steps = Math.floor((longestMm + overlapToleranceMm) / stepMm)
+  return { longestMm, longestLowerMm: (steps + 1e-9) * stepMm }
 }
 
 /**
@@ -46,7 +47,7 @@ export function stickOutLimit(
  */
 export function largestLowerMm({ longestMm, longestLowerMm }: StickOutLimit, upperMm: number): number {
   const heldMm = upperMm + overlapToleranceMm
-  return upperMm <= longestMm ? heldMm : Math.min(heldMm, longestLowerMm)
+  return upperMm <= longestMm + overlapToleranceMm ? heldMm : Math.min(heldMm, longestLowerMm)
 }
 
 /**
@@ -118,6 +119,6 @@ export function stickOutShortfallMm(
 ): number {
   const stickOutMm = chosenStickOutMm(lowerMm, upperMm, stepMm)
   const crossedMm = lowerMm > upperMm + overlapToleranceMm ? lowerMm - upperMm : 0
-  const overMm = stickOutMm > longestMm ? stickOutMm - longestMm : 0
+  const overMm = stickOutMm > longestMm + overlapToleranceMm ? stickOutMm - longestMm : 0
   return Math.max(crossedMm, overMm, outsideWindowMm(window, behindMm + stickOutMm))
 }

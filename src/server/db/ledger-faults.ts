@@ -7,7 +7,7 @@ export interface LedgerCheck {
 }
 
 /**
- * Adds every movement up again and says where balances, levels, pieces or alerts differ from what follows from them. It reads
+ * Adds every movement up again and says where balances, levels, pieces, alerts or assemblies differ from what follows from them. It reads
  * one snapshot, so it may run beside a working shop, and it shares nothing with the triggers it checks.
  */
 export async function ledgerFaults(db: Knex): Promise<LedgerCheck> {
@@ -153,6 +153,28 @@ const alertsAreWhatIsLow = `
   where coalesce(kept.position <= kept.reorder_point, false) <> (open_alerts.item_id is not null)
   order by items.code, cribs.code`
 
+/** A part that is no longer with its built assembly is told of, or is about to be looked at. */
+const goneAssemblyPartsAreTold = `
+  with summed as (${summed}), part as (
+    select placed.*, count(*) over (partition by item_id, location_id, condition) as claimed
+    from assembly_parts as placed where location_id is not null)
+  select format('assembly %s: its %s is gone from %s, and nothing says so', assemblies.number, items.code,
+    locations.code) as fault
+  from part
+  join assemblies on assemblies.id = part.assembly_id
+  join items on items.id = part.item_id join locations on locations.id = part.location_id
+  left join summed on (summed.item_id, summed.location_id, summed.condition)
+    = (part.item_id, part.location_id, part.condition)
+  left join lateral (
+    select to_location_id from movements where piece_id = part.piece_id order by id desc limit 1
+  ) as last on true
+  where case when part.piece_id is null then coalesce(summed.quantity, 0) < part.claimed
+      else last.to_location_id is distinct from part.location_id end
+    and not exists (select from assembly_findings as finding
+      where finding.assembly_id = part.assembly_id and finding.code = 'part_gone' and finding.resolved_at is null)
+    and not exists (select from assembly_rechecks as due where due.assembly_id = part.assembly_id)
+  order by assemblies.number, items.code`
+
 const questions = [
   balancesAreSums,
   itemsSumToZero,
@@ -165,4 +187,5 @@ const questions = [
   mergesArePaired,
   reversalsMirror,
   alertsAreWhatIsLow,
+  goneAssemblyPartsAreTold,
 ]

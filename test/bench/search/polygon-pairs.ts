@@ -1,6 +1,7 @@
 import polygonClipping, { type Polygon, type Ring } from 'polygon-clipping'
 import type { SearchTables } from '@/core/search/search-tables'
 import type { BareCrib } from './bare-loop'
+import { processorSeconds } from './figures'
 import type { Survivor } from './surviving-pairs'
 
 /** A wall and a holder's outline this far out stand for those without end. */
@@ -41,10 +42,11 @@ export function libraryTime(
     const noseMm = survivor.overallMm - clamps.leastInMm[clamp]!
     holders.push([outlineRing(crib, clamps.outline[clamp]!, noseMm, survivor.standOffMm)])
   }
-  const startedAt = performance.now()
   let meeting = 0
-  for (const holder of holders) if (polygonClipping.intersection(holder, wall).length > 0) meeting++
-  return { pairs, meeting, seconds: (performance.now() - startedAt) / 1000 }
+  const seconds = processorSeconds(() => {
+    for (const holder of holders) if (polygonClipping.intersection(holder, wall).length > 0) meeting++
+  })
+  return { pairs, meeting, seconds }
 }
 
 /** The side towards the wall, closed along the axis. */

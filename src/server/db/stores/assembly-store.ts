@@ -93,16 +93,24 @@ export async function createAssembly(
       geometry: JSON.stringify(part.geometry),
     })),
   )
+  await createAssemblyCheck(trx, row.id, check)
+  return row.id
+}
+
+export async function createAssemblyCheck(
+  trx: Knex,
+  assemblyId: string,
+  check: NewAssemblyCheck,
+): Promise<void> {
   const answer = JSON.stringify(check.answer)
   await trx('assembly_checks').insert({
-    assembly_id: row.id,
+    assembly_id: assemblyId,
     feature: JSON.stringify(check.feature),
     clearances: check.clearances === null ? null : JSON.stringify(check.clearances),
     kept_answer: answer,
     answer,
     created_by: check.createdBy,
   })
-  return row.id
 }
 
 /** Held until the transaction ends, against every other change of it. */

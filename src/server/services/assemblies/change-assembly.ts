@@ -1,22 +1,26 @@
-import { assemblyGaugeLengthMm } from '@/core/assemblies/assembly-figures'
+import { assemblyGaugeLengthMm, reachRequestOf } from '@/core/assemblies/assembly-figures'
 import type { Recheck } from '@/core/assemblies/assembly-findings'
 import { can } from '@/core/policies/permissions'
+import { reachAnswer } from '@/core/reach/reach-answer'
 import { AppError } from '@/lib/app-error'
 import { findingSentence } from '@/lib/assembly-sentences'
-import type { AssemblyResponse, UpdateAssemblyRequest } from '@/schemas/assembly'
+import type { AddAssemblyCheckRequest, AssemblyResponse, UpdateAssemblyRequest } from '@/schemas/assembly'
 import type { Actor } from '../../auth/actor'
 import { type Database, db } from '../../db/connection'
 import { readAssemblyParts } from '../../db/read-models/assembly-details'
 import {
   type AssemblyRecord,
+  createAssemblyCheck,
   takeOverSizes as keepSizes,
   lockSizes,
   archiveAssembly as markArchived,
   updateAssembly as writeAssembly,
 } from '../../db/stores/assembly-store'
 import { createAuditEntry } from '../../db/stores/audit-store'
+import { readShopSettings } from '../../db/stores/shop-settings-store'
 import { inTransaction } from '../../db/transaction'
 import { readPartSizes, toolsOf } from './assembly-tools'
+import { checkOf, refuseShort } from './kept-check'
 import { getLockedAssembly } from './locked-assembly'
 import { readAssembly } from './read-assembly'
 import { recheckAssembly } from './recheck-assembly'
@@ -33,6 +37,23 @@ export async function updateAssembly(
     const tools = toolsOf(await readAssemblyParts(trx, id))
     await writeAssembly(trx, id, { ...request, gaugeLengthMm: assemblyGaugeLengthMm(tools, stickOutMm) })
     refuseFailing(await recheckAssembly(trx, { ...assembly, stickOutMm }), 'stickOutMm')
+  })
+}
+
+/** Another feature it is good for as it is set: kept, it is looked at with the others from now on. */
+export async function addAssemblyCheck(
+  actor: Actor,
+  id: string,
+  { version, ...request }: AddAssemblyCheckRequest,
+): Promise<AssemblyResponse> {
+  return changing(actor, id, version, 'assembly-check-added', async (trx, assembly) => {
+    const tools = toolsOf(await readAssemblyParts(trx, id))
+    const { reach } = await readShopSettings(trx)
+    const check = checkOf(request)
+    const answer = reachAnswer(reachRequestOf(tools, check, assembly.stickOutMm, reach))
+    refuseShort(answer, check, 'feature')
+    await createAssemblyCheck(trx, id, { ...check, answer, createdBy: actor.id })
+    await recheckAssembly(trx, assembly)
   })
 }
 
@@ -113,10 +134,11 @@ export function refuseFailing(recheck: Recheck, path: string): void {
 }
 
 function audited(assembly: AssemblyResponse): Record<string, unknown> {
-  const { number, name, note, state, stickOutMm, gaugeLengthMm, archivedAt, tools } = assembly
+  const { number, name, note, state, stickOutMm, gaugeLengthMm, archivedAt, tools, checks } = assembly
   const { toolNumber, lengthOffsetNumber, diameterOffsetNumber } = assembly
   return {
     ...{ number, name, note, state, stickOutMm, gaugeLengthMm, archivedAt },
     ...{ toolNumber, lengthOffsetNumber, diameterOffsetNumber, tools },
+    features: checks.map(({ feature }) => feature),
   }
 }

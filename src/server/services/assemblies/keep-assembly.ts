@@ -2,9 +2,7 @@ import { assemblyGaugeLengthMm, reachRequestOf } from '@/core/assemblies/assembl
 import type { AssemblyTools } from '@/core/assemblies/types'
 import { colletFitsBore, colletHolds, fixedBoreHolds } from '@/core/holding/holds'
 import { reachAnswer } from '@/core/reach/reach-answer'
-import type { ReachAnswer } from '@/core/reach/types'
 import { AppError } from '@/lib/app-error'
-import { verdictSentence } from '@/lib/reach-sentences'
 import type { AssemblyResponse, CreateAssemblyRequest } from '@/schemas/assembly'
 import type { FieldProblem } from '@/schemas/problem'
 import type { Actor } from '../../auth/actor'
@@ -16,6 +14,7 @@ import { findItemOfPiece } from '../../db/stores/movement-store'
 import { readShopSettings } from '../../db/stores/shop-settings-store'
 import { inTransaction } from '../../db/transaction'
 import { type NamedPart, readPartSizes, toolsOf } from './assembly-tools'
+import { checkOf, refuseShort } from './kept-check'
 import { readAssembly } from './read-assembly'
 
 /** Keeps an option as a numbered assembly, with the check it was found by. Only what reaches is kept. */
@@ -32,10 +31,9 @@ export async function keepAssembly(actor: Actor, request: CreateAssemblyRequest)
     const tools = toolsOf(sizes)
     refuseUnheldExtension(tools)
     const { reach } = await readShopSettings(trx)
-    const clearances = request.clearances ?? null
-    const check = { feature: request.feature, clearances: withoutNulls(clearances) }
+    const check = checkOf(request)
     const answer = reachAnswer(reachRequestOf(tools, check, request.stickOutMm ?? null, reach))
-    refuseShort(answer, request)
+    refuseShort(answer, check, 'stickOutMm')
     const stickOutMm = answer.stickOut.usedMm
     const id = await createAssembly(
       trx,
@@ -115,23 +113,6 @@ function refuseUnheldExtension({ extension, extensionCollet, holder }: AssemblyT
     throw impossible([{ path, message: 'The holder takes a collet for the extension: say which.' }])
 }
 
-function refuseShort(answer: ReachAnswer, request: CreateAssemblyRequest): void {
-  if (answer.messages.some(({ code }) => code === 'collet-not-given'))
-    throw impossible([{ path: 'collet', message: 'This chuck takes a collet: say which.' }])
-  if (answer.verdict === 'reaches') return
-  const message = verdictSentence(answer, request.feature, 'mm')
-  throw impossible([{ path: 'stickOutMm', message: `Only what reaches is kept. ${message}` }])
-}
-
 function impossible(errors: FieldProblem[]): AppError {
   return new AppError('impossible', errors[0]?.message ?? 'This cannot be kept.', { errors })
-}
-
-/** A clearance left out is the shop's own. */
-function withoutNulls(clearances: CreateAssemblyRequest['clearances']) {
-  if (clearances?.shankMm == null && clearances?.holderMm == null) return null
-  return {
-    ...(clearances.shankMm == null ? {} : { shankMm: clearances.shankMm }),
-    ...(clearances.holderMm == null ? {} : { holderMm: clearances.holderMm }),
-  }
 }

@@ -9,7 +9,7 @@ import { listStartingSpeeds } from '../../db/stores/starting-speed-store'
 /** The shop's starting speeds in one material, by what the tool is made of. */
 export type MaterialSpeeds = ReadonlyMap<Substrate, { lowMPerMin: number; highMPerMin: number }>
 
-/** Null where no material was named. The catalogue knows of a cutter's own material alone, so that decides. */
+/** Null where no material was named. Which cutters suit it the catalogue does not know: it says where to start alone. */
 export async function materialSpeeds({ where }: ReachSearchRequest): Promise<MaterialSpeeds | null> {
   if (where?.material == null) return null
   const named = where.material.toLowerCase()
@@ -19,18 +19,16 @@ export async function materialSpeeds({ where }: ReachSearchRequest): Promise<Mat
   throw new AppError('impossible', message, { errors: [{ path: 'where.material', message }] })
 }
 
-/** What a cutter is made of; one whose material was never entered counts as carbide, as in its stiffness. */
-export function substrateOf({ substrate }: Pick<CutterGeometry, 'substrate'>): Substrate {
-  return substrate ?? 'carbide'
-}
-
-/** Where to start with a cutter, held to the least of cutter, holder and spindle. */
+/**
+ * Where to start with a cutter, held to the least of cutter, holder and spindle. One whose own material was never entered
+ * counts as carbide, as in its stiffness.
+ */
 export function startingSpeed(
   cutter: CutterGeometry & { maximumRpm?: number | null },
   speeds: MaterialSpeeds | null,
   otherLimitsRpm: Pick<SpeedLimits, 'holder' | 'spindle'>,
 ): NonNullable<SearchOptionResponse['speed']> | null {
-  const range = speeds?.get(substrateOf(cutter))
+  const range = speeds?.get(cutter.substrate ?? 'carbide')
   if (!range) return null
   const { lowMPerMin, highMPerMin } = range
   const limit = leastSpeedLimit({ ...otherLimitsRpm, cutter: cutter.maximumRpm ?? null })

@@ -11,7 +11,7 @@ import {
 } from '../../db/read-models/tooling-stock'
 import type { CribTables } from './crib-tables'
 import { type MachineLimits, machineLimits } from './machine-limits'
-import { type MaterialSpeeds, materialSpeeds, substrateOf } from './material-speeds'
+import { type MaterialSpeeds, materialSpeeds } from './material-speeds'
 
 /** Ranks after every assembly whose parts all have a cost, however dear. */
 export const unknownCostPenalty = 1e13
@@ -48,8 +48,7 @@ export async function searchFilters(crib: CribTables, body: ReachSearchRequest):
   const suits = {
     cutters: columnOf(
       tooling.cutters,
-      (index) =>
-        isKept('cutters', index) && isCutterSuited(crib, piecePlaces, body, { limits, speeds }, index),
+      (index) => isKept('cutters', index) && isCutterSuited(crib, piecePlaces, body, limits, index),
     ),
     holders: columnOf(
       tooling.holders,
@@ -119,10 +118,9 @@ function isCutterSuited(
   { tables: { tooling }, cutterSources }: CribTables,
   piecePlaces: Map<string, PiecePlace>,
   { where }: ReachSearchRequest,
-  { limits, speeds }: Pick<SearchFilters, 'limits' | 'speeds'>,
+  { widestToolMm }: MachineLimits,
   index: number,
 ): boolean {
-  const { widestToolMm } = limits
   const geometry = tooling.cutters[index]?.geometry
   const piece = cutterSources[index]?.piece
   if (!geometry || (piece && piecePlaces.get(piece.id)?.isGone !== false)) return false
@@ -133,7 +131,6 @@ function isCutterSuited(
     (!substrates ||
       substrates.length === 0 ||
       (geometry.substrate != null && substrates.includes(geometry.substrate))) &&
-    (speeds === null || speeds.has(substrateOf(geometry))) &&
     (widestToolMm === null || geometry.cuttingDiameterMm <= widestToolMm)
   )
 }
