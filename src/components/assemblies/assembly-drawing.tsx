@@ -46,7 +46,7 @@ export function AssemblyDrawing(props: AssemblyDrawingProps) {
       holderMm: clearances?.holderMm ?? reachSettings.holderClearanceMm,
     },
   })
-  if (!isMounted || !scene) return <div ref={ref} className="h-[24rem] print:h-[132mm]" />
+  if (!isMounted || !scene) return <div ref={ref} className="h-[24rem] print:h-[112mm]" />
   const height = Math.round(Math.min(560, Math.max(420, width * 0.8)))
   const layout = sectionLayout(scene, 'whole', { width, height }, null, name)
   return (
@@ -55,7 +55,7 @@ export function AssemblyDrawing(props: AssemblyDrawingProps) {
         role="img"
         aria-label={sectionSentence(scene, null, unit)}
         viewBox={`0 0 ${width} ${height}`}
-        className="block h-auto w-full print:mx-auto print:max-h-[132mm]"
+        className="block h-auto w-full print:mx-auto print:max-h-[112mm]"
       >
         <SectionPatterns layout={layout} />
         <g clipPath={`url(#${name}-section-sheet)`}>
