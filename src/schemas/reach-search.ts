@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { cutterForms, substrates } from '@/core/tooling'
 import { lengthUnits } from '@/core/units/length-unit'
 import { colletResponseSchema } from './collet'
+import { cutEstimateSchema, searchCutSchema } from './cut-estimate'
 import { cutterResponseSchema } from './cutter'
 import { extensionResponseSchema } from './extension'
 import { idSchema } from './fields'
@@ -66,6 +67,8 @@ const requestFields = {
     .nullish(),
   clearances: clearancesSchema.nullish(),
   sideLoadN: optionalSizeSchema,
+  /** A cut to be estimated for every assembly listed. */
+  cut: searchCutSchema.nullish(),
   where: whereSchema.nullish(),
   rankBy: z.enum(searchRankings, 'Rank by stiffness, stock, cost or built.').default('stiffness'),
   /** 20 where one feature is asked about, 3 of each where many are. */
@@ -146,6 +149,8 @@ const assemblyFields = {
       limited: z.enum(['no', 'high', 'all']),
     })
     .nullable(),
+  /** What the cut asked for would do with it; null where none was. An estimate, never a setting to run by. */
+  estimate: cutEstimateSchema.nullable(),
   /** Absent for those who see no costs; the amount is null where the cost of a part is not known. */
   cost: z.object({ amount: z.number().nullable(), currency: z.string() }).optional(),
 }

@@ -1,3 +1,4 @@
+import type { CuttingSettings } from '@/core/cutting/cut-answer'
 import { type StickOutBands, stickOutBand } from '@/core/cutting/stick-out-caution'
 import { can } from '@/core/policies/permissions'
 import { reachAnswer } from '@/core/reach/reach-answer'
@@ -18,6 +19,7 @@ import type { MachineLimits } from './machine-limits'
 import { type MaterialSpeeds, startingSpeed } from './material-speeds'
 import { asMounted } from './mounted-request'
 import type { PartRows } from './named-parts'
+import { cutCautions, estimatedCut, type SearchedCut } from './searched-cut'
 
 type Feature = NonNullable<ReachSearchRequest['feature']>
 
@@ -30,7 +32,8 @@ export interface ListingContext {
   body: ReachSearchRequest
   limits: MachineLimits
   speeds: MaterialSpeeds | null
-  cutting: StickOutBands
+  cutting: CuttingSettings
+  cut: SearchedCut | null
   currency: string
 }
 
@@ -73,6 +76,7 @@ export function listedAssembly(
   const parts = partsOf({ cutter, holder, collet, extension, extensionCollet })
   const isExtensionUnchecked =
     option.extensionIndex !== null && tooling.extensions[option.extensionIndex]?.shankDiameterMm == null
+  const estimate = estimateOf(answer, cutter, holder, context)
   return {
     key: keyOf(option, crib),
     cutter,
@@ -82,6 +86,7 @@ export function listedAssembly(
     extensionCollet: extensionCollet ?? null,
     reach: saidAnswer(answer, body.sentenceUnit),
     cautions: [
+      ...(estimate && context.cut ? cutCautions({ cutter }, estimate, context.cut, body.sentenceUnit) : []),
       ...cautionsOf(answer, body.sentenceUnit),
       ...bandCautions(answer, context.cutting),
       ...(isExtensionUnchecked ? [extensionCaution(extension?.code ?? '')] : []),
@@ -93,8 +98,21 @@ export function listedAssembly(
       holder: holder.maximumRpm,
       spindle: context.limits.maximumRpm,
     }),
+    estimate,
     ...(can(context.actor.role, 'seeCosts') ? { cost: costOf(parts, context.currency) } : {}),
   }
+}
+
+function estimateOf(
+  { stiffness }: ReachAnswer,
+  cutter: SearchOptionResponse['cutter'],
+  holder: SearchOptionResponse['holder'],
+  { cut, limits, cutting }: ListingContext,
+): SearchOptionResponse['estimate'] {
+  if (!cut) return null
+  const { complianceUmPerN, stickOutToDiameter } = stiffness
+  const assembly = { cutter, holderMaximumRpm: holder.maximumRpm, complianceUmPerN, stickOutToDiameter }
+  return estimatedCut(assembly, cut, limits, cutting)
 }
 
 function cutterOf(

@@ -1,7 +1,9 @@
 import { CoreInputError } from '@/core/core-input-error'
+import type { SpindleOfMachine } from '@/core/cutting/cut-answer'
 import { type MachineWindow, machineWindow } from '@/core/machine/machine-window'
 import { setUpWindow } from '@/core/machine/set-up-window'
 import { AppError } from '@/lib/app-error'
+import { spindleOf } from '@/lib/cut-draft'
 import { sentenceLength } from '@/lib/reach-sentences'
 import type { MachineResponse } from '@/schemas/machine'
 import type { ReachSearchRequest } from '@/schemas/reach-search'
@@ -14,6 +16,7 @@ export interface MachineLimits {
   spindleNoseDiameterMm: number | null
   widestToolMm: number | null
   maximumRpm: number | null
+  spindle: SpindleOfMachine | null
   gaugeLengthMm: { shortestMm: number; longestMm: number } | null
 }
 
@@ -35,6 +38,7 @@ export async function machineLimits(body: ReachSearchRequest): Promise<MachineLi
     spindleNoseDiameterMm: machine?.spindleNoseDiameterMm ?? null,
     widestToolMm: machine?.widestToolMm ?? null,
     maximumRpm: machine?.maximumRpm ?? null,
+    spindle: machine && spindleOf(machine),
     gaugeLengthMm: gaugeLengths(machine, window),
   }
 }

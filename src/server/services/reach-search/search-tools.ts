@@ -15,6 +15,7 @@ import { listedAnswer } from './listed-answer'
 import { readPartRows } from './named-parts'
 import { searchFilters } from './search-filters'
 import { searchQuestion } from './search-question'
+import { searchedCut } from './searched-cut'
 
 export interface SearchResult {
   results: SearchAnswerResponse[]
@@ -47,9 +48,10 @@ export async function searchTools(
   }))
   const { currency, cutting } = await readShopSettings(db())
   const named = answered.flatMap(({ ready, answer }) => [...ready, ...namedAssemblies(answer)])
+  const cut = await searchedCut(body.cut)
   const rows = await readPartRows(actor, crib, named, body.where?.cribId ?? null)
   const { piecePlaces, limits, speeds } = filters
-  const context = { actor, crib, rows, piecePlaces, limits, speeds, body, currency, cutting }
+  const context = { actor, crib, rows, piecePlaces, limits, speeds, body, currency, cutting, cut }
   const results = await inTurns(answered, signal, ({ ready, answer, feature }) =>
     listedAnswer(ready, answer, feature, context),
   )
