@@ -15,6 +15,7 @@ test('the list is edited, undone, selected from and changed by the keyboard alon
 
   await page.getByRole('button', { name: 'More', exact: true }).focus()
   await page.keyboard.press('Enter')
+  await expect(page.getByRole('menu')).toBeVisible()
   await page.keyboard.type('Edit')
   await page.keyboard.press('Enter')
   await expect(page.getByRole('button', { name: 'Done editing' })).toBeVisible()
