@@ -1,25 +1,10 @@
 'use client'
 
 import { Ellipsis } from 'lucide-react'
-import { type ComponentType, type RefObject, useRef, useState } from 'react'
+import { type ComponentType, useRef, useState } from 'react'
 import { buttonClass } from '@/components/ui/button'
+import type { ListMenuProps } from './list-act'
 import type { LoadedListMenuProps } from './loaded-list-menu'
-
-/** What opens over a list. */
-export type ListAct = 'columns' | 'views' | 'paste' | 'changeSelected' | 'changeFound'
-
-export interface ListMenuProps {
-  many: string
-  isNarrowed: boolean
-  exportHref: string
-  onAct: (act: ListAct) => void
-  onPrint: () => void
-  /** Where there is a grid: it has columns to choose and cells to edit. */
-  onEdit?: (() => void) | undefined
-  /** On a phone the mark alone. */
-  isMarkAlone?: boolean
-  triggerRef: RefObject<HTMLButtonElement | null>
-}
 
 interface Loaded {
   Menu: ComponentType<LoadedListMenuProps>

@@ -14,7 +14,7 @@ import {
 import Link from 'next/link'
 import { useCan } from '@/components/layout/shop-context'
 import { Menu, MenuItem, MenuLink, MenuRule } from '@/components/ui/menu'
-import type { ListMenuProps } from './list-menu'
+import type { ListMenuProps } from './list-act'
 
 export interface LoadedListMenuProps extends ListMenuProps {
   /** It was pressed while it was on its way. */

@@ -1,0 +1,17 @@
+import type { RefObject } from 'react'
+
+/** What opens over a list. */
+export type ListAct = 'columns' | 'views' | 'paste' | 'changeSelected' | 'changeFound'
+
+export interface ListMenuProps {
+  many: string
+  isNarrowed: boolean
+  exportHref: string
+  onAct: (act: ListAct) => void
+  onPrint: () => void
+  /** Where there is a grid: it has columns to choose and cells to edit. */
+  onEdit?: (() => void) | undefined
+  /** On a phone the mark alone. */
+  isMarkAlone?: boolean
+  triggerRef: RefObject<HTMLButtonElement | null>
+}
