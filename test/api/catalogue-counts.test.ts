@@ -113,7 +113,9 @@ describe('counts beside the choices', () => {
       ['holders', 'series'],
       ['collets', 'series'],
     ]) {
-      const { counts } = (await crib.get(`/api/${kind}/counts?of=${facet}`)).body as unknown as { counts: Counts }
+      const { counts } = (await crib.get(`/api/${kind}/counts?of=${facet}`)).body as unknown as {
+        counts: Counts
+      }
       const [most] = counts[facet ?? ''] ?? []
       expect(most?.count).toBeGreaterThan(0)
       const list = await crib.get(`/api/${kind}?${facet}=${encodeURIComponent(most?.value ?? '')}`)
