@@ -34,6 +34,8 @@ test('a pocket leads to its cutters and on to the reach check', async ({ page })
   await page.goBack()
   await page.getByRole('link', { name: `Check the reach of ${code}` }).click()
   await expect(page).toHaveURL(/\/reach\?.*cutter=\d+/)
+  await expect(page.getByRole('textbox', { name: 'Depth', exact: true })).toHaveValue('40')
+  await expect(page.getByRole('textbox', { name: 'Inside corner radius' })).toHaveValue('46.605')
   await expect(page.getByText(code).first()).toBeVisible()
 })
 

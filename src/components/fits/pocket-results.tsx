@@ -13,6 +13,7 @@ import { useCan, useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { StateSentence } from '../ui/state-sentence'
+import { reachLink } from './reach-link'
 
 const shownAtMost = 200
 
@@ -99,14 +100,6 @@ function listQuery(asked: URLSearchParams): string {
   return query.toString()
 }
 
-function reachQuery(cutterId: string, asked: URLSearchParams): string {
-  const query = new URLSearchParams({ cutter: cutterId })
-  for (const [name, value] of asked) {
-    if (name !== 'inStock') query.set(name, value)
-  }
-  return query.toString()
-}
-
 function CutterTable({ rows, asked }: { rows: FittingCutter[]; asked: URLSearchParams }) {
   const { unit } = useShop()
   const figure = (mm: number) => formatLength(mm, unit, { withUnit: false })
@@ -174,7 +167,7 @@ function CutterTable({ rows, asked }: { rows: FittingCutter[]; asked: URLSearchP
               </td>
               <td className={`${cell} text-right`}>
                 <Link
-                  href={`/reach?${reachQuery(row.id, asked)}`}
+                  href={reachLink(row.id, asked)}
                   prefetch={false}
                   aria-label={`Check the reach of ${row.code}`}
                   className="text-accent inline-flex items-center font-semibold whitespace-nowrap hover:underline pointer-coarse:min-h-11"
