@@ -14,6 +14,7 @@ import type { useItemStock } from '@/hooks/use-item'
 import { useMoveStock } from '@/hooks/use-move-stock'
 import { usePlaces } from '@/hooks/use-places'
 import { ApiError } from '@/lib/api-client'
+import { lowSentence } from '@/lib/low-sentence'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
 import type { LocationResponse } from '@/schemas/location'
 import type { BalanceResponse } from '@/schemas/stock'
@@ -95,7 +96,7 @@ function MoveForm({ kind, item, balances, sources, onClose }: MoveFormProps) {
     setErrors({})
     setIsBusy(true)
     try {
-      await moveStock(
+      const low = await moveStock(
         {
           kind,
           itemId: item.id,
@@ -109,6 +110,7 @@ function MoveForm({ kind, item, balances, sources, onClose }: MoveFormProps) {
         key,
       )
       toast.success(`${count.count} × ${item.code} ${kind === 'issue' ? 'issued' : 'returned'}.`)
+      for (const alert of low) toast.warning(lowSentence(alert))
       onClose()
     } catch (error) {
       setErrors(refusals(error))
