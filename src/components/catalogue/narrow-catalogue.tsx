@@ -18,6 +18,7 @@ import { SortSelect } from './sort-select'
 export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, shownIds, view, onViewChange } = props
   const [act, setAct] = useState<ListAct | null>(null)
+  const [total, setTotal] = useState<number | null>(null)
   const list = useRef<CatalogueListHandle<Row>>(null)
   const printer = useRef<ListPrinterHandle>(null)
   const menuButton = useRef<HTMLButtonElement>(null)
@@ -45,6 +46,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           />
           <FilterDrawer
             count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
+            found={total}
             onClear={() => onViewChange({ filters: {}, sort: '' })}
           >
             <SortSelect columns={columns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
@@ -59,7 +61,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           </FilterDrawer>
         </div>
       </div>
-      <CatalogueList {...props} handleRef={list} />
+      <CatalogueList {...props} handleRef={list} onTotal={setTotal} />
       <ListOverlays
         {...{ definition, columns, shownIds, view, onViewChange, act }}
         onAct={setAct}

@@ -166,6 +166,7 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           <SearchBox value={view.q} label="Search reorder points" onSearch={(q) => onViewChange({ q })} />
           <FilterDrawer
             count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
+            found={list.error || list.isLoading ? null : (list.total ?? null)}
             onClear={() => onViewChange({ filters: {}, sort: '' })}
           >
             <SortSelect columns={sortColumns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
