@@ -136,7 +136,10 @@ function WidePage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           cribId={view.filters.cribId}
           suppliers={suppliers}
           onClose={close}
-          onSaved={reload}
+          onSaved={(itemCode) => {
+            reload()
+            if (itemCode) onViewChange(viewOf(itemCode))
+          }}
         />
       ) : null}
     </>
@@ -200,7 +203,10 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           cribId={view.filters.cribId}
           suppliers={suppliers}
           onClose={() => setEdited(null)}
-          onSaved={reload}
+          onSaved={(itemCode) => {
+            reload()
+            if (itemCode) onViewChange(viewOf(itemCode))
+          }}
           onRemove={(row) => {
             setEdited(null)
             setRemoved(row)
@@ -212,6 +218,11 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
       ) : null}
     </>
   )
+}
+
+/** The list as it surely shows the row of an item that was added. */
+function viewOf(itemCode: string): Partial<CatalogueView> {
+  return { q: itemCode, filters: {}, sort: '' }
 }
 
 const sortColumns = [
