@@ -2,7 +2,7 @@ import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { chooseMore, expect, signIn, test } from '../support/browser'
+import { expect, signIn, test } from '../support/browser'
 
 const rows = (page: Page) => page.locator('.ag-grid-scrolling-container .ag-row')
 const cells = (page: Page, column: string) => rows(page).locator(`[col-id="${column}"]`)
@@ -21,7 +21,7 @@ async function makeCutters(page: Page, maker: string, diameters: number[]) {
 async function openList(page: Page, maker: string) {
   await page.goto(`/cutters?maker=${maker}&sort=cuttingDiameterMm&columns=code,cuttingDiameterMm,maker`)
   await expect(rows(page).first()).toBeVisible()
-  await chooseMore(page, 'Edit in list')
+  await page.getByRole('button', { name: 'Edit in the list' }).click()
 }
 
 async function type(page: Page, column: string, row: number, text: string) {

@@ -82,7 +82,7 @@ export const listStates: ListState[] = [
 
 async function editing(page: Page): Promise<void> {
   await listRow(page)
-  await chooseMore(page, 'Edit in list')
+  await page.getByRole('button', { name: 'Edit in the list' }).click()
   await expect(page.getByRole('button', { name: 'Done editing' })).toBeVisible()
 }
 

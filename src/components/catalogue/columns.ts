@@ -135,7 +135,7 @@ export function itemColumns<Row extends ItemRow>(canSeeCosts: boolean): Catalogu
 
 function unitCostColumn<Row extends ItemRow>(): CatalogueColumn<Row> {
   return {
-    ...{ id: 'unitCost', heading: 'Unit cost', name: 'Unit cost', kind: 'money', width: 110 },
+    ...{ id: 'unitCost', heading: 'Unit cost', name: 'Unit cost (price)', kind: 'money', width: 110 },
     ...{ isUsual: false, isSortable: true },
     text: (row, { currency }) => (row.unitCost == null ? '' : formatMoney(row.unitCost, currency)),
   }

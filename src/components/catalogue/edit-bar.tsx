@@ -22,7 +22,7 @@ export interface EditBarProps<Row extends CatalogueRow> {
 }
 
 /** Over a list that is being edited: how, what can be taken back, what was not taken, and the rows selected. */
-export function EditBar<Row extends CatalogueRow>(props: EditBarProps<Row>) {
+export default function EditBar<Row extends CatalogueRow>(props: EditBarProps<Row>) {
   const { definition, editing, grid, total } = props
   const { selected, refusals, undoName, redoName } = editing
   const [isHeld, setIsHeld] = useState(false)

@@ -9,8 +9,8 @@ export interface ListMenuProps {
   exportHref: string
   onAct: (act: ListAct) => void
   onPrint: () => void
-  /** Where there is a grid: it has columns to choose and cells to edit. */
-  onEdit?: (() => void) | undefined
+  /** Where there is a grid: it has columns to choose. */
+  hasColumns?: boolean
   /** On a phone the mark alone. */
   isMarkAlone?: boolean
   triggerRef: RefObject<HTMLButtonElement | null>

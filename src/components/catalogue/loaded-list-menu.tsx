@@ -4,10 +4,10 @@ import {
   Bookmark,
   ClipboardPaste,
   Columns3,
+  Copy,
   Download,
   Ellipsis,
   ListChecks,
-  Pencil,
   Printer,
   Upload,
 } from 'lucide-react'
@@ -24,7 +24,7 @@ export interface LoadedListMenuProps extends ListMenuProps {
 }
 
 export function LoadedListMenu(props: LoadedListMenuProps) {
-  const { many, isNarrowed, exportHref, onAct, onPrint, onEdit, isMarkAlone, triggerRef } = props
+  const { many, isNarrowed, exportHref, onAct, onPrint, hasColumns, isMarkAlone, triggerRef } = props
   const mayKeep = useCan('keepCrib')
   return (
     <Menu
@@ -39,7 +39,7 @@ export function LoadedListMenu(props: LoadedListMenuProps) {
       <MenuItem Mark={Bookmark} onChoose={() => onAct('views')}>
         Views
       </MenuItem>
-      {onEdit ? (
+      {hasColumns ? (
         <MenuItem Mark={Columns3} onChoose={() => onAct('columns')}>
           Columns
         </MenuItem>
@@ -61,11 +61,6 @@ export function LoadedListMenu(props: LoadedListMenuProps) {
       {mayKeep ? (
         <>
           <MenuRule />
-          {onEdit ? (
-            <MenuItem Mark={Pencil} onChoose={onEdit}>
-              Edit in list
-            </MenuItem>
-          ) : null}
           <MenuItem Mark={ListChecks} onChoose={() => onAct('changeFound')}>
             Change all {isNarrowed ? 'found' : many}
           </MenuItem>
@@ -82,6 +77,16 @@ export function LoadedListMenu(props: LoadedListMenuProps) {
             )}
           >
             Import a file
+          </MenuLink>
+          <MenuLink
+            Mark={Copy}
+            link={(content) => (
+              <Link href={`/duplicates?kind=${one.replace(/s$/, '')}`} prefetch={false}>
+                {content}
+              </Link>
+            )}
+          >
+            Duplicates
           </MenuLink>
         </>
       ) : null}
