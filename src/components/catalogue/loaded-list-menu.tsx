@@ -4,7 +4,6 @@ import {
   Bookmark,
   ClipboardPaste,
   Columns3,
-  Copy,
   Download,
   Ellipsis,
   ListChecks,
@@ -77,16 +76,6 @@ export function LoadedListMenu(props: LoadedListMenuProps) {
             )}
           >
             Import a file
-          </MenuLink>
-          <MenuLink
-            Mark={Copy}
-            link={(content) => (
-              <Link href={`/duplicates?kind=${one.replace(/s$/, '')}`} prefetch={false}>
-                {content}
-              </Link>
-            )}
-          >
-            Duplicates
           </MenuLink>
         </>
       ) : null}

@@ -1,11 +1,12 @@
 'use client'
 
 import { useRef, useState } from 'react'
+import { useViewName } from '@/hooks/use-view-name'
 import { AddButton } from './add-button'
 import { CatalogueList, type CatalogueListHandle } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
 import type { CatalogueShapeProps } from './catalogue-shape'
-import { exportPath, isNarrowed, narrowingText } from './catalogue-view'
+import { exportPath, isNarrowed, narrowingText, viewParams } from './catalogue-view'
 import { FilterDrawer } from './filter-drawer'
 import { FilterFields } from './filter-fields'
 import type { ListAct } from './list-act'
@@ -21,6 +22,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
   const [total, setTotal] = useState<number | null>(null)
   const list = useRef<CatalogueListHandle<Row>>(null)
   const printer = useRef<ListPrinterHandle>(null)
+  const viewName = useViewName(definition.kind, viewParams(view).toString())
   const menuButton = useRef<HTMLButtonElement>(null)
   return (
     <>
@@ -38,6 +40,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
             triggerRef={menuButton}
           />
         </div>
+        {viewName ? <p className="truncate font-semibold">{viewName}</p> : null}
         <div className="flex items-center gap-2">
           <SearchBox
             value={view.q}

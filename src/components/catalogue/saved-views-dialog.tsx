@@ -89,7 +89,8 @@ function SavedViewList<Row extends CatalogueRow>({
         onSave={(name, isShared) =>
           void attempt(async () => {
             await saved.create({ name, isShared, query: viewParams(view).toString() })
-            toast.success(`“${name.trim()}” is saved.`)
+            toast.success(`“${name.trim()}” is saved. Open it by “More”, “Views”.`)
+            onClose()
           })
         }
       />
