@@ -183,6 +183,11 @@ export function hasLengths(kind: ImportKind): boolean {
   return importFields[kind].some(({ type }) => hasLengthUnit(type))
 }
 
+/** Whether a file of this kind may hold decimals: lengths, or what a thing costs. */
+export function hasDecimals(kind: ImportKind): boolean {
+  return importFields[kind].some(({ type }) => hasLengthUnit(type) || type === 'money')
+}
+
 export const importKindLabels: Readonly<Record<ImportKind, string>> = {
   cutters: 'Cutters',
   holders: 'Holders',

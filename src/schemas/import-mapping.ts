@@ -10,6 +10,14 @@ const columnTargetSchema = z.union([
   z.object({ field: fieldNameSchema.nullable(), unit: z.enum(lengthUnits).nullable().optional() }),
 ])
 
+/** What stands before the decimals of a file's numbers. */
+export const decimalSigns = ['point', 'comma'] as const
+export type DecimalSign = (typeof decimalSigns)[number]
+
+/** How a file came to its decimal sign: the person set it, its numbers leave no doubt, the shop writes it so. */
+export const decimalOrigins = ['set', 'guessed', 'shop'] as const
+export type DecimalOrigin = (typeof decimalOrigins)[number]
+
 /** Column to field, as the person sets it. */
 export const importMappingSchema = z.record(
   z.string(),

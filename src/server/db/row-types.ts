@@ -212,6 +212,8 @@ export interface ImportsRow {
   attempt: number
   heading_line: number | null
   warning_count: number
+  decimals: string | null
+  decimals_origin: string | null
 }
 
 export interface ItemMergesRow {

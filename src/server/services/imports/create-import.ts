@@ -44,8 +44,13 @@ export async function createImport(actor: Actor, upload: Request): Promise<{ id:
 }
 
 /** Of a form everything is text: an empty part was left out, and the mapping is JSON. */
-function parseForm({ kind, unit, mapping }: ReceivedUpload['fields']): CreateImportRequest {
-  const values = { kind, unit: unit || undefined, mapping: mapping ? jsonOf(mapping) : undefined }
+function parseForm({ kind, unit, decimals, mapping }: ReceivedUpload['fields']): CreateImportRequest {
+  const values = {
+    kind,
+    unit: unit || undefined,
+    decimals: decimals || undefined,
+    mapping: mapping ? jsonOf(mapping) : undefined,
+  }
   const parsed = createImportRequestSchema.safeParse(values)
   if (parsed.success) return parsed.data
   throw new AppError('wrong-shape', 'Some fields cannot be taken as they are.', {
@@ -70,7 +75,7 @@ async function refuseUnreadable(
   const head = await readHead(path)
   const other = nonTextKind(head)
   if (other) throw unreadable(`This is ${other}, not CSV. Save the table as CSV and upload that.`)
-  const { sources } = await importSettings(request)
+  const { sources } = await importSettings({ ...request, decimals: null, decimalsOrigin: null })
   try {
     checkMapping(request.kind, request.mapping, headingsOfHead(head, sources))
   } catch (error) {

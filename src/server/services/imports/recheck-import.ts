@@ -8,7 +8,7 @@ import { checkImportJob } from '../../jobs/definitions'
 import { sendJob } from '../../jobs/queue'
 import { noSuchImport } from './import-refusals'
 
-/** Has the file read again, by other columns or another unit. */
+/** Has the file read again, by other columns, another unit or another decimal sign. */
 export async function recheckImport(id: string, request: RecheckImportRequest): Promise<{ id: string }> {
   await inTransaction(db(), async (trx) => {
     const found = await lockImport(trx, id)
@@ -25,7 +25,11 @@ export async function recheckImport(id: string, request: RecheckImportRequest): 
       mapping,
       found.columns.map((column) => column.heading),
     )
-    await markReading(trx, id, { unit: request.unit ?? found.unit, mapping })
+    await markReading(trx, id, {
+      unit: request.unit ?? found.unit,
+      decimals: request.decimals,
+      mapping,
+    })
     await sendJob(trx, checkImportJob, { importId: id })
   })
   return { id }
