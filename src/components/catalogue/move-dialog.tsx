@@ -2,7 +2,7 @@
 
 import { type FormEvent, useState } from 'react'
 import { toast } from 'sonner'
-import { useShop } from '@/components/layout/shop-context'
+import { useCan, useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
@@ -32,7 +32,7 @@ export interface MoveDialogProps {
 export function MoveDialog(props: MoveDialogProps) {
   const { kind, item, stock, onClose } = props
   const balances = stock.stock?.balances ?? []
-  const sources = balances.filter((balance) => isSource(kind, balance))
+  const sources = balances.filter((balance) => isSource(kind, balance)).toSorted(byUse)
   return (
     <Dialog
       isOpen
@@ -63,6 +63,13 @@ function isSource(kind: MoveDialogProps['kind'], balance: BalanceResponse): bool
   const isBin = balance.locationKind === 'bin'
   const isInUse = balance.locationKind === 'person' || balance.locationKind === 'machine'
   return balance.quantity > 0 && (kind === 'issue' ? isBin : isInUse)
+}
+
+/** What can be used comes first, the fullest place of all; what is worn comes last. */
+export function byUse(one: BalanceResponse, other: BalanceResponse): number {
+  return (
+    Number(one.condition === 'worn') - Number(other.condition === 'worn') || other.quantity - one.quantity
+  )
 }
 
 interface MoveFormProps extends Pick<MoveDialogProps, 'kind' | 'item' | 'onClose'> {
@@ -203,7 +210,11 @@ function worst(condition: Condition | undefined): Condition {
 function sourceWords(balance: BalanceResponse): string {
   const place =
     balance.cribCode === null ? balance.locationName : `${balance.cribCode} ${balance.locationCode}`
-  return `${place}, ${conditionNames[balance.condition].toLowerCase()}: ${balance.quantity}`
+  const condition =
+    balance.condition === 'worn'
+      ? 'worn, for regrinding or scrap'
+      : conditionNames[balance.condition].toLowerCase()
+  return `${place}, ${condition}: ${balance.quantity}`
 }
 
 const fewBins = 30
@@ -211,13 +222,12 @@ const fewBins = 30
 function useTargets(kind: MoveDialogProps['kind'], balances: readonly BalanceResponse[]) {
   const { actor } = useShop()
   const [search, setSearch] = useState('')
+  const mayKeep = useCan('keepCrib')
   const machines = usePlaces(kind === 'issue' ? 'machine' : null)
+  const people = usePlaces(kind === 'issue' && mayKeep ? 'person' : null)
   const bins = usePlaces(kind === 'return' ? 'bin' : null, search)
   if (kind === 'issue') {
-    const options: SelectOption[] = [
-      { value: actor.locationId, label: `My hands (${actor.name})` },
-      ...machines.places.map((place) => ({ value: place.id, label: place.name })),
-    ]
+    const options = issueTargets(actor, machines.places, people.places)
     return { options, isNarrowable: false, search, setSearch }
   }
   const options = returnTargets(balances, bins.places, search)
@@ -227,6 +237,21 @@ function useTargets(kind: MoveDialogProps['kind'], balances: readonly BalanceRes
     search,
     setSearch,
   }
+}
+
+type NamedPlace = Pick<LocationResponse, 'id' | 'name'>
+
+/** Where a piece may go to: one's own hands, the machines, and the hands of others for those who see their places. */
+export function issueTargets(
+  actor: { name: string; locationId: string },
+  machines: readonly NamedPlace[],
+  people: readonly NamedPlace[],
+): SelectOption[] {
+  const others = people.filter(({ id }) => id !== actor.locationId)
+  return [
+    { value: actor.locationId, label: `My hands (${actor.name})` },
+    ...[...machines, ...others].map(({ id, name }) => ({ value: id, label: name })),
+  ]
 }
 
 /**
