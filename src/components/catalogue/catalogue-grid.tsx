@@ -112,6 +112,7 @@ function useGridColumns<Row extends CatalogueRow>(
       id: column.id,
       heading: column.heading,
       name: column.name,
+      word: column.word,
       unitText: column.kind === 'length' ? unit : (unitTexts[column.kind] ?? ''),
       width: column.width,
       isFigure: isFigure(column.kind),

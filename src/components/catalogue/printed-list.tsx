@@ -52,6 +52,7 @@ export function PrintedList<Row extends CatalogueRow>(props: PrintedListProps<Ro
             {shown.map((column) => (
               <th key={column.id} scope="col" className={printedCellClass(column)}>
                 {column.heading}
+                {column.word ? <span className="block font-normal">{column.word}</span> : null}
                 {column.kind === 'length' ? <span className="block font-normal">{shop.unit}</span> : null}
               </th>
             ))}

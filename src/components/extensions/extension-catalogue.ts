@@ -21,7 +21,7 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
   columns: (canSeeCosts) => [
     codeColumn(),
     ...boreColumns(),
-    lengthColumn('projectionMm', 'E', 'Projection (E)'),
+    lengthColumn('projectionMm', 'E', 'Projection (E)', { word: 'projection' }),
     ...clampingLengths.map(([field, heading, name, look]) =>
       lengthColumn<ExtensionResponse>(field, heading, name, look),
     ),
@@ -34,6 +34,6 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
     boreDiameterFilter,
     ...itemFilters,
   ],
-  facts: (row, unit) => `${boreWords(row.bore, unit)} · E ${formatLength(row.projectionMm, unit)}`,
+  facts: (row, unit) => `${boreWords(row.bore, unit)} · projection ${formatLength(row.projectionMm, unit)}`,
   form: extensionForm,
 }
