@@ -1,7 +1,7 @@
 import { expectAccessible } from '../support/accessibility'
 import { type ApiClient, signedInAs, uniqueCode } from '../support/api'
 import { createCutter, createShelf, putOnShelf, siteDatabase } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { chooseMore, expect, signIn, test } from '../support/browser'
 
 let crib: ApiClient
 
@@ -67,8 +67,12 @@ test('two of one geometry are made one, and the old code finds the one that is k
   await db.destroy()
 
   await signIn(page, 'cribManager')
-  await page.goto('/duplicates?kind=cutter')
+  await page.goto('/cutters')
+  await chooseMore(page, 'Duplicates')
+  await expect(page).toHaveURL(/\/duplicates\?kind=cutter$/)
   await expect(page.getByRole('radio', { name: `Keep ${keptCode}` })).toBeVisible()
+  // The one with pieces is kept unless another is chosen.
+  await expect(page.getByRole('radio', { name: `Keep ${oldCode}` })).toBeChecked()
   await expectAccessible(page, 'the duplicates')
   await page.getByRole('radio', { name: `Keep ${keptCode}` }).check()
   await page

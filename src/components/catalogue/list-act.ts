@@ -1,9 +1,11 @@
 import type { RefObject } from 'react'
+import type { CatalogueKind } from '@/core/stock/kinds'
 
 /** What opens over a list. */
 export type ListAct = 'columns' | 'views' | 'paste' | 'changeSelected' | 'changeFound'
 
 export interface ListMenuProps {
+  kind: CatalogueKind
   many: string
   isNarrowed: boolean
   exportHref: string

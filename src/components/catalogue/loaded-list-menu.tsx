@@ -4,6 +4,7 @@ import {
   Bookmark,
   ClipboardPaste,
   Columns3,
+  Copy,
   Download,
   Ellipsis,
   ListChecks,
@@ -23,7 +24,7 @@ export interface LoadedListMenuProps extends ListMenuProps {
 }
 
 export function LoadedListMenu(props: LoadedListMenuProps) {
-  const { many, isNarrowed, exportHref, onAct, onPrint, hasColumns, isMarkAlone, triggerRef } = props
+  const { kind, many, isNarrowed, exportHref, onAct, onPrint, hasColumns, isMarkAlone, triggerRef } = props
   const mayKeep = useCan('keepCrib')
   return (
     <Menu
@@ -76,6 +77,16 @@ export function LoadedListMenu(props: LoadedListMenuProps) {
             )}
           >
             Import a file
+          </MenuLink>
+          <MenuLink
+            Mark={Copy}
+            link={(content) => (
+              <Link href={`/duplicates?kind=${kind}`} prefetch={false}>
+                {content}
+              </Link>
+            )}
+          >
+            Duplicates
           </MenuLink>
         </>
       ) : null}

@@ -31,6 +31,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           <h1 className="mr-auto text-2xl">{definition.title}</h1>
           <AddButton one={definition.one} onAdd={props.onAdd} />
           <ListMenu
+            kind={definition.kind}
             many={definition.many}
             isNarrowed={isNarrowed(view)}
             exportHref={exportPath(definition.kind, view, shownIds)}
