@@ -173,6 +173,16 @@ export function importField(kind: ImportKind, name: string): ImportField | undef
   return byName.get(kind)?.get(name)
 }
 
+/** What can be said for all rows of a file that has no column for it. */
+export const defaultableFields = {
+  cutters: ['form'],
+  holders: [],
+  collets: [],
+  extensions: [],
+  stock: ['crib'],
+  reorderPoints: ['crib'],
+} as const satisfies Record<ImportKind, readonly string[]>
+
 /** Whether a cell of this type is in the unit of its column. */
 export function hasLengthUnit(type: ImportFieldType): boolean {
   return type === 'length' || type === 'diameter' || type === 'distance' || type === 'range'

@@ -18,6 +18,14 @@ export type DecimalSign = (typeof decimalSigns)[number]
 export const decimalOrigins = ['set', 'guessed', 'shop'] as const
 export type DecimalOrigin = (typeof decimalOrigins)[number]
 
+/** Field to what is written for it in all rows that give nothing. */
+export const importDefaultsSchema = z.record(
+  z.string(),
+  z.string('Write it as a text.').max(200, 'More than 200 characters.'),
+  'Send an object: field to value.',
+)
+export type ImportDefaults = z.output<typeof importDefaultsSchema>
+
 /** Column to field, as the person sets it. */
 export const importMappingSchema = z.record(
   z.string(),

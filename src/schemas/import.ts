@@ -1,7 +1,13 @@
 import { z } from 'zod'
 import { lengthUnits } from '@/core/units/length-unit'
 import { importKinds } from './import-fields'
-import { decimalOrigins, decimalSigns, importColumnSchema, importMappingSchema } from './import-mapping'
+import {
+  decimalOrigins,
+  decimalSigns,
+  importColumnSchema,
+  importDefaultsSchema,
+  importMappingSchema,
+} from './import-mapping'
 import { listQuerySchema, listResponseSchema } from './paging'
 
 export const importStates = ['reading', 'checked', 'committing', 'committed', 'failed', 'cancelled'] as const
@@ -19,6 +25,7 @@ export const createImportRequestSchema = z.object({
   /** Absent: as the file's numbers tell, else as the shop writes them. */
   decimals: decimalsSchema.optional(),
   mapping: importMappingSchema.default({}),
+  defaults: importDefaultsSchema.default({}),
 })
 export type CreateImportRequest = z.output<typeof createImportRequestSchema>
 
@@ -27,6 +34,7 @@ export const recheckImportRequestSchema = z.object({
   unit: z.enum(lengthUnits, 'Only mm or in.').optional(),
   decimals: decimalsSchema.optional(),
   mapping: importMappingSchema.optional(),
+  defaults: importDefaultsSchema.optional(),
 })
 export type RecheckImportRequest = z.output<typeof recheckImportRequestSchema>
 
@@ -62,6 +70,7 @@ export const importResponseSchema = z.object({
   encoding: z.string().nullable(),
   delimiter: z.string().nullable(),
   columns: z.array(importColumnSchema),
+  defaults: importDefaultsSchema,
   rowsRead: z.number(),
   /** Null until the file has been counted. */
   rows: z.number().nullable(),
@@ -85,6 +94,7 @@ export type ImportResponse = z.infer<typeof importResponseSchema>
 
 export const importListRowSchema = importResponseSchema.omit({
   columns: true,
+  defaults: true,
   rejected: true,
   warnings: true,
 })

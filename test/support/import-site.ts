@@ -14,6 +14,7 @@ export interface Upload {
   unit?: 'mm' | 'in'
   decimals?: DecimalSign
   mapping?: Record<string, unknown>
+  defaults?: Record<string, string>
   fileName?: string
 }
 
@@ -29,7 +30,12 @@ export interface ImportSite {
   commit(id: string, rejects?: RejectChoice): Promise<void>
   recheck(
     id: string,
-    change: { unit?: 'mm' | 'in'; decimals?: DecimalSign; mapping?: Record<string, string | null> },
+    change: {
+      unit?: 'mm' | 'in'
+      decimals?: DecimalSign
+      mapping?: Record<string, string | null>
+      defaults?: Record<string, string>
+    },
   ): Promise<void>
   cancel(id: string): Promise<void>
   get(id: string): Promise<ImportResponse>
@@ -107,12 +113,21 @@ export async function createImportSite(): Promise<ImportSite> {
   return site
 }
 
-export function uploadRequest({ kind, content, unit, decimals, mapping, fileName }: Upload): Request {
+export function uploadRequest({
+  kind,
+  content,
+  unit,
+  decimals,
+  mapping,
+  defaults,
+  fileName,
+}: Upload): Request {
   const form = new FormData()
   form.set('file', new File([content as BlobPart], fileName ?? `${kind}.csv`))
   form.set('kind', kind)
   if (unit) form.set('unit', unit)
   if (decimals) form.set('decimals', decimals)
+  if (defaults) form.set('defaults', JSON.stringify(defaults))
   if (mapping) form.set('mapping', JSON.stringify(mapping))
   return new Request('http://127.0.0.1/api/imports', { method: 'POST', body: form })
 }

@@ -13,6 +13,7 @@ import { Notice } from '../ui/notice'
 import { CancelDialog } from './cancel-dialog'
 import { ColumnsTable } from './columns-table'
 import { CommitBar, RejectsLink } from './commit-bar'
+import { FillIn } from './fill-in'
 import { ImportProgress } from './import-progress'
 import { hasItemKey, ImportTabs, type ImportView, viewsOf } from './import-tabs'
 import { countText, formatWords, sizeText } from './import-words'
@@ -62,6 +63,12 @@ export function ImportPage({ initial }: { initial: ImportResponse }) {
               <LeftOutLine found={found} />
               <DecimalsLine found={found} />
               <KeyNotice found={found} />
+              <FillIn
+                key={found.checkedAt}
+                found={found}
+                isBusy={isBusy}
+                onRecheck={(change) => run(() => recheckImport(found.id, change))}
+              />
               {found.state === 'checked' ? (
                 <CommitBar
                   found={found}

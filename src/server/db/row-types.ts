@@ -214,6 +214,7 @@ export interface ImportsRow {
   warning_count: number
   decimals: string | null
   decimals_origin: string | null
+  defaults: unknown
 }
 
 export interface ItemMergesRow {

@@ -12,6 +12,7 @@ function warningsOf(columns: ImportColumn[], cells: string[], unit: 'mm' | 'in' 
     unit,
     decimalComma: false,
     decimalsOrigin: 'shop',
+    defaults: {},
     currencyDecimals: 2,
   })
   return reader

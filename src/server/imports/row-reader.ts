@@ -2,7 +2,7 @@ import type { LengthUnit } from '@/core/units/length-unit'
 import type { RowProblem } from '@/schemas/import'
 import { type ImportField, type ImportKind, importField } from '@/schemas/import-fields'
 import { importLimits } from '@/schemas/import-limits'
-import type { DecimalOrigin, ImportColumn } from '@/schemas/import-mapping'
+import type { DecimalOrigin, ImportColumn, ImportDefaults } from '@/schemas/import-mapping'
 import { cellValue, unitNamed } from './cell-value'
 import type { CsvFault, CsvRecord } from './csv-reader'
 import { isDoubtful } from './decimal-sign'
@@ -27,6 +27,8 @@ export interface ReadingSettings {
   /** How that is known. */
   decimalsOrigin: DecimalOrigin
   currencyDecimals: number
+  /** For rows that give nothing. */
+  defaults: ImportDefaults
 }
 
 interface MappedColumn {

@@ -2,7 +2,13 @@ import type { Knex } from 'knex'
 import type { LengthUnit } from '@/core/units/length-unit'
 import type { ImportState, RejectChoice, RowOutcome, RowProblem } from '@/schemas/import'
 import type { ImportKind } from '@/schemas/import-fields'
-import type { DecimalOrigin, DecimalSign, ImportColumn, ImportMapping } from '@/schemas/import-mapping'
+import type {
+  DecimalOrigin,
+  DecimalSign,
+  ImportColumn,
+  ImportDefaults,
+  ImportMapping,
+} from '@/schemas/import-mapping'
 import { enumFromDb, enumToDb } from '../enum-case'
 import type { ImportsRow } from '../row-types'
 
@@ -16,6 +22,7 @@ export interface ImportRecord {
   decimals: DecimalSign | null
   decimalsOrigin: DecimalOrigin | null
   mapping: ImportMapping
+  defaults: ImportDefaults
   rejects: RejectChoice | null
   fileName: string
   filePath: string | null
@@ -30,6 +37,7 @@ export interface NewImport {
   /** As the person set them. */
   decimals?: DecimalSign | undefined
   mapping: ImportMapping
+  defaults: ImportDefaults
   fileName: string
   fileSizeBytes: number
   filePath: string
@@ -43,6 +51,7 @@ export async function createImport(trx: Knex, given: NewImport): Promise<string>
       unit: given.unit,
       ...decimalColumns(given.decimals),
       mapping: JSON.stringify(given.mapping),
+      defaults: JSON.stringify(given.defaults),
       file_name: given.fileName,
       file_size_bytes: given.fileSizeBytes,
       file_path: given.filePath,
@@ -188,7 +197,12 @@ export async function markCancelled(trx: Knex, id: string): Promise<void> {
 export async function markReading(
   trx: Knex,
   id: string,
-  change: { unit: LengthUnit; decimals?: DecimalSign | undefined; mapping: ImportMapping },
+  change: {
+    unit: LengthUnit
+    decimals?: DecimalSign | undefined
+    mapping: ImportMapping
+    defaults: ImportDefaults
+  },
 ): Promise<void> {
   await trx('imports')
     .where('id', id)
@@ -198,6 +212,7 @@ export async function markReading(
       unit: change.unit,
       ...decimalColumns(change.decimals),
       mapping: JSON.stringify(change.mapping),
+      defaults: JSON.stringify(change.defaults),
       rows_read: 0,
       error: null,
       updated_at: trx.fn.now(),
@@ -252,6 +267,7 @@ function fromRow(row: ImportsRow): ImportRecord {
     decimals: row.decimals as DecimalSign | null,
     decimalsOrigin: row.decimals_origin as DecimalOrigin | null,
     mapping: (row.mapping ?? {}) as ImportMapping,
+    defaults: row.defaults as ImportDefaults,
     rejects: row.rejects as RejectChoice | null,
     fileName: row.file_name,
     filePath: row.file_path,

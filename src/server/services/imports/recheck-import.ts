@@ -4,6 +4,7 @@ import { db } from '../../db/connection'
 import { lockImport, markReading } from '../../db/stores/import-store'
 import { inTransaction } from '../../db/transaction'
 import { checkMapping } from '../../imports/column-mapping'
+import { checkDefaults } from '../../imports/import-defaults'
 import { checkImportJob } from '../../jobs/definitions'
 import { sendJob } from '../../jobs/queue'
 import { noSuchImport } from './import-refusals'
@@ -25,10 +26,13 @@ export async function recheckImport(id: string, request: RecheckImportRequest): 
       mapping,
       found.columns.map((column) => column.heading),
     )
+    const defaults = request.defaults ?? found.defaults
+    checkDefaults(found.kind, defaults)
     await markReading(trx, id, {
       unit: request.unit ?? found.unit,
       decimals: request.decimals,
       mapping,
+      defaults,
     })
     await sendJob(trx, checkImportJob, { importId: id })
   })
