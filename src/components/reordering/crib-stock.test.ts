@@ -52,7 +52,7 @@ describe('the crib of a first reorder point', () => {
 describe('what is said before a point is saved', () => {
   it('says that it is low at once in a crib that has none, and where the pieces are', () => {
     expect(pointOutlook(stocked([lying('MAIN', 3)]), east, 2)).toEqual({
-      sentence: '0 in EAST, 3 in MAIN; low at once, and mailed so.',
+      sentence: '0 in EAST, 3 in MAIN; low at once.',
       isCaution: true,
     })
   })

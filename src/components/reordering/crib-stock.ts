@@ -47,8 +47,7 @@ export function pointOutlook(
     ...elsewhere.map(({ cribCode, pieces: there }) => `${there} in ${cribCode}`),
   ].join(', ')
   if (reorderPoint === null) return { sentence: `Usable pieces: ${places}.`, isCaution: false }
-  if (here + stock.coming <= reorderPoint)
-    return { sentence: `${places}; low at once, and mailed so.`, isCaution: true }
+  if (here + stock.coming <= reorderPoint) return { sentence: `${places}; low at once.`, isCaution: true }
   // What is reserved, and where what is coming goes, is known of the whole shop alone.
   if (here - stock.reserved <= reorderPoint)
     return { sentence: `${places}; perhaps low at once: pieces are reserved or coming.`, isCaution: true }
