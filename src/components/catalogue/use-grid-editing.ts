@@ -1,10 +1,10 @@
 'use client'
 
 import { type RefObject, useCallback, useMemo, useRef, useState } from 'react'
-import { toast } from 'sonner'
 import type { CellEdit } from '@/components/grid/parts-list-column'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useShop } from '@/components/layout/shop-context'
+import { toast } from '@/components/ui/toast'
 import { type ItemChange, useChangeItems } from '@/hooks/use-change-items'
 import { useChangeFound } from '@/hooks/use-found-changes'
 import { useSaveItem } from '@/hooks/use-save-item'

@@ -13,6 +13,7 @@ import type { CatalogueShapeProps } from './catalogue-shape'
 import { exportPath, isNarrowed, narrowingText } from './catalogue-view'
 import type { EditBarProps } from './edit-bar'
 import { FilterFields } from './filter-fields'
+import { useFirstBlock } from './first-block'
 import type { ListAct } from './list-act'
 import { ListMenu } from './list-menu'
 import { ListOverlays } from './list-overlays'
@@ -49,6 +50,7 @@ export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapePro
   const printer = useRef<ListPrinterHandle>(null)
   const menuButton = useRef<HTMLButtonElement>(null)
   const editing = useGridEditing(definition, grid, isEditing)
+  const firstBlock = useFirstBlock(definition.kind, view)
   const narrowed = isNarrowed(view)
   return (
     <>
@@ -114,6 +116,7 @@ export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapePro
         {...props}
         onTotal={setTotal}
         handleRef={grid}
+        firstBlock={firstBlock}
         editing={isEditing ? editing : undefined}
       />
       <ListOverlays

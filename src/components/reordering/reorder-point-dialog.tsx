@@ -1,7 +1,6 @@
 'use client'
 
 import { type ComponentProps, type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
 import { parseCount } from '@/core/units/parse-count'
 import {
   createReorderPoint,
@@ -18,6 +17,7 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { toast } from '../ui/toast'
 import { useAttempt } from '../ui/use-attempt'
 import { useNewPoint } from './new-point'
 import { NewPointFields } from './new-point-fields'
