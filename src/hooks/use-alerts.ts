@@ -1,5 +1,6 @@
-import useSWR from 'swr'
+import useSWR, { mutate } from 'swr'
 import { getJson } from '@/lib/api-client'
+import type { MovementResponse } from '@/schemas/movement'
 import type { AlertResponse } from '@/schemas/reordering'
 
 /** As many as one answer holds; beyond that a list of what is low is a list of everything. */
@@ -28,4 +29,17 @@ export function useOpenAlertCount(isAsked: boolean): number | undefined {
     refreshInterval: lookAgainMs,
   })
   return data?.total
+}
+
+/** Everything that shows what is low, or when, reads again: after whatever may bring an item low or above. */
+export async function refreshReordering(): Promise<void> {
+  await mutate((key) => typeof key === 'string' && /^\/api\/(alerts|reorder-points)\b/.test(key))
+}
+
+/** What a movement brought low: its alerts were opened in the same transaction, at the instant it was recorded. */
+export async function readBroughtLow(
+  movement: Pick<MovementResponse, 'itemId' | 'recordedAt'>,
+): Promise<AlertResponse[]> {
+  const { rows } = await getJson<OpenAlerts>(`/api/alerts?state=open&itemId=${movement.itemId}`)
+  return rows.filter(({ openedAt }) => openedAt === movement.recordedAt)
 }

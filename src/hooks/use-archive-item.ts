@@ -4,6 +4,7 @@ import { useSWRConfig } from 'swr'
 import type { CatalogueKind } from '@/core/stock/kinds'
 import { callApi } from '@/lib/api-client'
 import { itemApiPath } from '@/lib/catalogue-paths'
+import { refreshReordering } from './use-alerts'
 
 /** Takes an item out of the lists, or brings it back. */
 export function useArchiveItem(kind: CatalogueKind) {
@@ -13,5 +14,6 @@ export function useArchiveItem(kind: CatalogueKind) {
     if (isArchived) await callApi('DELETE', path)
     else await callApi('PATCH', path, { body: { version: row.version, archivedAt: null } })
     await mutate(path)
+    await refreshReordering()
   }
 }

@@ -10,6 +10,7 @@ import type {
   MergeItemsResponse,
   MergePreview,
 } from '@/schemas/duplicate'
+import { refreshReordering } from './use-alerts'
 
 /** The groups of items of a kind that measure the same. */
 export function useDuplicates(kind: CatalogueKind) {
@@ -35,6 +36,14 @@ export function useMergePreview({ keptItemId, mergedItemId }: MergeItemsRequest)
 }
 
 /** Makes one item of two; the key makes a repeat harmless. */
-export function mergeItems(request: MergeItemsRequest, idempotencyKey: string): Promise<MergeItemsResponse> {
-  return callApi<MergeItemsResponse>('POST', '/api/duplicates/merge', { body: request, idempotencyKey })
+export async function mergeItems(
+  request: MergeItemsRequest,
+  idempotencyKey: string,
+): Promise<MergeItemsResponse> {
+  const merged = await callApi<MergeItemsResponse>('POST', '/api/duplicates/merge', {
+    body: request,
+    idempotencyKey,
+  })
+  await refreshReordering()
+  return merged
 }

@@ -14,9 +14,10 @@ export function useItem<Row extends { id: string }>(kind: CatalogueKind, first: 
   return data ?? first
 }
 
-export function useItemStock(itemId: string) {
+/** Null asks nothing yet. */
+export function useItemStock(itemId: string | null) {
   const { data, error, isLoading, mutate } = useSWR<ItemStockResponse, Error>(
-    `/api/items/${itemId}/stock`,
+    itemId === null ? null : `/api/items/${itemId}/stock`,
     getJson,
   )
   return { stock: data, error, isLoading, retry: () => mutate() }

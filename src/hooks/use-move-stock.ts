@@ -6,6 +6,8 @@ import { catalogueKinds } from '@/core/stock/kinds'
 import { callApi } from '@/lib/api-client'
 import { itemApiPath } from '@/lib/catalogue-paths'
 import type { MovementResponse } from '@/schemas/movement'
+import type { AlertResponse } from '@/schemas/reordering'
+import { readBroughtLow, refreshReordering } from './use-alerts'
 import { itemMovementsUrl } from './use-item'
 
 export interface MoveStockRequest {
@@ -30,19 +32,21 @@ function useStockRefresh() {
       if (key.startsWith(`/api/items/${itemId}/`)) return true
       return catalogueKinds.some((kind) => key === itemApiPath(kind, itemId))
     })
+    await refreshReordering()
   }
 }
 
-/** Issues or returns; the key makes a repeat of the same call harmless. */
+/** Issues or returns, and answers what that brought low; the key makes a repeat of the same call harmless. */
 export function useMoveStock() {
   const refresh = useStockRefresh()
-  return async (request: MoveStockRequest, idempotencyKey: string): Promise<MovementResponse> => {
+  return async (request: MoveStockRequest, idempotencyKey: string): Promise<AlertResponse[]> => {
     const movement = await callApi<MovementResponse>('POST', '/api/movements', {
       body: request,
       idempotencyKey,
     })
     await refresh(request.itemId)
-    return movement
+    // It is posted: that nobody can say what is low now does not undo it.
+    return readBroughtLow(movement).catch(() => [])
   }
 }
 

@@ -10,7 +10,7 @@ interface PlacePage {
 }
 
 /** Places of one kind, by what their code holds; null asks nothing yet. */
-export function usePlaces(kind: 'machine' | 'bin' | null, code = '') {
+export function usePlaces(kind: 'machine' | 'bin' | 'person' | null, code = '') {
   const search = code.trim() === '' ? '' : `&code=${encodeURIComponent(code.trim())}`
   const { data, error, isLoading } = useSWR<PlacePage, Error>(
     kind ? `/api/locations?kind=${kind}&limit=200${search}` : null,

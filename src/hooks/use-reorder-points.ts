@@ -1,7 +1,9 @@
+import useSWR from 'swr'
 import { catalogueKinds } from '@/core/stock/kinds'
 import { callApi, getJson } from '@/lib/api-client'
 import { catalogueApiPath } from '@/lib/catalogue-paths'
 import type { ReorderPointResponse, ReorderPointRow } from '@/schemas/reordering'
+import { refreshReordering } from './use-alerts'
 import { type CatalogueBlock, catalogueBlockUrl } from './use-catalogue-rows'
 
 export const reorderPointsApiPath = '/api/reorder-points'
@@ -35,6 +37,7 @@ export async function saveReorderPoint(
   const { version, reorderPoint, orderUpTo } = row
   const body = { version, reorderPoint, orderUpTo, ...change }
   const saved = await callApi<ReorderPointResponse>('PUT', reorderPointUrl(row), { body })
+  await refreshReordering()
   return { ...row, ...saved }
 }
 
@@ -49,42 +52,71 @@ export async function saveReorderPoints(
   const saved = await callApi<{ rows: ReorderPointResponse[] }>('PUT', reorderPointsApiPath, {
     body: { rows },
   })
+  await refreshReordering()
   return changes.map(({ row }, index) => ({ ...row, ...saved.rows[index] }))
 }
 
 export async function removeReorderPoint(row: ReorderPointRow): Promise<void> {
   await callApi('DELETE', reorderPointUrl(row))
+  await refreshReordering()
 }
 
 function reorderPointUrl({ itemId, cribId }: { itemId: string; cribId: string }): string {
   return `${reorderPointsApiPath}/${itemId}/${cribId}`
 }
 
-/**
- * Sets a first reorder point for the item of this code, of whichever kind it is; false where none in use has the code.
- * What cannot be is thrown, with its fields.
- */
+/** Sets a first reorder point; answers it as the list shows it. What cannot be is thrown, with its fields. */
 export async function createReorderPoint(
-  code: string,
+  item: ItemOfCode,
   cribId: string,
   values: ReorderPointChange,
-): Promise<boolean> {
-  const itemId = code === '' ? null : await findItemId(code)
-  if (itemId === null) return false
-  await callApi('PUT', reorderPointUrl({ itemId, cribId }), { body: values })
-  return true
+): Promise<Pick<ReorderPointRow, 'reorderPoint'> & Partial<ReorderPointRow>> {
+  const pair = { itemId: item.id, cribId }
+  const set = await callApi<ReorderPointResponse>('PUT', reorderPointUrl(pair), { body: values })
+  await refreshReordering()
+  // It is set: that its row cannot be read now does not undo it.
+  const listed = await readItemReorderPoints(item.id).catch(() => null)
+  return listed?.rows.find((row) => row.cribId === cribId) ?? set
 }
 
-async function findItemId(code: string): Promise<string | null> {
+export interface ItemOfCode {
+  id: string
+  code: string
+}
+
+/** The item in use that has this code, of whichever kind it is; undefined until it is known, null where none has it. */
+export function useItemOfCode(code: string): ItemOfCode | null | undefined {
+  const { data } = useSWR(code === '' ? null : ['item-of-code', code], () => findItemOfCode(code))
+  return data
+}
+
+/** Where this item has a reorder point, crib by crib. */
+export function useItemReorderPoints(itemId: string) {
+  const { data, error, mutate } = useSWR<CatalogueBlock<ReorderPointRow>, Error>(
+    itemReorderPointsUrl(itemId),
+    getJson,
+  )
+  return { rows: data?.rows, error, retry: () => mutate() }
+}
+
+function itemReorderPointsUrl(itemId: string): string {
+  return `${reorderPointsApiPath}?itemId=${itemId}&sort=cribCode`
+}
+
+function readItemReorderPoints(itemId: string): Promise<CatalogueBlock<ReorderPointRow>> {
+  return getJson(itemReorderPointsUrl(itemId))
+}
+
+export async function findItemOfCode(code: string): Promise<ItemOfCode | null> {
   for (const kind of catalogueKinds) {
     // Many codes may hold this one; the list is read on until it is found.
     for (let offset = 0; ; ) {
       const query = new URLSearchParams({ code, sort: 'code' }).toString()
-      const { rows } = await getJson<CatalogueBlock<{ id: string; code: string }>>(
+      const { rows } = await getJson<CatalogueBlock<ItemOfCode>>(
         catalogueBlockUrl(catalogueApiPath(kind), query, offset, mostRows),
       )
       const item = rows.find((row) => row.code.toLowerCase() === code.toLowerCase())
-      if (item) return item.id
+      if (item) return item
       if (rows.length < mostRows) break
       offset += mostRows
     }

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { catalogueKinds, conditions, shopLocationKinds } from '@/core/stock/kinds'
 import { idSchema } from './fields'
+import { itemSizeSchema } from './item-size'
 
 export const duplicatesQuerySchema = z.strictObject({ kind: z.enum(catalogueKinds, 'Say which kind.') })
 
@@ -12,12 +13,14 @@ export const duplicateItemSchema = z.object({
   description: z.string(),
   isTrackedByPiece: z.boolean(),
   onHand: z.number(),
+  /** Cribs in which it has a reorder point. */
+  reorderPoints: z.number(),
 })
 export type DuplicateItem = z.infer<typeof duplicateItemSchema>
 
-/** Groups of items of one geometry; `total` counts all groups, of which the first stand here. */
+/** Groups of items of one geometry, the one most worth keeping first; `total` counts all groups, of which the first stand here. */
 export const duplicatesResponseSchema = z.object({
-  groups: z.array(z.array(duplicateItemSchema)),
+  groups: z.array(z.object({ size: itemSizeSchema, items: z.array(duplicateItemSchema) })),
   total: z.number(),
 })
 export type DuplicatesResponse = z.infer<typeof duplicatesResponseSchema>

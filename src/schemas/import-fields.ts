@@ -186,6 +186,15 @@ export function exportField(kind: CatalogueKind, name: string): ImportField | un
     ? fixtureFields.find(({ field }) => field === name)
     : importField(importKindOf[kind], name)
 }
+/** What can be said for all rows of a file that has no column for it. */
+export const defaultableFields = {
+  cutters: ['form'],
+  holders: [],
+  collets: [],
+  extensions: [],
+  stock: ['crib'],
+  reorderPoints: ['crib'],
+} as const satisfies Record<ImportKind, readonly string[]>
 
 /** Whether a cell of this type is in the unit of its column. */
 export function hasLengthUnit(type: ImportFieldType): boolean {
@@ -195,6 +204,11 @@ export function hasLengthUnit(type: ImportFieldType): boolean {
 /** Whether a file of this kind holds lengths, which a bare number has to be told the unit of. */
 export function hasLengths(kind: ImportKind): boolean {
   return importFields[kind].some(({ type }) => hasLengthUnit(type))
+}
+
+/** Whether a file of this kind may hold decimals: lengths, or what a thing costs. */
+export function hasDecimals(kind: ImportKind): boolean {
+  return importFields[kind].some(({ type }) => hasLengthUnit(type) || type === 'money')
 }
 
 export const importKindLabels: Readonly<Record<ImportKind, string>> = {

@@ -10,6 +10,22 @@ const columnTargetSchema = z.union([
   z.object({ field: fieldNameSchema.nullable(), unit: z.enum(lengthUnits).nullable().optional() }),
 ])
 
+/** What stands before the decimals of a file's numbers. */
+export const decimalSigns = ['point', 'comma'] as const
+export type DecimalSign = (typeof decimalSigns)[number]
+
+/** How a file came to its decimal sign: the person set it, its numbers leave no doubt, the shop writes it so. */
+export const decimalOrigins = ['set', 'guessed', 'shop'] as const
+export type DecimalOrigin = (typeof decimalOrigins)[number]
+
+/** Field to what is written for it in all rows that give nothing. */
+export const importDefaultsSchema = z.record(
+  z.string(),
+  z.string('Write it as a text.').max(200, 'More than 200 characters.'),
+  'Send an object: field to value.',
+)
+export type ImportDefaults = z.output<typeof importDefaultsSchema>
+
 /** Column to field, as the person sets it. */
 export const importMappingSchema = z.record(
   z.string(),

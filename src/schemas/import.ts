@@ -1,11 +1,19 @@
 import { z } from 'zod'
 import { lengthUnits } from '@/core/units/length-unit'
 import { importKinds } from './import-fields'
-import { importColumnSchema, importMappingSchema } from './import-mapping'
+import {
+  decimalOrigins,
+  decimalSigns,
+  importColumnSchema,
+  importDefaultsSchema,
+  importMappingSchema,
+} from './import-mapping'
 import { listQuerySchema, listResponseSchema } from './paging'
 
 export const importStates = ['reading', 'checked', 'committing', 'committed', 'failed', 'cancelled'] as const
 export type ImportState = (typeof importStates)[number]
+
+const decimalsSchema = z.enum(decimalSigns, 'Only point or comma.')
 
 export const rowOutcomes = ['added', 'changed', 'unchanged', 'rejected'] as const
 export type RowOutcome = (typeof rowOutcomes)[number]
@@ -14,14 +22,19 @@ export type RowOutcome = (typeof rowOutcomes)[number]
 export const createImportRequestSchema = z.object({
   kind: z.enum(importKinds, `Say what the file holds: ${importKinds.join(', ')}.`),
   unit: z.enum(lengthUnits, 'Only mm or in.').optional(),
+  /** Absent: as the file's numbers tell, else as the shop writes them. */
+  decimals: decimalsSchema.optional(),
   mapping: importMappingSchema.default({}),
+  defaults: importDefaultsSchema.default({}),
 })
 export type CreateImportRequest = z.output<typeof createImportRequestSchema>
 
 /** Reads the file again, by these columns. What is absent stays as it was. */
 export const recheckImportRequestSchema = z.object({
   unit: z.enum(lengthUnits, 'Only mm or in.').optional(),
+  decimals: decimalsSchema.optional(),
   mapping: importMappingSchema.optional(),
+  defaults: importDefaultsSchema.optional(),
 })
 export type RecheckImportRequest = z.output<typeof recheckImportRequestSchema>
 
@@ -51,9 +64,13 @@ export const importResponseSchema = z.object({
   fileSizeBytes: z.number(),
   /** Of bare numbers, where neither cell, column nor row says. */
   unit: z.enum(lengthUnits),
+  /** Null until the file has been looked at, unless they were set. */
+  decimals: z.enum(decimalSigns).nullable(),
+  decimalsOrigin: z.enum(decimalOrigins).nullable(),
   encoding: z.string().nullable(),
   delimiter: z.string().nullable(),
   columns: z.array(importColumnSchema),
+  defaults: importDefaultsSchema,
   rowsRead: z.number(),
   /** Null until the file has been counted. */
   rows: z.number().nullable(),
@@ -77,6 +94,7 @@ export type ImportResponse = z.infer<typeof importResponseSchema>
 
 export const importListRowSchema = importResponseSchema.omit({
   columns: true,
+  defaults: true,
   rejected: true,
   warnings: true,
 })

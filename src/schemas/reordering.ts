@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { catalogueKinds } from '@/core/stock/kinds'
 import { bulkLimit } from './catalogue-bulk'
 import { idSchema, optionalLineSchema, versionSchema } from './fields'
+import { itemSizeSchema } from './item-size'
 import { listQuerySchema, listResponseSchema, setFilter } from './paging'
 import { leadTimeDaysSchema } from './supplier'
 
@@ -146,6 +147,8 @@ export const alertResponseSchema = z.object({
   itemCode: z.string(),
   itemKind: z.enum(catalogueKinds).nullable(),
   description: z.string(),
+  /** What it measures, to say what it is where it has no description; null where it carries no geometry. */
+  size: itemSizeSchema.nullable(),
   cribCode: z.string(),
   /** Bins of the crib that hold the item, or held it last. */
   places: z.array(z.string()),

@@ -66,8 +66,9 @@ const stockOf = async (id: string) => (await crib.get(`/api/items/${id}/stock`))
 
 async function groupOf(id: string): Promise<string[]> {
   const { body } = await crib.get('/api/duplicates?kind=cutter')
-  const groups = body.groups as { id: string }[][]
-  return groups.find((group) => group.some((item) => item.id === id))?.map((item) => item.id) ?? []
+  const groups = body.groups as { items: { id: string }[] }[]
+  const group = groups.find(({ items }) => items.some((item) => item.id === id))
+  return group?.items.map((item) => item.id) ?? []
 }
 
 describe('duplicates', () => {
@@ -78,6 +79,18 @@ describe('duplicates', () => {
     const third = await createCutter(crib, { overallLengthMm, maker: 'A third' })
     await createCutter(crib, { overallLengthMm: overallLengthMm + 0.001 })
     expect((await groupOf(first)).sort()).toEqual([first, second, third].sort())
+  })
+
+  it('stand with the one first that the shop lives with: pieces before a reorder point before age', async () => {
+    const overallLengthMm = 600 + Math.floor(Math.random() * 1e6) / 1e4
+    const made: string[] = []
+    for (const _ of [1, 2, 3, 4]) made.push(await createCutter(crib, { overallLengthMm }))
+    const [oldest, second, pointed, stocked] = made as [string, string, string, string]
+    await putOnShelf(db, crib, { itemId: stocked, binId: shelf.binId, quantity: 1 })
+    await crib.send('PUT', `/api/reorder-points/${pointed}/${shelf.cribId}`, {
+      body: { reorderPoint: 1, orderUpTo: 3 },
+    })
+    expect(await groupOf(oldest)).toEqual([stocked, pointed, oldest, second])
   })
 
   it('of holders measure the same along their whole outline', async () => {
@@ -93,7 +106,9 @@ describe('duplicates', () => {
       made.push((await crib.post('/api/holders', holder(diameter))).body.id)
     }
     const { body } = await crib.get('/api/duplicates?kind=holder')
-    const groups = (body.groups as { id: string }[][]).map((group) => group.map(({ id }) => id).sort())
+    const groups = (body.groups as { items: { id: string }[] }[]).map(({ items }) =>
+      items.map(({ id }) => id).sort(),
+    )
     expect(groups).toContainEqual(made.slice(0, 2).sort())
   })
 

@@ -98,6 +98,7 @@ describe('an alert', () => {
         reorderPoint: 8,
         suggestedQuantity: 10,
         places: ['A-1'],
+        size: { kind: 'cutter', form: 'square' },
       },
     ])
     await put({ reorderPoint: 7, orderUpTo: 12 })

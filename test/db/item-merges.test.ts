@@ -222,7 +222,7 @@ describe('duplicates', () => {
     await createCutter(database.db, { overall_length_mm: 76.2001 })
     await archive(archived)
     const { groups } = await readDuplicateGroups(database.db, 'cutter')
-    const ids = groups.map((group) => group.map(({ id }) => id).sort())
+    const ids = groups.map(({ items }) => items.map(({ id }) => id).sort())
     expect(ids).toContainEqual([one, other].sort())
   })
 })

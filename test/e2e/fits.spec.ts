@@ -1,7 +1,7 @@
 import { expectAccessible } from '../support/accessibility'
 import { type ApiClient, signedInAs, uniqueCode } from '../support/api'
 import { createCutter, createShelf, putOnShelf, siteDatabase } from '../support/api-stock'
-import { expect, signIn, test } from '../support/browser'
+import { chooseMore, expect, signIn, test } from '../support/browser'
 
 let crib: ApiClient
 
@@ -34,6 +34,8 @@ test('a pocket leads to its cutters and on to the reach check', async ({ page })
   await page.goBack()
   await page.getByRole('link', { name: `Check the reach of ${code}` }).click()
   await expect(page).toHaveURL(/\/reach\?.*cutter=\d+/)
+  await expect(page.getByRole('textbox', { name: /^Depth/ })).toHaveValue('40')
+  await expect(page.getByRole('img', { name: /inside corners of 46\.61 mm radius/ })).toBeVisible()
   await expect(page.getByText(code).first()).toBeVisible()
   await expect(page.getByRole('textbox', { name: /^Depth/ })).toHaveValue('40')
   await page.goBack()
@@ -70,8 +72,12 @@ test('two of one geometry are made one, and the old code finds the one that is k
   await db.destroy()
 
   await signIn(page, 'cribManager')
-  await page.goto('/duplicates?kind=cutter')
+  await page.goto('/cutters')
+  await chooseMore(page, 'Duplicates')
+  await expect(page).toHaveURL(/\/duplicates\?kind=cutter$/)
   await expect(page.getByRole('radio', { name: `Keep ${keptCode}` })).toBeVisible()
+  // The one with pieces is kept unless another is chosen.
+  await expect(page.getByRole('radio', { name: `Keep ${oldCode}` })).toBeChecked()
   await expectAccessible(page, 'the duplicates')
   await page.getByRole('radio', { name: `Keep ${keptCode}` }).check()
   await page

@@ -88,7 +88,7 @@ test('while the list is edited, undo takes a change of everything found back as 
   const maker = uniqueCode('FOUND')
   await makeCutters(page, maker, 2)
   await page.goto(`/cutters?maker=${maker}&columns=code,description`)
-  await chooseMore(page, 'Edit in list')
+  await page.getByRole('button', { name: 'Edit in the list' }).click()
   await page.getByRole('button', { name: 'Change all 2 found' }).click()
   await askFor(page, 'description', 'for steel')
   await dialog(page).getByRole('button', { name: 'Change 2 cutters' }).click()

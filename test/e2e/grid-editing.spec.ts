@@ -2,7 +2,7 @@ import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { uniqueCode } from '../support/api'
 import { squareCutter } from '../support/api-stock'
-import { chooseMore, expect, signIn, test } from '../support/browser'
+import { expect, signIn, test } from '../support/browser'
 
 const rows = (page: Page) => page.locator('.ag-grid-scrolling-container .ag-row')
 const cells = (page: Page, column: string) => rows(page).locator(`[col-id="${column}"]`)
@@ -21,7 +21,7 @@ async function makeCutters(page: Page, maker: string, diameters: number[]) {
 async function openList(page: Page, maker: string) {
   await page.goto(`/cutters?maker=${maker}&sort=cuttingDiameterMm&columns=code,cuttingDiameterMm,maker`)
   await expect(rows(page).first()).toBeVisible()
-  await chooseMore(page, 'Edit in list')
+  await page.getByRole('button', { name: 'Edit in the list' }).click()
 }
 
 async function type(page: Page, column: string, row: number, text: string) {
@@ -69,6 +69,41 @@ test('what cannot be stays at its cell with the reason until it is mended or lef
   await page.keyboard.press('Enter')
   await expect(cells(page, 'cuttingDiameterMm').first()).toHaveText('5')
   await expect(page.getByText('was not changed to')).toHaveCount(0)
+})
+
+test('Undo clears what was not taken before it touches an edit, and no row moves for it', async ({
+  page,
+}) => {
+  const maker = uniqueCode('EDIT')
+  await makeCutters(page, maker, [6, 8])
+  await openList(page, maker)
+  await type(page, 'cuttingDiameterMm', 0, '5')
+  await expect(page.getByRole('button', { name: /^Undo: DC of/ })).toBeEnabled()
+  const before = await rows(page).nth(1).boundingBox()
+  await type(page, 'cuttingDiameterMm', 1, 'half')
+  await expect(page.getByRole('alert').filter({ hasText: 'is not a length' })).toBeVisible()
+  expect(await rows(page).nth(1).boundingBox()).toEqual(before)
+  await page.getByRole('button', { name: /^Undo: half typed in / }).click()
+  await expect(cells(page, 'cuttingDiameterMm')).toHaveText(['5', '8'])
+  await expect(page.getByText('was not changed to')).toHaveCount(0)
+  await page.getByRole('button', { name: /^Undo: DC of/ }).click()
+  await expect(cells(page, 'cuttingDiameterMm')).toHaveText(['6', '8'])
+  await page.getByRole('button', { name: 'Redo' }).click()
+  await expect(cells(page, 'cuttingDiameterMm')).toHaveText(['5', '8'])
+  await expect(page.getByRole('button', { name: /^Undo: DC of/ })).toBeEnabled()
+})
+
+test('editing is not done while a value is not taken, unless it is let go', async ({ page }) => {
+  const maker = uniqueCode('EDIT')
+  await makeCutters(page, maker, [6])
+  await openList(page, maker)
+  await type(page, 'cuttingDiameterMm', 0, 'half')
+  await page.getByRole('button', { name: 'Done editing' }).click()
+  await expect(page.getByRole('alert').filter({ hasText: 'editing is not done' })).toBeVisible()
+  await expect(cells(page, 'cuttingDiameterMm').first()).toHaveText('half')
+  await page.getByRole('button', { name: 'Drop it and finish' }).click()
+  await expect(page.getByRole('button', { name: 'Done editing' })).toHaveCount(0)
+  await expect(cells(page, 'cuttingDiameterMm').first()).toHaveText('6')
 })
 
 test('an edit of a row someone else changed says so, and goes over theirs only when asked', async ({

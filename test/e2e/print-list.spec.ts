@@ -32,7 +32,7 @@ test('the rows of the view are printed with the columns shown and what narrows t
   await isPrinted(page)
   await page.emulateMedia({ media: 'print' })
   const sheet = sheetOf(page)
-  await expect(sheet.getByRole('columnheader')).toHaveText(['Code', 'DCmm'])
+  await expect(sheet.getByRole('columnheader')).toHaveText(['Code', 'DCdiametermm'])
   await expect(sheet.locator('tbody td:nth-child(2)')).toHaveText(['6', '5', '4'])
   await expect(sheet).toContainText('3 rows.')
   await expect(sheet).toContainText(`Maker: ${maker}.`)

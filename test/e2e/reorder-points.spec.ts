@@ -1,7 +1,7 @@
 import type { Page } from '@playwright/test'
 import { expectAccessible } from '../support/accessibility'
 import { type ApiClient, signedInAs, uniqueCode } from '../support/api'
-import { createCutter, createShelf, type Shelf } from '../support/api-stock'
+import { createCutter, createShelf, putOnShelf, type Shelf, siteDatabase } from '../support/api-stock'
 import { chooseMore, expect, signIn, test } from '../support/browser'
 
 let crib: ApiClient
@@ -164,12 +164,42 @@ test('a first one is set by the item’s code, and taken away again', async ({ p
   await expect(dialog.getByText('its alert stays open')).toBeVisible()
   await dialog.getByLabel('Order up to').fill('8')
   await add.click()
-  await expect(page.getByText('4 found')).toBeVisible()
-  await page.getByRole('searchbox').fill(code)
+  await expect(
+    page.getByText(/ has the reorder point 6\. It is low now: 0 available and coming\.$/),
+  ).toBeVisible()
+  await expect(page.getByRole('searchbox')).toHaveValue(code)
+  await expect(page.getByText('1 found')).toBeVisible()
   await page.locator('[row-index="0"] input[type="checkbox"]').check()
   await page.getByRole('button', { name: 'Take away' }).click()
   await page.getByRole('button', { name: 'Take it away' }).click()
   await expect(page.getByText(`No reorder point matches “${code}”.`)).toBeVisible()
+})
+
+test('a first one is of the crib where the pieces lie, and says beforehand what it would bring', async ({
+  page,
+}) => {
+  await signIn(page, 'cribManager')
+  const db = siteDatabase()
+  const [stocked, bare] = [uniqueCode('STOCKED'), uniqueCode('BARE')]
+  const itemId = await createCutter(crib, { code: stocked })
+  await createCutter(crib, { code: bare })
+  await putOnShelf(db, crib, { itemId, binId: shelf.binId, quantity: 3 })
+  await db.destroy()
+  await page.goto('/reorder-points')
+  await page.getByRole('button', { name: 'Add a reorder point' }).click()
+  const dialog = page.getByRole('dialog')
+  const inCrib = dialog.getByRole('combobox', { name: 'Crib' })
+  await dialog.getByLabel('Item’s code').fill(stocked)
+  await expect(inCrib).toHaveValue(shelf.cribId)
+  await dialog.getByLabel('Reorder point').fill('2')
+  await expect(dialog.getByText(/^3 in .+; not low\.$/)).toBeVisible()
+  await dialog.getByLabel('Reorder point').fill('3')
+  await expect(dialog.getByText(/^3 in .+; low at once/)).toBeVisible()
+  await dialog.getByLabel('Item’s code').fill(bare)
+  await expect(inCrib).toHaveValue('')
+  await dialog.getByLabel('Order up to').fill('5')
+  await dialog.getByRole('button', { name: 'Add the reorder point' }).click()
+  await expect(inCrib).toHaveAccessibleDescription(/Choose the crib/)
 })
 
 test('the keyboard alone reaches a cell, changes it and leaves it', async ({ page }) => {

@@ -58,3 +58,21 @@ test('an item with stock is not archived, and the page says why', async ({ page 
   await page.getByRole('button', { name: 'Archive it' }).click()
   await expect(page.getByRole('alert').filter({ hasText: 'pieces of this item' })).toBeVisible()
 })
+
+test('an issue that brings an item low says so, and the count in the heading moves at once', async ({
+  page,
+}) => {
+  await crib.send('PUT', `/api/reorder-points/${itemId}/${shelf.cribId}`, {
+    body: { reorderPoint: 3, orderUpTo: 6 },
+  })
+  await signIn(page, 'cribManager')
+  await page.goto(`/cutters/${itemId}`)
+  const heading = page.getByRole('navigation', { name: 'Main' }).getByRole('link', { name: /^Low stock/ })
+  await expect(heading).toHaveText(/\d/)
+  const before = (await heading.textContent()) ?? ''
+  await page.getByRole('button', { name: 'Issue' }).click()
+  await page.getByLabel('Pieces').fill('2')
+  await page.getByRole('dialog').getByRole('button', { name: 'Issue' }).click()
+  await expect(page.getByText(/ is now low in .+: 3 left, reorder point 3\.$/)).toBeVisible()
+  await expect(heading).not.toHaveText(before)
+})

@@ -5,6 +5,7 @@ import { createMailSender } from '@/server/emails/mail-sender'
 import { readMail } from '@/server/emails/read-mail'
 import { addMember, setReorderPoint } from '../support/alerts'
 import { type Books, createBooks, receive } from '../support/books'
+import { soundCutter } from '../support/catalogue'
 import { createTestDatabase, type TestDatabase } from '../support/database'
 import {
   messageIdOf,
@@ -72,6 +73,14 @@ describe('a mail of the outbox', () => {
       expect(mail.text).toContain(said)
       expect(mail.html).toContain(said)
     }
+  })
+
+  it('says what an item without a description is by its form and diameter', async () => {
+    await db('cutters').insert({ item_id: books.itemId, ...soundCutter, cutting_diameter_mm: 6 })
+    await goLow()
+    await send()
+    const mail = await readMail(Buffer.from(server.received[0] ?? ''))
+    expect(mail.text).toContain(': Square end mill 6 mm\n')
   })
 
   it('goes to each member in a mail of its own', async () => {

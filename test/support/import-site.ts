@@ -4,6 +4,7 @@ import { join } from 'node:path'
 import type { Knex } from 'knex'
 import type { ImportResponse, RejectChoice } from '@/schemas/import'
 import type { ImportKind } from '@/schemas/import-fields'
+import type { DecimalSign } from '@/schemas/import-mapping'
 import type { Actor } from '@/server/auth/actor'
 import { createTestDatabase } from './database'
 
@@ -11,7 +12,9 @@ export interface Upload {
   kind: ImportKind
   content: string | Uint8Array
   unit?: 'mm' | 'in'
+  decimals?: DecimalSign
   mapping?: Record<string, unknown>
+  defaults?: Record<string, string>
   fileName?: string
 }
 
@@ -25,7 +28,15 @@ export interface ImportSite {
   check(id: string): Promise<void>
   apply(id: string): Promise<void>
   commit(id: string, rejects?: RejectChoice): Promise<void>
-  recheck(id: string, change: { unit?: 'mm' | 'in'; mapping?: Record<string, string | null> }): Promise<void>
+  recheck(
+    id: string,
+    change: {
+      unit?: 'mm' | 'in'
+      decimals?: DecimalSign
+      mapping?: Record<string, string | null>
+      defaults?: Record<string, string>
+    },
+  ): Promise<void>
   cancel(id: string): Promise<void>
   get(id: string): Promise<ImportResponse>
   rejects(id: string): Promise<string>
@@ -69,8 +80,11 @@ export async function createImportSite(): Promise<ImportSite> {
     commit: async (id, rejects = 'stop') => {
       await commitImport(id, rejects)
     },
-    recheck: async (id, { unit, mapping }) => {
-      await recheckImport(id, { unit, mapping: mapping ? importMappingSchema.parse(mapping) : undefined })
+    recheck: async (id, { mapping, ...change }) => {
+      await recheckImport(id, {
+        ...change,
+        mapping: mapping ? importMappingSchema.parse(mapping) : undefined,
+      })
     },
     cancel: cancelImport,
     get: getImport,
@@ -99,11 +113,21 @@ export async function createImportSite(): Promise<ImportSite> {
   return site
 }
 
-export function uploadRequest({ kind, content, unit, mapping, fileName }: Upload): Request {
+export function uploadRequest({
+  kind,
+  content,
+  unit,
+  decimals,
+  mapping,
+  defaults,
+  fileName,
+}: Upload): Request {
   const form = new FormData()
   form.set('file', new File([content as BlobPart], fileName ?? `${kind}.csv`))
   form.set('kind', kind)
   if (unit) form.set('unit', unit)
+  if (decimals) form.set('decimals', decimals)
+  if (defaults) form.set('defaults', JSON.stringify(defaults))
   if (mapping) form.set('mapping', JSON.stringify(mapping))
   return new Request('http://127.0.0.1/api/imports', { method: 'POST', body: form })
 }

@@ -7,6 +7,8 @@ export interface ListState {
   name: string
   path: string
   reach: (page: Page) => Promise<unknown>
+  /** As wide as a sheet of paper, whatever the screen is. */
+  isOnPaper?: true
 }
 
 const dialog = (page: Page) => page.getByRole('dialog')
@@ -68,6 +70,7 @@ export const listStates: ListState[] = [
   {
     name: 'a list printed',
     path: '/cutters',
+    isOnPaper: true,
     reach: async (page) => {
       await listRow(page)
       await page.evaluate(() => window.dispatchEvent(new Event('beforeprint')))
@@ -79,7 +82,7 @@ export const listStates: ListState[] = [
 
 async function editing(page: Page): Promise<void> {
   await listRow(page)
-  await chooseMore(page, 'Edit in list')
+  await page.getByRole('button', { name: 'Edit in the list' }).click()
   await expect(page.getByRole('button', { name: 'Done editing' })).toBeVisible()
 }
 
@@ -131,11 +134,11 @@ export function testListStates(states: readonly ListState[]): void {
   test('no rule of accessibility is broken in any state of a catalogue list', async ({ page }) => {
     test.setTimeout(300_000)
     await signIn(page, 'cribManager')
-    for (const { name, path, reach } of states) {
+    for (const { name, path, reach, isOnPaper } of states) {
       await page.emulateMedia({ media: 'screen' })
       await page.goto(path)
       await reach(page)
-      expect.soft(await sidewaysOverrunPx(page), name).toBe(0)
+      if (!isOnPaper) expect.soft(await sidewaysOverrunPx(page), name).toBe(0)
       await expectAccessible(page, name)
     }
   })

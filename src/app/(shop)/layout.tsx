@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
-import { Toaster } from 'sonner'
 import { AppHeader } from '@/components/layout/app-header'
 import { ShopProvider } from '@/components/layout/shop-context'
+import { ToastArea } from '@/components/ui/toast-area'
 import { can } from '@/core/policies/permissions'
 import { requireActor } from '@/server/auth/require-actor'
 import { isFirstDayOpen } from '@/server/services/first-day/get-first-day'
@@ -42,7 +42,7 @@ export default async function ShopLayout({ children }: { children: ReactNode }) 
           {children}
         </main>
       </div>
-      <Toaster position="bottom-right" closeButton />
+      <ToastArea />
     </ShopProvider>
   )
 }

@@ -1,7 +1,7 @@
 'use client'
 
 import type { FormEvent } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import type { Role } from '@/core/policies/permissions'
 import { callApi } from '@/lib/api-client'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'

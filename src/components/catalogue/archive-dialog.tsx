@@ -1,10 +1,10 @@
 'use client'
 
 import { useState } from 'react'
-import { toast } from 'sonner'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
+import { toast } from '@/components/ui/toast'
 import { useArchiveItem } from '@/hooks/use-archive-item'
 import type { CatalogueRow } from './catalogue-row'
 

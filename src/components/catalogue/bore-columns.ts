@@ -20,7 +20,7 @@ export function boreColumns<Row extends { bore: Bore }>(): CatalogueColumn<Row>[
 /** How far a shank goes in, and how much of it must be held: what `lengthColumn` makes a column of. */
 export const clampingLengths = [
   ['boreDepthMm', 'Bore depth', 'Bore depth', { width: 104 }],
-  ['minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)', {}],
+  ['minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)', { word: 'min. clamp' }],
   ['gripStartMm', 'Grip start', 'Where gripping begins behind the nose face', { width: 100, isUsual: false }],
 ] as const
 

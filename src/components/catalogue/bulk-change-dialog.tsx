@@ -1,9 +1,9 @@
 'use client'
 
-import { toast } from 'sonner'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
+import { toast } from '@/components/ui/toast'
 import { useAttempt } from '@/components/ui/use-attempt'
 import { faultSentence } from '@/lib/field-faults'
 import type { CatalogueDefinition } from './catalogue-definition'

@@ -11,6 +11,8 @@ export interface CatalogueColumn<Row> {
   id: string
   /** What stands over the column: a symbol where there is one. */
   heading: string
+  /** Under a symbol, what a shop calls it in a word or two. */
+  word?: string | undefined
   /** The full name, on hover, in the chooser and for a screen reader. */
   name: string
   kind: 'code' | 'text' | 'length' | 'angle' | 'count' | 'money' | 'onHand' | 'places'

@@ -12,8 +12,9 @@ interface FilterName {
 
 /** One way to narrow a list. A range of lengths has `name.min` and `name.max`. */
 export type CatalogueFilter = FilterName &
+  /** What counts nothing widens the list instead of narrowing it. */
   (
-    | { kind: 'choice'; anyLabel: string; options: readonly SelectOption[] }
+    | { kind: 'choice'; anyLabel: string; options: readonly SelectOption[]; isUncounted?: true }
     /** The choices are what the counts have. */
     | { kind: 'counted'; anyLabel: string; unknownLabel: string }
     /** What the counts have is offered while typing. */
@@ -68,6 +69,7 @@ export const itemFilters: readonly CatalogueFilter[] = [
     kind: 'choice',
     name: 'archived',
     isMore: true,
+    isUncounted: true,
     label: 'Archived',
     anyLabel: 'Left out',
     options: [

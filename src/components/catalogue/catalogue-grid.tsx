@@ -6,14 +6,15 @@ import { type RefObject, useCallback, useMemo, useState } from 'react'
 import type { PartsListColumn } from '@/components/grid/parts-list-column'
 import { PartsListGrid, type PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useShop } from '@/components/layout/shop-context'
-import { blockSize, type CatalogueBlock, catalogueBlockUrl } from '@/hooks/use-catalogue-rows'
+import { blockSize, type CatalogueBlock } from '@/hooks/use-catalogue-rows'
 import { getJson } from '@/lib/api-client'
-import { catalogueApiPath, itemPagePath } from '@/lib/catalogue-paths'
+import { itemPagePath } from '@/lib/catalogue-paths'
 import { type CatalogueColumn, isFigure } from './catalogue-column'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import { CatalogueState } from './catalogue-state'
 import { type CatalogueView, queryParams } from './catalogue-view'
+import { type FirstBlock, listBlockUrl } from './first-block'
 import { StockWord } from './stock-word'
 import type { GridEditing } from './use-grid-editing'
 
@@ -28,6 +29,7 @@ export interface CatalogueGridProps<Row extends CatalogueRow> {
   onReset: () => void
   onAdd: () => void
   handleRef: RefObject<PartsListHandle | null>
+  firstBlock: FirstBlock
   /** Present while the list is being edited. */
   editing: GridEditing<Row> | undefined
 }
@@ -35,7 +37,7 @@ export interface CatalogueGridProps<Row extends CatalogueRow> {
 type LoadState = { state: 'loading' | 'ready' | 'empty' } | { state: 'failed'; failure: Error }
 
 export default function CatalogueGrid<Row extends CatalogueRow>(props: CatalogueGridProps<Row>) {
-  const { definition, columns, shownIds, view, handleRef, editing, onViewChange, onTotal } = props
+  const { definition, columns, shownIds, view, handleRef, firstBlock, editing, onViewChange, onTotal } = props
   const router = useRouter()
   const [load, setLoad] = useState<LoadState>({ state: 'loading' })
   const gridColumns = useGridColumns(columns, shownIds, editing?.cellEdit)
@@ -43,10 +45,10 @@ export default function CatalogueGrid<Row extends CatalogueRow>(props: Catalogue
 
   const loadBlock = useCallback(
     (offset: number, sort: string) => {
-      const query = sort ? `${narrowing}${narrowing ? '&' : ''}sort=${encodeURIComponent(sort)}` : narrowing
-      return getJson<CatalogueBlock<Row>>(catalogueBlockUrl(catalogueApiPath(definition.kind), query, offset))
+      const url = listBlockUrl(definition.kind, narrowing, sort, offset)
+      return firstBlock.take<Row>(url) ?? getJson<CatalogueBlock<Row>>(url)
     },
-    [definition.kind, narrowing],
+    [definition.kind, narrowing, firstBlock],
   )
   const handleLoad = useCallback(
     (total: number) => {
@@ -112,6 +114,7 @@ function useGridColumns<Row extends CatalogueRow>(
       id: column.id,
       heading: column.heading,
       name: column.name,
+      word: column.word,
       unitText: column.kind === 'length' ? unit : (unitTexts[column.kind] ?? ''),
       width: column.width,
       isFigure: isFigure(column.kind),

@@ -1,7 +1,7 @@
 'use client'
 
 import Link from 'next/link'
-import { type RefObject, useImperativeHandle } from 'react'
+import { type RefObject, useEffect, useImperativeHandle } from 'react'
 import { useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { useCatalogueRows } from '@/hooks/use-catalogue-rows'
@@ -20,6 +20,7 @@ export interface CatalogueListProps<Row extends CatalogueRow> {
   onClear: () => void
   onReset: () => void
   onAdd: () => void
+  onTotal: (total: number | null) => void
   handleRef: RefObject<CatalogueListHandle<Row> | null>
 }
 
@@ -31,7 +32,7 @@ export interface CatalogueListHandle<Row> {
 
 /** The same rows for a thumb: what it is, what there is, where it lies. It grows as it is scrolled. */
 export function CatalogueList<Row extends CatalogueRow>(props: CatalogueListProps<Row>) {
-  const { definition, view } = props
+  const { definition, view, onTotal } = props
   const query = queryParams(view).toString()
   const { unit } = useShop()
   const list = useCatalogueRows<Row>(catalogueApiPath(definition.kind), query)
@@ -39,6 +40,8 @@ export function CatalogueList<Row extends CatalogueRow>(props: CatalogueListProp
     reload: () => void list.retry(),
     loaded: () => ({ rows: list.rows, first: 0, total: list.total ?? list.rows.length }),
   }))
+  const total = list.error || list.isLoading ? null : (list.total ?? null)
+  useEffect(() => onTotal(total), [onTotal, total])
   const end = useEndReached(list.hasMore && !list.isLoadingMore && !list.error, list.loadMore)
   if (list.rows.length === 0)
     return (

@@ -21,6 +21,7 @@ type Names<Row, Value> = {
 
 interface ColumnOptions {
   width?: number
+  word?: string
   isUsual?: boolean
 }
 
@@ -31,10 +32,10 @@ export function lengthColumn<Row>(
   id: Names<Row, NumberValue>,
   heading: string,
   name: string,
-  { width = 84, isUsual = true }: ColumnOptions = {},
+  { width = 84, isUsual = true, word }: ColumnOptions = {},
 ): CatalogueColumn<Row> {
   return {
-    ...{ id, heading, name, kind: 'length', width, isUsual, isSortable: true },
+    ...{ id, heading, name, word, kind: 'length', width, isUsual, isSortable: true },
     text: (row, { unit }) => {
       const mm = row[id] as NumberValue
       return mm == null ? '' : formatLength(mm, unit, { withUnit: false })
@@ -46,10 +47,10 @@ export function angleColumn<Row>(
   id: Names<Row, NumberValue>,
   heading: string,
   name: string,
-  { width = 84, isUsual = false }: ColumnOptions = {},
+  { width = 84, isUsual = false, word }: ColumnOptions = {},
 ): CatalogueColumn<Row> {
   return {
-    ...{ id, heading, name, kind: 'angle', width, isUsual, isSortable: true },
+    ...{ id, heading, name, word, kind: 'angle', width, isUsual, isSortable: true },
     text: (row) => {
       const deg = row[id] as NumberValue
       return deg == null ? '' : formatAngle(deg).replace('°', '')
@@ -61,10 +62,10 @@ export function countColumn<Row>(
   id: Names<Row, NumberValue>,
   heading: string,
   name: string,
-  { width = 76, isUsual = true }: ColumnOptions = {},
+  { width = 76, isUsual = true, word }: ColumnOptions = {},
 ): CatalogueColumn<Row> {
   return {
-    ...{ id, heading, name, kind: 'count', width, isUsual, isSortable: true },
+    ...{ id, heading, name, word, kind: 'count', width, isUsual, isSortable: true },
     text: (row) => {
       const count = row[id] as NumberValue
       return count == null ? '' : String(count)
@@ -118,16 +119,16 @@ export function itemColumns<Row extends ItemRow>(canSeeCosts: boolean): Catalogu
     },
     {
       ...{ id: 'available', heading: 'Available', name: 'Available: on hand less reserved', kind: 'count' },
-      ...{ width: 92, isUsual: true, isSortable: true },
+      ...{ width: 90, isUsual: true, isSortable: true },
       text: (row) => String(row.stock.available),
     },
     {
       ...{ id: 'locations', heading: 'Location', name: 'Bins it lies in, fullest first', kind: 'places' },
-      ...{ width: 170, isUsual: true, isSortable: false },
+      ...{ width: 140, isUsual: true, isSortable: false },
       text: (row) => placeCodes(row.stock),
     },
-    textColumn('maker', 'Maker', (row) => row.maker ?? '', { width: 150 }),
-    textColumn('partNumber', 'Part number', (row) => row.partNumber ?? '', { width: 150 }),
+    textColumn('maker', 'Maker', (row) => row.maker ?? '', { width: 130 }),
+    textColumn('partNumber', 'Part number', (row) => row.partNumber ?? '', { width: 138 }),
     textColumn('description', 'Description', (row) => row.description, { width: 280 }),
     ...(canSeeCosts ? [unitCostColumn<Row>()] : []),
   ]
@@ -135,7 +136,7 @@ export function itemColumns<Row extends ItemRow>(canSeeCosts: boolean): Catalogu
 
 function unitCostColumn<Row extends ItemRow>(): CatalogueColumn<Row> {
   return {
-    ...{ id: 'unitCost', heading: 'Unit cost', name: 'Unit cost', kind: 'money', width: 110 },
+    ...{ id: 'unitCost', heading: 'Unit cost', name: 'Unit cost (price)', kind: 'money', width: 110 },
     ...{ isUsual: false, isSortable: true },
     text: (row, { currency }) => (row.unitCost == null ? '' : formatMoney(row.unitCost, currency)),
   }

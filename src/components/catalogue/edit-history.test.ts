@@ -1,5 +1,12 @@
 import { describe, expect, it } from 'vitest'
-import { type EditStep, longestHistory, type RowsStep, undoChanges, withStep } from './edit-history'
+import {
+  type EditStep,
+  longestHistory,
+  type RowsStep,
+  reversedStep,
+  undoChanges,
+  withStep,
+} from './edit-history'
 
 const step: RowsStep = {
   field: 'maker',
@@ -19,6 +26,17 @@ describe('taking an edit back', () => {
     expect(undoChanges(step, (id) => rows.get(id))).toEqual([
       { id: '1', version: 4, maker: 'Old' },
       { id: '2', version: 2, maker: null },
+    ])
+  })
+
+  it('makes again what was taken back, by taking back the step the other way round', () => {
+    const rows = new Map([
+      ['1', { version: 5, maker: 'Old' }],
+      ['2', { version: 3, maker: null }],
+    ])
+    expect(undoChanges(reversedStep(step), (id) => rows.get(id))).toEqual([
+      { id: '1', version: 5, maker: 'New' },
+      { id: '2', version: 3, maker: 'New' },
     ])
   })
 

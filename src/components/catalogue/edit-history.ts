@@ -22,6 +22,11 @@ export function withStep(steps: readonly EditStep[], step: EditStep): EditStep[]
   return [...steps, step].slice(-longestHistory)
 }
 
+/** The same step the other way round: taking this one back makes it again. */
+export function reversedStep(step: RowsStep): RowsStep {
+  return { ...step, rows: step.rows.map(({ id, before, after }) => ({ id, before: after, after: before })) }
+}
+
 /**
  * What takes a step back, or null where a row says otherwise by now: someone else, or a later edit, changed it since.
  */

@@ -8,10 +8,13 @@ import { Dialog } from '@/components/ui/dialog'
 /** Sorting and filtering of a list on a phone: out of the way until it is asked for. */
 export function FilterDrawer({
   count,
+  found,
   onClear,
   children,
 }: {
   count: number
+  /** How many pass as it is now; null while nobody knows. */
+  found: number | null
   onClear: () => void
   children: ReactNode
 }) {
@@ -27,7 +30,7 @@ export function FilterDrawer({
           {children}
           <div className="bg-sheet border-hairline sticky bottom-0 -mx-5 -mb-4 flex flex-wrap gap-2 border-t px-5 py-3">
             <Button variant="primary" className="flex-1" onClick={() => setIsOpen(false)}>
-              Show the list
+              {found === null ? 'Show the list' : `Show ${found.toLocaleString('en')}`}
             </Button>
             <Button disabled={count === 0} onClick={onClear}>
               Clear all

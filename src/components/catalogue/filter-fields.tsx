@@ -91,7 +91,8 @@ function FilterBox(props: FilterBoxProps) {
   const value = values[filter.name] ?? ''
   // A place or a crib from the address has no name but the one that comes with its count.
   const isNamedByCounts = filter.kind === 'counted' && value !== ''
-  const isCountable = filter.kind !== 'lengthRange' || !filter.isWorkedOut
+  const isCountable =
+    filter.kind === 'lengthRange' ? !filter.isWorkedOut : filter.kind !== 'choice' || !filter.isUncounted
   const isWanted = isCountable && (isNear || isNamedByCounts)
   const counts = useCatalogueCounts(kind, narrowing, filter.name, isWanted)
   const nearing = { onPointerEnter: () => setIsNear(true), onFocus: () => setIsNear(true) }
@@ -281,6 +282,7 @@ function LengthBound({
   listId: string
 }) {
   const { unit, decimalComma } = useShop()
+  const faultId = useId()
   const given = values[name]
   const shown =
     given && Number.isFinite(Number(given)) ? lengthInputText(Number(given), unit, { decimalComma }) : ''
@@ -294,17 +296,26 @@ function LengthBound({
     typed.text.trim() === '' ? null : parseLength(typed.text, { unit, decimalComma, allowZero: true })
   const fault = read && !read.ok ? read.message : null
   return (
-    <span className="flex-1 sm:w-24 sm:flex-none">
+    <span className="relative flex-1 sm:w-24 sm:flex-none">
       <input
         type="text"
         list={listId}
         aria-label={label}
         placeholder={words}
         aria-invalid={fault ? true : undefined}
+        aria-describedby={fault ? faultId : undefined}
         className={filterClass}
         {...typed.props}
       />
-      {fault ? <span className="text-collision block max-w-48 text-sm font-semibold">{fault}</span> : null}
+      {fault ? (
+        // Laid over a list, which would else move down under the pointer.
+        <span
+          id={faultId}
+          className="text-collision bg-sheet sm:border-collision block text-sm font-semibold sm:absolute sm:top-full sm:z-20 sm:mt-1 sm:w-max sm:max-w-64 sm:border sm:px-2 sm:py-1"
+        >
+          {fault}
+        </span>
+      ) : null}
     </span>
   )
 }

@@ -2,12 +2,12 @@
 
 import { useEffect, useMemo, useState } from 'react'
 import { type Control, type FieldValues, type UseFormReturn, useForm, useWatch } from 'react-hook-form'
-import { toast } from 'sonner'
 import { NoDrawing } from '@/components/drawing/no-drawing'
 import { useCan, useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { classNames } from '@/components/ui/class-names'
 import { Notice } from '@/components/ui/notice'
+import { toast } from '@/components/ui/toast'
 import { useSaveItem } from '@/hooks/use-save-item'
 import { ApiError } from '@/lib/api-client'
 import { createItemSchemas } from '@/schemas/create-item'

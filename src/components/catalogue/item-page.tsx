@@ -1,10 +1,10 @@
 'use client'
 
 import { type ReactNode, useState } from 'react'
-import { toast } from 'sonner'
 import { useCan } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Notice } from '@/components/ui/notice'
+import { toast } from '@/components/ui/toast'
 import { useArchiveItem } from '@/hooks/use-archive-item'
 import { useItem, useItemStock } from '@/hooks/use-item'
 import { ArchiveDialog } from './archive-dialog'

@@ -1,104 +1,55 @@
 'use client'
 
-import {
-  Bookmark,
-  ClipboardPaste,
-  Columns3,
-  Download,
-  Ellipsis,
-  ListChecks,
-  Pencil,
-  Printer,
-  Upload,
-} from 'lucide-react'
-import Link from 'next/link'
-import type { RefObject } from 'react'
-import { useCan } from '@/components/layout/shop-context'
-import { Menu, MenuItem, MenuLink, MenuRule } from '@/components/ui/menu'
+import { Ellipsis } from 'lucide-react'
+import { type ComponentType, useRef, useState } from 'react'
+import { buttonClass } from '@/components/ui/button'
+import type { ListMenuProps } from './list-act'
+import type { LoadedListMenuProps } from './loaded-list-menu'
 
-/** What opens over a list. */
-export type ListAct = 'columns' | 'views' | 'paste' | 'changeSelected' | 'changeFound'
-
-export interface ListMenuProps {
-  many: string
-  isNarrowed: boolean
-  /** Rows of it come in by file, or pasted. */
-  isImported: boolean
-  exportHref: string
-  onAct: (act: ListAct) => void
-  onPrint: () => void
-  /** Where there is a grid: it has columns to choose and cells to edit. */
-  onEdit?: (() => void) | undefined
-  /** On a phone the mark alone. */
-  isMarkAlone?: boolean
-  triggerRef?: RefObject<HTMLButtonElement | null>
+interface Loaded {
+  Menu: ComponentType<LoadedListMenuProps>
+  isOpenAtOnce: boolean
+  hasFocus: boolean
 }
 
-/** Everything one may do with a list, but for the one thing done most. */
+/**
+ * Everything one may do with a list, but for the one thing done most. The menu's own code comes when a hand or the
+ * keyboard comes near; a press in between opens it as soon as it is there.
+ */
 export function ListMenu(props: ListMenuProps) {
-  const { many, isNarrowed, isImported, exportHref, onAct, onPrint, onEdit, isMarkAlone, triggerRef } = props
-  const mayKeep = useCan('keepCrib')
+  const { isMarkAlone, triggerRef } = props
+  const [loaded, setLoaded] = useState<Loaded | null>(null)
+  const isPressed = useRef(false)
+
+  async function handleNear() {
+    const { LoadedListMenu } = await import('./loaded-list-menu')
+    const hasFocus = triggerRef.current !== null && triggerRef.current === document.activeElement
+    setLoaded((now) => now ?? { Menu: LoadedListMenu, isOpenAtOnce: isPressed.current, hasFocus })
+  }
+  function handlePress() {
+    isPressed.current = true
+    void handleNear()
+  }
+
+  if (loaded) {
+    const { Menu, ...manner } = loaded
+    return <Menu {...props} {...manner} />
+  }
   return (
-    <Menu
-      label="More"
-      Mark={Ellipsis}
-      size="compact"
-      {...(isMarkAlone ? { isMarkAlone } : {})}
-      {...(triggerRef ? { triggerRef } : {})}
+    <button
+      ref={triggerRef}
+      type="button"
+      aria-haspopup="menu"
+      aria-expanded={false}
+      aria-label={isMarkAlone ? 'More' : undefined}
+      className={buttonClass({ size: 'compact' }, isMarkAlone ? 'w-11 px-0!' : undefined)}
+      onPointerEnter={handleNear}
+      onFocus={handleNear}
+      onPointerDown={handlePress}
+      onClick={handlePress}
     >
-      <MenuItem Mark={Bookmark} onChoose={() => onAct('views')}>
-        Views
-      </MenuItem>
-      {onEdit ? (
-        <MenuItem Mark={Columns3} onChoose={() => onAct('columns')}>
-          Columns
-        </MenuItem>
-      ) : null}
-      <MenuRule />
-      <MenuItem Mark={Printer} onChoose={onPrint}>
-        Print
-      </MenuItem>
-      <MenuLink
-        Mark={Download}
-        link={(content) => (
-          <a href={exportHref} download>
-            {content}
-          </a>
-        )}
-      >
-        Export as CSV
-      </MenuLink>
-      {mayKeep ? (
-        <>
-          <MenuRule />
-          {onEdit ? (
-            <MenuItem Mark={Pencil} onChoose={onEdit}>
-              Edit in list
-            </MenuItem>
-          ) : null}
-          <MenuItem Mark={ListChecks} onChoose={() => onAct('changeFound')}>
-            Change all {isNarrowed ? 'found' : many}
-          </MenuItem>
-          {isImported ? (
-            <>
-              <MenuRule />
-              <MenuItem Mark={ClipboardPaste} onChoose={() => onAct('paste')}>
-                Paste rows
-              </MenuItem>
-              <MenuLink
-                Mark={Upload}
-                link={(content) => (
-                  <Link href="/imports" prefetch={false}>
-                    {content}
-                  </Link>
-                )}
-              >
-                Import a file
-              </MenuLink>
-            </>
-          ) : null}
-        </>
-      ) : null}
-    </Menu>
+      <Ellipsis aria-hidden="true" className="size-5" />
+      {isMarkAlone ? null : 'More'}
+    </button>
   )
 }

@@ -2,7 +2,7 @@
 
 import { type RefObject, useCallback, useEffect, useImperativeHandle, useRef, useState } from 'react'
 import { createPortal, flushSync } from 'react-dom'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { type CatalogueBlock, catalogueBlockUrl } from '@/hooks/use-catalogue-rows'
 import { getJson } from '@/lib/api-client'
 import { catalogueApiPath } from '@/lib/catalogue-paths'

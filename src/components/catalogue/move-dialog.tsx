@@ -1,19 +1,20 @@
 'use client'
 
 import { type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
-import { useShop } from '@/components/layout/shop-context'
+import { useCan, useShop } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
 import { SelectField, type SelectOption } from '@/components/ui/select-field'
 import { TextField } from '@/components/ui/text-field'
+import { toast } from '@/components/ui/toast'
 import { type Condition, conditions } from '@/core/stock/kinds'
 import { parseCount } from '@/core/units/parse-count'
 import type { useItemStock } from '@/hooks/use-item'
 import { useMoveStock } from '@/hooks/use-move-stock'
 import { usePlaces } from '@/hooks/use-places'
 import { ApiError } from '@/lib/api-client'
+import { lowSentence } from '@/lib/low-sentence'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
 import type { LocationResponse } from '@/schemas/location'
 import type { BalanceResponse } from '@/schemas/stock'
@@ -31,7 +32,7 @@ export interface MoveDialogProps {
 export function MoveDialog(props: MoveDialogProps) {
   const { kind, item, stock, onClose } = props
   const balances = stock.stock?.balances ?? []
-  const sources = balances.filter((balance) => isSource(kind, balance))
+  const sources = balances.filter((balance) => isSource(kind, balance)).toSorted(byUse)
   return (
     <Dialog
       isOpen
@@ -62,6 +63,13 @@ function isSource(kind: MoveDialogProps['kind'], balance: BalanceResponse): bool
   const isBin = balance.locationKind === 'bin'
   const isInUse = balance.locationKind === 'person' || balance.locationKind === 'machine'
   return balance.quantity > 0 && (kind === 'issue' ? isBin : isInUse)
+}
+
+/** What can be used comes first, the fullest place of all; what is worn comes last. */
+export function byUse(one: BalanceResponse, other: BalanceResponse): number {
+  return (
+    Number(one.condition === 'worn') - Number(other.condition === 'worn') || other.quantity - one.quantity
+  )
 }
 
 interface MoveFormProps extends Pick<MoveDialogProps, 'kind' | 'item' | 'onClose'> {
@@ -95,7 +103,7 @@ function MoveForm({ kind, item, balances, sources, onClose }: MoveFormProps) {
     setErrors({})
     setIsBusy(true)
     try {
-      await moveStock(
+      const low = await moveStock(
         {
           kind,
           itemId: item.id,
@@ -109,6 +117,7 @@ function MoveForm({ kind, item, balances, sources, onClose }: MoveFormProps) {
         key,
       )
       toast.success(`${count.count} × ${item.code} ${kind === 'issue' ? 'issued' : 'returned'}.`)
+      for (const alert of low) toast.warning(lowSentence(alert))
       onClose()
     } catch (error) {
       setErrors(refusals(error))
@@ -201,7 +210,11 @@ function worst(condition: Condition | undefined): Condition {
 function sourceWords(balance: BalanceResponse): string {
   const place =
     balance.cribCode === null ? balance.locationName : `${balance.cribCode} ${balance.locationCode}`
-  return `${place}, ${conditionNames[balance.condition].toLowerCase()}: ${balance.quantity}`
+  const condition =
+    balance.condition === 'worn'
+      ? 'worn, for regrinding or scrap'
+      : conditionNames[balance.condition].toLowerCase()
+  return `${place}, ${condition}: ${balance.quantity}`
 }
 
 const fewBins = 30
@@ -209,13 +222,12 @@ const fewBins = 30
 function useTargets(kind: MoveDialogProps['kind'], balances: readonly BalanceResponse[]) {
   const { actor } = useShop()
   const [search, setSearch] = useState('')
+  const mayKeep = useCan('keepCrib')
   const machines = usePlaces(kind === 'issue' ? 'machine' : null)
+  const people = usePlaces(kind === 'issue' && mayKeep ? 'person' : null)
   const bins = usePlaces(kind === 'return' ? 'bin' : null, search)
   if (kind === 'issue') {
-    const options: SelectOption[] = [
-      { value: actor.locationId, label: `My hands (${actor.name})` },
-      ...machines.places.map((place) => ({ value: place.id, label: place.name })),
-    ]
+    const options = issueTargets(actor, machines.places, people.places)
     return { options, isNarrowable: false, search, setSearch }
   }
   const options = returnTargets(balances, bins.places, search)
@@ -225,6 +237,21 @@ function useTargets(kind: MoveDialogProps['kind'], balances: readonly BalanceRes
     search,
     setSearch,
   }
+}
+
+type NamedPlace = Pick<LocationResponse, 'id' | 'name'>
+
+/** Where a piece may go to: one's own hands, the machines, and the hands of others for those who see their places. */
+export function issueTargets(
+  actor: { name: string; locationId: string },
+  machines: readonly NamedPlace[],
+  people: readonly NamedPlace[],
+): SelectOption[] {
+  const others = people.filter(({ id }) => id !== actor.locationId)
+  return [
+    { value: actor.locationId, label: `My hands (${actor.name})` },
+    ...[...machines, ...others].map(({ id, name }) => ({ value: id, label: name })),
+  ]
 }
 
 /**

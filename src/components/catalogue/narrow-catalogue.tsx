@@ -1,14 +1,16 @@
 'use client'
 
 import { useRef, useState } from 'react'
+import { useViewName } from '@/hooks/use-view-name'
 import { AddButton } from './add-button'
 import { CatalogueList, type CatalogueListHandle } from './catalogue-list'
 import type { CatalogueRow } from './catalogue-row'
 import type { CatalogueShapeProps } from './catalogue-shape'
-import { exportPath, isNarrowed, narrowingText } from './catalogue-view'
+import { exportPath, isNarrowed, narrowingText, viewParams } from './catalogue-view'
 import { FilterDrawer } from './filter-drawer'
 import { FilterFields } from './filter-fields'
-import { type ListAct, ListMenu } from './list-menu'
+import type { ListAct } from './list-act'
+import { ListMenu } from './list-menu'
 import { ListOverlays } from './list-overlays'
 import { ListPrinter, type ListPrinterHandle } from './list-printer'
 import { SearchBox } from './search-box'
@@ -17,8 +19,10 @@ import { SortSelect } from './sort-select'
 export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, shownIds, view, onViewChange } = props
   const [act, setAct] = useState<ListAct | null>(null)
+  const [total, setTotal] = useState<number | null>(null)
   const list = useRef<CatalogueListHandle<Row>>(null)
   const printer = useRef<ListPrinterHandle>(null)
+  const viewName = useViewName(definition.kind, viewParams(view).toString())
   const menuButton = useRef<HTMLButtonElement>(null)
   return (
     <>
@@ -27,8 +31,8 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           <h1 className="mr-auto text-2xl">{definition.title}</h1>
           <AddButton one={definition.one} onAdd={props.onAdd} />
           <ListMenu
+            kind={definition.kind}
             many={definition.many}
-            isImported={definition.kind !== 'fixture'}
             isNarrowed={isNarrowed(view)}
             exportHref={exportPath(definition.kind, view, shownIds)}
             onAct={setAct}
@@ -37,6 +41,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
             triggerRef={menuButton}
           />
         </div>
+        {viewName ? <p className="truncate font-semibold">{viewName}</p> : null}
         <div className="flex items-center gap-2">
           <SearchBox
             value={view.q}
@@ -45,6 +50,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           />
           <FilterDrawer
             count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
+            found={total}
             onClear={() => onViewChange({ filters: {}, sort: '' })}
           >
             <SortSelect columns={columns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
@@ -59,7 +65,7 @@ export function NarrowCatalogue<Row extends CatalogueRow>(props: CatalogueShapeP
           </FilterDrawer>
         </div>
       </div>
-      <CatalogueList {...props} handleRef={list} />
+      <CatalogueList {...props} handleRef={list} onTotal={setTotal} />
       <ListOverlays
         {...{ definition, columns, shownIds, view, onViewChange, act }}
         onAct={setAct}

@@ -52,6 +52,7 @@ export function PrintedList<Row extends CatalogueRow>(props: PrintedListProps<Ro
             {shown.map((column) => (
               <th key={column.id} scope="col" className={printedCellClass(column)}>
                 {column.heading}
+                {column.word ? <span className="block font-normal">{column.word}</span> : null}
                 {column.kind === 'length' ? <span className="block font-normal">{shop.unit}</span> : null}
               </th>
             ))}
@@ -75,8 +76,8 @@ export function PrintedList<Row extends CatalogueRow>(props: PrintedListProps<Ro
 
 function extentSentence({ rows, first, total, isPart }: Printed<unknown>): string {
   const figure = (count: number) => count.toLocaleString('en')
+  if (isPart && rows.length === 0) return 'No row was loaded when this was printed; print by “More”, “Print”.'
   if (rows.length === total) return total === 1 ? '1 row.' : `${figure(total)} rows.`
-  if (rows.length === 0) return `None of ${figure(total)} rows was loaded; print by “More”, “Print” for all.`
   const extent = `Rows ${figure(first + 1)} to ${figure(first + rows.length)} of ${figure(total)}`
   return isPart ? `${extent}: those loaded. For all of them print by “More”, “Print”.` : `${extent}.`
 }

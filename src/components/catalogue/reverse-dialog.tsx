@@ -1,10 +1,10 @@
 'use client'
 
 import { useState } from 'react'
-import { toast } from 'sonner'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
+import { toast } from '@/components/ui/toast'
 import { useReverseMovement } from '@/hooks/use-move-stock'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'
 import type { MovementResponse } from '@/schemas/movement'

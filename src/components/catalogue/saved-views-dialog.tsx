@@ -1,11 +1,11 @@
 'use client'
 
 import { useState } from 'react'
-import { toast } from 'sonner'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
 import { TextField } from '@/components/ui/text-field'
+import { toast } from '@/components/ui/toast'
 import { useAttempt } from '@/components/ui/use-attempt'
 import { useSavedViews } from '@/hooks/use-saved-views'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
@@ -89,7 +89,8 @@ function SavedViewList<Row extends CatalogueRow>({
         onSave={(name, isShared) =>
           void attempt(async () => {
             await saved.create({ name, isShared, query: viewParams(view).toString() })
-            toast.success(`“${name.trim()}” is saved.`)
+            toast.success(`“${name.trim()}” is saved. Open it by “More”, “Views”.`)
+            onClose()
           })
         }
       />

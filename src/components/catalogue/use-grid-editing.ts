@@ -1,17 +1,24 @@
 'use client'
 
 import { type RefObject, useCallback, useMemo, useRef, useState } from 'react'
-import { toast } from 'sonner'
 import type { CellEdit } from '@/components/grid/parts-list-column'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useShop } from '@/components/layout/shop-context'
+import { toast } from '@/components/ui/toast'
 import { type ItemChange, useChangeItems } from '@/hooks/use-change-items'
 import { useChangeFound } from '@/hooks/use-found-changes'
 import { useSaveItem } from '@/hooks/use-save-item'
 import { faultSentence } from '@/lib/field-faults'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
-import { type EditStep, type FoundStep, type RowsStep, undoChanges, withStep } from './edit-history'
+import {
+  type EditStep,
+  type FoundStep,
+  type RowsStep,
+  reversedStep,
+  undoChanges,
+  withStep,
+} from './edit-history'
 import { currentRow, type EditRefusal, refusalMessage } from './edit-refusal'
 import type { ItemField } from './item-form-definition'
 import { formFields, type Manner, readTypedField, typedText } from './typed-values'
@@ -22,13 +29,18 @@ export interface GridEditing<Row> {
   cellEdit: (columnId: string) => CellEdit<Row> | undefined
   fields: readonly ItemField[]
   refusals: readonly EditRefusal<Row>[]
-  steps: readonly EditStep[]
   selected: readonly Row[]
   isBusy: boolean
   handleEdit: (row: Row, columnId: string, text: string) => void
   handleSelect: (rows: Row[]) => void
   takeBack: (refusal: EditRefusal<Row>) => void
+  /** What was typed and not taken goes first, then the last edit. */
   undo: () => void
+  undoName: string | null
+  redo: () => void
+  redoName: string | null
+  /** How many values are not taken, once the last edit has its answer. */
+  settledRefusals: () => Promise<number>
   /** One field of all rows selected; throws what stands against it. */
   changeSelected: (field: ItemField, value: unknown) => Promise<void>
   /** Everything found was changed, or that was taken back, elsewhere on the page. */
@@ -54,6 +66,7 @@ export function useGridEditing<Row extends CatalogueRow>(
   const changeFound = useChangeFound(definition.kind)
   const [refusals, setRefusals] = useState<EditRefusal<Row>[]>([])
   const [steps, setSteps] = useState<EditStep[]>([])
+  const [undone, setUndone] = useState<RowsStep[]>([])
   const [selected, setSelected] = useState<Row[]>([])
   const [waiting, setWaiting] = useState(0)
   const refused = useRef(new Map<string, EditRefusal<Row>>())
@@ -125,8 +138,7 @@ export function useGridEditing<Row extends CatalogueRow>(
           after: fieldValue(after, columnId),
         }
         const name = `${field.symbol ?? field.label} of ${after.code}`
-        if (after.version !== base.version)
-          setSteps((past) => withStep(past, { field: columnId, name, rows: [change] }))
+        if (after.version !== base.version) noteStep({ field: columnId, name, rows: [change] })
       } catch (error) {
         const current = currentRow<Row>(error)
         if (current) show([current])
@@ -140,20 +152,50 @@ export function useGridEditing<Row extends CatalogueRow>(
     grid.current?.redrawRow(row.id)
   }
 
+  function noteStep(step: EditStep) {
+    setSteps((past) => withStep(past, step))
+    setUndone([])
+  }
+
   function undo() {
+    const refusal = refusals.at(-1)
+    if (refusal) return takeBack(refusal)
     const step = steps.at(-1)
     if (!step) return
     setSteps((past) => past.filter((one) => one !== step))
     enqueue(async () => {
       try {
         if ('foundId' in step) await undoFound(step)
-        else await undoRows(step)
+        else {
+          await undoRows(step)
+          setUndone((past) => [...past, step])
+        }
         toast.success(`${step.name} is as it was.`)
       } catch (error) {
         toast.error(`${step.name} was not taken back. ${faultSentence(error)}`)
         grid.current?.refresh()
       }
     })
+  }
+
+  function redo() {
+    const step = undone.at(-1)
+    if (!step) return
+    setUndone((past) => past.filter((one) => one !== step))
+    enqueue(async () => {
+      try {
+        await undoRows(reversedStep(step))
+        setSteps((past) => withStep(past, step))
+      } catch (error) {
+        toast.error(`${step.name} was not made again. ${faultSentence(error)}`)
+        grid.current?.refresh()
+      }
+    })
+  }
+
+  async function settledRefusals(): Promise<number> {
+    await tail.current
+    return refused.current.size
   }
 
   async function undoRows(step: RowsStep): Promise<void> {
@@ -185,7 +227,7 @@ export function useGridEditing<Row extends CatalogueRow>(
         after: fieldValue(row, field.path),
       }))
       const name = `${field.label} of ${rows.length} ${rows.length === 1 ? definition.one : definition.many}`
-      setSteps((past) => withStep(past, { field: field.path, name, rows }))
+      noteStep({ field: field.path, name, rows })
     } catch (error) {
       grid.current?.refresh()
       throw error
@@ -193,7 +235,7 @@ export function useGridEditing<Row extends CatalogueRow>(
   }
 
   function noteFound(step: FoundStep) {
-    setSteps((past) => withStep(past, step))
+    noteStep(step)
     grid.current?.refresh()
   }
 
@@ -202,9 +244,13 @@ export function useGridEditing<Row extends CatalogueRow>(
     grid.current?.refresh()
   }
 
-  useUndoKey(isOn, undo)
+  useUndoKey(isOn, undo, redo)
+  const refusedLast = refusals.at(-1)
+  const refusedIn = fields.find(({ path }) => path === refusedLast?.columnId)?.label
+  const undoName = refusedLast ? `${refusedLast.text} typed in ${refusedIn}` : (steps.at(-1)?.name ?? null)
   return {
-    ...{ cellEdit, fields, refusals, steps, selected, isBusy: waiting > 0 },
-    ...{ handleEdit, handleSelect: setSelected, takeBack, undo, changeSelected, noteFound, forgetFound },
+    ...{ cellEdit, fields, refusals, selected, isBusy: waiting > 0, settledRefusals },
+    ...{ undo, undoName, redo, redoName: undone.at(-1)?.name ?? null },
+    ...{ handleEdit, handleSelect: setSelected, takeBack, changeSelected, noteFound, forgetFound },
   }
 }

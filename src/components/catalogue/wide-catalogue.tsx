@@ -3,6 +3,7 @@
 import dynamic from 'next/dynamic'
 import { type ReactNode, useRef, useState } from 'react'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
+import { useCan } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { StateSentence } from '@/components/ui/state-sentence'
 import { AddButton } from './add-button'
@@ -10,9 +11,11 @@ import type { CatalogueGridProps } from './catalogue-grid'
 import type { CatalogueRow } from './catalogue-row'
 import type { CatalogueShapeProps } from './catalogue-shape'
 import { exportPath, isNarrowed, narrowingText } from './catalogue-view'
-import { EditBar } from './edit-bar'
+import type { EditBarProps } from './edit-bar'
 import { FilterFields } from './filter-fields'
-import { type ListAct, ListMenu } from './list-menu'
+import { useFirstBlock } from './first-block'
+import type { ListAct } from './list-act'
+import { ListMenu } from './list-menu'
 import { ListOverlays } from './list-overlays'
 import { ListPrinter, type ListPrinterHandle } from './list-printer'
 import { MakerList } from './maker-list'
@@ -32,15 +35,22 @@ const CatalogueGrid = dynamic(loadGrid, {
   loading: () => <StateSentence sentence="Loading the list …" />,
 }) as <Row extends CatalogueRow>(props: CatalogueGridProps<Row>) => ReactNode
 
+const EditBar = dynamic(() => import('./edit-bar'), {
+  ssr: false,
+  loading: () => <div className="h-23" />,
+}) as <Row extends CatalogueRow>(props: EditBarProps<Row>) => ReactNode
+
 export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapeProps<Row>) {
   const { definition, columns, shownIds, view, onViewChange, onClear, onAdd } = props
   const [total, setTotal] = useState<number | null>(null)
   const [act, setAct] = useState<ListAct | null>(null)
+  const mayKeep = useCan('keepCrib')
   const [isEditing, setIsEditing] = useState(false)
   const grid = useRef<PartsListHandle>(null)
   const printer = useRef<ListPrinterHandle>(null)
   const menuButton = useRef<HTMLButtonElement>(null)
   const editing = useGridEditing(definition, grid, isEditing)
+  const firstBlock = useFirstBlock(definition.kind, view)
   const narrowed = isNarrowed(view)
   return (
     <>
@@ -57,14 +67,19 @@ export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapePro
           onSearch={(q) => onViewChange({ q })}
           onLeaveDown={() => grid.current?.focusFirstRow()}
         />
+        {mayKeep && !isEditing ? (
+          <Button size="compact" onClick={() => setIsEditing(true)}>
+            Edit<span className="sr-only"> in the list</span>
+          </Button>
+        ) : null}
         <ListMenu
+          kind={definition.kind}
           many={definition.many}
-          isImported={definition.kind !== 'fixture'}
           isNarrowed={narrowed}
           exportHref={exportPath(definition.kind, view, shownIds)}
           onAct={setAct}
           onPrint={() => printer.current?.print()}
-          onEdit={() => setIsEditing(true)}
+          hasColumns
           triggerRef={menuButton}
         />
         <AddButton one={definition.one} isQuiet={isEditing} onAdd={onAdd} />
@@ -101,6 +116,7 @@ export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapePro
         {...props}
         onTotal={setTotal}
         handleRef={grid}
+        firstBlock={firstBlock}
         editing={isEditing ? editing : undefined}
       />
       <ListOverlays

@@ -16,7 +16,7 @@ export const colletCatalogue: CatalogueDefinition<ColletResponse> = {
     lengthColumn('minimumMm', 'From', 'Smallest shank it takes'),
     lengthColumn('maximumMm', 'To', 'Largest shank it takes'),
     lengthColumn('lengthMm', 'Length', 'Length of the collet', { width: 90 }),
-    lengthColumn('minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)'),
+    lengthColumn('minimumGripMm', 'LSCN', 'Minimum clamping length (LSCN)', { word: 'min. clamp' }),
     ...itemColumns<ColletResponse>(canSeeCosts),
   ],
   filters: [

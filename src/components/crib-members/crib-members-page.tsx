@@ -4,19 +4,21 @@ import { useState } from 'react'
 import { type CribChoice, useCribs } from '@/hooks/use-cribs'
 import { faultSentence } from '@/lib/field-faults'
 import { PageHeading } from '../layout/page-heading'
-import { useCan } from '../layout/shop-context'
+import { useCan, useShop } from '../layout/shop-context'
 import { Button, ButtonLink } from '../ui/button'
 import { SelectField } from '../ui/select-field'
 import { StateSentence } from '../ui/state-sentence'
+import { firstCrib } from './first-crib'
 import { MemberList } from './member-list'
 
 /** Who works in a crib, and so gets its mail of what is low. */
 export function CribMembersPage() {
   const canAdminister = useCan('administer')
+  const { actor } = useShop()
   const { data, error } = useCribs()
   const [chosen, setChosen] = useState<string | null>(null)
   const cribs = data?.rows ?? []
-  const crib = cribs.find(({ id }) => id === chosen) ?? cribs.find(({ members }) => members === 0) ?? cribs[0]
+  const crib = cribs.find(({ id }) => id === chosen) ?? firstCrib(cribs, actor.homeCribId)
   return (
     <>
       <PageHeading

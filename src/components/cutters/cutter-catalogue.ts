@@ -21,26 +21,33 @@ export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
   many: 'cutters',
   columns: (canSeeCosts) => [
     codeColumn(),
-    textColumn('form', 'Form', (row) => cutterFormNames[row.form], { width: 176 }),
-    lengthColumn('cuttingDiameterMm', 'DC', 'Cutting diameter (DC)'),
-    lengthColumn('cornerRadiusMm', 'RE', 'Corner radius (RE)', { width: 72 }),
-    lengthColumn('lengthOfCutMm', 'APMX', 'Length of cut (APMX)'),
-    lengthColumn('fluteLengthMm', 'LCF', 'Fluted length with run-out (LCF)', { isUsual: false }),
-    lengthColumn('reachLengthMm', 'LU', 'Reach length (LU)'),
-    lengthColumn('neckDiameterMm', 'DN', 'Neck diameter (DN)', { isUsual: false }),
-    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter (DMM)'),
-    lengthColumn('overallLengthMm', 'OAL', 'Overall length (OAL)'),
-    countColumn('fluteCount', 'NOF', 'Number of flutes (NOF)', { width: 70 }),
-    angleColumn('taperHalfAngleDeg', 'κ', 'Taper, a side (κ)'),
-    angleColumn('pointAngleDeg', 'SIG', 'Point angle, included (SIG)'),
+    textColumn('form', 'Form', (row) => cutterFormNames[row.form], { width: 150 }),
+    lengthColumn('cuttingDiameterMm', 'DC', 'Cutting diameter (DC)', { word: 'diameter', width: 78 }),
+    lengthColumn('cornerRadiusMm', 'RE', 'Corner radius (RE)', { word: 'corner', width: 72 }),
+    lengthColumn('lengthOfCutMm', 'APMX', 'Length of cut (APMX)', { word: 'cut length', width: 82 }),
+    lengthColumn('fluteLengthMm', 'LCF', 'Fluted length with run-out (LCF)', {
+      word: 'flute',
+      isUsual: false,
+    }),
+    lengthColumn('reachLengthMm', 'LU', 'Reach length (LU)', { word: 'reach', width: 72 }),
+    lengthColumn('neckDiameterMm', 'DN', 'Neck diameter (DN)', { word: 'neck', isUsual: false }),
+    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter (DMM)', { word: 'shank', width: 76 }),
+    lengthColumn('overallLengthMm', 'OAL', 'Overall length (OAL)', { word: 'overall', width: 76 }),
+    countColumn('fluteCount', 'NOF', 'Number of flutes (NOF)', { word: 'flutes', width: 64 }),
+    angleColumn('taperHalfAngleDeg', 'κ', 'Taper, a side (κ)', { word: 'taper' }),
+    angleColumn('pointAngleDeg', 'SIG', 'Point angle, included (SIG)', { word: 'point' }),
     lengthColumn('tipDiameterMm', 'Tip ⌀', 'Diameter at the tip', { isUsual: false }),
-    angleColumn('neckTaperHalfAngleDeg', 'BHTA', 'Neck taper, a side (BHTA)'),
+    angleColumn('neckTaperHalfAngleDeg', 'BHTA', 'Neck taper, a side (BHTA)', { word: 'neck taper' }),
     angleColumn('neckTransitionAngleDeg', 'Transition', 'Neck to shank, a side', { width: 100 }),
     textColumn('substrate', 'Made of', (row) => (row.substrate ? substrateNames[row.substrate] : ''), {
       width: 100,
       isUsual: false,
     }),
-    countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', { isUsual: false, width: 90 }),
+    countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', {
+      word: 'highest',
+      isUsual: false,
+      width: 90,
+    }),
     ...itemColumns<CutterResponse>(canSeeCosts),
   ],
   filters: [
@@ -83,8 +90,8 @@ export const cutterCatalogue: CatalogueDefinition<CutterResponse> = {
   facts: (row, unit) => {
     const figure = (mm: number) => formatLength(mm, unit, { withUnit: false })
     const depth = row.reachLengthMm
-      ? `LU ${figure(row.reachLengthMm)}`
-      : `APMX ${figure(row.lengthOfCutMm ?? row.fluteLengthMm ?? 0)}`
+      ? `reach ${figure(row.reachLengthMm)}`
+      : `cut ${figure(row.lengthOfCutMm ?? row.fluteLengthMm ?? 0)}`
     return `⌀${formatLength(row.cuttingDiameterMm, unit, { fractions: true })} · ${cutterFormNames[row.form]} · ${depth}`
   },
   form: cutterForm,

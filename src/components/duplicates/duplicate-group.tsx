@@ -10,18 +10,22 @@ import type { MergePair } from './merge-dialog'
 
 export interface DuplicateGroupProps {
   kind: CatalogueKind
+  /** What they all measure, in words. */
+  size: string
+  /** The one most worth keeping first. */
   items: readonly DuplicateItem[]
   onMerge: (pair: MergePair) => void
 }
 
 /** Items of one geometry: which to keep is chosen, the others are merged into it one by one. */
-export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
+export function DuplicateGroup({ kind, size, items, onMerge }: DuplicateGroupProps) {
   const groupId = useId()
   const [keptId, setKeptId] = useState(items[0]?.id)
   const kept = items.find(({ id }) => id === keptId) ?? items[0]
   if (!kept) return null
   return (
     <table className="border-ink w-full border-t-2 sm:table-fixed" aria-label={`The same as ${kept.code}`}>
+      <caption className="pt-1.5 text-left font-semibold">{size}</caption>
       <thead className="max-sm:sr-only">
         <tr className="border-hairline text-ink-soft border-b text-left text-sm [&>th]:py-1.5 [&>th]:pr-3 [&>th]:font-normal">
           <th scope="col" className="w-24">
@@ -64,7 +68,7 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
                 {item.code}
               </Link>
               <span className="text-ink-soft block text-sm">
-                {[item.description, item.isTrackedByPiece ? 'tracked piece by piece' : '']
+                {[item.description, item.isTrackedByPiece ? 'tracked piece by piece' : '', pointText(item)]
                   .filter(Boolean)
                   .join(' · ')}
               </span>
@@ -87,4 +91,9 @@ export function DuplicateGroup({ kind, items, onMerge }: DuplicateGroupProps) {
       </tbody>
     </table>
   )
+}
+
+function pointText({ reorderPoints }: DuplicateItem): string {
+  if (reorderPoints === 0) return ''
+  return reorderPoints === 1 ? 'has a reorder point' : `has ${reorderPoints} reorder points`
 }

@@ -4,11 +4,14 @@ import { usePathname, useSearchParams } from 'next/navigation'
 import { useState } from 'react'
 import { type ToolingKind, toolingKinds } from '@/core/stock/kinds'
 import { useDuplicates } from '@/hooks/use-duplicates'
+import { fullSizeWords } from '@/lib/size-words'
 import { PageHeading } from '../layout/page-heading'
+import { useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { SelectField } from '../ui/select-field'
 import { StateSentence } from '../ui/state-sentence'
 import { DuplicateGroup } from './duplicate-group'
+import { groupsText } from './groups-text'
 import { MergeDialog, type MergePair } from './merge-dialog'
 
 const kindNames: Readonly<Record<ToolingKind, string>> = {
@@ -26,6 +29,7 @@ export function DuplicatesPage() {
   const { data, error, refresh } = useDuplicates(kind)
   const [pair, setPair] = useState<MergePair | null>(null)
   const many = kindNames[kind].toLowerCase()
+  const { unit } = useShop()
   return (
     <>
       <PageHeading
@@ -53,15 +57,16 @@ export function DuplicatesPage() {
         ) : null}
         {data && data.groups.length > 0 ? (
           <p role="status">
-            {data.total} {data.total === 1 ? 'group' : 'groups'} of {many} measure the same.
+            {groupsText(data.total, many)}
             {data.total > data.groups.length ? ` The first ${data.groups.length} are shown.` : ''}
           </p>
         ) : null}
         {data?.groups.map((group) => (
           <DuplicateGroup
-            key={group.map(({ id }) => id).join()}
+            key={group.items.map(({ id }) => id).join()}
             kind={kind}
-            items={group}
+            size={fullSizeWords(group.size, unit)}
+            items={group.items}
             onMerge={setPair}
           />
         ))}

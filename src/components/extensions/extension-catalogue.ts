@@ -21,8 +21,8 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
   columns: (canSeeCosts) => [
     codeColumn(),
     ...boreColumns(),
-    lengthColumn('projectionMm', 'E', 'Projection (E)'),
-    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter, which the holder takes'),
+    lengthColumn('projectionMm', 'E', 'Projection (E)', { word: 'projection' }),
+    lengthColumn('shankDiameterMm', 'DMM', 'Shank diameter, which the holder takes', { word: 'shank' }),
     ...clampingLengths.map(([field, heading, name, look]) =>
       lengthColumn<ExtensionResponse>(field, heading, name, look),
     ),
@@ -36,6 +36,6 @@ export const extensionCatalogue: CatalogueDefinition<ExtensionResponse> = {
     boreDiameterFilter,
     ...itemFilters,
   ],
-  facts: (row, unit) => `${boreWords(row.bore, unit)} · E ${formatLength(row.projectionMm, unit)}`,
+  facts: (row, unit) => `${boreWords(row.bore, unit)} · projection ${formatLength(row.projectionMm, unit)}`,
   form: extensionForm,
 }

@@ -13,6 +13,7 @@ import { useCan, useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { Notice } from '../ui/notice'
 import { StateSentence } from '../ui/state-sentence'
+import { reachLink, searchLink } from './reach-link'
 
 const shownAtMost = 200
 
@@ -53,7 +54,7 @@ export function PocketResults({ query }: { query: string }) {
       </p>
       <p>
         <Link
-          href={searchPath(asked)}
+          href={searchLink(asked)}
           prefetch={false}
           className="text-accent inline-flex items-center font-semibold hover:underline pointer-coarse:min-h-11"
         >
@@ -106,34 +107,6 @@ function listQuery(asked: URLSearchParams): string {
   if (floorRadiusMm !== null) query.set('endRadiusMm.max', floorRadiusMm)
   if (asked.get('inStock') === 'yes') query.set('stockState', 'inStock')
   return query.toString()
-}
-
-/** What the pocket's figures are called in the address of a reach check, and of a search of the crib. */
-const featureNames = [
-  ['depthMm', 'depth'],
-  ['insideCornerRadiusMm', 'corner'],
-  ['floorRadiusMm', 'floor'],
-] as const
-
-function featureQuery(asked: URLSearchParams): URLSearchParams {
-  return new URLSearchParams(
-    featureNames.flatMap(([name, written]) => {
-      const value = asked.get(name)
-      return value === null ? [] : [[written, value]]
-    }),
-  )
-}
-
-function searchPath(asked: URLSearchParams): string {
-  const query = featureQuery(asked)
-  if (asked.get('inStock') === 'yes') query.set('stock', 'yes')
-  return `/search?${query}`
-}
-
-function reachPath(cutterId: string, asked: URLSearchParams): string {
-  const query = featureQuery(asked)
-  query.set('cutter', cutterId)
-  return `/reach?${query}`
 }
 
 function CutterTable({ rows, asked }: { rows: FittingCutter[]; asked: URLSearchParams }) {
@@ -203,7 +176,7 @@ function CutterTable({ rows, asked }: { rows: FittingCutter[]; asked: URLSearchP
               </td>
               <td className={`${cell} text-right`}>
                 <Link
-                  href={reachPath(row.id, asked)}
+                  href={reachLink(row.id, asked)}
                   prefetch={false}
                   aria-label={`Check the reach of ${row.code}`}
                   className="text-accent inline-flex items-center font-semibold whitespace-nowrap hover:underline pointer-coarse:min-h-11"

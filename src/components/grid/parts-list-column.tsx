@@ -7,6 +7,8 @@ export interface PartsListColumn<Row> {
   id: string
   heading: string
   name: string
+  /** Under a symbol, what a shop calls it. */
+  word?: string | undefined
   unitText: string
   width: number
   isFigure: boolean
@@ -39,7 +41,7 @@ export function columnDef<Row>(column: PartsListColumn<Row>, initialSort: string
     type: column.isFigure ? 'rightAligned' : undefined,
     headerComponentParams: {
       innerHeaderComponent: PartsListHeading,
-      innerHeaderComponentParams: { unitText: column.unitText, fullName: column.name },
+      innerHeaderComponentParams: { unitText: column.unitText, word: column.word, fullName: column.name },
     },
     initialWidth: column.width,
     minWidth: 56,

@@ -9,6 +9,7 @@ import { useTapElsewhere } from '../ui/symbol-name'
 export interface PartsListHeadingProps extends CustomInnerHeaderProps {
   /** The unit under the heading, softer; empty where there is none. */
   unitText: string
+  word?: string | undefined
   fullName: string
 }
 
@@ -16,7 +17,7 @@ export interface PartsListHeadingProps extends CustomInnerHeaderProps {
  * Over a column: the symbol, its unit under it, and its name for those who hear the table. Whoever points at the heading,
  * comes to it by keyboard or taps it sees the name as well.
  */
-export function PartsListHeading({ displayName, unitText, fullName }: PartsListHeadingProps) {
+export function PartsListHeading({ displayName, unitText, word, fullName }: PartsListHeadingProps) {
   const heading = useRef<HTMLSpanElement>(null)
   const bubble = useNameBubble()
   const isNamed = displayName !== fullName
@@ -28,12 +29,21 @@ export function PartsListHeading({ displayName, unitText, fullName }: PartsListH
         <>
           <span aria-hidden="true">{displayName}</span>
           <span className="sr-only">{fullName}</span>
+          {word ? (
+            <span className="text-ink-soft text-xs font-normal">
+              {' '}
+              {unitText}
+              <span aria-hidden="true" className="block">
+                {word}
+              </span>
+            </span>
+          ) : null}
           <NameBubble text={headingName(displayName, fullName)} anchor={heading} isSilent {...{ bubble }} />
         </>
       ) : (
         <span>{displayName}</span>
       )}
-      {unitText ? <span className="text-ink-soft block text-xs font-normal">{unitText}</span> : null}
+      {unitText && !word ? <span className="text-ink-soft block text-xs font-normal">{unitText}</span> : null}
     </span>
   )
 }

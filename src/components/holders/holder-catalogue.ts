@@ -28,13 +28,17 @@ export const holderCatalogue: CatalogueDefinition<HolderResponse> = {
     codeColumn(),
     textColumn('taper', 'Taper', (row) => row.taper ?? '', { name: 'Spindle taper', width: 96 }),
     ...boreColumns(),
-    lengthColumn('gaugeLengthMm', 'A', 'Gauge length (A)'),
+    lengthColumn('gaugeLengthMm', 'A', 'Gauge length (A)', { word: 'gauge' }),
     ...clampingLengths.map(([field, heading, name, look]) =>
       lengthColumn<HolderResponse>(field, heading, name, look),
     ),
     countColumn('nutTorqueNm', 'N·m', 'Nut torque in N·m', { isUsual: false, width: 80 }),
     lengthColumn('sideLockInsertionMm', 'Side-lock', 'Side-lock insertion', { width: 96, isUsual: false }),
-    countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', { isUsual: false, width: 90 }),
+    countColumn('maximumRpm', 'RPMX', 'Highest spindle speed (RPMX)', {
+      word: 'highest',
+      isUsual: false,
+      width: 90,
+    }),
     ...itemColumns<HolderResponse>(canSeeCosts),
   ],
   filters: [

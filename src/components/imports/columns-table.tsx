@@ -3,14 +3,16 @@
 import { useId, useState } from 'react'
 import type { ImportResponse, RecheckImportRequest } from '@/schemas/import'
 import {
+  hasDecimals,
   hasLengths,
   hasLengthUnit,
   type ImportKind,
   importField,
   importFields,
 } from '@/schemas/import-fields'
-import type { ImportColumn } from '@/schemas/import-mapping'
+import type { DecimalSign, ImportColumn } from '@/schemas/import-mapping'
 import { Button } from '../ui/button'
+import { classNames } from '../ui/class-names'
 import { controlClass } from '../ui/field'
 
 type Target = { field: string; unit: '' | 'mm' | 'in' }
@@ -30,10 +32,11 @@ function targetOf(column: ImportColumn): Target {
 export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
   const [changed, setChanged] = useState<Record<string, Target>>({})
   const [unit, setUnit] = useState(found.unit)
+  const [decimals, setDecimals] = useState(found.decimals)
   const targets = new Map(
     found.columns.map((column) => [column.heading, changed[column.heading] ?? targetOf(column)]),
   )
-  const isDirty = Object.keys(changed).length > 0 || unit !== found.unit
+  const isDirty = Object.keys(changed).length > 0 || unit !== found.unit || decimals !== found.decimals
 
   function handleChange(heading: string, target: Target) {
     // A field is given by one column: the one that had it lets go.
@@ -55,7 +58,18 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
             ? 'What you set here is kept by the shop when the import is committed, and known the next time.'
             : 'How the columns of this file were read.'}
         </p>
-        {!hasLengths(found.kind) || !onRecheck ? null : <FileUnit unit={unit} onChange={setUnit} />}
+        {onRecheck ? (
+          <div className="flex flex-wrap gap-x-6 gap-y-2">
+            {hasDecimals(found.kind) && decimals ? (
+              <FileDecimals
+                decimals={decimals}
+                note={decimals === found.decimals ? decimalsNote(found) : 'not checked yet'}
+                onChange={setDecimals}
+              />
+            ) : null}
+            {hasLengths(found.kind) ? <FileUnit unit={unit} onChange={setUnit} /> : null}
+          </div>
+        ) : null}
       </div>
       <table className="border-ink w-full border-t text-left text-[0.9375rem]">
         <thead className="border-ink border-b max-md:hidden">
@@ -86,7 +100,13 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
           <Button
             variant="primary"
             disabled={isBusy}
-            onClick={() => onRecheck({ unit, mapping: mappingOf(found.columns, changed) })}
+            onClick={() =>
+              onRecheck({
+                unit,
+                ...(decimals && decimals !== found.decimals ? { decimals } : {}),
+                mapping: mappingOf(found.columns, changed),
+              })
+            }
           >
             {isBusy ? 'Starting …' : 'Check again'}
           </Button>
@@ -94,6 +114,7 @@ export function ColumnsTable({ found, isBusy, onRecheck }: ColumnsTableProps) {
             onClick={() => {
               setChanged({})
               setUnit(found.unit)
+              setDecimals(found.decimals)
             }}
           >
             Undo
@@ -116,6 +137,47 @@ function mappingOf(
         const { field, unit } = changed[column.heading] ?? targetOf(column)
         return [column.heading, { field: field || null, unit: unit || null }]
       }),
+  )
+}
+
+const decimalNotes = {
+  set: 'set here',
+  guessed: 'as its numbers tell',
+  shop: 'as the shop writes them',
+} as const
+
+function decimalsNote({ decimalsOrigin }: ImportResponse): string {
+  return decimalsOrigin ? decimalNotes[decimalsOrigin] : ''
+}
+
+interface FileDecimalsProps {
+  decimals: DecimalSign
+  /** How it is known. */
+  note: string
+  onChange: (decimals: DecimalSign) => void
+}
+
+function FileDecimals({ decimals, note, onChange }: FileDecimalsProps) {
+  const id = useId()
+  return (
+    <div className="flex flex-wrap items-center gap-x-2 text-[0.9375rem]">
+      <label htmlFor={id} className="font-semibold">
+        Decimals in this file
+      </label>
+      <select
+        id={id}
+        aria-describedby={`${id}-note`}
+        className={classNames(controlClass, 'w-auto')}
+        value={decimals}
+        onChange={(event) => onChange(event.target.value === 'comma' ? 'comma' : 'point')}
+      >
+        <option value="point">point: 12.5</option>
+        <option value="comma">comma: 12,5</option>
+      </select>
+      <span id={`${id}-note`} className="text-ink-soft">
+        {note}
+      </span>
+    </div>
   )
 }
 

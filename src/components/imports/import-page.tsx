@@ -13,6 +13,7 @@ import { Notice } from '../ui/notice'
 import { CancelDialog } from './cancel-dialog'
 import { ColumnsTable } from './columns-table'
 import { CommitBar, RejectsLink } from './commit-bar'
+import { FillIn } from './fill-in'
 import { ImportProgress } from './import-progress'
 import { hasItemKey, ImportTabs, type ImportView, viewsOf } from './import-tabs'
 import { countText, formatWords, sizeText } from './import-words'
@@ -60,7 +61,14 @@ export function ImportPage({ initial }: { initial: ImportResponse }) {
             <div className="flex flex-col gap-3 px-4 py-4 lg:px-6">
               <OutcomeSentence found={found} />
               <LeftOutLine found={found} />
+              <DecimalsLine found={found} />
               <KeyNotice found={found} />
+              <FillIn
+                key={found.checkedAt}
+                found={found}
+                isBusy={isBusy}
+                onRecheck={(change) => run(() => recheckImport(found.id, change))}
+              />
               {found.state === 'checked' ? (
                 <CommitBar
                   found={found}
@@ -107,6 +115,17 @@ function LeftOutLine({ found }: { found: ImportResponse }) {
     <p className="text-ink-soft text-[0.9375rem]">
       {leftOut.length === 1 ? 'One column is' : `${leftOut.length} columns are`} left out: {shown.join(', ')}
       {rest > 0 ? ` and ${rest} more` : ''}.
+    </p>
+  )
+}
+
+/** A guess is said where it decides what the numbers are. */
+function DecimalsLine({ found }: { found: ImportResponse }) {
+  if (found.state !== 'checked' || found.decimals !== 'comma' || found.decimalsOrigin !== 'guessed')
+    return null
+  return (
+    <p className="text-[0.9375rem]">
+      Its numbers have a decimal comma, so 12,5 is read as 12.5. If that is wrong, say so under Columns.
     </p>
   )
 }

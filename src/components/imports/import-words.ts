@@ -1,5 +1,5 @@
 import type { ImportListRow, ImportState } from '@/schemas/import'
-import { hasLengths, type ImportKind } from '@/schemas/import-fields'
+import { hasDecimals, hasLengths, type ImportKind } from '@/schemas/import-fields'
 
 export const stateWords: Readonly<Record<ImportState, string>> = {
   reading: 'Being read',
@@ -36,10 +36,13 @@ export function countText(count: number): string {
 }
 
 /** What the reader found of the file: `Windows-1252, semicolons, bare numbers in inches`. */
-export function formatWords(found: Pick<ImportListRow, 'encoding' | 'delimiter' | 'unit' | 'kind'>): string {
+export function formatWords(
+  found: Pick<ImportListRow, 'encoding' | 'delimiter' | 'decimals' | 'unit' | 'kind'>,
+): string {
   const words = [
     encodingNames[found.encoding ?? ''],
     delimiterNames[found.delimiter ?? ''],
+    hasDecimals(found.kind) && found.decimals === 'comma' ? 'decimal commas' : undefined,
     hasLengths(found.kind) ? `bare numbers in ${found.unit === 'in' ? 'inches' : 'millimetres'}` : undefined,
   ]
   return words.filter(Boolean).join(', ')

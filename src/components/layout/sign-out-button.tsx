@@ -1,7 +1,7 @@
 'use client'
 
 import type { ReactNode } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { callApi } from '@/lib/api-client'
 import { Button } from '../ui/button'
 

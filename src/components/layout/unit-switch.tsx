@@ -2,7 +2,7 @@
 
 import { useRouter } from 'next/navigation'
 import { useTransition } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { type LengthUnit, lengthUnits } from '@/core/units/length-unit'
 import { callApi } from '@/lib/api-client'
 import { classNames } from '../ui/class-names'

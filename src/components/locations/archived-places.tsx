@@ -1,6 +1,6 @@
 'use client'
 
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import type { useArchivedLocations } from '@/hooks/use-locations'
 import { callApi } from '@/lib/api-client'
 import { faultSentence } from '@/lib/field-faults'

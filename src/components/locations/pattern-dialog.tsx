@@ -1,7 +1,7 @@
 'use client'
 
 import { type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { CoreInputError } from '@/core/core-input-error'
 import { binCodes } from '@/core/stock/bin-codes'
 import { useLocations } from '@/hooks/use-locations'

@@ -1,6 +1,6 @@
 'use client'
 
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import type { PersonLink } from '@/schemas/person'
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'

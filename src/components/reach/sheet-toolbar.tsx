@@ -1,7 +1,7 @@
 'use client'
 
 import { Printer, Share2 } from 'lucide-react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { Button } from '../ui/button'
 import { classNames } from '../ui/class-names'
 import type { SectionView } from './section-layout'

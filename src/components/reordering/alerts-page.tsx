@@ -7,16 +7,24 @@ import { useCribs } from '@/hooks/use-cribs'
 import { itemPagePath } from '@/lib/catalogue-paths'
 import { faultSentence } from '@/lib/field-faults'
 import { formatInstant } from '@/lib/format-instant'
+import { sizeWords } from '@/lib/size-words'
 import type { AlertResponse } from '@/schemas/reordering'
 import { PageHeading } from '../layout/page-heading'
-import { useCan } from '../layout/shop-context'
+import { useCan, useShop } from '../layout/shop-context'
 import { Button, ButtonLink } from '../ui/button'
 import { SelectField } from '../ui/select-field'
 import { StateSentence } from '../ui/state-sentence'
 import { MembersNotice } from './members-notice'
 
+/** What became of the mail about it. */
+export function mailSentence(hasMailServer: boolean): string {
+  return hasMailServer
+    ? 'A mail goes to the crib’s members when it happens.'
+    : 'No mail server is set, so nobody is mailed: look here.'
+}
+
 /** What fell to its reorder point and has not come back above it. */
-export function AlertsPage() {
+export function AlertsPage({ hasMailServer }: { hasMailServer: boolean }) {
   const canKeep = useCan('keepCrib')
   const [cribId, setCribId] = useState('')
   const { data: cribs } = useCribs()
@@ -25,7 +33,7 @@ export function AlertsPage() {
     <>
       <PageHeading
         title="Low stock"
-        note="Items whose pieces, available and coming, are at or below the reorder point of their crib. The crib’s members had a mail when it happened."
+        note={`Items whose pieces, available and coming, are at or below the reorder point of their crib. ${mailSentence(hasMailServer)}`}
       >
         <SelectField
           label="Crib"
@@ -107,6 +115,7 @@ function AlertsTable({ rows }: { rows: AlertResponse[] }) {
 }
 
 function AlertRow({ row }: { row: AlertResponse }) {
+  const { unit } = useShop()
   return (
     <tr className={`border-hairline hover:bg-accent-wash border-b align-top ${phoneRow}`}>
       <td className="max-sm:block max-sm:pb-1 sm:px-3 sm:py-1.5 sm:pl-4 lg:pl-6">
@@ -120,7 +129,9 @@ function AlertRow({ row }: { row: AlertResponse }) {
         ) : (
           <span className="font-semibold">{row.itemCode}</span>
         )}
-        <span className="text-ink-soft block">{row.description}</span>
+        <span className="text-ink-soft block">
+          {row.description || (row.size ? sizeWords(row.size, unit) : '')}
+        </span>
       </td>
       <Cell label="Where">
         {row.cribCode}

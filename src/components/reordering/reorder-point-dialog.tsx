@@ -1,8 +1,13 @@
 'use client'
 
 import { type ComponentProps, type FormEvent, useState } from 'react'
-import { useCribs } from '@/hooks/use-cribs'
-import { createReorderPoint, saveReorderPoint } from '@/hooks/use-reorder-points'
+import { parseCount } from '@/core/units/parse-count'
+import {
+  createReorderPoint,
+  findItemOfCode,
+  type ItemOfCode,
+  saveReorderPoint,
+} from '@/hooks/use-reorder-points'
 import { ApiError } from '@/lib/api-client'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import type { ReorderPointResponse, ReorderPointRow } from '@/schemas/reordering'
@@ -12,7 +17,10 @@ import { Dialog } from '../ui/dialog'
 import { Notice } from '../ui/notice'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { toast } from '../ui/toast'
 import { useAttempt } from '../ui/use-attempt'
+import { useNewPoint } from './new-point'
+import { NewPointFields } from './new-point-fields'
 import {
   type EditedField,
   editedFields,
@@ -29,9 +37,12 @@ export interface ReorderPointDialogProps {
   row: ReorderPointRow | null
   /** The crib looked at, which a new one most likely is of. */
   cribId?: string | undefined
+  /** The item a new one is of, where it is not asked for. */
+  item?: ItemOfCode | undefined
   suppliers: readonly SupplierResponse[]
   onClose: () => void
-  onSaved: () => void
+  /** With the code of a new one, so that it can be shown. */
+  onSaved: (itemCode?: string) => void
   onRemove?: (row: ReorderPointRow) => void
 }
 
@@ -39,29 +50,35 @@ const emptyTexts: TypedTexts = { packSize: '1', minimumOrder: '1' }
 
 /** A reorder point as a form: a new one, or one that is there on a phone. What is refused stays as it was typed. */
 export function ReorderPointDialog(props: ReorderPointDialogProps) {
-  const { row, cribId, suppliers, onClose, onSaved, onRemove } = props
+  const { row, cribId, item, suppliers, onClose, onSaved, onRemove } = props
   const [base, setBase] = useState(row)
   const [texts, setTexts] = useState<TypedTexts>(row ? textsOf(row) : emptyTexts)
   const [unread, setUnread] = useState<TypedTexts>({})
-  const [codeFault, setCodeFault] = useState<string>()
+  const point = useNewPoint(item, cribId)
   const { fault, isBusy, attempt } = useAttempt()
   const current = currentOf(fault)
   const faults = { ...fieldFaults(fault), ...unread }
 
   function handleSubmit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault()
-    const values = new FormData(event.currentTarget)
     const read = readTypedPoint(texts)
     setUnread(read.ok ? {} : read.faults)
-    const code = String(values.get('code') ?? '').trim()
-    const isCodeMissing = row === null && code === ''
-    setCodeFault(isCodeMissing ? 'Give the code of the item.' : undefined)
-    if (!read.ok || isCodeMissing) return
+    const isNamed = base !== null || point.check()
+    if (!read.ok || !isNamed) return
     void attempt(async () => {
-      if (base) await saveReorderPoint(current ? { ...base, ...current } : base, read.change)
-      else if (!(await createReorderPoint(code, String(values.get('cribId') ?? ''), read.change)))
-        return setCodeFault('No item in use has this code.')
-      onSaved()
+      if (base) {
+        await saveReorderPoint(current ? { ...base, ...current } : base, read.change)
+        return onSaved()
+      }
+      const found = item ?? (await findItemOfCode(point.code.trim()))
+      if (!found) return point.setFaults({ code: 'No item in use has this code.' })
+      const set = await createReorderPoint(found, point.cribId, read.change)
+      const isLow = set.position !== undefined && set.position <= set.reorderPoint
+      const where = `${found.code}${point.crib ? ` in ${point.crib.code}` : ''}`
+      const message = `${where} has the reorder point ${set.reorderPoint}.`
+      if (isLow) toast.warning(`${message} It is low now: ${set.position} available and coming.`)
+      else toast.success(message)
+      onSaved(found.code)
     })
   }
 
@@ -77,7 +94,13 @@ export function ReorderPointDialog(props: ReorderPointDialogProps) {
     <Dialog
       isOpen
       onOpenChange={onClose}
-      title={row ? `${row.itemCode} in ${row.cribCode}` : 'Add a reorder point'}
+      title={
+        row
+          ? `${row.itemCode} in ${row.cribCode}`
+          : item
+            ? `Add a reorder point of ${item.code}`
+            : 'Add a reorder point'
+      }
       {...(row ? { description: row.description } : {})}
     >
       <form onSubmit={handleSubmit} className="flex flex-col gap-4" noValidate>
@@ -88,7 +111,9 @@ export function ReorderPointDialog(props: ReorderPointDialogProps) {
             {faultSentence(fault)}
           </Notice>
         ) : null}
-        {row ? null : <ItemAndCrib codeFault={codeFault} cribId={cribId} />}
+        {row ? null : (
+          <NewPointFields point={point} isItemKnown={item !== undefined} reorderPoint={typedPoint(texts)} />
+        )}
         <div className="grid gap-4 sm:grid-cols-2">
           {editedFields.map((field) => (
             <PointField
@@ -150,23 +175,9 @@ function StaleNotice({ now, onTakeTheirs }: { now: ReorderPointRow; onTakeTheirs
   )
 }
 
-function ItemAndCrib({ codeFault, cribId }: { codeFault: string | undefined; cribId: string | undefined }) {
-  const { data: cribs } = useCribs()
-  return (
-    <div className="grid gap-4 sm:grid-cols-2">
-      <TextField label="Item’s code" name="code" error={codeFault} isRequired autoComplete="off" />
-      <SelectField
-        key={cribs ? 'cribs' : 'none'}
-        label="Crib"
-        name="cribId"
-        defaultValue={cribId}
-        options={(cribs?.rows ?? []).map((crib) => ({
-          value: crib.id,
-          label: `${crib.code} · ${crib.name}`,
-        }))}
-      />
-    </div>
-  )
+function typedPoint(texts: TypedTexts): number | null {
+  const read = parseCount(texts.reorderPoint ?? '')
+  return read.ok ? read.count : null
 }
 
 const hints: Partial<Record<EditedField['field'], string>> = {

@@ -136,7 +136,10 @@ function WidePage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           cribId={view.filters.cribId}
           suppliers={suppliers}
           onClose={close}
-          onSaved={reload}
+          onSaved={(itemCode) => {
+            reload()
+            if (itemCode) onViewChange(viewOf(itemCode))
+          }}
         />
       ) : null}
     </>
@@ -166,6 +169,7 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           <SearchBox value={view.q} label="Search reorder points" onSearch={(q) => onViewChange({ q })} />
           <FilterDrawer
             count={Object.keys(view.filters).length + (view.sort ? 1 : 0)}
+            found={list.error || list.isLoading ? null : (list.total ?? null)}
             onClear={() => onViewChange({ filters: {}, sort: '' })}
           >
             <SortSelect columns={sortColumns} value={view.sort} onChange={(sort) => onViewChange({ sort })} />
@@ -199,7 +203,10 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
           cribId={view.filters.cribId}
           suppliers={suppliers}
           onClose={() => setEdited(null)}
-          onSaved={reload}
+          onSaved={(itemCode) => {
+            reload()
+            if (itemCode) onViewChange(viewOf(itemCode))
+          }}
           onRemove={(row) => {
             setEdited(null)
             setRemoved(row)
@@ -211,6 +218,11 @@ function NarrowPage({ view, onViewChange, onClear, suppliers }: ShapeProps) {
       ) : null}
     </>
   )
+}
+
+/** The list as it surely shows the row of an item that was added. */
+function viewOf(itemCode: string): Partial<CatalogueView> {
+  return { q: itemCode, filters: {}, sort: '' }
 }
 
 const sortColumns = [

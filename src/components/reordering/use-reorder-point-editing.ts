@@ -1,7 +1,7 @@
 'use client'
 
 import { type RefObject, useCallback, useRef, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { type ReorderPointChange, saveReorderPoint, saveReorderPoints } from '@/hooks/use-reorder-points'
 import { ApiError } from '@/lib/api-client'
 import { faultSentence } from '@/lib/field-faults'

@@ -2,7 +2,7 @@
 
 import { useRouter } from 'next/navigation'
 import { type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { parseDecimal } from '@/core/units/parse-decimal'
 import { parseLength } from '@/core/units/parse-length'
 import { callApi } from '@/lib/api-client'

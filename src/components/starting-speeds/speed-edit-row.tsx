@@ -1,7 +1,7 @@
 'use client'
 
 import { type FormEvent, useId, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { isoGroupNames, isoGroups } from '@/core/speeds/iso-groups'
 import { substrates } from '@/core/tooling'
 import { parseSpeed } from '@/core/units/parse-speed'

@@ -2,7 +2,7 @@
 
 import type { LucideIcon } from 'lucide-react'
 import { DropdownMenu } from 'radix-ui'
-import { createContext, type ReactNode, type RefObject, useContext, useRef } from 'react'
+import { createContext, type ReactNode, type RefObject, useContext, useEffect, useRef } from 'react'
 import { type ButtonLook, buttonClass } from './button'
 
 export interface MenuProps extends ButtonLook {
@@ -10,8 +10,11 @@ export interface MenuProps extends ButtonLook {
   label: string
   Mark: LucideIcon
   /** The label is heard and not seen. */
-  isMarkAlone?: boolean
+  isMarkAlone?: boolean | undefined
   triggerRef?: RefObject<HTMLButtonElement | null>
+  /** It takes the place of a button that was pressed, or had the keyboard. */
+  isOpenAtOnce?: boolean
+  hasFocus?: boolean
   children: ReactNode
 }
 
@@ -19,12 +22,16 @@ export interface MenuProps extends ButtonLook {
 const ChosenContext = createContext<RefObject<(() => void) | null> | null>(null)
 
 /** A button and the acts behind it. */
-export function Menu({ label, Mark, isMarkAlone, triggerRef, children, ...look }: MenuProps) {
+export function Menu(props: MenuProps) {
+  const { label, Mark, isMarkAlone, triggerRef, isOpenAtOnce, hasFocus, children, ...look } = props
   const own = useRef<HTMLButtonElement>(null)
   const trigger = triggerRef ?? own
+  useEffect(() => {
+    if (hasFocus && !isOpenAtOnce) trigger.current?.focus()
+  }, [hasFocus, isOpenAtOnce, trigger])
   const chosen = useRef<(() => void) | null>(null)
   return (
-    <DropdownMenu.Root modal={false}>
+    <DropdownMenu.Root modal={false} defaultOpen={isOpenAtOnce ?? false}>
       <DropdownMenu.Trigger
         ref={trigger}
         aria-label={isMarkAlone ? label : undefined}

@@ -37,10 +37,12 @@ export function readDecimal(text: string, decimalComma: boolean): ExactDecimal |
 function readComma(text: string, decimalComma: boolean): ExactDecimal | ParseFailure {
   if (text.includes('.') || text.indexOf(',') !== text.lastIndexOf(',')) return ambiguous(text)
   const point = text.replace(',', '.')
-  if (decimalComma) return readDecimal(point, false)
+  const read = readDecimal(point, false)
+  if (decimalComma || !read.ok) return read
+  const [whole = '', part = ''] = text.split(',')
   return parseFailure(
     'decimal-comma',
-    `${quoted(text)} has a comma. Write ${point}, or turn the decimal comma on in the settings.`,
+    looksGrouped(whole, part) ? `Write ${whole}${part} or ${point}.` : `Write it ${point}.`,
   )
 }
 

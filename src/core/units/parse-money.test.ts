@@ -46,6 +46,13 @@ describe('parseMoney', () => {
     expect(parseMoney(text, cents)).toMatchObject({ ok: false, code })
   })
 
+  it('says how to write a comma that can only be the decimal sign, and both ways where it can be thousands', () => {
+    expect(parseMoney('19,40', cents)).toMatchObject({ code: 'decimal-comma', message: 'Write it 19.40.' })
+    expect(parseMoney('19,4', cents)).toMatchObject({ message: 'Write it 19.4.' })
+    expect(parseMoney('1,234', cents)).toMatchObject({ message: 'Write 1234 or 1.234.' })
+    expect(parseMoney('cheap, very', cents)).toMatchObject({ code: 'not-an-amount' })
+  })
+
   it('reads back every amount of cents exactly', () => {
     fc.assert(
       fc.property(fc.integer({ min: 0, max: 1_000_000_000 }), (minor) => {

@@ -303,6 +303,9 @@ export interface ImportsRow {
   attempt: number
   heading_line: number | null
   warning_count: number
+  decimals: string | null
+  decimals_origin: string | null
+  defaults: unknown
 }
 
 export interface ItemMergesRow {

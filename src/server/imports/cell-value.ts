@@ -3,7 +3,7 @@ import { parseAngle } from '@/core/units/parse-angle'
 import { parseCount } from '@/core/units/parse-count'
 import { parseLength } from '@/core/units/parse-length'
 import { parseMoney } from '@/core/units/parse-money'
-import { quoted } from '@/core/units/parsed'
+import { type ParseFailure, quoted } from '@/core/units/parsed'
 import type { ImportFieldType } from '@/schemas/import-fields'
 import { withoutFormulaGuard } from './csv-line'
 import { conditionNamed, formNamed, partNamed, substrateNamed } from './trade-words'
@@ -43,7 +43,7 @@ const length =
   (options: { allowZero: boolean; drillSizes: boolean }): Reader =>
   (text, context) => {
     const read = parseLength(text, { ...options, unit: context.unit, decimalComma: context.decimalComma })
-    return read.ok ? { kind: 'value', value: read.mm } : problem(read.message)
+    return read.ok ? { kind: 'value', value: read.mm } : unread(read)
   }
 
 const plainLength = length({ allowZero: false, drillSizes: false })
@@ -55,14 +55,14 @@ const readers: Readonly<Record<Exclude<ImportFieldType, 'text'>, Reader>> = {
   range: readRange,
   angle: (text, context) => {
     const read = parseAngle(text, context)
-    return read.ok ? { kind: 'value', value: read.deg } : problem(read.message)
+    return read.ok ? { kind: 'value', value: read.deg } : unread(read)
   },
   count: (text) => readCount(text.replace(/^z\s*=?\s*(?=\d)|(?<=\d)\s*(?:fl|flutes?|z|teeth|rpm)\.?$/gi, '')),
   quantity: (text) => readCount(text.replace(/(?<=\d)\s*(?:pcs?|pieces?|ea|each)\.?$/i, '')),
   days: (text) => readCount(text.replace(/(?<=\d)\s*(?:d|days?)\.?$/i, '')),
   money: (text, context) => {
     const read = parseMoney(text, { decimals: context.currencyDecimals, decimalComma: context.decimalComma })
-    return read.ok ? { kind: 'value', value: read.minor } : problem(read.message)
+    return read.ok ? { kind: 'value', value: read.minor } : unread(read)
   },
   form: (text) =>
     word(
@@ -79,6 +79,15 @@ const readers: Readonly<Record<Exclude<ImportFieldType, 'text'>, Reader>> = {
 
 function problem(message: string): CellValue {
   return { kind: 'problem', message }
+}
+
+/** A comma that is no decimal sign may be one all the same: the file as a whole can say so. */
+function unread({ code, message }: ParseFailure): CellValue {
+  return problem(
+    code === 'decimal-comma'
+      ? `${message} If commas are the decimals of this file, say so under Columns.`
+      : message,
+  )
 }
 
 function word(value: string | undefined, text: string, what: string, instead: string): CellValue {

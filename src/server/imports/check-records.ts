@@ -13,6 +13,7 @@ import {
 import type { StagedRow } from '../db/stores/import-row-store'
 import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
 import { type FlatRecord, textOf } from './flat-values'
+import { defaultRecord } from './import-defaults'
 import type { ImportRow, RowReader } from './row-reader'
 
 /** How the kinds of a file are called one by one. */
@@ -94,7 +95,9 @@ class ItemCheck {
 
   staged(matches: KeyMatches): StagedRow {
     const item = this.findItem(matches)
-    const whole: FlatRecord = { ...(item?.columns as FlatRecord | undefined), ...this.given.flat }
+    // An item that is there keeps its own: what holds for all rows only fills what nobody has said.
+    const filled = defaultRecord(this.reader.settings.defaults)
+    const whole: FlatRecord = { ...filled, ...(item?.columns as FlatRecord | undefined), ...this.given.flat }
     if (item !== undefined) this.checkWhole(whole, item)
     const changes = item ? changesBetween(item.columns as FlatRecord, whole) : []
     return {

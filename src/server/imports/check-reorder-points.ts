@@ -8,6 +8,7 @@ import type { StagedRow } from '../db/stores/import-row-store'
 import { keyOf, matchedItem } from './check-records'
 import { fieldOf, type GivenRecord, givenRecord } from './flat-record'
 import { type FlatRecord, textOf } from './flat-values'
+import { defaultRecord } from './import-defaults'
 import type { ImportRow, RowReader } from './row-reader'
 
 type FoundItem = ReturnType<typeof matchedItem>
@@ -18,7 +19,11 @@ export async function checkReorderPoints(
   rows: readonly ImportRow[],
   reader: RowReader,
 ): Promise<StagedRow[]> {
-  const given = rows.map((row) => givenRecord('reorderPoints', [row], reader))
+  const filled = defaultRecord(reader.settings.defaults)
+  const given = rows.map((row) => {
+    const own = givenRecord('reorderPoints', [row], reader)
+    return { ...own, flat: { ...filled, ...own.flat } }
+  })
   const keys = given.map(({ flat }) => keyOf(flat))
   const items = (await findImportMatches(db, null, keys)).map((match, at) =>
     matchedItem(keys[at] ?? keyOf({}), match),

@@ -6,6 +6,7 @@ import type { StagedRow } from '../db/stores/import-row-store'
 import { keyOf, matchedItem } from './check-records'
 import { givenRecord } from './flat-record'
 import { type FlatRecord, textOf } from './flat-values'
+import { defaultRecord } from './import-defaults'
 import type { ImportRow, RowReader } from './row-reader'
 
 /**
@@ -17,7 +18,11 @@ export async function checkStock(
   rows: readonly ImportRow[],
   reader: RowReader,
 ): Promise<StagedRow[]> {
-  const given = rows.map((row) => givenRecord('stock', [row], reader))
+  const filled = defaultRecord(reader.settings.defaults)
+  const given = rows.map((row) => {
+    const own = givenRecord('stock', [row], reader)
+    return { ...own, flat: { ...filled, ...own.flat } }
+  })
   const matches = await findImportMatches(
     db,
     null,

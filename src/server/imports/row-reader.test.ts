@@ -7,7 +7,14 @@ function column(heading: string, field: string, unit: ImportColumn['unit'] = nul
 }
 
 function warningsOf(columns: ImportColumn[], cells: string[], unit: 'mm' | 'in' = 'mm'): string[] {
-  const reader = new RowReader(columns, { kind: 'cutters', unit, decimalComma: false, currencyDecimals: 2 })
+  const reader = new RowReader(columns, {
+    kind: 'cutters',
+    unit,
+    decimalComma: false,
+    decimalsOrigin: 'shop',
+    defaults: {},
+    currencyDecimals: 2,
+  })
   return reader
     .warningsOf({ line: 2, cells, faults: [] })
     .map((warning) => `${warning.column}: ${warning.value}`)

@@ -2,9 +2,10 @@ import type { LengthUnit } from '@/core/units/length-unit'
 import type { RowProblem } from '@/schemas/import'
 import { type ImportField, type ImportKind, importField } from '@/schemas/import-fields'
 import { importLimits } from '@/schemas/import-limits'
-import type { ImportColumn } from '@/schemas/import-mapping'
+import type { DecimalOrigin, ImportColumn, ImportDefaults } from '@/schemas/import-mapping'
 import { cellValue, unitNamed } from './cell-value'
 import type { CsvFault, CsvRecord } from './csv-reader'
+import { isDoubtful } from './decimal-sign'
 
 export type RowValue = string | number | readonly [number, number]
 
@@ -23,7 +24,11 @@ export interface ReadingSettings {
   /** Of bare numbers, where neither cell, column nor row says. */
   unit: LengthUnit
   decimalComma: boolean
+  /** How that is known. */
+  decimalsOrigin: DecimalOrigin
   currencyDecimals: number
+  /** For rows that give nothing. */
+  defaults: ImportDefaults
 }
 
 interface MappedColumn {
@@ -36,6 +41,7 @@ interface MappedColumn {
 const longestShown = 200
 
 const lengthTypes: ReadonlySet<string> = new Set(['length', 'diameter', 'distance'])
+const decimalTypes: ReadonlySet<string> = new Set([...lengthTypes, 'angle', 'money'])
 const bareFraction = /^(?:\d+[ -]+)?\d+ ?\/ ?\d+$/
 const bareNumber = /^\d*[.,]?\d+$/
 
@@ -117,7 +123,34 @@ export class RowReader {
 
   /** What is taken, with a word about it: bare quotes, and millimetres beside fractions of an inch. */
   warningsOf(record: CsvRecord): RowProblem[] {
-    return [...this.quoteWarnings(record), ...this.mixedUnitWarnings(record)]
+    return [...this.quoteWarnings(record), ...this.mixedUnitWarnings(record), ...this.decimalWarnings(record)]
+  }
+
+  /** The cells of a row that may hold decimals. */
+  decimalCells(record: CsvRecord): string[] {
+    return this.decimalColumns().map(({ index }) => record.cells[index] ?? '')
+  }
+
+  private decimalColumns(): MappedColumn[] {
+    return this.mapped.filter(({ field }) => decimalTypes.has(field.type))
+  }
+
+  /** Under a guess `1,234` may still be a thousand: it is read by the guess, and said. */
+  private decimalWarnings(record: CsvRecord): RowProblem[] {
+    if (this.settings.decimalsOrigin !== 'guessed') return []
+    const sign = this.settings.decimalComma ? ',' : '.'
+    return this.decimalColumns().flatMap(({ index, heading }) => {
+      const cell = record.cells[index] ?? ''
+      if (!cell.includes(sign) || !isDoubtful(cell)) return []
+      return [
+        {
+          line: record.line,
+          column: heading,
+          value: shownCell(cell),
+          message: `The “${sign}” is read as the decimal sign, as in the rest of the file. Is it one of thousands?`,
+        },
+      ]
+    })
   }
 
   /** A bare fraction is inches whatever the unit set: a row that has one was hardly measured in millimetres. */

@@ -1,8 +1,9 @@
 import { importLimits } from '@/schemas/import-limits'
-import type { ImportColumn } from '@/schemas/import-mapping'
+import type { DecimalOrigin, DecimalSign, ImportColumn } from '@/schemas/import-mapping'
 import { headingRecordIndex, type MappingSources, mapColumns, uniqueHeadings } from './column-mapping'
 import { type CsvFormat, detectDelimiter, firstRecords, readRecords } from './csv-file'
 import type { CsvRecord } from './csv-reader'
+import { SeenSigns } from './decimal-sign'
 import { decodeHead, detectEncoding, readHead } from './encoding'
 import { groupKey, takesSeveralRows } from './group-rows'
 import { ImportFileError } from './import-file-error'
@@ -11,6 +12,8 @@ import { type ReadingSettings, RowReader } from './row-reader'
 export interface FileSurvey {
   format: CsvFormat
   headingLine: number
+  decimals: DecimalSign
+  decimalsOrigin: DecimalOrigin
   columns: ImportColumn[]
   rows: number
   /** Of items that take several rows: the line of the last of them, by what names the item. */
@@ -48,13 +51,23 @@ export async function surveyFile(
   const format: CsvFormat = { encoding, delimiter: detectDelimiter(decodeHead(head, encoding)) }
   const { records } = firstRecords(head)
   const headingLine = records[headingRecordIndex(records, sources)]?.line ?? 1
-  const survey: FileSurvey = { format, headingLine, columns: [], rows: 0, lastLines: new Map() }
+  const survey: FileSurvey = {
+    format,
+    headingLine,
+    ...decimalsOf(settings, null),
+    columns: [],
+    rows: 0,
+    lastLines: new Map(),
+  }
+  const signs = new SeenSigns()
   let reader: RowReader | undefined
   for await (const batch of readRecords(path, format)) {
     for (const record of batch) {
       if (record.line < headingLine) continue
-      if (reader) countRow(survey, record, reader)
-      else {
+      if (reader) {
+        countRow(survey, record, reader)
+        for (const cell of reader.decimalCells(record)) signs.add(cell)
+      } else {
         survey.columns = mapColumns(headingsOf(record), sources)
         reader = new RowReader(survey.columns, settings)
       }
@@ -62,7 +75,19 @@ export async function surveyFile(
     await onProgress()
   }
   if (!reader) throw new ImportFileError('This file is empty.')
-  return survey
+  return { ...survey, ...decimalsOf(settings, signs.guess()) }
+}
+
+/** What the person set goes before what the numbers tell, and that before what the shop writes. */
+function decimalsOf(
+  { decimalComma, decimalsOrigin }: ReadingSettings,
+  guess: DecimalSign | null,
+): Pick<FileSurvey, 'decimals' | 'decimalsOrigin'> {
+  if (guess !== null && decimalsOrigin !== 'set') return { decimals: guess, decimalsOrigin: 'guessed' }
+  return {
+    decimals: decimalComma ? 'comma' : 'point',
+    decimalsOrigin: decimalsOrigin === 'set' ? 'set' : 'shop',
+  }
 }
 
 function countRow(survey: FileSurvey, record: CsvRecord, reader: RowReader): void {

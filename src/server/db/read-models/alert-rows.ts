@@ -1,9 +1,11 @@
 import type { Knex } from 'knex'
 import { type CatalogueKind, catalogueKinds } from '@/core/stock/kinds'
 import { suggestedOrder } from '@/core/stock/suggested-order'
+import type { ItemSize } from '@/schemas/item-size'
 import type { PageQuery } from '@/schemas/paging'
 import type { AlertResponse } from '@/schemas/reordering'
 import { type KeyPage, readKeyPage } from '../key-page'
+import { readItemSizes } from './item-sizes'
 
 interface AlertSelection {
   state?: readonly ('open' | 'closed')[] | undefined
@@ -51,7 +53,7 @@ export async function readAlertPage(
   }
   const page = await readKeyPage(db, matching, { sql: 'alerts.id', isDescending: true }, [], query)
   const rows: JoinedRow[] = await joined(db).whereIn('alerts.id', page.ids).orderBy('alerts.id', 'desc')
-  return { ...page, rows: rows.map(alert) }
+  return { ...page, rows: await alertsOf(db, rows) }
 }
 
 /** What one transaction brought low in a crib and is still of it: what one mail tells of. */
@@ -59,7 +61,15 @@ export async function readAlertsOfEvent(db: Knex, eventId: string, cribId: strin
   const rows: JoinedRow[] = await joined(db)
     .where({ 'alerts.opened_event': eventId, 'alerts.crib_id': cribId })
     .orderByRaw('lower(items.code), alerts.id')
-  return rows.map(alert)
+  return alertsOf(db, rows)
+}
+
+async function alertsOf(db: Knex, rows: readonly JoinedRow[]): Promise<AlertResponse[]> {
+  const sizes = await readItemSizes(
+    db,
+    rows.map((row) => row.item_id),
+  )
+  return rows.map((row) => alert(row, sizes.get(row.item_id) ?? null))
 }
 
 /** An empty shelf is told by the bins that held the item. */
@@ -97,7 +107,7 @@ function joined(db: Knex): Knex.QueryBuilder {
     })
 }
 
-function alert(row: JoinedRow): AlertResponse {
+function alert(row: JoinedRow, size: ItemSize | null): AlertResponse {
   const { order_up_to: orderUpTo, pack_size: packSize, minimum_order: minimumOrder } = row
   const hasRule = orderUpTo !== null && packSize !== null && minimumOrder !== null
   return {
@@ -109,6 +119,7 @@ function alert(row: JoinedRow): AlertResponse {
     itemCode: row.item_code,
     itemKind: catalogueKindOf(row.item_kind),
     description: row.description,
+    size,
     cribCode: row.crib_code,
     places: row.places,
     onHand: row.on_hand,

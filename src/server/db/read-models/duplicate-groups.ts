@@ -3,6 +3,7 @@ import type { CatalogueKind } from '@/core/stock/kinds'
 import type { DuplicateItem, DuplicatesResponse } from '@/schemas/duplicate'
 import { enumToDb } from '../enum-case'
 import { type GeometryTable, geometryColumns, geometryTables } from '../geometry-tables'
+import { readItemSizes } from './item-sizes'
 
 const groupsAtMost = 100
 
@@ -34,34 +35,58 @@ export async function readDuplicateGroups(db: Knex, kind: CatalogueKind): Promis
       order by count(*) desc, min(lower(items.code))
       limit ${groupsAtMost}`,
   )
-  const items = await readDuplicateItems(
-    db,
-    rows.flatMap(({ ids }) => ids),
-  )
+  const ids = rows.flatMap((row) => row.ids)
+  const items = await readDuplicateItems(db, ids)
+  const sizes = await readItemSizes(db, ids)
   return {
-    groups: rows.map(({ ids }) => ids.flatMap((id) => items.get(id) ?? [])),
+    groups: rows.flatMap(({ ids }) => {
+      const size = sizes.get(ids[0] ?? '')
+      const members = ids.flatMap((id) => items.get(id) ?? [])
+      return size ? [{ size, items: members.toSorted(byWorth).map(({ item }) => item) }] : []
+    }),
     total: Number(rows[0]?.total ?? 0),
   }
 }
 
-async function readDuplicateItems(db: Knex, ids: string[]): Promise<Map<string, DuplicateItem>> {
+interface Member {
+  item: DuplicateItem
+  movements: number
+}
+
+/** What the shop lives with comes first: most pieces, then a reorder point, then a history, then the older. */
+function byWorth(one: Member, other: Member): number {
+  return (
+    other.item.onHand - one.item.onHand ||
+    other.item.reorderPoints - one.item.reorderPoints ||
+    other.movements - one.movements ||
+    Number(one.item.id) - Number(other.item.id)
+  )
+}
+
+async function readDuplicateItems(db: Knex, ids: string[]): Promise<Map<string, Member>> {
   const rows = await db('items')
     .whereRaw('id = any(?::bigint[])', [ids])
     .select('id', 'code', 'maker', 'part_number', 'description', 'is_tracked_by_piece')
     .select(
       db.raw(`(select coalesce(sum(on_hand), 0)::int from stock_levels where item_id = items.id) as on_hand`),
+      db.raw(`(select count(*)::int from reorder_points where item_id = items.id) as reorder_points`),
+      db.raw(`(select count(*)::int from movements where item_id = items.id) as movements`),
     )
   return new Map(
     rows.map((row) => [
       row.id,
       {
-        id: row.id,
-        code: row.code,
-        maker: row.maker,
-        partNumber: row.part_number,
-        description: row.description,
-        isTrackedByPiece: row.is_tracked_by_piece,
-        onHand: row.on_hand,
+        item: {
+          id: row.id,
+          code: row.code,
+          maker: row.maker,
+          partNumber: row.part_number,
+          description: row.description,
+          isTrackedByPiece: row.is_tracked_by_piece,
+          onHand: row.on_hand,
+          reorderPoints: row.reorder_points,
+        },
+        movements: row.movements,
       },
     ]),
   )

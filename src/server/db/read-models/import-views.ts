@@ -10,7 +10,7 @@ import type {
 } from '@/schemas/import'
 import type { ImportKind } from '@/schemas/import-fields'
 import { listedProblems } from '@/schemas/import-limits'
-import type { ImportColumn } from '@/schemas/import-mapping'
+import type { DecimalOrigin, DecimalSign, ImportColumn, ImportDefaults } from '@/schemas/import-mapping'
 import type { PageQuery } from '@/schemas/paging'
 import { enumFromDb } from '../enum-case'
 import { type KeyPage, readKeyPage } from '../key-page'
@@ -36,6 +36,7 @@ export async function readImportView(db: Knex, id: string): Promise<ImportRespon
   return {
     ...listRow(row),
     columns: row.headings === null ? [] : (row.headings as ImportColumn[]),
+    defaults: row.defaults as ImportDefaults,
     rejected: row.state === 'reading' ? [] : rejected.flatMap(({ problems }) => rejection(problems)),
     warnings: row.warnings as RowProblem[],
   }
@@ -68,6 +69,8 @@ function listRow(row: JoinedRow): ImportListRow {
     fileName: row.file_name,
     fileSizeBytes: Number(row.file_size_bytes),
     unit: row.unit === 'in' ? 'in' : 'mm',
+    decimals: row.decimals as DecimalSign | null,
+    decimalsOrigin: row.decimals_origin as DecimalOrigin | null,
     encoding: row.encoding,
     delimiter: row.delimiter,
     rowsRead: row.rows_read,

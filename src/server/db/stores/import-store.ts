@@ -2,7 +2,13 @@ import type { Knex } from 'knex'
 import type { LengthUnit } from '@/core/units/length-unit'
 import type { ImportState, RejectChoice, RowOutcome, RowProblem } from '@/schemas/import'
 import type { ImportKind } from '@/schemas/import-fields'
-import type { ImportColumn, ImportMapping } from '@/schemas/import-mapping'
+import type {
+  DecimalOrigin,
+  DecimalSign,
+  ImportColumn,
+  ImportDefaults,
+  ImportMapping,
+} from '@/schemas/import-mapping'
 import { enumFromDb, enumToDb } from '../enum-case'
 import type { ImportsRow } from '../row-types'
 
@@ -12,7 +18,11 @@ export interface ImportRecord {
   kind: ImportKind
   state: ImportState
   unit: LengthUnit
+  /** Null until the file has been looked at, unless they were set. */
+  decimals: DecimalSign | null
+  decimalsOrigin: DecimalOrigin | null
   mapping: ImportMapping
+  defaults: ImportDefaults
   rejects: RejectChoice | null
   fileName: string
   filePath: string | null
@@ -24,7 +34,10 @@ export interface ImportRecord {
 export interface NewImport {
   kind: ImportKind
   unit: LengthUnit
+  /** As the person set them. */
+  decimals?: DecimalSign | undefined
   mapping: ImportMapping
+  defaults: ImportDefaults
   fileName: string
   fileSizeBytes: number
   filePath: string
@@ -36,7 +49,9 @@ export async function createImport(trx: Knex, given: NewImport): Promise<string>
     .insert({
       kind: enumToDb(given.kind),
       unit: given.unit,
+      ...decimalColumns(given.decimals),
       mapping: JSON.stringify(given.mapping),
+      defaults: JSON.stringify(given.defaults),
       file_name: given.fileName,
       file_size_bytes: given.fileSizeBytes,
       file_path: given.filePath,
@@ -95,6 +110,8 @@ async function updateClaimed(
 export interface SurveyNotes {
   encoding: string
   delimiter: string
+  decimals: DecimalSign
+  decimalsOrigin: DecimalOrigin
   columns: ImportColumn[]
   headingLine: number
   rows: number
@@ -104,6 +121,8 @@ export function noteSurvey(db: Knex, claim: ImportClaim, survey: SurveyNotes): P
   return updateClaimed(db, claim, {
     encoding: survey.encoding,
     delimiter: survey.delimiter,
+    decimals: survey.decimals,
+    decimals_origin: survey.decimalsOrigin,
     headings: JSON.stringify(survey.columns),
     heading_line: survey.headingLine,
     rows_total: survey.rows,
@@ -178,7 +197,12 @@ export async function markCancelled(trx: Knex, id: string): Promise<void> {
 export async function markReading(
   trx: Knex,
   id: string,
-  change: { unit: LengthUnit; mapping: ImportMapping },
+  change: {
+    unit: LengthUnit
+    decimals?: DecimalSign | undefined
+    mapping: ImportMapping
+    defaults: ImportDefaults
+  },
 ): Promise<void> {
   await trx('imports')
     .where('id', id)
@@ -186,11 +210,18 @@ export async function markReading(
       state: 'reading',
       attempt: trx.raw('attempt + 1'),
       unit: change.unit,
+      ...decimalColumns(change.decimals),
       mapping: JSON.stringify(change.mapping),
+      defaults: JSON.stringify(change.defaults),
       rows_read: 0,
       error: null,
       updated_at: trx.fn.now(),
     })
+}
+
+/** Of decimals that are set; nothing where they are not. */
+function decimalColumns(decimals: DecimalSign | undefined): Record<string, string> {
+  return decimals ? { decimals, decimals_origin: 'set' } : {}
 }
 
 /** Of an import held by `lockImport`. */
@@ -233,7 +264,10 @@ function fromRow(row: ImportsRow): ImportRecord {
     kind: enumFromDb(row.kind) as ImportKind,
     state: row.state as ImportState,
     unit: row.unit as LengthUnit,
+    decimals: row.decimals as DecimalSign | null,
+    decimalsOrigin: row.decimals_origin as DecimalOrigin | null,
     mapping: (row.mapping ?? {}) as ImportMapping,
+    defaults: row.defaults as ImportDefaults,
     rejects: row.rejects as RejectChoice | null,
     fileName: row.file_name,
     filePath: row.file_path,

@@ -89,7 +89,7 @@ class ImportCheck {
   ) {}
 
   async run(): Promise<void> {
-    const { sources, reading } = await importSettings(this.found)
+    const { sources, reading } = await importSettings(withoutGuess(this.found))
     const path = this.found.filePath
     if (path === null) throw new ImportFileError('The uploaded file is gone. Upload it again.')
     const survey = await surveyFile(path, sources, reading, () => this.stillOurs())
@@ -97,7 +97,11 @@ class ImportCheck {
       await held(noteSurvey(trx, this.claim, { ...survey.format, ...survey }))
       await removeImportRows(trx, this.found.id)
     })
-    const reader = new RowReader(survey.columns, reading)
+    const reader = new RowReader(survey.columns, {
+      ...reading,
+      decimalComma: survey.decimals === 'comma',
+      decimalsOrigin: survey.decimalsOrigin,
+    })
     await this.stageRows(path, survey, reader)
     await analyzeImportRows(db())
     await this.finish(survey.columns)
@@ -160,6 +164,11 @@ class ImportCheck {
       )
     })
   }
+}
+
+/** What was guessed of the file before is guessed anew: other columns may tell more. */
+function withoutGuess(found: ImportRecord): ImportRecord {
+  return found.decimalsOrigin === 'set' ? found : { ...found, decimals: null, decimalsOrigin: null }
 }
 
 export function headingOf(of: ImportRecord, columns: readonly ImportColumn[], field: string): string {

@@ -7,6 +7,7 @@ import { readShopSettings } from '../../db/stores/shop-settings-store'
 import { inTransaction } from '../../db/transaction'
 import { checkMapping } from '../../imports/column-mapping'
 import { nonTextKind, readHead } from '../../imports/encoding'
+import { checkDefaults } from '../../imports/import-defaults'
 import { ImportFileError } from '../../imports/import-file-error'
 import { type ReceivedUpload, receiveUpload } from '../../imports/receive-upload'
 import { headingsOfHead } from '../../imports/survey-file'
@@ -43,9 +44,21 @@ export async function createImport(actor: Actor, upload: Request): Promise<{ id:
   }
 }
 
-/** Of a form everything is text: an empty part was left out, and the mapping is JSON. */
-function parseForm({ kind, unit, mapping }: ReceivedUpload['fields']): CreateImportRequest {
-  const values = { kind, unit: unit || undefined, mapping: mapping ? jsonOf(mapping) : undefined }
+/** Of a form everything is text: an empty part was left out, and the mapping and the defaults are JSON. */
+function parseForm({
+  kind,
+  unit,
+  decimals,
+  mapping,
+  defaults,
+}: ReceivedUpload['fields']): CreateImportRequest {
+  const values = {
+    kind,
+    unit: unit || undefined,
+    decimals: decimals || undefined,
+    mapping: mapping ? jsonOf('mapping', mapping, 'column to field') : undefined,
+    defaults: defaults ? jsonOf('defaults', defaults, 'field to value') : undefined,
+  }
   const parsed = createImportRequestSchema.safeParse(values)
   if (parsed.success) return parsed.data
   throw new AppError('wrong-shape', 'Some fields cannot be taken as they are.', {
@@ -53,13 +66,17 @@ function parseForm({ kind, unit, mapping }: ReceivedUpload['fields']): CreateImp
   })
 }
 
-function jsonOf(text: string): unknown {
+function jsonOf(path: 'mapping' | 'defaults', text: string, shape: string): unknown {
   try {
     return JSON.parse(text)
   } catch {
-    throw new AppError('wrong-shape', 'The mapping is not JSON.', {
-      errors: [{ path: 'mapping', message: 'Send a JSON object: column to field.' }],
-    })
+    throw new AppError(
+      'wrong-shape',
+      path === 'mapping' ? 'The mapping is not JSON.' : 'The defaults are not JSON.',
+      {
+        errors: [{ path, message: `Send a JSON object: ${shape}.` }],
+      },
+    )
   }
 }
 
@@ -70,7 +87,8 @@ async function refuseUnreadable(
   const head = await readHead(path)
   const other = nonTextKind(head)
   if (other) throw unreadable(`This is ${other}, not CSV. Save the table as CSV and upload that.`)
-  const { sources } = await importSettings(request)
+  checkDefaults(request.kind, request.defaults)
+  const { sources } = await importSettings({ ...request, decimals: null, decimalsOrigin: null })
   try {
     checkMapping(request.kind, request.mapping, headingsOfHead(head, sources))
   } catch (error) {

@@ -8,7 +8,7 @@ import type { ReadingSettings } from '../../imports/row-reader'
 
 /** By what a file's columns are known and its cells are read: the import's own say, and the shop's. */
 export async function importSettings(
-  of: Pick<ImportRecord, 'kind' | 'unit' | 'mapping'>,
+  of: Pick<ImportRecord, 'kind' | 'unit' | 'decimals' | 'decimalsOrigin' | 'mapping' | 'defaults'>,
 ): Promise<{ sources: MappingSources; reading: ReadingSettings }> {
   const shop = await readShopSettings(db())
   const kept = await readKeptMappings(db(), of.kind)
@@ -17,7 +17,9 @@ export async function importSettings(
     reading: {
       kind: of.kind,
       unit: of.unit,
-      decimalComma: shop.decimalComma,
+      decimalComma: of.decimals ? of.decimals === 'comma' : shop.decimalComma,
+      decimalsOrigin: of.decimalsOrigin ?? 'shop',
+      defaults: of.defaults,
       currencyDecimals: currencyDecimals(shop.currency),
     },
   }

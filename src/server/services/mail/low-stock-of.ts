@@ -1,4 +1,5 @@
 import { itemPagePath } from '@/lib/catalogue-paths'
+import { sizeWords } from '@/lib/size-words'
 import type { AlertResponse } from '@/schemas/reordering'
 import type { Database } from '../../db/connection'
 import { findCrib } from '../../db/stores/crib-store'
@@ -13,7 +14,7 @@ export async function lowStockOf(
   alerts: readonly AlertResponse[],
 ): Promise<LowStock> {
   const crib = await findCrib(db, cribId)
-  const { shopName } = await readShopSettings(db)
+  const { shopName, lengthUnit } = await readShopSettings(db)
   const site = env().publicUrl.replace(/\/$/, '')
   return {
     shopName,
@@ -21,6 +22,7 @@ export async function lowStockOf(
     listUrl: `${site}/alerts`,
     lines: alerts.map((alert) => ({
       ...alert,
+      description: alert.description || (alert.size ? sizeWords(alert.size, lengthUnit) : ''),
       url: `${site}${alert.itemKind ? itemPagePath(alert.itemKind, alert.itemId) : '/alerts'}`,
       isOverMeanwhile: alert.closedAt !== null,
     })),
