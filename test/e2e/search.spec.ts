@@ -149,7 +149,12 @@ test('a machine’s taper and its set-up’s window leave what goes in', async (
   const crib = await signedInAs('cribManager')
   const taper = uniqueCode('BT')
   const machine = { code: uniqueCode('M'), name: 'Vertical mill', taper, gaugeLineToTableMm: 600 }
-  const made = await crib.post('/api/machines', { ...machine, zTravelMm: 450, maximumRpm: 12_000 })
+  const made = await crib.post('/api/machines', {
+    ...machine,
+    zTravelMm: 450,
+    maximumRpm: 12_000,
+    spindleNoseDiameterMm: 80,
+  })
   // Over 436 with 25 to spare a tool may be 139 long; what reaches is 139.5 and more.
   const heights = { highestMm: 436, lowestTipMm: 20, retractClearanceMm: 25 }
   const setUp = await crib.post('/api/set-ups', { machineId: made.body.id, name: 'Tall vise', ...heights })
@@ -163,6 +168,8 @@ test('a machine’s taper and its set-up’s window leave what goes in', async (
   await crib.patch(`/api/holders/${rows.necked.holderId}`, { version, taper })
   await page.reload()
   await expect(optionOf(page, rows.thickCode)).toContainText('Stick-out to set')
+  const check = optionOf(page, rows.thickCode).getByRole('link', { name: /^Check and draw/ })
+  await expect(check).toHaveAttribute('href', /h\.spindle=80&/)
   await choice.selectOption(`setup:${setUp.body.id}`)
   await expect(page).toHaveURL(/setup=\d+/)
   await expect(page.getByRole('region', { name: 'Falls short' })).toContainText(

@@ -70,7 +70,7 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
         <div className="flex flex-wrap items-center gap-2">
           {place === null ? null : <KeepAssembly assembly={assembly} listing={listing} />}
           <ButtonLink
-            href={reachCheckPath(assembly, draft, reading)}
+            href={reachCheckPath(assembly, listing, reading)}
             prefetch={false}
             className="max-lg:min-h-16 max-lg:flex-1"
             aria-label={`Check and draw ${name}`}
