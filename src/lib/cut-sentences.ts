@@ -2,7 +2,8 @@ import type { CutAnswer, CutAssumption } from '@/core/cutting/cut-answer'
 import type { StickOutBand, StickOutBands } from '@/core/cutting/stick-out-caution'
 import { decimalText } from '@/core/units/decimal-text'
 import { type LengthUnit, mmPerInch } from '@/core/units/length-unit'
-import { formatRpm } from './format-speed'
+import { formatLength } from './format-length'
+import { formatRpm, formatSpeed } from './format-speed'
 
 /** What was taken for granted, each with what it means. */
 export const assumptionSentences: Readonly<Record<CutAssumption, string>> = {
@@ -48,6 +49,46 @@ export function driveSentence(answer: CutAnswer): string | null {
   return drive.drives
     ? `The spindle drives it at ${formatRpm(spindleRpm)}: ${power}, ${torque}.`
     : `The spindle does not drive it at ${formatRpm(spindleRpm)}: ${power}, ${torque}.`
+}
+
+/** The figures a choice between assemblies is made by, each with its label. */
+export function cutRows(answer: CutAnswer, unit: LengthUnit): [label: string, text: string][] {
+  const held = answer.assumptions.includes('speed-limited') ? ', held to the fastest allowed' : ''
+  const tooth =
+    answer.kind === 'milling'
+      ? ` · ${formatLength(answer.feedPerToothMm, unit, { extraDecimals: 1 })} a tooth${thinningWords(answer.chipThinningFactor)}`
+      : ''
+  return [
+    ...(answer.kind === 'milling'
+      ? ([
+          ['Side load', `${amount(answer.sideLoadN)} N`],
+          ['Deflection at the tip', `${amount(answer.deflectionUm)} µm`],
+        ] as [string, string][])
+      : ([['Thrust', `${amount(answer.thrustN)} N`]] as [string, string][])),
+    [
+      'Spindle speed',
+      `${formatRpm(answer.spindleRpm)} · ${formatSpeed(answer.cuttingSpeedMPerMin, unit)}${held}`,
+    ],
+    ['Feed', `${formatFeed(answer.feedMmPerMin, unit)}${tooth}`],
+    ['Power and torque', driveWords(answer)],
+  ]
+}
+
+function driveWords({ drive, motorPowerKw, powerKw, torqueNm }: CutAnswer): string {
+  if (drive === null || motorPowerKw === null)
+    return `${amount(powerKw)} kW, ${amount(torqueNm)} Nm; what a spindle gives is not known`
+  const words = drive.drives ? 'the spindle drives it' : 'the spindle does not drive it'
+  return `${amount(motorPowerKw)} of ${amount(drive.powerKw)} kW, ${amount(torqueNm)} of ${amount(drive.torqueNm)} Nm: ${words}`
+}
+
+/**
+ * How much the feed a tooth is raised for chips thinner than it; nothing where they are not.
+ *
+ * @example
+ * thinningWords(1.1547) // => ', 1.15 × for thin chips'
+ */
+export function thinningWords(factor: number): string {
+  return factor > 1 ? `, ${decimalText(factor, 2, 2)} × for thin chips` : ''
 }
 
 /**

@@ -6,10 +6,12 @@ import { searchReach } from '@/core/search/search-reach'
 import { type SearchTables, searchTables } from '@/core/search/search-tables'
 import type { SearchAnswer } from '@/core/search/types'
 import { type CribSize, cribOfSize, fullSize } from '../support/crib-of-size'
+import type { Figure } from './runner/bench'
+import { median } from './runner/statistics'
 import { type BareCrib, bareCrib, bareDirect, bareStacks } from './search/bare-loop'
 import { benchFeatures, fortyFeatures, type NamedFeature } from './search/features'
-import { type Figure, middle, processorSeconds } from './search/figures'
 import { libraryTime } from './search/polygon-pairs'
+import { processorSeconds } from './search/processor-seconds'
 import { survivorsOf } from './search/surviving-pairs'
 
 const oneLimitSeconds = 1
@@ -83,7 +85,7 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
     other.push(times[1])
   }
   const answer = search()
-  const seconds = middle(ours)
+  const seconds = median(ours)
   const stacks = allAssemblies(tables, crib, survivors, feature)
   const counted = bare().reaching + stacks.reaching
   if (counted !== answer.reachable)
@@ -103,18 +105,18 @@ function featureFigures(tables: SearchTables, crib: BareCrib, { name, feature }:
     },
     {
       name: `${name}, against a bare loop over those pairs`,
-      value: seconds / middle(other),
+      value: seconds / median(other),
       unit: 'times',
       limit: { atMost: bareRatioLimit },
-      sides: { ours: seconds, other: middle(other), unit: 's' },
+      sides: { ours: seconds, other: median(other), unit: 's' },
       samples,
     },
     {
       name: `${name}, against the bare loop with every holder behind an extension`,
-      value: seconds / (middle(other) + stacks.seconds),
+      value: seconds / (median(other) + stacks.seconds),
       unit: 'times',
       limit: null,
-      sides: { ours: seconds, other: middle(other) + stacks.seconds, unit: 's' },
+      sides: { ours: seconds, other: median(other) + stacks.seconds, unit: 's' },
       samples: 1,
     },
     {
@@ -164,7 +166,7 @@ function windowFigure(tables: SearchTables): Figure {
   for (let at = 0; at < warmUps; at++) inWindow()
   return {
     name: `${name}, one feature in a machine's window`,
-    value: middle(Array.from({ length: samples }, () => processorSeconds(inWindow))),
+    value: median(Array.from({ length: samples }, () => processorSeconds(inWindow))),
     unit: 's',
     limit: { atMost: oneLimitSeconds },
     samples,
@@ -179,7 +181,7 @@ function fortyFigure(tables: SearchTables): Figure {
   const times = Array.from({ length: 3 }, () => processorSeconds(all))
   return {
     name: 'forty features',
-    value: middle(times),
+    value: median(times),
     unit: 's',
     limit: { atMost: fortyLimitSeconds },
     samples: times.length,
@@ -211,6 +213,6 @@ function featureSeconds(size: CribSize): number[] {
   const tables = searchTables(cribOfSize(size), defaultReachSettings)
   return benchFeatures.map(({ feature }) => {
     for (let at = 0; at < warmUps; at++) ask(tables, feature)
-    return middle(Array.from({ length: samples }, () => processorSeconds(() => ask(tables, feature))))
+    return median(Array.from({ length: samples }, () => processorSeconds(() => ask(tables, feature))))
   })
 }

@@ -87,6 +87,50 @@ test('two stand side by side in one drawing, with their figures', async ({ page 
   await expect(compared).toBeHidden()
 })
 
+test('a cut is estimated for every option, with what the spindle has for it, and side by side', async ({
+  page,
+}) => {
+  const { thickCode, necked } = rows
+  const crib = await signedInAs('cribManager')
+  const taper = uniqueCode('BT')
+  const { version } = (await crib.get(`/api/holders/${necked.holderId}`)).body
+  await crib.patch(`/api/holders/${necked.holderId}`, { version, taper })
+  const machine = { code: uniqueCode('M'), name: 'Weak mill', taper, gaugeLineToTableMm: 600, zTravelMm: 450 }
+  const spindlePoints = [{ rpm: 12_000, torqueNm: 0.01 }]
+  const made = await crib.post('/api/machines', { ...machine, maximumRpm: 12_000, spindlePoints })
+  await signIn(page, 'machinist')
+  await page.goto(`/search?depth=25&${asked()}`)
+  await page.getByText('Cut, to estimate load, speed and power').click()
+  await page.getByRole('textbox', { name: /^Cut depth/ }).fill('2')
+  await page.getByRole('button', { name: 'Find', exact: true }).click()
+  await expect(page.getByText('Choose the material too, or leave the cut blank.')).toBeVisible()
+  await page.getByRole('combobox', { name: 'Material cut' }).selectOption('22')
+  await page.getByRole('textbox', { name: /^Cut width/ }).fill('1')
+  await page.getByRole('textbox', { name: /^Feed a tooth/ }).fill('0.04')
+  await page.getByRole('textbox', { name: /^Cutting speed/ }).fill('100')
+  await page.getByRole('button', { name: 'Find', exact: true }).click()
+  await expect(page).toHaveURL(/cut=22&.*ap=2/)
+  // 100 m/min on 4 mm are 7958 rpm; a quarter of the diameter wide, the feed goes up 1.15 times.
+  const estimate = optionOf(page, thickCode).getByRole('region', { name: 'The cut, estimated' })
+  await expect(estimate).toContainText('7 958 rpm')
+  await expect(estimate).toContainText('1.15 × for thin chips')
+  await expect(estimate).toContainText('what a spindle gives is not known')
+  await expect(optionOf(page, necked.cutterCode)).toContainText('The cut is not estimated.')
+  await page.getByRole('combobox', { name: 'Machine and set-up' }).selectOption(`machine:${made.body.id}`)
+  await expect(estimate).toContainText('The spindle does not drive this cut, by estimate')
+  await expectAccessible(page, 'options with a cut estimated')
+  for (const code of [thickCode, necked.cutterCode])
+    await optionOf(page, code)
+      .getByRole('checkbox', { name: /^Compare/ })
+      .check()
+  await page.getByRole('button', { name: 'Side by side' }).click()
+  const compared = page.getByRole('region', { name: 'Side by side' })
+  await expect(compared.getByRole('row', { name: /^Side load, estimated .* N/ })).toBeVisible()
+  await expect(compared.getByRole('row', { name: /^Power and torque, estimated/ })).toContainText(
+    'the spindle does not drive it',
+  )
+})
+
 test('what reaches is kept as an assembly, with the stick-out it was found at', async ({ page }) => {
   const { necked } = rows
   await signIn(page, 'machinist')
@@ -105,7 +149,12 @@ test('a machine’s taper and its set-up’s window leave what goes in', async (
   const crib = await signedInAs('cribManager')
   const taper = uniqueCode('BT')
   const machine = { code: uniqueCode('M'), name: 'Vertical mill', taper, gaugeLineToTableMm: 600 }
-  const made = await crib.post('/api/machines', { ...machine, zTravelMm: 450, maximumRpm: 12_000 })
+  const made = await crib.post('/api/machines', {
+    ...machine,
+    zTravelMm: 450,
+    maximumRpm: 12_000,
+    spindleNoseDiameterMm: 80,
+  })
   // Over 436 with 25 to spare a tool may be 139 long; what reaches is 139.5 and more.
   const heights = { highestMm: 436, lowestTipMm: 20, retractClearanceMm: 25 }
   const setUp = await crib.post('/api/set-ups', { machineId: made.body.id, name: 'Tall vise', ...heights })
@@ -115,9 +164,12 @@ test('a machine’s taper and its set-up’s window leave what goes in', async (
   const choice = page.getByRole('combobox', { name: 'Machine and set-up' })
   await choice.selectOption(`machine:${made.body.id}`)
   await expect(page.getByText('No holder passes what you filter by.')).toBeVisible()
-  await crib.patch(`/api/holders/${rows.necked.holderId}`, { version: 1, taper })
+  const { version } = (await crib.get(`/api/holders/${rows.necked.holderId}`)).body
+  await crib.patch(`/api/holders/${rows.necked.holderId}`, { version, taper })
   await page.reload()
   await expect(optionOf(page, rows.thickCode)).toContainText('Stick-out to set')
+  const check = optionOf(page, rows.thickCode).getByRole('link', { name: /^Check and draw/ })
+  await expect(check).toHaveAttribute('href', /h\.spindle=80&/)
   await choice.selectOption(`setup:${setUp.body.id}`)
   await expect(page).toHaveURL(/setup=\d+/)
   await expect(page.getByRole('region', { name: 'Falls short' })).toContainText(

@@ -26,6 +26,7 @@ export async function createSearchCrib(db: Knex, crib: ApiClient): Promise<Searc
   const thickId = await createCutter(crib, {
     code: thickCode,
     cuttingDiameterMm: 4,
+    fluteCount: 4,
     lengthOfCutMm: 8,
     fluteLengthMm: 8,
     neckDiameterMm: 3.8,

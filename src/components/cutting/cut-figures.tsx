@@ -12,6 +12,7 @@ import {
   cautionAssumptions,
   driveSentence,
   formatFeed,
+  thinningWords,
 } from '@/lib/cut-sentences'
 import { formatLength } from '@/lib/format-length'
 import { formatRpm, formatSpeed } from '@/lib/format-speed'
@@ -44,7 +45,7 @@ export function CutFigures(props: CutFiguresProps) {
         </Figure>
         <Figure name="Feed" value={formatFeed(answer.feedMmPerMin, unit)}>
           {answer.kind === 'milling'
-            ? `${formatLength(answer.feedPerToothMm, unit, { extraDecimals: 1 })} a tooth${thinning(answer.chipThinningFactor)}`
+            ? `${formatLength(answer.feedPerToothMm, unit, { extraDecimals: 1 })} a tooth${thinningWords(answer.chipThinningFactor)}`
             : null}
         </Figure>
         <Figure name="Power at the cutter" value={`${amount(answer.powerKw)} kW`}>
@@ -110,8 +111,4 @@ function Figure({ name, value, children }: { name: string; value: string; childr
       </dd>
     </div>
   )
-}
-
-function thinning(factor: number): string {
-  return factor > 1 ? `, ${decimalText(factor, 2, 2)} × for thin chips` : ''
 }

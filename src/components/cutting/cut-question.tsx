@@ -1,7 +1,6 @@
 'use client'
 
-import { findWorkMaterial, workMaterials } from '@/core/cutting/work-materials'
-import { isoGroupNames, isoGroups } from '@/core/speeds/iso-groups'
+import { findWorkMaterial } from '@/core/cutting/work-materials'
 import type { Substrate } from '@/core/tooling'
 import type { CutQuestionState } from '@/hooks/use-cut-question'
 import { useStartingSpeeds } from '@/hooks/use-starting-speeds'
@@ -9,10 +8,10 @@ import { substrateNames } from '@/lib/cutter-words'
 import { formatSpeedRange, speedInputText, speedUnitNames } from '@/lib/format-speed'
 import { useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
-import { controlClass, Field } from '../ui/field'
 import { LengthField } from '../ui/length-field'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { WorkMaterialField } from './work-material-field'
 
 export interface CutQuestionProps {
   question: CutQuestionState
@@ -37,29 +36,11 @@ export function CutQuestion({
   return (
     <div className="flex flex-col gap-3">
       <div className="grid items-start gap-4 sm:grid-cols-2 lg:grid-cols-3">
-        <Field label="Material cut" className="sm:col-span-2 lg:col-span-1">
-          {(wiring) => (
-            <select
-              {...wiring}
-              className={controlClass}
-              value={draft.materialNumber}
-              onChange={(event) => type({ materialNumber: event.target.value })}
-            >
-              <option value="">None chosen</option>
-              {isoGroups.map((group) => (
-                <optgroup key={group} label={`${group} · ${isoGroupNames[group]}`}>
-                  {workMaterials
-                    .filter(({ isoGroup }) => isoGroup === group)
-                    .map(({ number, name }) => (
-                      <option key={number} value={number}>
-                        {name}
-                      </option>
-                    ))}
-                </optgroup>
-              ))}
-            </select>
-          )}
-        </Field>
+        <WorkMaterialField
+          className="sm:col-span-2 lg:col-span-1"
+          value={draft.materialNumber}
+          onChoose={(materialNumber) => type({ materialNumber })}
+        />
         <TextField
           label="Cutting speed"
           symbol={speedUnitNames[unit]}

@@ -9,7 +9,7 @@ export const toolSlots = ['cutter', 'holder', 'collet', 'extension'] as const
 export type ToolSlot = (typeof toolSlots)[number]
 
 /** How what is typed in a field is read. `choice` and `text` are taken as they stand. */
-export type FieldKind = 'length' | 'lengthOrZero' | 'angle' | 'number' | 'choice' | 'text'
+export type FieldKind = 'length' | 'lengthOrZero' | 'angle' | 'number' | 'speed' | 'choice' | 'text'
 
 export interface ReachField {
   group: FieldGroup

@@ -3,7 +3,9 @@ import { type LengthUnit, lengthDecimals } from '@/core/units/length-unit'
 import { parseAngle } from '@/core/units/parse-angle'
 import { parseDecimal } from '@/core/units/parse-decimal'
 import { parseLength } from '@/core/units/parse-length'
+import { parseSpeed } from '@/core/units/parse-speed'
 import { lengthInputText } from '@/lib/format-length'
+import { speedInputText } from '@/lib/format-speed'
 import type { FieldKind } from './reach-fields'
 
 /** How the person reads and writes figures. */
@@ -12,7 +14,7 @@ export interface Reading {
   decimalComma: boolean
 }
 
-/** A figure in millimetres, degrees or newtons; a word where the field holds one; null where nothing was typed. */
+/** A figure in millimetres, degrees, newtons or m/min; a word where the field holds one; null where nothing was typed. */
 export type FieldValue = number | string | null
 
 export type FieldRead = { ok: true; value: FieldValue } | { ok: false; message: string }
@@ -31,6 +33,10 @@ export function readField(kind: FieldKind, text: string, reading: Reading): Fiel
       const read = parseAngle(written, reading)
       return read.ok ? { ok: true, value: read.deg } : read
     }
+    case 'speed': {
+      const read = parseSpeed(written, reading)
+      return read.ok ? { ok: true, value: read.mPerMin } : read
+    }
     case 'number': {
       const read = parseDecimal(written, reading)
       return read.ok ? { ok: true, value: read.value } : read
@@ -47,6 +53,7 @@ export function fieldText(kind: FieldKind, value: FieldValue, reading: Reading):
   if (typeof value === 'string') return value
   if (kind === 'length' || kind === 'lengthOrZero')
     return lengthInputText(value, reading.unit, { decimalComma: reading.decimalComma })
+  if (kind === 'speed') return speedInputText(value, reading.unit, { decimalComma: reading.decimalComma })
   const text = decimalText(value, 0, lengthDecimals)
   return reading.decimalComma ? text.replace('.', ',') : text
 }

@@ -13,6 +13,7 @@ import {
   type SearchedAssembly,
   sceneOfAssembly,
 } from './listed-assembly'
+import { OptionCut } from './option-cut'
 import { OptionDrawing } from './option-drawing'
 
 export interface AssemblyItemProps {
@@ -32,6 +33,7 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
   const name = `${cutter.code} in ${assembly.holder.code}`
   const scene = sceneOfAssembly(assembly, listing)
   const isPicked = isChosen(key)
+  const cut = place === null ? null : <OptionCut estimate={assembly.estimate} unit={unit} />
   return (
     <li className="border-hairline grid grid-cols-[6.5rem_minmax(0,1fr)] gap-x-4 gap-y-3 border-b py-4 lg:grid-cols-[7.5rem_minmax(0,1fr)_17rem]">
       <div className="max-lg:row-span-1">
@@ -56,17 +58,19 @@ export function AssemblyItem({ assembly, place, listing, children }: AssemblyIte
           material={draft.choices.material}
           unit={unit}
         />
+        <div className="max-lg:hidden">{cut}</div>
         <div className="max-lg:hidden">{children}</div>
         <Cautions cautions={cautions} className="max-lg:hidden" />
       </div>
       <div className="flex min-w-0 flex-col gap-2 max-lg:col-span-2">
+        <div className="lg:hidden">{cut}</div>
         <FetchList assembly={assembly} />
         <div className="lg:hidden">{children}</div>
         <Cautions cautions={cautions} className="lg:hidden" />
         <div className="flex flex-wrap items-center gap-2">
           {place === null ? null : <KeepAssembly assembly={assembly} listing={listing} />}
           <ButtonLink
-            href={reachCheckPath(assembly, draft, reading)}
+            href={reachCheckPath(assembly, listing, reading)}
             prefetch={false}
             className="max-lg:min-h-16 max-lg:flex-1"
             aria-label={`Check and draw ${name}`}

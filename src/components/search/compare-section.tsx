@@ -2,6 +2,7 @@
 
 import { useEffect, useRef } from 'react'
 import { decimalText } from '@/core/units/decimal-text'
+import { cutRows } from '@/lib/cut-sentences'
 import { formatLength } from '@/lib/format-length'
 import { formatMoney } from '@/lib/format-money'
 import { Button } from '../ui/button'
@@ -73,7 +74,7 @@ function nameOf({ cutter, holder }: SearchedAssembly): string {
 function CompareTable({ assemblies, listing }: Omit<CompareSectionProps, 'onClose'>) {
   const size = (mm: number) => formatLength(mm, listing.unit)
   const stiffest = Math.min(...assemblies.map(({ stiffness }) => stiffness.complianceUmPerN))
-  const rows: [string, (assembly: SearchedAssembly) => string][] = [
+  const rows: CompareRow[] = [
     ['Stick-out to set', ({ stickOut }) => size(stickOut.usedMm)],
     ['Gauge length', ({ reach }) => size(reach.gaugeLengthMm)],
     ['Reaches', ({ reach }) => (reach.reachMm === null ? 'without limit' : size(reach.reachMm))],
@@ -84,9 +85,8 @@ function CompareTable({ assemblies, listing }: Omit<CompareSectionProps, 'onClos
     ],
     ['Stick-out to diameter', ({ stiffness }) => decimalText(stiffness.stickOutToDiameter, 1, 1)],
     ['In stock', ({ stock }) => (stock.available > 0 ? `${stock.available}` : 'not all of it')],
-    ...(assemblies.some(({ cost }) => cost)
-      ? [['Cost of its parts', costText] as [string, typeof costText]]
-      : []),
+    ...cutRowsOf(assemblies, listing),
+    ...(assemblies.some(({ cost }) => cost) ? [['Cost of its parts', costText] as CompareRow] : []),
   ]
   return (
     <div className="overflow-x-auto">
@@ -119,6 +119,24 @@ function CompareTable({ assemblies, listing }: Omit<CompareSectionProps, 'onClos
       </table>
     </div>
   )
+}
+
+type CompareRow = [label: string, text: (assembly: SearchedAssembly) => string]
+
+/** The cut asked for, as estimated for each; in a hole a mill and a drill have not all figures in common. */
+function cutRowsOf(
+  assemblies: readonly SearchedAssembly[],
+  { unit }: Pick<AssemblyListing, 'unit'>,
+): CompareRow[] {
+  if (assemblies.every(({ estimate }) => estimate === null)) return []
+  const rowsOf = ({ estimate }: SearchedAssembly) =>
+    new Map(estimate?.answer ? cutRows(estimate.answer, unit) : [])
+  const labels = new Set(assemblies.flatMap((assembly) => [...rowsOf(assembly).keys()]))
+  if (labels.size === 0) return [['The cut, estimated', ({ estimate }) => estimate?.sentence ?? '']]
+  return [...labels].map((label) => [
+    `${label}, estimated`,
+    (assembly) => rowsOf(assembly).get(label) ?? assembly.estimate?.sentence ?? '',
+  ])
 }
 
 function costText({ cost }: SearchedAssembly): string {

@@ -26,15 +26,15 @@ test('it leaves out what was not asked, and speaks in the reader’s unit', () =
 })
 
 test('it says what is looked through only where that is not everything', () => {
-  const texts = { stepover: '', cusp: '', ratio: '' }
-  expect(filterWords({ choices: noChoices, texts })).toBeNull()
+  const texts = { stepover: '', cusp: '', ratio: '', ap: '', ae: '', fz: '', vc: '' }
+  expect(filterWords({ choices: noChoices, texts, cutMaterial: null })).toBeNull()
   const choices = {
     ...noChoices,
     material: 'Grey iron',
     forms: ['ball' as const],
     substrates: ['hss' as const],
   }
-  expect(filterWords({ choices, texts: { ...texts, ratio: '6' } })).toBe(
-    'in Grey iron; only ball end mill; only of HSS; at most 6 × DC out',
+  expect(filterWords({ choices, texts: { ...texts, ratio: '6' }, cutMaterial: 22 })).toBe(
+    'in Grey iron; only ball end mill; only of HSS; at most 6 × DC out; a cut estimated for each',
   )
 })

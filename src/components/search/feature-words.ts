@@ -16,7 +16,11 @@ export function featureWords(feature: Feature, purpose: SearchPurpose | null, un
 }
 
 /** What else was chosen: the material, and what of the crib is looked through; null where nothing was. */
-export function filterWords({ choices, texts }: Pick<SearchDraft, 'choices' | 'texts'>): string | null {
+export function filterWords({
+  choices,
+  texts,
+  cutMaterial,
+}: Pick<SearchDraft, 'choices' | 'texts' | 'cutMaterial'>): string | null {
   const words = [
     choices.material === null ? null : `in ${choices.material}`,
     choices.forms.length === 0
@@ -26,6 +30,7 @@ export function filterWords({ choices, texts }: Pick<SearchDraft, 'choices' | 't
       ? null
       : `only of ${choices.substrates.map((substrate) => substrateNames[substrate]).join(', ')}`,
     texts.ratio.trim() === '' ? null : `at most ${texts.ratio.trim()} × DC out`,
+    cutMaterial === null ? null : 'a cut estimated for each',
   ].filter((word) => word !== null)
   return words.length === 0 ? null : words.join('; ')
 }

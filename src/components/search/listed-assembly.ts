@@ -1,7 +1,7 @@
 import type { Clearances, Feature } from '@/core/reach/types'
+import { askedFeature } from '@/core/search/asked-feature'
 import { decimalText } from '@/core/units/decimal-text'
 import { type LengthUnit, lengthDecimals } from '@/core/units/length-unit'
-import { askedFeature } from '@/lib/asked-feature'
 import type { ReachSearchBody, SearchNearMissResponse, SearchOptionResponse } from '@/schemas/reach-search'
 import { draftQuery } from '../reach/reach-query'
 import type { Reading } from '../reach/read-field'
@@ -17,6 +17,8 @@ export interface AssemblyListing {
   draft: SearchDraft
   unit: LengthUnit
   clearances: Clearances
+  /** Of the machine chosen; null where there is none, or where it is not known. */
+  spindleNoseDiameterMm: number | null
   isChosen: (key: string) => boolean
   /** No more fit side by side. */
   isFull: boolean
@@ -51,8 +53,15 @@ const pieceFields = [
   ['overallLengthMm', 'c.OAL'],
 ] as const
 
-/** The reach check of an assembly, ready in its address; of a measured piece with the piece's own figures. */
-export function reachCheckPath(assembly: SearchedAssembly, draft: SearchDraft, reading: Reading): string {
+/**
+ * The reach check of an assembly, ready in its address; of a measured piece with the piece's own figures, and in the
+ * spindle of the machine chosen.
+ */
+export function reachCheckPath(
+  assembly: SearchedAssembly,
+  { draft, spindleNoseDiameterMm }: Pick<AssemblyListing, 'draft' | 'spindleNoseDiameterMm'>,
+  reading: Reading,
+): string {
   const { cutter, holder, collet, extension, stickOut } = assembly
   const query = new URLSearchParams(
     draftQuery(
@@ -74,6 +83,8 @@ export function reachCheckPath(assembly: SearchedAssembly, draft: SearchDraft, r
       if (figure !== null) query.set(name, decimalText(figure, 0, lengthDecimals))
     }
   }
+  if (spindleNoseDiameterMm !== null)
+    query.set('h.spindle', decimalText(spindleNoseDiameterMm, 0, lengthDecimals))
   query.set('stickout', decimalText(stickOut.usedMm, 0, lengthDecimals))
   return `/reach?${query}`
 }
@@ -84,7 +95,7 @@ export function keptOption(assembly: SearchedAssembly, { feature, request }: Ass
   const { shankMm, holderMm } = request.clearances ?? {}
   const isOwnClearance = shankMm != null || holderMm != null
   return {
-    feature: askedFeature(feature, request.purpose ?? null),
+    feature: askedFeature({ feature, purpose: request.purpose ?? null }),
     cutter: cutter.piece ? { pieceId: cutter.piece.id } : { id: cutter.id },
     holder: { id: holder.id },
     collet: collet && { id: collet.id },

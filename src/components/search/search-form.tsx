@@ -19,6 +19,7 @@ import { classNames } from '../ui/class-names'
 import { LengthField } from '../ui/length-field'
 import { SelectField } from '../ui/select-field'
 import { TextField } from '../ui/text-field'
+import { CutFields } from './cut-fields'
 import { compileSearch, type SearchDraft, type SearchText, searchTexts } from './search-question'
 
 export interface SearchFormProps {
@@ -145,6 +146,13 @@ export function SearchForm({ draft: asked, reading, settings, refused, onAsk }: 
             onChange={(event) => setText('ratio')(event.target.value)}
           />
         </FieldsFold>
+        <CutFields
+          draft={draft}
+          reading={reading}
+          errors={errors}
+          onMaterial={(cutMaterial) => set({ cutMaterial })}
+          onText={(name, typed) => setText(name)(typed)}
+        />
       </div>
       <div className="bg-sheet border-hairline sticky bottom-0 border-t px-4 py-3">
         <Button type="submit" variant="primary" size="counter" className="w-full">

@@ -22,7 +22,7 @@ function errorsOf(query: string) {
 
 const whole = [
   'depth=25&draft=2&opening=12&corner=3&floor=0&obstacles=5x8&for=finishing&stepover=0.3&cusp=0.01&ratio=6',
-  'rank=cost&crib=2&machine=3&stock=yes&forms=square,ball&tool=carbide&material=Tool+steel',
+  'cut=22&ap=2&ae=1&fz=0.04&vc=100&rank=cost&crib=2&machine=3&stock=yes&forms=square,ball&tool=carbide&material=Tool+steel',
 ].join('&')
 
 describe('a search in the address', () => {
@@ -39,6 +39,7 @@ describe('a search in the address', () => {
       },
       purpose: 'finishing',
       scallop: { stepoverMm: 0.3, maximumHeightMm: 0.01 },
+      cut: { materialNumber: 22, depthOfCutMm: 2, stepoverMm: 1, feedMm: 0.04, cuttingSpeedMPerMin: 100 },
       where: {
         cribId: '2',
         machineId: '3',
@@ -61,6 +62,16 @@ describe('a search in the address', () => {
       expect(requestOf(whole, reading).feature).toEqual(requestOf(whole).feature)
     }
     expect(requestOf(whole, inches).sentenceUnit).toBe('in')
+  })
+
+  test('it asks for a cut that is whole, and says what is missing of one that is not', () => {
+    expect(requestOf('depth=25').cut).toBeNull()
+    expect(Object.keys(errorsOf('depth=25&cut=22&ap=2'))).toEqual(['cut.stepoverMm', 'cut.feedMm'])
+    expect(errorsOf('depth=25&ap=2&ae=1&fz=0.04')).toHaveProperty(['cut.materialNumber'])
+    expect(requestOf('feature=hole&depth=25&diameter=8&cut=2&fz=0.2').cut).toMatchObject({
+      feedMm: 0.2,
+      depthOfCutMm: null,
+    })
   })
 
   test('it lists every holder of the one cutter it names', () => {

@@ -1,3 +1,4 @@
+import { findWorkMaterial } from '@/core/cutting/work-materials'
 import type { ReachSettings } from '@/core/reach/types'
 import { type CutterForm, cutterForms, type Substrate, substrates } from '@/core/tooling'
 import {
@@ -23,9 +24,17 @@ export const searchTexts = {
     kind: 'number',
     path: 'where.longestStickOutToDiameter',
   },
+  ap: { label: 'Cut depth', kind: 'length', path: 'cut.depthOfCutMm' },
+  ae: { label: 'Cut width', kind: 'length', path: 'cut.stepoverMm' },
+  fz: { label: 'Feed a tooth', kind: 'length', path: 'cut.feedMm' },
+  vc: { label: 'Cutting speed', kind: 'speed', path: 'cut.cuttingSpeedMPerMin' },
 } as const satisfies Record<string, { label: string; kind: FieldKind; path: string }>
 export type SearchText = keyof typeof searchTexts
 export const searchTextNames = Object.keys(searchTexts) as SearchText[]
+
+/** Those that say what cut is to be estimated, beside its material. */
+export const cutTextNames = ['ap', 'ae', 'fz', 'vc'] as const satisfies readonly SearchText[]
+export const cutMaterialPath = 'cut.materialNumber'
 
 /** What is chosen, not typed: it asks again at once. */
 export interface SearchChoices {
@@ -45,6 +54,8 @@ export interface SearchDraft {
   check: ReachDraft
   purpose: SearchPurpose | null
   texts: Readonly<Record<SearchText, string>>
+  /** Of the cut to be estimated: its number in the table. */
+  cutMaterial: number | null
   choices: SearchChoices
 }
 
@@ -58,7 +69,8 @@ export function searchDraft(query: URLSearchParams, reading: Reading): SearchDra
   const texts = Object.fromEntries(
     searchTextNames.map((name) => [name, typedText(name, query.get(name), reading)]),
   ) as Record<SearchText, string>
-  return { check: askedCheck(query, reading), purpose, texts, choices: searchChoices(query) }
+  const cutMaterial = findWorkMaterial(Number(query.get('cut')))?.number ?? null
+  return { check: askedCheck(query, reading), purpose, texts, cutMaterial, choices: searchChoices(query) }
 }
 
 /** Beside the feature a cutter may be named: what is looked for is then what holds it. */
@@ -101,9 +113,10 @@ function listed<Word extends string>(text: string | null, known: readonly Word[]
 export function searchQuery(draft: SearchDraft, reading: Reading): URLSearchParams {
   const query = new URLSearchParams(draftQuery(draft.check, reading))
   if (draft.purpose) query.set('for', draft.purpose)
+  if (draft.cutMaterial !== null) query.set('cut', String(draft.cutMaterial))
   for (const name of searchTextNames) {
     const written = draft.texts[name].trim()
-    if (written === '' || (name !== 'ratio' && draft.purpose !== 'finishing')) continue
+    if (written === '' || !isTextAsked(name, draft)) continue
     const { kind } = searchTexts[name]
     const read = readField(kind, written, reading)
     query.set(name, read.ok ? fieldText(kind, read.value, plain) : `${unreadMark}${written}`)
@@ -154,12 +167,13 @@ export function compileSearch(draft: SearchDraft, reading: Reading, settings: Re
   const errors: Record<string, string> = { ...unread }
   const figures = new Map<SearchText, number>()
   for (const name of searchTextNames) {
-    if (name !== 'ratio' && purpose !== 'finishing') continue
+    if (!isTextAsked(name, draft)) continue
     const read = readField(searchTexts[name].kind, draft.texts[name], reading)
     if (!read.ok) errors[searchTexts[name].path] = read.message
     else if (typeof read.value === 'number') figures.set(name, read.value)
   }
   addMissing(draft, feature, figures, errors)
+  addMissingOfCut(draft, feature?.kind === 'hole', errors)
   if (Object.keys(errors).length > 0) return { state: 'refused', errors }
   if (!feature) return { state: 'empty' }
   const [stepoverMm, maximumHeightMm] = [figures.get('stepover'), figures.get('cusp')]
@@ -169,6 +183,7 @@ export function compileSearch(draft: SearchDraft, reading: Reading, settings: Re
       feature,
       purpose,
       scallop: stepoverMm && maximumHeightMm ? { stepoverMm, maximumHeightMm } : null,
+      cut: cutOf(draft, figures),
       clearances: clearances.shankMm === null && clearances.holderMm === null ? null : clearances,
       where: {
         cribId: choices.cribId,
@@ -185,6 +200,41 @@ export function compileSearch(draft: SearchDraft, reading: Reading, settings: Re
       perCutter: cutterId === null ? 1 : null,
       sentenceUnit: reading.unit,
     },
+  }
+}
+
+/** A cusp is asked about of a finished surface alone. */
+function isTextAsked(name: SearchText, { purpose }: Pick<SearchDraft, 'purpose'>): boolean {
+  return (name !== 'stepover' && name !== 'cusp') || purpose === 'finishing'
+}
+
+function cutOf(
+  { cutMaterial }: SearchDraft,
+  figures: ReadonlyMap<SearchText, number>,
+): ReachSearchBody['cut'] {
+  const feedMm = figures.get('fz')
+  if (cutMaterial === null || feedMm === undefined) return null
+  return {
+    materialNumber: cutMaterial,
+    feedMm,
+    depthOfCutMm: figures.get('ap') ?? null,
+    stepoverMm: figures.get('ae') ?? null,
+    cuttingSpeedMPerMin: figures.get('vc') ?? null,
+  }
+}
+
+/** A cut is given whole or not at all; in a hole a drill needs neither depth nor width. */
+function addMissingOfCut(
+  { cutMaterial, texts }: SearchDraft,
+  isHole: boolean,
+  errors: Record<string, string>,
+): void {
+  const isTyped = cutTextNames.some((name) => texts[name].trim() !== '')
+  if (cutMaterial === null && !isTyped) return
+  if (cutMaterial === null) errors[cutMaterialPath] ??= 'Choose the material too, or leave the cut blank.'
+  for (const name of isHole ? (['fz'] as const) : (['ap', 'ae', 'fz'] as const)) {
+    if (texts[name].trim() !== '') continue
+    errors[searchTexts[name].path] ??= `Enter the ${searchTexts[name].label.toLowerCase()}.`
   }
 }
 

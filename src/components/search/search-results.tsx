@@ -1,6 +1,7 @@
 'use client'
 
 import { useState } from 'react'
+import { useMachines, useSetUps } from '@/hooks/use-machines'
 import type { useToolSearch } from '@/hooks/use-tool-search'
 import type {
   ReachSearchBody,
@@ -90,6 +91,7 @@ function Answer({ answer, request, draft, onChoices }: AnswerProps) {
   const { options, nearMisses, reachable, considered } = answer
   const listed = [...options, ...nearMisses]
   const compared = chosen.flatMap((key) => listed.find((assembly) => assembly.key === key) ?? [])
+  const spindleNoseDiameterMm = useSpindleNose(draft.choices)
   const feature = request.feature
   if (!feature) return null
   const listing: AssemblyListing = {
@@ -101,6 +103,7 @@ function Answer({ answer, request, draft, onChoices }: AnswerProps) {
       shankMm: request.clearances?.shankMm ?? reachSettings.shankClearanceMm,
       holderMm: request.clearances?.holderMm ?? reachSettings.holderClearanceMm,
     },
+    spindleNoseDiameterMm,
     isChosen: (key) => chosen.includes(key),
     isFull: chosen.length >= mostCompared,
     onChoose: (key) =>
@@ -152,6 +155,14 @@ function Answer({ answer, request, draft, onChoices }: AnswerProps) {
       ) : null}
     </>
   )
+}
+
+/** Of the machine chosen, or of the one its set-up is on. */
+function useSpindleNose({ machineId, setUpId }: SearchChoices): number | null {
+  const machines = useMachines()
+  const setUps = useSetUps('all')
+  const wantedId = machineId ?? setUps.rows.find(({ id }) => id === setUpId)?.machineId
+  return machines.rows.find(({ id }) => id === wantedId)?.spindleNoseDiameterMm ?? null
 }
 
 const mostCompared = 4

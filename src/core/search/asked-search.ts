@@ -4,6 +4,7 @@ import { overlapToleranceMm } from '@/core/outline/types'
 import { type CheckedDemand, checkedDemand } from '@/core/reach/checked-feature'
 import { checkedClearances } from '@/core/reach/reach-case'
 import type { Clearances, Feature } from '@/core/reach/types'
+import { askedFeature } from './asked-feature'
 import { eachTable } from './each-table'
 import type { SearchTables } from './search-tables'
 import type { GaugeLengthWindow, ScallopLimit, SearchQuestion, SearchTableName } from './types'
@@ -64,18 +65,6 @@ export function askedSearch(tables: SearchTables, question: SearchQuestion): Ask
     limit: whole(question.limit, 'limit', 0),
     nearMissLimit: whole(question.nearMissLimit, 'nearMissLimit', 0),
   }
-}
-
-/**
- * What of a feature a purpose asks: a roughing cutter needs the depth and the opening; corner and floor are the finishing
- * cutter's.
- *
- * @example
- * askedFeature({ feature: { kind: 'wall', depthMm: 5, floorRadiusMm: 1 }, purpose: 'roughing' }).floorRadiusMm // => null
- */
-export function askedFeature({ feature, purpose }: Pick<SearchQuestion, 'feature' | 'purpose'>): Feature {
-  if (purpose !== 'roughing' || feature.kind === 'hole') return feature
-  return { ...feature, insideCornerRadiusMm: null, floorRadiusMm: null }
 }
 
 function askedScallop({ scallop }: SearchQuestion): ScallopLimit | null {

@@ -1,5 +1,5 @@
 import type { ReachRequest } from '@/core/reach/types'
-import { askedFeature } from './asked-search'
+import { askedFeature } from './asked-feature'
 import type { SearchTables } from './search-tables'
 import type { AssemblyParts, SearchQuestion } from './types'
 

@@ -1,7 +1,7 @@
 import polygonClipping, { type Polygon, type Ring } from 'polygon-clipping'
 import type { SearchTables } from '@/core/search/search-tables'
 import type { BareCrib } from './bare-loop'
-import { processorSeconds } from './figures'
+import { processorSeconds } from './processor-seconds'
 import type { Survivor } from './surviving-pairs'
 
 /** A wall and a holder's outline this far out stand for those without end. */

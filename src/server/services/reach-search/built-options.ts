@@ -1,14 +1,14 @@
 import { overlapToleranceMm } from '@/core/outline/types'
 import { reachAnswer } from '@/core/reach/reach-answer'
 import type { Feature } from '@/core/reach/types'
+import { assemblyRequest } from '@/core/search/assembly-request'
 import { searchReach } from '@/core/search/search-reach'
 import type { AssemblyParts, SearchOption } from '@/core/search/types'
 import type { ReachSearchRequest } from '@/schemas/reach-search'
 import type { BuiltAssembly } from '../../db/read-models/built-assemblies'
 import type { CribTables } from './crib-tables'
-import { asMounted } from './mounted-request'
 import type { SearchFilters } from './search-filters'
-import { searchQuestion } from './search-question'
+import { assemblyQuestion, searchQuestion } from './search-question'
 
 export interface BuiltOption extends SearchOption {
   built: BuiltAssembly
@@ -105,8 +105,7 @@ function standingOption(
   body: ReachSearchRequest,
   { limits }: SearchFilters,
 ): BuiltOption | null {
-  const mounted = asMounted(parts, feature, crib.tables, body, limits)
-  if (!mounted) return null
+  const mounted = assemblyRequest(crib.tables, assemblyQuestion(feature, body, limits), parts)
   const answer = reachAnswer({ ...mounted, stickOutMm: built.stickOutMm })
   const { gaugeLengthMm } = limits
   const longest = body.where?.longestStickOutToDiameter

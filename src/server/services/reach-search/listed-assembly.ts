@@ -3,6 +3,7 @@ import { type StickOutBands, stickOutBand } from '@/core/cutting/stick-out-cauti
 import { can } from '@/core/policies/permissions'
 import { reachAnswer } from '@/core/reach/reach-answer'
 import type { ReachAnswer } from '@/core/reach/types'
+import { assemblyRequest } from '@/core/search/assembly-request'
 import type { SearchOption } from '@/core/search/types'
 import type { ToolingKind } from '@/core/stock/kinds'
 import type { CutterGeometry } from '@/core/tooling'
@@ -17,8 +18,8 @@ import type { PiecePlace } from '../../db/read-models/tooling-stock'
 import type { CribTables, CutterSource } from './crib-tables'
 import type { MachineLimits } from './machine-limits'
 import { type MaterialSpeeds, startingSpeed } from './material-speeds'
-import { asMounted } from './mounted-request'
 import type { PartRows } from './named-parts'
+import { assemblyQuestion } from './search-question'
 import { cutCautions, estimatedCut, type SearchedCut } from './searched-cut'
 
 type Feature = NonNullable<ReachSearchRequest['feature']>
@@ -70,9 +71,12 @@ export function listedAssembly(
     (option.extensionIndex === null || extension != null) &&
     (option.extensionColletIndex === null || extensionCollet != null)
   if (!cutter || !holder || !isWhole) return null
-  const mounted = asMounted(option, feature, crib.tables, body, context.limits)
-  if (!mounted) return null
-  const answer = reachAnswer({ ...mounted, stickOutMm: option.stickOutMm })
+  const asked = assemblyQuestion(feature, body, context.limits)
+  const answer = reachAnswer({
+    ...assemblyRequest(crib.tables, asked, option),
+    sideLoadN: body.sideLoadN ?? null,
+    stickOutMm: option.stickOutMm,
+  })
   const parts = partsOf({ cutter, holder, collet, extension, extensionCollet })
   const isExtensionUnchecked =
     option.extensionIndex !== null && tooling.extensions[option.extensionIndex]?.shankDiameterMm == null
