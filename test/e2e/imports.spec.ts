@@ -42,7 +42,7 @@ test('a file is checked, its rejects stand with line, column, value and reason, 
   await page.getByRole('link', { name: 'Rejected rows as CSV' }).click()
   expect((await download).suggestedFilename()).toBe('list-rejects.csv')
 
-  const commit = page.getByRole('button', { name: 'Commit 1' })
+  const commit = page.getByRole('button', { name: 'Bring in 1' })
   await expect(commit).toBeDisabled()
   await page.getByLabel('Leave out the 1 rejected').check()
   await commit.click()
@@ -60,7 +60,7 @@ test('a heading nobody knows is said once, checked again, and known the next tim
   await expectNoFaults(page)
   await page.getByRole('button', { name: 'Check again' }).click()
   await expect(page.getByText('This file would add 1.')).toBeVisible(byWorker)
-  await page.getByRole('button', { name: 'Commit 1' }).click()
+  await page.getByRole('button', { name: 'Bring in 1' }).click()
   await expect(page.getByText('Committed: 1 added.')).toBeVisible(byWorker)
 
   await upload(page, content(uniqueCode('E2E')))
@@ -75,7 +75,7 @@ test('a heading nobody knows is said once, checked again, and known the next tim
 test('what would change stands with before and after', async ({ page }) => {
   const code = uniqueCode('E2E')
   await upload(page, head + row(code))
-  await page.getByRole('button', { name: 'Commit 1' }).click()
+  await page.getByRole('button', { name: 'Bring in 1' }).click()
   await expect(page.getByText('Committed: 1 added.')).toBeVisible(byWorker)
   await upload(page, head + row(code, '3 1/2'))
   await expect(page.getByText('This file would change 1.')).toBeVisible(byWorker)

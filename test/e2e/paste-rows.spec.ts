@@ -25,7 +25,7 @@ test('a block pasted over the list goes through the checks of an import', async 
   await dialog.getByRole('button', { name: 'Check these rows' }).click()
   await expect(page).toHaveURL(/\/imports\/\d+/)
   await expect(page.getByText('pasted-rows.tsv').first()).toBeVisible()
-  await expect(page.getByRole('button', { name: /^Commit/ })).toBeEnabled()
+  await expect(page.getByRole('button', { name: /^Bring in/ })).toBeEnabled()
   const list = await (await page.request.get(`/api/cutters?code=${code}`)).json()
   expect(list.total).toBe(0)
 })

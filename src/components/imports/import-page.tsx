@@ -100,7 +100,7 @@ export function ImportPage({ initial }: { initial: ImportResponse }) {
 }
 
 function headingNote(found: ImportResponse): string {
-  const rows = found.rows === null ? null : `${countText(found.rows)} rows`
+  const rows = found.rows === null ? null : `${countText(found.rows)} ${found.rows === 1 ? 'row' : 'rows'}`
   return [importKindLabels[found.kind], rows, sizeText(found.fileSizeBytes), formatWords(found)]
     .filter(Boolean)
     .join(', ')
