@@ -114,7 +114,7 @@ const itemKindOf = {
   extensions: 'extension',
 } as const
 
-function isItemKind(kind: ImportKind): kind is keyof typeof itemKindOf {
+export function isItemKind(kind: ImportKind): kind is keyof typeof itemKindOf {
   return Object.hasOwn(itemKindOf, kind)
 }
 
@@ -149,11 +149,26 @@ function TakenTable({ rows, look }: { rows: ImportRowResponse[]; look: ValueLook
             </td>
             <td className="max-md:col-span-2">
               {row.changes.length > 0 ? <Changes row={row} look={look} /> : (row.description ?? '')}
+              {row.sizes.length > 0 ? <Sizes row={row} look={look} /> : null}
             </td>
           </tr>
         ))}
       </tbody>
     </table>
+  )
+}
+
+/** As they were read, so that a size that was meant otherwise is seen before it is brought in. */
+function Sizes({ row, look }: { row: ImportRowResponse; look: ValueLook }) {
+  return (
+    <ul className="flex flex-wrap gap-x-4">
+      {row.sizes.map(({ field, value }) => (
+        <li key={field}>
+          <span className="text-ink-soft">{fieldLabel(look.kind, field)} </span>
+          {valueText(field, value, look)}
+        </li>
+      ))}
+    </ul>
   )
 }
 
