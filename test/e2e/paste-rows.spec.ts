@@ -75,3 +75,15 @@ test('a line of headings alone is refused at the rows', async ({ page }) => {
   await rows.fill('Code\tDia\nA\t6\tmore\n')
   await expect(dialog.getByText('1 row has more cells than there are headings')).toBeVisible()
 })
+
+test('rows pasted without headings are all tools, and the choice can be changed', async ({ page }) => {
+  await paste(
+    page,
+    `${uniqueCode('PST')}\tSquare\t6\t12\t57\t6\r\n${uniqueCode('PST')}\tSquare\t8\t19\t63\t8\r\n`,
+  )
+  const dialog = page.getByRole('dialog')
+  await expect(dialog.getByRole('radio', { name: 'a row of the list' })).toBeChecked()
+  await expect(dialog.getByText('2 rows, 6 columns.')).toBeVisible()
+  await dialog.getByRole('radio', { name: 'headings' }).check()
+  await expect(dialog.getByText('1 row, 6 columns.')).toBeVisible()
+})
