@@ -79,6 +79,12 @@ export async function createReorderPoint(
   return listed?.rows.find((row) => row.cribId === cribId) ?? set
 }
 
+/** Whether a first one would put itself over another. */
+export async function hasReorderPoint(itemId: string, cribId: string): Promise<boolean> {
+  const { rows } = await readItemReorderPoints(itemId)
+  return rows.some((row) => row.cribId === cribId)
+}
+
 export interface ItemOfCode {
   id: string
   code: string

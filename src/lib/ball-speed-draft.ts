@@ -208,7 +208,7 @@ function readField(
       return read.ok ? read.mPerMin : read
     }
     case 'rpm': {
-      const read = parseCount(text)
+      const read = parseCount(text, settings)
       return read.ok ? read.count : read
     }
   }

@@ -19,6 +19,8 @@ function bulkSchema<Change extends z.ZodType<{ id: string }>>(change: Change) {
         (changes) => new Set(changes.map(({ id }) => id)).size === changes.length,
         'A row stands here twice.',
       ),
+    /** Says what stands against the changes and makes none. */
+    isRehearsal: z.boolean('Only true or false.').optional(),
   })
 }
 

@@ -116,6 +116,8 @@ export const importRowSchema = z.object({
   itemId: z.string().nullable(),
   code: z.string().nullable(),
   description: z.string().nullable(),
+  /** Of a new item, as they were read: mm, the form by its name. */
+  sizes: z.array(z.object({ field: z.string(), value: z.union([z.string(), z.number()]) })),
   changes: z.array(fieldChangeSchema),
   problems: z.array(rowProblemSchema),
 })

@@ -41,6 +41,17 @@ describe('a change of many rows', () => {
     expect(await now()).toEqual(rows)
   })
 
+  it('changes none in a rehearsal, which answers the rows as they are or what stands against it', async () => {
+    const rehearse = (changes: object[]) => crib.post('/api/cutters/bulk', { changes, isRehearsal: true })
+    const answer = await rehearse(each({ maker: 'Northgate Tools' }))
+    expect(answer.status).toBe(200)
+    expect(answer.body.rows).toEqual(rows)
+    const refused = await rehearse(each({ cornerRadiusMm: 400 }))
+    expect(refused.status).toBe(422)
+    expect(faultPaths(refused)).toHaveLength(3)
+    expect(await now()).toEqual(rows)
+  })
+
   it('changes none where someone changed one meanwhile', async () => {
     await crib.patch(`/api/cutters/${rows[2]?.id}`, { version: 1, description: 'theirs' })
     const answer = await send(each({ description: 'mine' }))

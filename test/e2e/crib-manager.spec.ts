@@ -121,7 +121,7 @@ test('a messy list goes in: a heading said once, one row rejected with its reaso
 
   await checkColumns()
   await page.getByLabel('Leave out the 1 rejected').check()
-  await page.getByRole('button', { name: 'Commit 21' }).click()
+  await page.getByRole('button', { name: 'Bring in 21' }).click()
   await expect(page.getByText('Committed: 21 added, 1 rejected.')).toBeVisible(byWorker)
   await page.goto(`/cutters?maker=${mark}&sort=code`)
   await expect(page.getByText('21 found')).toBeVisible()
@@ -132,7 +132,7 @@ test('a messy list goes in: a heading said once, one row rejected with its reaso
   await upload(page, 'Opening stock', 'stock.csv', Buffer.from(stock))
   await expect(page.getByRole('row').filter({ hasText: 'Z-9' })).toBeVisible(byWorker)
   await page.getByLabel('Leave out the 1 rejected').check()
-  await page.getByRole('button', { name: 'Commit 1' }).click()
+  await page.getByRole('button', { name: 'Bring in 1' }).click()
   await expect(page.getByText('Committed: 1 added, 1 rejected.')).toBeVisible(byWorker)
 
   await page.goto(`/cutters?maker=${mark}&sort=code`)

@@ -37,6 +37,8 @@ test('the list is edited, undone, selected from and changed by the keyboard alon
   await dialog.getByRole('combobox', { name: 'To' }).focus()
   await page.keyboard.type(`${maker}-B`)
   await page.keyboard.press('Enter')
+  await dialog.getByRole('button', { name: 'Change 1 cutter' }).focus()
+  await page.keyboard.press('Enter')
   await expect(dialog).toHaveCount(0)
   await expect(page.getByRole('button', { name: 'Undo: Maker of 1 cutter' })).toBeEnabled()
   await page.keyboard.press('ControlOrMeta+z')

@@ -23,11 +23,11 @@ test('a file goes in from a phone, nothing runs off the side, and every target t
     expect((await tab.boundingBox())?.height).toBeGreaterThanOrEqual(44)
     expect(await isWithin(), (await tab.textContent()) ?? '').toBe(true)
   }
-  for (const name of [/^Commit/, /^Cancel the import/]) {
+  for (const name of [/^Bring in/, /^Cancel the import/]) {
     const target = await page.getByRole('button', { name }).boundingBox()
     expect(target?.height).toBeGreaterThanOrEqual(44)
   }
   await page.getByText('Leave out the 1 rejected').tap()
-  await page.getByRole('button', { name: 'Commit 1' }).tap()
+  await page.getByRole('button', { name: 'Bring in 1' }).tap()
   await expect(page.getByText('Committed: 1 added, 1 rejected.')).toBeVisible(byWorker)
 })

@@ -42,7 +42,7 @@ test('a file is checked, its rejects stand with line, column, value and reason, 
   await page.getByRole('link', { name: 'Rejected rows as CSV' }).click()
   expect((await download).suggestedFilename()).toBe('list-rejects.csv')
 
-  const commit = page.getByRole('button', { name: 'Commit 1' })
+  const commit = page.getByRole('button', { name: 'Bring in 1' })
   await expect(commit).toBeDisabled()
   await page.getByLabel('Leave out the 1 rejected').check()
   await commit.click()
@@ -60,7 +60,7 @@ test('a heading nobody knows is said once, checked again, and known the next tim
   await expectNoFaults(page)
   await page.getByRole('button', { name: 'Check again' }).click()
   await expect(page.getByText('This file would add 1.')).toBeVisible(byWorker)
-  await page.getByRole('button', { name: 'Commit 1' }).click()
+  await page.getByRole('button', { name: 'Bring in 1' }).click()
   await expect(page.getByText('Committed: 1 added.')).toBeVisible(byWorker)
 
   await upload(page, content(uniqueCode('E2E')))
@@ -75,7 +75,7 @@ test('a heading nobody knows is said once, checked again, and known the next tim
 test('what would change stands with before and after', async ({ page }) => {
   const code = uniqueCode('E2E')
   await upload(page, head + row(code))
-  await page.getByRole('button', { name: 'Commit 1' }).click()
+  await page.getByRole('button', { name: 'Bring in 1' }).click()
   await expect(page.getByText('Committed: 1 added.')).toBeVisible(byWorker)
   await upload(page, head + row(code, '3 1/2'))
   await expect(page.getByText('This file would change 1.')).toBeVisible(byWorker)
@@ -99,4 +99,39 @@ test('the example files are there to take', async ({ page }) => {
     const answer = await page.request.get((await link.getAttribute('href')) ?? '')
     expect(answer.status()).toBe(200)
   }
+})
+
+test('a crib list with decimal commas and no forms goes in without an admin', async ({ page }) => {
+  const [flat, quarter, wrong] = [uniqueCode('BIG'), uniqueCode('BIG'), uniqueCode('BIG')]
+  const content = [
+    'Code;Ø;Corner R;Cut length;Total length;Shank;Price;Where;Qty',
+    `${flat};3;0;8;38;3;12,50;A1;4`,
+    `${quarter};1/4";0;19;64;1/4";22,00;A3;3`,
+    `${wrong};10;6;22;72;10;x;A4;2`,
+  ].join('\n')
+  await page.goto('/imports/new')
+  await page.getByLabel('Bare numbers are in').selectOption('mm')
+  await page
+    .getByLabel('Choose a CSV file')
+    .setInputFiles({ name: 'crib.csv', mimeType: 'text/csv', buffer: Buffer.from(content) })
+  await page.getByRole('button', { name: 'Upload and check' }).click()
+  await expect(page.getByText('Its numbers have a decimal comma')).toBeVisible(byWorker)
+  await expect(page.getByText('3 rows, Form: Choose a form.')).toBeVisible(byWorker)
+  await expect(page.getByText('The corner radius is more than half the cutting diameter.')).toBeVisible()
+  await expect(page.getByText('Where and Qty say what lies where.')).toBeVisible()
+  await expectNoFaults(page)
+
+  await page.getByLabel('Form for all rows').selectOption('square')
+  await page.getByRole('button', { name: 'Check again with it' }).click()
+  await expect(page.getByText('This file would add 2; 1 is rejected.')).toBeVisible(byWorker)
+  await page.getByRole('tab', { name: /^Added/ }).click()
+  await expect(page.getByRole('row').filter({ hasText: quarter })).toContainText(/Cutting diameter 6\.35/)
+  await page.getByRole('tab', { name: /^Columns/ }).click()
+  await expect(page.getByLabel('Decimals in this file')).toHaveValue('comma')
+  await expectNoFaults(page)
+
+  await page.getByLabel('Leave out the 1 rejected').check()
+  await page.getByRole('button', { name: 'Bring in 2' }).click()
+  await page.getByRole('link', { name: 'Bring in the opening stock' }).click(byWorker)
+  await expect(page).toHaveURL(/\/imports\/new\?kind=stock$/, byWorker)
 })

@@ -25,7 +25,7 @@ test('a block pasted over the list goes through the checks of an import', async 
   await dialog.getByRole('button', { name: 'Check these rows' }).click()
   await expect(page).toHaveURL(/\/imports\/\d+/)
   await expect(page.getByText('pasted-rows.tsv').first()).toBeVisible()
-  await expect(page.getByRole('button', { name: /^Commit/ })).toBeEnabled()
+  await expect(page.getByRole('button', { name: /^Bring in/ })).toBeEnabled()
   const list = await (await page.request.get(`/api/cutters?code=${code}`)).json()
   expect(list.total).toBe(0)
 })
@@ -74,4 +74,16 @@ test('a line of headings alone is refused at the rows', async ({ page }) => {
   await expect(rows).toHaveAccessibleDescription(/only a line of headings/)
   await rows.fill('Code\tDia\nA\t6\tmore\n')
   await expect(dialog.getByText('1 row has more cells than there are headings')).toBeVisible()
+})
+
+test('rows pasted without headings are all tools, and the choice can be changed', async ({ page }) => {
+  await paste(
+    page,
+    `${uniqueCode('PST')}\tSquare\t6\t12\t57\t6\r\n${uniqueCode('PST')}\tSquare\t8\t19\t63\t8\r\n`,
+  )
+  const dialog = page.getByRole('dialog')
+  await expect(dialog.getByRole('radio', { name: 'a row of the list' })).toBeChecked()
+  await expect(dialog.getByText('2 rows, 6 columns.')).toBeVisible()
+  await dialog.getByRole('radio', { name: 'headings' }).check()
+  await expect(dialog.getByText('1 row, 6 columns.')).toBeVisible()
 })

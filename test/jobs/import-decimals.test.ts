@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { readImportRowPage } from '@/server/db/read-models/import-views'
 import { createImportSite, type ImportSite } from '../support/import-site'
 
 let site: ImportSite
@@ -64,5 +65,20 @@ describe('the decimals of a file', () => {
     await site.recheck(checked.id, { unit: 'mm' })
     await site.check(checked.id)
     expect(await site.get(checked.id)).toMatchObject({ added: 1, decimals: 'comma', decimalsOrigin: 'set' })
+  })
+})
+
+describe('the rows it would add', () => {
+  it('they show their sizes as read: a quarter of an inch is 6.35', async () => {
+    const { id } = await site.checked({ kind: 'cutters', content: `${head}D-7;square;1/4";0;19;64;1/4";1\n` })
+    const { rows } = await readImportRowPage(site.db, id, { limit: 10, outcome: 'added' })
+    expect(rows[0]?.sizes).toEqual([
+      { field: 'form', value: 'square' },
+      { field: 'cuttingDiameterMm', value: 6.35 },
+      { field: 'cornerRadiusMm', value: 0 },
+      { field: 'lengthOfCutMm', value: 19 },
+      { field: 'shankDiameterMm', value: 6.35 },
+      { field: 'overallLengthMm', value: 64 },
+    ])
   })
 })

@@ -81,3 +81,23 @@ describe('what holds for all rows', () => {
     })
   })
 })
+
+describe('the first check', () => {
+  it('it says all faults of a row: the missing form, a radius no form can have, and a price that is none', async () => {
+    const content = 'code,dc,cr,apmx,oal,dmm,price\nG-1,10,6,22,72,10,x\nG-2,6,3,13,57,6,1\n'
+    const { rejected } = await site.checked({ kind: 'cutters', content })
+    expect(rejected.map((first) => [first, ...first.further].map(({ column }) => column))).toEqual([
+      ['price', 'Form', 'cr'],
+      ['Form'],
+    ])
+    expect(rejected[0]?.further[1]?.message).toBe('The corner radius is more than half the cutting diameter.')
+  })
+
+  it('it draws nothing from a size that could not be read', async () => {
+    const content = 'code,dc,cr,apmx,oal,dmm\nG-3,ten,6,22,72,10\n'
+    const { rejected } = await site.checked({ kind: 'cutters', content })
+    expect(rejected.map((first) => [first, ...first.further].map(({ column }) => column))).toEqual([
+      ['dc', 'Form'],
+    ])
+  })
+})

@@ -32,7 +32,7 @@ beforeAll(async () => {
 })
 afterAll(() => site.close())
 
-const head = 'Crib,Code,Bin,Qty,Condition\n'
+const head = 'Crib,Code,Where,Qty,Condition\n'
 
 function balances(code: string) {
   return site
@@ -77,15 +77,18 @@ describe('opening stock', () => {
     const content = `${head}MAIN,S-4,B9,1,\nNORTH,S-4,A1-01,1,\nMAIN,NONE,A1-01,1,\nMAIN,S-4,A1-01,-1,\nMAIN,S-4,A1-01,1.5,\nMAIN,S-4,A1-01,,\nMAIN,S-4,MAIN,1,\nMAIN,S-4,A1-01,1,shiny\n`
     const checked = await site.checked({ kind: 'stock', content })
     expect(checked.rejected.map(({ column, value }) => [column, value])).toEqual([
-      ['Bin', 'B9'],
+      ['Where', 'B9'],
       ['Crib', 'NORTH'],
       ['Code', 'NONE'],
       ['Qty', '-1'],
       ['Qty', '1.5'],
       ['Qty', ''],
-      ['Bin', 'MAIN'],
+      ['Where', 'MAIN'],
       ['Condition', 'shiny'],
     ])
+    expect(checked.rejected[6]?.message).toBe(
+      'MAIN is a crib: only bins hold stock. Its 2 bins are A1-01 … A1-02.',
+    )
   })
 
   it('it refuses the same item, bin and condition twice, and takes nothing for a quantity of 0', async () => {

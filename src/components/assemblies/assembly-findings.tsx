@@ -2,7 +2,7 @@
 
 import { CircleX } from 'lucide-react'
 import { useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { useActOnAssembly } from '@/hooks/use-assemblies'
 import { findingSentence } from '@/lib/assembly-sentences'
 import { faultSentence } from '@/lib/field-faults'

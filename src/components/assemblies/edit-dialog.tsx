@@ -1,7 +1,7 @@
 'use client'
 
 import { type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { parseLength } from '@/core/units/parse-length'
 import { useChangeAssembly } from '@/hooks/use-assemblies'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'

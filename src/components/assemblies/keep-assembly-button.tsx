@@ -3,7 +3,7 @@
 import { BookmarkPlus } from 'lucide-react'
 import { useRouter } from 'next/navigation'
 import { type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import type { Clearances, Feature } from '@/core/reach/types'
 import { useAddAssemblyCheck, useAssemblies } from '@/hooks/use-assemblies'
 import { useKeepAssembly } from '@/hooks/use-keep-assembly'

@@ -1,7 +1,7 @@
 'use client'
 
 import { type FormEvent, useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import type { LengthUnit } from '@/core/units/length-unit'
 import { useImportMeasurements } from '@/hooks/use-assemblies'
 import { faultSentence } from '@/lib/field-faults'

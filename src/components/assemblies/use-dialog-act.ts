@@ -1,7 +1,7 @@
 'use client'
 
 import { useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { type AssemblyAct, useActOnAssembly } from '@/hooks/use-assemblies'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { newIdempotencyKey } from '@/lib/new-idempotency-key'

@@ -1,5 +1,6 @@
 'use client'
 
+import { useState } from 'react'
 import { Button } from '@/components/ui/button'
 import { Dialog } from '@/components/ui/dialog'
 import { Notice } from '@/components/ui/notice'
@@ -9,6 +10,7 @@ import { faultSentence } from '@/lib/field-faults'
 import type { CatalogueDefinition } from './catalogue-definition'
 import type { CatalogueRow } from './catalogue-row'
 import { bulkRefusals } from './edit-refusal'
+import type { ItemField } from './item-form-definition'
 import { ManyField, useManyField } from './many-field'
 import { RefusedRows } from './refused-rows'
 import type { GridEditing } from './use-grid-editing'
@@ -28,7 +30,7 @@ export default function BulkChangeDialog<Row extends CatalogueRow>(props: BulkCh
       isOpen
       onOpenChange={(open) => !open && onClose()}
       title={`Change ${count} ${count === 1 ? definition.one : definition.many}`}
-      description="All of them are changed, or none. Undo takes it back."
+      description="You first see what would happen. All of them are changed, or none; Undo takes it back."
     >
       <BulkChangeForm {...props} />
     </Dialog>
@@ -41,21 +43,32 @@ function BulkChangeForm<Row extends CatalogueRow>({
   onClose,
 }: BulkChangeDialogProps<Row>) {
   const many = useManyField(editing.fields)
+  const [seen, setSeen] = useState<{ field: ItemField; value: unknown; changed: number } | null>(null)
   const { fault, isBusy, attempt } = useAttempt()
   const { field } = many
   const refusals = bulkRefusals(fault, editing.selected, editing.fields)
   if (!field) return null
 
-  function handleSubmit() {
+  function handleRehearse() {
     const typed = many.read()
     if (!typed || !field) return
-    const count = editing.selected.length
+    setSeen(null)
     void attempt(async () => {
-      await editing.changeSelected(field, typed.value)
-      toast.success(`${field.label} of ${count} ${count === 1 ? definition.one : definition.many} changed.`)
+      setSeen({ field, ...typed, changed: await editing.rehearseSelected(field, typed.value) })
+    })
+  }
+
+  function handleChange({ field, value, changed }: NonNullable<typeof seen>) {
+    void attempt(async () => {
+      await editing.changeSelected(field, value)
+      toast.success(`${field.label} of ${counted(changed)} changed.`)
       onClose()
     })
   }
+
+  const total = editing.selected.length
+  const counted = (count: number) => `${count} ${count === 1 ? definition.one : definition.many}`
+  const isReady = seen !== null && seen.changed > 0
 
   return (
     <form
@@ -63,19 +76,30 @@ function BulkChangeForm<Row extends CatalogueRow>({
       className="flex flex-col gap-4"
       onSubmit={(event) => {
         event.preventDefault()
-        handleSubmit()
+        handleRehearse()
       }}
     >
-      <ManyField many={many} />
+      <ManyField many={many} onChange={() => setSeen(null)} />
       {fault ? (
         <Notice kind="collision" isAnnounced>
           <p>{faultSentence(fault)}</p>
           <RefusedRows refusals={refusals} />
         </Notice>
       ) : null}
+      {seen && !fault ? (
+        <Notice kind="plain" isAnnounced>
+          {counted(total)} selected: {isReady ? seen.changed : 'none'} would change
+          {seen.changed < total ? `, ${total - seen.changed} are so already` : ''}.
+        </Notice>
+      ) : null}
       <div className="flex flex-wrap gap-3">
-        <Button type="submit" variant="primary" disabled={isBusy || editing.selected.length === 0}>
-          {isBusy ? 'Changing …' : 'Change them all'}
+        {isReady && !fault ? (
+          <Button variant="primary" disabled={isBusy} onClick={() => handleChange(seen)}>
+            {isBusy ? 'Changing …' : `Change ${counted(seen.changed)}`}
+          </Button>
+        ) : null}
+        <Button type="submit" variant={isReady ? 'secondary' : 'primary'} disabled={isBusy || total === 0}>
+          {isBusy && !seen ? 'Looking …' : seen ? 'Look again' : 'See what would change'}
         </Button>
         <Button onClick={onClose}>Cancel</Button>
       </div>

@@ -6,6 +6,7 @@ import { useItemStock } from '@/hooks/use-item'
 import { formatMoney } from '@/lib/format-money'
 import type { BalanceResponse, ItemStockResponse } from '@/schemas/stock'
 import type { CatalogueRow } from './catalogue-row'
+import { ItemReorderPoints } from './item-reorder-points'
 import { cellClass, headingCellClass, ItemSection } from './item-section'
 import { SectionState } from './section-state'
 import { StockWord } from './stock-word'
@@ -23,6 +24,7 @@ export function ItemStockSection({ row }: { row: CatalogueRow }) {
       ) : isLoading ? (
         <SectionState sentence="Loading the stock …" />
       ) : null}
+      <ItemReorderPoints item={row} />
     </ItemSection>
   )
 }

@@ -11,7 +11,7 @@ import { useAttempt } from '@/components/ui/use-attempt'
 import { createImport } from '@/hooks/use-import'
 import { faultSentence, fieldFaults } from '@/lib/field-faults'
 import { hasLengths, type ImportKind } from '@/schemas/import-fields'
-import { pastedBlock, pastedFile } from './pasted-block'
+import { pastedBlock, pastedFile, startsWithHeadings } from './pasted-block'
 import { PastedSample } from './pasted-sample'
 
 export interface PasteRowsProps {
@@ -52,7 +52,8 @@ function PasteForm({
 }) {
   const { unit } = useShop()
   const router = useRouter()
-  const [hasHeadings, setHasHeadings] = useState(true)
+  const [saidHeadings, setSaidHeadings] = useState<boolean | null>(null)
+  const hasHeadings = useMemo(() => saidHeadings ?? startsWithHeadings(text), [saidHeadings, text])
   const [isTried, setIsTried] = useState(false)
   const { fault, isBusy, attempt } = useAttempt()
   const block = useMemo(() => pastedBlock(text, hasHeadings), [text, hasHeadings])
@@ -93,15 +94,7 @@ function PasteForm({
       )}
       {block.columns > 0 ? (
         <>
-          <label className="flex min-h-11 items-center gap-2.5">
-            <input
-              type="checkbox"
-              className="accent-accent size-5"
-              checked={hasHeadings}
-              onChange={(event) => setHasHeadings(event.target.checked)}
-            />
-            The first row holds the headings
-          </label>
+          <FirstRowChoice hasHeadings={hasHeadings} onChoose={setSaidHeadings} />
           <PastedSample {...{ block, hasHeadings }} />
         </>
       ) : null}
@@ -122,5 +115,36 @@ function PasteForm({
         {isLong ? <Button onClick={() => onChange('')}>Paste other rows</Button> : null}
       </div>
     </form>
+  )
+}
+
+function FirstRowChoice({
+  hasHeadings,
+  onChoose,
+}: {
+  hasHeadings: boolean
+  onChoose: (hasHeadings: boolean) => void
+}) {
+  return (
+    <fieldset>
+      <legend className="font-semibold">The first row is</legend>
+      <div className="flex flex-wrap gap-x-6">
+        {[true, false].map((choice) => (
+          <label key={String(choice)} className="flex min-h-11 items-center gap-2.5">
+            <input
+              type="radio"
+              name="first-row"
+              className="accent-accent size-4"
+              checked={hasHeadings === choice}
+              onChange={() => onChoose(choice)}
+            />
+            {choice ? 'headings' : 'a row of the list'}
+          </label>
+        ))}
+      </div>
+      {hasHeadings ? null : (
+        <p className="text-ink-soft text-sm">You say on the next page what each column is.</p>
+      )}
+    </fieldset>
   )
 }

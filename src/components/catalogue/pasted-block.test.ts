@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { isBlock, pastedBlock, pastedFile, pastedRecords } from './pasted-block'
+import { isBlock, pastedBlock, pastedFile, pastedRecords, startsWithHeadings } from './pasted-block'
 
 describe('a pasted block', () => {
   it('is counted as a spreadsheet copies it: tabs between cells, CRLF behind rows', () => {
@@ -56,4 +56,16 @@ describe('a pasted block', () => {
     expect(isBlock('EM-1')).toBe(false)
     expect(isBlock('two words\n')).toBe(false)
   })
+})
+
+describe('a first row', () => {
+  it.each([
+    ['Tool #\tDia\tD1\tØ mm', true],
+    ['Code\tForm\n6\t12', true],
+    ['EM-301\tsquare\t3\t0,5', false],
+    ['EM-305\tsquare\t1/4"\t19', false],
+    ['EM-305\tsquare\t6 mm', false],
+  ])('it is guessed by whether numbers stand in it: %j', (text, isHeadings) =>
+    expect(startsWithHeadings(text)).toBe(isHeadings),
+  )
 })

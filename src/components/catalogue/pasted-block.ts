@@ -12,6 +12,17 @@ export interface PastedBlock {
   fault: string | null
 }
 
+const number = /^[ø#]?\s*(?:\d+[ -])?\d*(?:[.,/]\d+)*\s*(?:mm|in|")?$/i
+
+/** Whether the first row is likely one of headings: a row with numbers among its cells is a tool. */
+export function startsWithHeadings(text: string): boolean {
+  const [first = []] = pastedRecords(text.slice(0, longestFirstRow))
+  return !first.some((cell) => /\d/.test(cell) && number.test(cell.trim()))
+}
+
+/** Enough to judge a first row by. */
+const longestFirstRow = 20_000
+
 const sampledRows = 6
 
 /** What a block copied from a spreadsheet looks like: rows of cells parted by tabs. */

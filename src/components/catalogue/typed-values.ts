@@ -153,7 +153,7 @@ function readNumber(
     return read.ok ? read.deg : read
   }
   if (kind === 'count') {
-    const read = parseCount(text)
+    const read = parseCount(text, { decimalComma })
     return read.ok ? read.count : read
   }
   if (kind === 'money') {

@@ -5,7 +5,7 @@ import type { CellEdit } from '@/components/grid/parts-list-column'
 import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useShop } from '@/components/layout/shop-context'
 import { toast } from '@/components/ui/toast'
-import { type ItemChange, useChangeItems } from '@/hooks/use-change-items'
+import { type ItemChange, rehearseItems, useChangeItems } from '@/hooks/use-change-items'
 import { useChangeFound } from '@/hooks/use-found-changes'
 import { useSaveItem } from '@/hooks/use-save-item'
 import { faultSentence } from '@/lib/field-faults'
@@ -41,6 +41,8 @@ export interface GridEditing<Row> {
   redoName: string | null
   /** How many values are not taken, once the last edit has its answer. */
   settledRefusals: () => Promise<number>
+  /** How many of the rows selected a value would change; throws what stands against it. */
+  rehearseSelected: (field: ItemField, value: unknown) => Promise<number>
   /** One field of all rows selected; throws what stands against it. */
   changeSelected: (field: ItemField, value: unknown) => Promise<void>
   /** Everything found was changed, or that was taken back, elsewhere on the page. */
@@ -216,10 +218,18 @@ export function useGridEditing<Row extends CatalogueRow>(
     return [await save({ existing: { id, version }, body })]
   }
 
+  const selectedChanges = (field: ItemField, value: unknown): ItemChange[] =>
+    selected.map(newest).map(({ id, version }) => ({ id, version, [field.path]: value }))
+
+  async function rehearseSelected(field: ItemField, value: unknown): Promise<number> {
+    const rows = await rehearseItems<Row>(definition.kind, selectedChanges(field, value))
+    return rows.filter((row) => (fieldValue(row, field.path) ?? '') !== (value ?? '')).length
+  }
+
   async function changeSelected(field: ItemField, value: unknown): Promise<void> {
     const before = selected.map(newest)
     try {
-      const after = await changeItems(before.map(({ id, version }) => ({ id, version, [field.path]: value })))
+      const after = await changeItems(selectedChanges(field, value))
       show(after)
       const rows = after.map((row, index) => ({
         id: row.id,
@@ -251,6 +261,14 @@ export function useGridEditing<Row extends CatalogueRow>(
   return {
     ...{ cellEdit, fields, refusals, selected, isBusy: waiting > 0, settledRefusals },
     ...{ undo, undoName, redo, redoName: undone.at(-1)?.name ?? null },
-    ...{ handleEdit, handleSelect: setSelected, takeBack, changeSelected, noteFound, forgetFound },
+    ...{
+      handleEdit,
+      handleSelect: setSelected,
+      takeBack,
+      rehearseSelected,
+      changeSelected,
+      noteFound,
+      forgetFound,
+    },
   }
 }

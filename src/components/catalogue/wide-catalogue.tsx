@@ -6,11 +6,12 @@ import type { PartsListHandle } from '@/components/grid/parts-list-grid'
 import { useCan } from '@/components/layout/shop-context'
 import { Button } from '@/components/ui/button'
 import { StateSentence } from '@/components/ui/state-sentence'
+import { useViewName } from '@/hooks/use-view-name'
 import { AddButton } from './add-button'
 import type { CatalogueGridProps } from './catalogue-grid'
 import type { CatalogueRow } from './catalogue-row'
 import type { CatalogueShapeProps } from './catalogue-shape'
-import { exportPath, isNarrowed, narrowingText } from './catalogue-view'
+import { exportPath, isNarrowed, narrowingText, viewParams } from './catalogue-view'
 import type { EditBarProps } from './edit-bar'
 import { FilterFields } from './filter-fields'
 import { useFirstBlock } from './first-block'
@@ -52,10 +53,12 @@ export function WideCatalogue<Row extends CatalogueRow>(props: CatalogueShapePro
   const editing = useGridEditing(definition, grid, isEditing)
   const firstBlock = useFirstBlock(definition.kind, view)
   const narrowed = isNarrowed(view)
+  const viewName = useViewName(definition.kind, viewParams(view).toString())
   return (
     <>
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 pt-3 pb-2 lg:px-6">
         <h1 className="text-2xl">{definition.title}</h1>
+        {viewName ? <p className="max-w-64 truncate font-semibold">{viewName}</p> : null}
         <p className="text-ink-soft mr-auto" role="status">
           {total === null
             ? ''

@@ -23,11 +23,11 @@ import type { StartingSpeed } from '@/schemas/starting-speed'
 /** What the shop's table of starting speeds means for this cutter, within what it and its holder may turn. */
 export function CutterSpeedsSection({ cutter }: { cutter: CutterResponse }) {
   const { rows, error, isLoading, refresh } = useStartingSpeeds()
-  const { unit } = useShop()
+  const { unit, decimalComma } = useShop()
   const [typed, setTyped] = useState('')
   const [holderId, setHolderId] = useState<string | null>(null)
   const { row: holder, error: holderError } = useReachItem('holder', holderId)
-  const spindle = typed.trim() === '' ? null : parseCount(typed)
+  const spindle = typed.trim() === '' ? null : parseCount(typed, { decimalComma })
   const limits: SpeedLimits = {
     spindle: spindle?.ok && spindle.count > 0 ? spindle.count : null,
     holder: holder?.maximumRpm ?? null,

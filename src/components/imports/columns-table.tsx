@@ -12,7 +12,6 @@ import {
 } from '@/schemas/import-fields'
 import type { DecimalSign, ImportColumn } from '@/schemas/import-mapping'
 import { Button } from '../ui/button'
-import { classNames } from '../ui/class-names'
 import { controlClass } from '../ui/field'
 
 type Target = { field: string; unit: '' | 'mm' | 'in' }
@@ -160,21 +159,21 @@ interface FileDecimalsProps {
 function FileDecimals({ decimals, note, onChange }: FileDecimalsProps) {
   const id = useId()
   return (
-    <div className="flex flex-wrap items-center gap-x-2 text-[0.9375rem]">
-      <label htmlFor={id} className="font-semibold">
+    <div className="flex items-center gap-x-2 text-[0.9375rem] max-sm:flex-wrap">
+      <label htmlFor={id} className="font-semibold whitespace-nowrap">
         Decimals in this file
       </label>
       <select
         id={id}
         aria-describedby={`${id}-note`}
-        className={classNames(controlClass, 'w-auto')}
+        className={controlClass}
         value={decimals}
         onChange={(event) => onChange(event.target.value === 'comma' ? 'comma' : 'point')}
       >
         <option value="point">point: 12.5</option>
         <option value="comma">comma: 12,5</option>
       </select>
-      <span id={`${id}-note`} className="text-ink-soft">
+      <span id={`${id}-note`} className="text-ink-soft whitespace-nowrap">
         {note}
       </span>
     </div>

@@ -37,7 +37,7 @@ export function CommitBar({ found, isBusy, onCommit, onCancel }: CommitBarProps)
           disabled={isBusy || (hasRejects && !isSkipping)}
           onClick={() => onCommit(isSkipping ? 'skip' : 'stop')}
         >
-          {isBusy ? 'Starting …' : `Commit ${countText(taken)}`}
+          {isBusy ? 'Starting …' : `Bring in ${countText(taken)}`}
         </Button>
       ) : null}
       {hasRejects ? <RejectsLink id={found.id} /> : null}

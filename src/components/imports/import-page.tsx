@@ -1,5 +1,6 @@
 'use client'
 
+import Link from 'next/link'
 import { usePathname, useSearchParams } from 'next/navigation'
 import { useState } from 'react'
 import { cancelImport, commitImport, recheckImport, useImport } from '@/hooks/use-import'
@@ -7,6 +8,7 @@ import { isUnderWay } from '@/hooks/use-imports'
 import { faultSentence } from '@/lib/field-faults'
 import type { ImportResponse } from '@/schemas/import'
 import { importKindLabels } from '@/schemas/import-fields'
+import type { ImportColumn } from '@/schemas/import-mapping'
 import { PageHeading } from '../layout/page-heading'
 import { ButtonLink } from '../ui/button'
 import { Notice } from '../ui/notice'
@@ -16,9 +18,9 @@ import { CommitBar, RejectsLink } from './commit-bar'
 import { FillIn } from './fill-in'
 import { ImportProgress } from './import-progress'
 import { hasItemKey, ImportTabs, type ImportView, viewsOf } from './import-tabs'
-import { countText, formatWords, sizeText } from './import-words'
+import { countText, formatWords, sizeText, stockHeadings } from './import-words'
 import { OutcomeSentence } from './outcome-sentence'
-import { StagedRows } from './staged-rows'
+import { isItemKind, StagedRows } from './staged-rows'
 import { WarningsTable } from './warnings-table'
 
 /** One import from the upload to its end: progress, verdict, decision, and every row and column behind it. */
@@ -61,6 +63,7 @@ export function ImportPage({ initial }: { initial: ImportResponse }) {
             <div className="flex flex-col gap-3 px-4 py-4 lg:px-6">
               <OutcomeSentence found={found} />
               <LeftOutLine found={found} />
+              <StockWay found={found} />
               <DecimalsLine found={found} />
               <KeyNotice found={found} />
               <FillIn
@@ -100,7 +103,7 @@ export function ImportPage({ initial }: { initial: ImportResponse }) {
 }
 
 function headingNote(found: ImportResponse): string {
-  const rows = found.rows === null ? null : `${countText(found.rows)} rows`
+  const rows = found.rows === null ? null : `${countText(found.rows)} ${found.rows === 1 ? 'row' : 'rows'}`
   return [importKindLabels[found.kind], rows, sizeText(found.fileSizeBytes), formatWords(found)]
     .filter(Boolean)
     .join(', ')
@@ -128,6 +131,28 @@ function DecimalsLine({ found }: { found: ImportResponse }) {
       Its numbers have a decimal comma, so 12,5 is read as 12.5. If that is wrong, say so under Columns.
     </p>
   )
+}
+
+/** Bins and quantities of a list of tools are opening stock: the way on, once the tools are there. */
+function StockWay({ found }: { found: ImportResponse }) {
+  const headings = found.columns.filter(isForStock).map((column) => column.heading)
+  const isOver = found.state === 'committed'
+  if (headings.length === 0 || !(isOver || found.state === 'checked') || !isItemKind(found.kind)) return null
+  return (
+    <Notice kind="plain">
+      {headings.join(' and ')} {headings.length === 1 ? 'says' : 'say'} what lies where. Opening stock takes
+      that from the same file, {isOver ? 'now that the tools are in' : 'once these are brought in'}.{' '}
+      {isOver ? (
+        <Link href="/imports/new?kind=stock" className="text-accent font-semibold underline">
+          Bring in the opening stock
+        </Link>
+      ) : null}
+    </Notice>
+  )
+}
+
+function isForStock({ heading, field }: ImportColumn): boolean {
+  return field === null && stockHeadings.test(heading.trim())
 }
 
 /** Without a column that names the item no row can be taken: said once, where it can be set. */

@@ -58,7 +58,7 @@ function readingSentence({ rows, rowsRead }: ImportResponse): string {
   return `Checked ${countText(rowsRead)} of ${countText(rows)} rows`
 }
 
-/** Without a measure of how far it is the bar breathes instead of filling. */
+/** Without a measure of how far it is a short piece of the bar breathes: it says nothing of how far. */
 function ProgressBar({ label, done }: { label: string; done: number | null }) {
   const percent = done === null ? null : Math.round(done * 100)
   return (
@@ -72,7 +72,7 @@ function ProgressBar({ label, done }: { label: string; done: number | null }) {
     >
       <div
         className={
-          percent === null ? 'bg-accent h-full w-full animate-pulse' : 'bg-accent h-full transition-[width]'
+          percent === null ? 'bg-accent h-full w-1/5 animate-pulse' : 'bg-accent h-full transition-[width]'
         }
         style={percent === null ? undefined : { width: `${percent}%` }}
       />

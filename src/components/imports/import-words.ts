@@ -20,6 +20,10 @@ export const kindWords: Readonly<Record<ImportKind, { page: string; see: string 
   reorderPoints: { page: '/reorder-points', see: 'See the reorder points' },
 }
 
+/** How a list of tools heads what opening stock takes: the bin and how many lie there. Common practice. */
+export const stockHeadings =
+  /^(?:where|bin|place|location|shelf|drawer|qty|quantity|on hand|count|stock|pcs|pieces)$/i
+
 /** On every button that ends an import before its commit. */
 export const cancelLabel = 'Cancel the import'
 

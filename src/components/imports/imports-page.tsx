@@ -89,7 +89,7 @@ function ImportsTableRow({ row }: { row: ImportListRow }) {
         </Link>
       </td>
       <td>{importKindLabels[row.kind]}</td>
-      <td className={row.state === 'failed' ? 'text-collision' : ''}>{stateWords[row.state]}</td>
+      <td className={row.state === 'failed' ? 'text-collision' : ''}>{stateText(row)}</td>
       <Count label="added" value={row.added} />
       <Count label="changed" value={row.changed} />
       <Count label="rejected" value={row.rejectedCount} />
@@ -97,6 +97,14 @@ function ImportsTableRow({ row }: { row: ImportListRow }) {
       <td className="text-ink-soft whitespace-nowrap max-md:col-span-2">{formatInstant(row.createdAt)}</td>
     </tr>
   )
+}
+
+/** A check that found nothing to take waits for nobody. */
+function stateText({ state, added, changed, unchanged, rejectedCount }: ImportListRow): string {
+  if (state !== 'checked' || added + changed > 0) return stateWords[state]
+  return rejectedCount > 0 || unchanged === 0
+    ? 'Checked, nothing can be taken'
+    : 'Checked, nothing would change'
 }
 
 function Count({ label, value }: { label: string; value: number }) {

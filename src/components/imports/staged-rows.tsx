@@ -9,6 +9,7 @@ import type { ImportKind } from '@/schemas/import-fields'
 import { useShop } from '../layout/shop-context'
 import { Button } from '../ui/button'
 import { StateSentence } from '../ui/state-sentence'
+import { FaultGroups } from './fault-groups'
 import { countText } from './import-words'
 import { fieldLabel, type ValueLook, valueText } from './value-text'
 
@@ -44,7 +45,11 @@ export function StagedRows({ found, outcome }: StagedRowsProps) {
   if (rows.length === 0) return <StateSentence sentence={emptySentences[outcome]} />
   return (
     <>
-      {outcome === 'rejected' ? <RejectedTable rows={rows} /> : <TakenTable rows={rows} look={look} />}
+      {outcome === 'rejected' ? (
+        <RejectedTable rows={rows} isWhole={!hasMore} />
+      ) : (
+        <TakenTable rows={rows} look={look} />
+      )}
       {hasMore ? (
         <div className="px-4 py-4 lg:px-6">
           <Button onClick={more} disabled={isLoadingMore}>
@@ -60,39 +65,45 @@ const rowClass =
   'border-hairline border-b align-top max-md:grid max-md:grid-cols-[auto_1fr] max-md:gap-x-3 max-md:px-4 max-md:py-2 md:[&>td]:px-4 md:[&>td]:py-1.5 lg:[&>td]:px-6'
 const headClass = 'border-ink bg-sheet border-b max-md:hidden [&_th]:px-4 [&_th]:py-2 lg:[&_th]:px-6'
 
-function RejectedTable({ rows }: { rows: ImportRowResponse[] }) {
+function RejectedTable({ rows, isWhole }: { rows: ImportRowResponse[]; isWhole: boolean }) {
   return (
-    <table className="w-full text-left text-[0.9375rem]">
-      <thead className={headClass}>
-        <tr>
-          <th scope="col">Line</th>
-          <th scope="col">Column</th>
-          <th scope="col">Value</th>
-          <th scope="col">Why it is rejected</th>
-        </tr>
-      </thead>
-      <tbody>
-        {rows.flatMap((row) =>
-          row.problems.map((problem, index) => (
-            <tr key={`${row.line}-${problem.line}-${problem.column}-${problem.message}`} className={rowClass}>
-              <td className="w-20 tabular-nums">
-                <span className="md:hidden">Line </span>
-                {index === 0 || problem.line !== row.line ? (
-                  problem.line
-                ) : (
-                  <span className="md:sr-only">{problem.line}</span>
-                )}
-              </td>
-              <td className="font-semibold md:w-52">{problem.column}</td>
-              <td className="max-w-60 break-words max-md:col-span-2 max-md:empty:hidden">
-                {problem.value === '' ? <span className="text-ink-soft">blank</span> : problem.value}
-              </td>
-              <td className="max-md:col-span-2">{problem.message}</td>
-            </tr>
-          )),
-        )}
-      </tbody>
-    </table>
+    <>
+      <FaultGroups rows={rows} isWhole={isWhole} />
+      <table className="w-full text-left text-[0.9375rem]">
+        <thead className={headClass}>
+          <tr>
+            <th scope="col">Line</th>
+            <th scope="col">Column</th>
+            <th scope="col">Value</th>
+            <th scope="col">Why it is rejected</th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.flatMap((row) =>
+            row.problems.map((problem, index) => (
+              <tr
+                key={`${row.line}-${problem.line}-${problem.column}-${problem.message}`}
+                className={rowClass}
+              >
+                <td className="w-20 tabular-nums">
+                  <span className="md:hidden">Line </span>
+                  {index === 0 || problem.line !== row.line ? (
+                    problem.line
+                  ) : (
+                    <span className="md:sr-only">{problem.line}</span>
+                  )}
+                </td>
+                <td className="font-semibold md:w-52">{problem.column}</td>
+                <td className="max-w-60 break-words max-md:col-span-2 max-md:empty:hidden">
+                  {problem.value === '' ? <span className="text-ink-soft">blank</span> : problem.value}
+                </td>
+                <td className="max-md:col-span-2">{problem.message}</td>
+              </tr>
+            )),
+          )}
+        </tbody>
+      </table>
+    </>
   )
 }
 
@@ -103,7 +114,7 @@ const itemKindOf = {
   extensions: 'extension',
 } as const
 
-function isItemKind(kind: ImportKind): kind is keyof typeof itemKindOf {
+export function isItemKind(kind: ImportKind): kind is keyof typeof itemKindOf {
   return Object.hasOwn(itemKindOf, kind)
 }
 
@@ -138,11 +149,26 @@ function TakenTable({ rows, look }: { rows: ImportRowResponse[]; look: ValueLook
             </td>
             <td className="max-md:col-span-2">
               {row.changes.length > 0 ? <Changes row={row} look={look} /> : (row.description ?? '')}
+              {row.sizes.length > 0 ? <Sizes row={row} look={look} /> : null}
             </td>
           </tr>
         ))}
       </tbody>
     </table>
+  )
+}
+
+/** As they were read, so that a size that was meant otherwise is seen before it is brought in. */
+function Sizes({ row, look }: { row: ImportRowResponse; look: ValueLook }) {
+  return (
+    <ul className="flex flex-wrap gap-x-4">
+      {row.sizes.map(({ field, value }) => (
+        <li key={field}>
+          <span className="text-ink-soft">{fieldLabel(look.kind, field)} </span>
+          {valueText(field, value, look)}
+        </li>
+      ))}
+    </ul>
   )
 }
 

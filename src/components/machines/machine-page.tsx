@@ -1,7 +1,7 @@
 'use client'
 
 import { useState } from 'react'
-import { toast } from 'sonner'
+import { toast } from '@/components/ui/toast'
 import { useMachine, useSetUps } from '@/hooks/use-machines'
 import { callApi } from '@/lib/api-client'
 import { faultSentence } from '@/lib/field-faults'

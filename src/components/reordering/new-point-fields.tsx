@@ -34,7 +34,7 @@ export function NewPointFields({ point, isItemKnown, reorderPoint }: NewPointFie
           error={point.faults.crib}
           isRequired
           options={[
-            ...(point.cribId === '' ? [{ value: '', label: 'Choose the crib' }] : []),
+            ...(point.crib ? [] : [{ value: point.cribId, label: 'Choose the crib' }]),
             ...point.cribs.map((crib) => ({ value: crib.id, label: `${crib.code} · ${crib.name}` })),
           ]}
         />

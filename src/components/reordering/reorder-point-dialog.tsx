@@ -5,6 +5,7 @@ import { parseCount } from '@/core/units/parse-count'
 import {
   createReorderPoint,
   findItemOfCode,
+  hasReorderPoint,
   type ItemOfCode,
   saveReorderPoint,
 } from '@/hooks/use-reorder-points'
@@ -72,6 +73,8 @@ export function ReorderPointDialog(props: ReorderPointDialogProps) {
       }
       const found = item ?? (await findItemOfCode(point.code.trim()))
       if (!found) return point.setFaults({ code: 'No item in use has this code.' })
+      if (await hasReorderPoint(found.id, point.cribId))
+        return point.setFaults({ crib: 'It has a reorder point there already: change that one.' })
       const set = await createReorderPoint(found, point.cribId, read.change)
       const isLow = set.position !== undefined && set.position <= set.reorderPoint
       const where = `${found.code}${point.crib ? ` in ${point.crib.code}` : ''}`

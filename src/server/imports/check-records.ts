@@ -1,6 +1,7 @@
 import { isDeepStrictEqual } from 'node:util'
 import type { Knex } from 'knex'
 import type { ToolingKind } from '@/core/stock/kinds'
+import { cutterForms } from '@/core/tooling'
 import { createItemSchemas } from '@/schemas/create-item'
 import type { FieldChange, RowOutcome, RowProblem } from '@/schemas/import'
 import { geometryFromRow, geometryTables } from '../db/geometry-tables'
@@ -145,8 +146,9 @@ class ItemCheck {
     }
     const parsed = createItemSchemas[this.kind].safeParse(requestOf(this.kind, whole))
     if (parsed.success) return
-    const hasFailures = this.problems.length > 0
-    for (const issue of parsed.error.issues) {
+    const issues = [...parsed.error.issues, ...this.issuesInAnyForm(whole, parsed.error.issues)]
+    const hasFailures = !this.isGeometryRead()
+    for (const issue of issues) {
       // A rule across fields says nothing where one of them could not be read.
       if (hasFailures && issue.code === 'custom') continue
       const [first, place, member] = issue.path
@@ -155,9 +157,38 @@ class ItemCheck {
     }
   }
 
+  /** Whether what could not be read is only what no rule about sizes asks for. */
+  private isGeometryRead(): boolean {
+    const unread = [...this.given.failed].filter((field) => !fieldsBesideSizes.has(field))
+    return unread.length === 0 && this.problems.length === this.given.failed.size
+  }
+
+  /**
+   * Where only the form is missing its rules are not asked; what is wrong in whatever form it may have is said now, not
+   * after the form has been given.
+   */
+  private issuesInAnyForm(whole: FlatRecord, issues: readonly { path: PropertyKey[] }[]): Issue[] {
+    if (this.kind !== 'cutter' || issues.some(({ path }) => path[0] !== 'form')) return []
+    const inForms = cutterForms.map((form) => {
+      const parsed = createItemSchemas.cutter.safeParse({ ...requestOf('cutter', whole), form })
+      return parsed.error?.issues ?? []
+    })
+    const [first = [], ...others] = inForms
+    return first.filter((issue) => others.every((form) => form.some((other) => isSameIssue(issue, other))))
+  }
+
   private rowOf(first: PropertyKey | undefined, place: PropertyKey | undefined): ImportRow | undefined {
     return (first === 'segments' && typeof place === 'number' && this.rows[place]) || this.rows[0]
   }
+}
+
+/** No rule about sizes reads these. */
+const fieldsBesideSizes: ReadonlySet<string> = new Set(['unitCost', 'fluteCount', 'substrate', 'maximumRpm'])
+
+type Issue = { code?: string | undefined; path: PropertyKey[]; message: string }
+
+function isSameIssue(one: Issue, other: Issue): boolean {
+  return one.message === other.message && one.path.join('.') === other.path.join('.')
 }
 
 function fieldsOf(first: string, member: PropertyKey | undefined, reader: RowReader): string[] {

@@ -109,7 +109,7 @@ class StockCheck {
     } else if (bin === undefined) this.refuse('location', 'Give the bin.')
     else if (!place.location) this.refuse('location', `Crib ${place.cribCode} has no bin ${bin}.`)
     else if (place.location.kind !== 'bin')
-      this.refuse('location', `${bin} is a ${place.location.kind}: only bins hold stock.`)
+      this.refuse('location', noBinSentence(String(bin), place.location))
     else if (place.location.isArchived) this.refuse('location', `Bin ${bin} is archived.`)
     else return place.location.id
     return null
@@ -120,4 +120,13 @@ class StockCheck {
     const parsed = openingStockSchema.safeParse(this.flat)
     for (const issue of parsed.error?.issues ?? []) this.refuse('quantity', issue.message)
   }
+}
+
+/** A drawer or a cabinet holds nothing itself: says which bins in it do. */
+function noBinSentence(code: string, { kind, bins }: NonNullable<BinMatch['location']>): string {
+  const one = `${code} is a ${kind}: only bins hold stock`
+  if (!bins) return `${one}, and it has none yet.`
+  return bins.count === 1
+    ? `${one}. Its bin is ${bins.first}.`
+    : `${one}. Its ${bins.count} bins are ${bins.first} … ${bins.last}.`
 }

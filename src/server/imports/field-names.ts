@@ -104,7 +104,7 @@ const otherNames: Readonly<Record<string, string>> = {
     'projects, lpr',
   crib: 'crib, crib code, tool crib, store, warehouse, site, store room',
   location:
-    'location, bin, bin code, location code, bin location, shelf, place, drawer bin, bin ' +
+    'location, where, bin, bin code, location code, bin location, shelf, place, drawer bin, bin ' +
     'number, storage location',
   quantity:
     'quantity, qty, on hand, count, stock, pieces, qty on hand, quantity on hand, pcs, ' +

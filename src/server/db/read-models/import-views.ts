@@ -124,9 +124,36 @@ function rowView(row: StagedRow): ImportRowResponse {
     itemId: row.item_id,
     code: textOf(row.field_values?.code),
     description: rowWords(row.field_values ?? {}),
+    sizes: row.outcome === 'added' ? sizesOf(row.field_values ?? {}) : [],
     changes: row.changes,
     problems: row.problems,
   }
+}
+
+/** What tells a tool apart, in the order a list of tools has it. */
+const sizeColumns = [
+  'form',
+  'cutting_diameter_mm',
+  'corner_radius_mm',
+  'length_of_cut_mm',
+  'shank_diameter_mm',
+  'overall_length_mm',
+  'taper',
+  'gauge_length_mm',
+  'series',
+  'minimum_mm',
+  'maximum_mm',
+  'length_mm',
+  'projection_mm',
+]
+
+function sizesOf(values: Record<string, unknown>): ImportRowResponse['sizes'] {
+  return sizeColumns.flatMap((column) => {
+    const value = values[column]
+    return typeof value === 'number' || typeof value === 'string'
+      ? [{ field: enumFromDb(column), value }]
+      : []
+  })
 }
 
 function textOf(value: unknown): string | null {

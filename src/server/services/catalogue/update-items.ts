@@ -18,12 +18,12 @@ type Row<Kind extends CatalogueKind> = CatalogueTypes[Kind]['row']
 
 /**
  * Changes many items, each as `updateItem` would: all of them or none. What stands against it is told row by row, at
- * `changes.<its place>`, so that all can be mended at once.
+ * `changes.<its place>`, so that all can be mended at once. A rehearsal answers the rows as they are.
  */
 export async function updateItems<Kind extends CatalogueKind>(
   actor: Actor,
   kind: Kind,
-  changes: readonly Change<Kind>[],
+  { changes, isRehearsal }: { changes: readonly Change<Kind>[]; isRehearsal?: boolean | undefined },
 ): Promise<{ rows: Row<Kind>[] }> {
   const ids = changes.map(({ id }) => id)
   const codes = changes.flatMap(({ code }) => code ?? [])
@@ -32,6 +32,7 @@ export async function updateItems<Kind extends CatalogueKind>(
       await lockItems(trx, kind, ids)
       const before = new Map((await readCatalogueRows(trx, kind, ids)).map((row) => [row.id, row]))
       refuseFaulty(kind, changes, before)
+      if (isRehearsal) return { rows: ids.flatMap((id) => visibleRow<Kind>(actor, before.get(id))) }
       for (const change of changes) {
         const row = before.get(change.id)
         if (row) await writeChange(trx, kind, change.id, changedFields({ ...row }, change))
@@ -41,6 +42,10 @@ export async function updateItems<Kind extends CatalogueKind>(
       return { rows: after.map((row) => visibleItem<Kind>(actor, row)) }
     }),
   )
+}
+
+function visibleRow<Kind extends CatalogueKind>(actor: Actor, row: Row<Kind> | undefined): Row<Kind>[] {
+  return row ? [visibleItem<Kind>(actor, row)] : []
 }
 
 function refuseFaulty<Kind extends CatalogueKind>(

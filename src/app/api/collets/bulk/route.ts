@@ -7,5 +7,5 @@ export const POST = route({
   access: 'keepCrib',
   body: bulkRequestSchemas.collet,
   answer: bulkResponseSchemas.collet,
-  handle: ({ actor, body }) => updateItems(actor, 'collet', body.changes),
+  handle: ({ actor, body }) => updateItems(actor, 'collet', body),
 })

@@ -7,5 +7,5 @@ export const POST = route({
   access: 'keepCrib',
   body: bulkRequestSchemas.cutter,
   answer: bulkResponseSchemas.cutter,
-  handle: ({ actor, body }) => updateItems(actor, 'cutter', body.changes),
+  handle: ({ actor, body }) => updateItems(actor, 'cutter', body),
 })

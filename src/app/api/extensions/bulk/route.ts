@@ -7,5 +7,5 @@ export const POST = route({
   access: 'keepCrib',
   body: bulkRequestSchemas.extension,
   answer: bulkResponseSchemas.extension,
-  handle: ({ actor, body }) => updateItems(actor, 'extension', body.changes),
+  handle: ({ actor, body }) => updateItems(actor, 'extension', body),
 })

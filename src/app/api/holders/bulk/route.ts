@@ -7,5 +7,5 @@ export const POST = route({
   access: 'keepCrib',
   body: bulkRequestSchemas.holder,
   answer: bulkResponseSchemas.holder,
-  handle: ({ actor, body }) => updateItems(actor, 'holder', body.changes),
+  handle: ({ actor, body }) => updateItems(actor, 'holder', body),
 })
