@@ -55,7 +55,8 @@ describe('a search for a machine', () => {
   it('offers holders of its taper alone, however that is written; one whose taper is not known, never', async () => {
     const { body: mill } = await crib.post('/api/machines', machine({ spindleNoseDiameterMm: 80 }))
     const before = await search({ machineId: mill.id })
-    expect(before.body).toMatchObject({ considered: 0, notes: [{ code: 'nothing-passes-filters' }] })
+    expect(before.body).toMatchObject({ considered: 0 })
+    expect(before.body.notes).toContainEqual(expect.objectContaining({ code: 'nothing-passes-filters' }))
     await crib.patch(`/api/holders/${rows.holderId}`, { version: 1, taper: taper.toLowerCase() })
     const [option] = optionsOf(await search({ machineId: mill.id }))
     expect(option?.holder.id).toBe(rows.holderId)

@@ -122,8 +122,8 @@ describe('what a crib could build', () => {
     expect(elsewhere.body).toMatchObject({
       considered: 0,
       options: [],
-      notes: [{ code: 'nothing-passes-filters' }],
     })
+    expect(elsewhere.body.notes).toContainEqual(expect.objectContaining({ code: 'nothing-passes-filters' }))
   })
 
   it('leaves corner and floor to the finishing cutter where it is to rough, and says so', async () => {
