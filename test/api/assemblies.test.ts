@@ -267,6 +267,24 @@ describe('a built assembly', () => {
     expect(await read(assembly.id)).toMatchObject({ isMarked: false })
   })
 
+  it('goes into no machine of another taper, however that is written', async () => {
+    const machine = await createMachine(db)
+    const taperOf = (taper: string | null) => db('holders').where('item_id', rows.holderId).update({ taper })
+    const assembly = await built()
+    await taperOf('CAT40')
+    try {
+      const refused = await act(machinist, assembly, 'pocket', { machineId: machine.id, pocket: 1 })
+      expect([refused.status, faultPaths(refused)]).toEqual([422, ['machineId']])
+      expect(refused.body.detail).toContain(`is CAT40, ${machine.code} takes BT30.`)
+      await taperOf('bt-30')
+      const { version } = await read(assembly.id)
+      const inside = await act(machinist, { ...assembly, version }, 'pocket', { machineId: machine.id })
+      expect(inside.status).toBe(200)
+    } finally {
+      await taperOf(null)
+    }
+  })
+
   it('shares no pocket and no tool number of a machine, and finds only pockets that are there', async () => {
     const machine = await createMachine(db, 10)
     const first = await built({ toolNumber: 4 }, { machineId: machine.id, pocket: 1 })

@@ -7,7 +7,7 @@ import { formatLength } from '@/lib/format-length'
 import type { AssemblyResponse } from '@/schemas/assembly'
 import { useShop } from '../layout/shop-context'
 import { AssemblyDrawing } from './assembly-drawing'
-import { partPlaceWords } from './assembly-words'
+import { difference, partPlaceWords } from './assembly-words'
 import { ScanCode, type ScanCodeProps } from './scan-code'
 
 export interface SetupSheetProps {
@@ -19,7 +19,7 @@ export interface SetupSheetProps {
 
 /** One page of paper, A4 or Letter, for whoever puts the assembly together: on the screen it is not seen. */
 export function SetupSheet({ assembly, code, date }: SetupSheetProps) {
-  const { unit, shopName, actor } = useShop()
+  const { unit, shopName, actor, measuringToleranceMm } = useShop()
   const { number, name, tools, stickOutMm, gaugeLengthMm, parts, checks, findings } = assembly
   const [check] = checks
   const said = (mm: number) => formatLength(mm, unit)
@@ -27,6 +27,9 @@ export function SetupSheet({ assembly, code, date }: SetupSheetProps) {
   const { nutTorqueNm, measurement } = assembly
   // Left empty for the pen where nothing was measured yet.
   const measured = measurement ? said(measurement.gaugeLengthMm) : ' '
+  const off = measurement
+    ? difference(measurement.gaugeLengthMm, gaugeLengthMm, measuringToleranceMm, unit)
+    : null
   return (
     <article
       aria-label="Set-up sheet"
@@ -46,6 +49,12 @@ export function SetupSheet({ assembly, code, date }: SetupSheetProps) {
       {faults.length > 0 ? (
         <p className="border-ink border-b-2 px-3 py-1 font-semibold">
           NO LONGER HOLDS. {faults.map(({ detail }) => findingSentence(detail, unit)).join(' ')}
+        </p>
+      ) : null}
+      {off?.isOver ? (
+        <p className="border-ink border-b-2 px-3 py-1 font-semibold">
+          MEASURED {off.text} to the calculated gauge length, more than the {said(measuringToleranceMm)}{' '}
+          allowed.
         </p>
       ) : null}
       <dl className="border-ink flex border-b [&>div]:flex-1">

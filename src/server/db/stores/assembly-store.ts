@@ -214,9 +214,23 @@ export async function moveAssembly(
 export async function findMachinePlace(
   trx: Knex,
   machineId: string,
-): Promise<{ code: string; locationId: string; pocketCount: number | null } | null> {
+): Promise<{ code: string; taper: string; locationId: string; pocketCount: number | null } | null> {
   const row = await trx('machines').where('id', machineId).whereNull('archived_at').forShare().first()
-  return row ? { code: row.code, locationId: row.location_id, pocketCount: row.pocket_count } : null
+  if (!row) return null
+  return { code: row.code, taper: row.taper, locationId: row.location_id, pocketCount: row.pocket_count }
+}
+
+/** What goes into the spindle, and its taper where it was entered. */
+export async function findSpindleEnd(
+  trx: Knex,
+  assemblyId: string,
+): Promise<{ code: string; taper: string | null } | null> {
+  const row = await trx('assembly_parts')
+    .join('items', 'items.id', 'assembly_parts.item_id')
+    .join('holders', 'holders.item_id', 'assembly_parts.item_id')
+    .where('assembly_parts.assembly_id', assemblyId)
+    .first('items.code', 'holders.taper')
+  return row ?? null
 }
 
 /** The sizes its parts have now are what everything about it goes by. */

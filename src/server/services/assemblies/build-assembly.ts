@@ -35,7 +35,7 @@ export async function buildAssembly(
       refuseUnbuildable(assembly)
       const parts = await readAssemblyParts(trx, id)
       await refuseWrongParts(trx, parts, request.parts)
-      const spot = await assemblySpot(trx, actor, request)
+      const spot = await assemblySpot(trx, actor, id, request)
       const places = placesOf(parts, request.parts, spot)
       await issueParts(trx, actor, assembly, parts, places)
       await markAssemblyBuilt(trx, id, places, spot)

@@ -32,7 +32,7 @@ export async function pocketAssembly(
     onceInTransaction(actor, claim, async (trx) => {
       const assembly = await getLockedBuiltAssembly(trx, id, version)
       const before = await readAssembly(trx, id)
-      const spot = await assemblySpot(trx, actor, { machineId, pocket })
+      const spot = await assemblySpot(trx, actor, id, { machineId, pocket })
       const parts = await readAssemblyParts(trx, id)
       await markMoved(trx, id, spot)
       await writeAssembly(trx, id, offsets)
