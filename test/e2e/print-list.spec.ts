@@ -37,7 +37,7 @@ test('the rows of the view are printed with the columns shown and what narrows t
   await expect(sheet).toContainText('3 rows.')
   await expect(sheet).toContainText(`Maker: ${maker}.`)
   await expect(page.getByRole('banner')).toBeHidden()
-  await expect(page.getByRole('button', { name: 'More' })).toBeHidden()
+  await expect(page.getByRole('button', { name: 'More', exact: true })).toBeHidden()
   await expect(page.locator('.ag-root-wrapper')).toBeHidden()
   await page.evaluate(() => window.dispatchEvent(new Event('afterprint')))
   await expect(sheet).toHaveCount(0)

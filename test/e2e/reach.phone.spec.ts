@@ -16,6 +16,7 @@ test.afterEach(async ({ page }) => {
 })
 
 test('verdict, drawing and stick-out come first, and nothing runs off the side', async ({ page }) => {
+  await expect(page.getByRole('img', { name: /^Section of/ })).toBeVisible()
   const verdict = await page.getByTestId('verdict').boundingBox()
   const drawing = await page.getByRole('img', { name: /^Section of/ }).boundingBox()
   const fields = await page.getByRole('region', { name: 'Feature' }).boundingBox()

@@ -240,7 +240,7 @@ test('a machinist reads the points and changes none', async ({ page }) => {
   await expect(cell(page, 0, 'itemCode')).toHaveText(codes[0] ?? '')
   for (const name of ['Add a reorder point', 'Change the rows selected', 'Take away'])
     await expect(page.getByRole('button', { name })).toHaveCount(0)
-  await page.getByRole('button', { name: 'More' }).click()
+  await page.getByRole('button', { name: 'More', exact: true }).click()
   await expect(page.getByRole('menuitem', { name: 'Export as CSV' })).toBeVisible()
   await expect(page.getByRole('menuitem', { name: /Import|Paste/ })).toHaveCount(0)
   await page.keyboard.press('Escape')

@@ -97,7 +97,7 @@ export function reorderingStates({ cribId, code, supplierName, mailId }: Reorder
       refused('Add a reorder point', 'Add the reorder point'),
     ),
     state('cribManager', points, 'reorder points, their menu', async (page) => {
-      await page.getByRole('button', { name: 'More' }).click()
+      await page.getByRole('button', { name: 'More', exact: true }).click()
       await expect(page.getByRole('menuitem', { name: 'Paste rows' })).toBeVisible()
     }),
     state('cribManager', '/suppliers', 'suppliers', shows(supplierName)),
